@@ -93,7 +93,7 @@ public record StudyResult(
      *
      * @param site name of the site
      * @param level the dated level
-     * @param ageKa its age
+     * @param age its age, ka
      * @param seaLevelMetres implied height of the sea above its present mean level
      * @param upliftFrom the level whose rate was used
      * @param circular whether that rate rests on the level itself or on its highstand
@@ -101,7 +101,7 @@ public record StudyResult(
     public record ImpliedSeaLevel(
             String site,
             String level,
-            Quantity ageKa,
+            Quantity age,
             Quantity seaLevelMetres,
             Optional<String> upliftFrom,
             boolean circular) {}

@@ -12,7 +12,7 @@ import java.util.Optional;
  * @param rate propagated (JCGM 101:2008), flat in displacement
  * @param rateWithPrior the same draws under the prior of the rate
  * @param firstOrder the law of propagation of uncertainty beside it
- * @param ageKa of the level
+ * @param age of the level, ka
  * @param relativeSeaLevelMetres where the sea stood, relative to the land of today, when it formed
  * @param probabilityUplift absent under a one-signed prior
  * @param bound where the 95 % interval holds 0
@@ -28,7 +28,7 @@ public record LevelAnswer(
         Optional<Rate> rate,
         Optional<Rate> rateWithPrior,
         Optional<FirstOrder> firstOrder,
-        Optional<Quantity> ageKa,
+        Optional<Quantity> age,
         Optional<Quantity> relativeSeaLevelMetres,
         Optional<Double> probabilityUplift,
         Optional<Bound> bound,
@@ -91,12 +91,12 @@ public record LevelAnswer(
      * One sample of the level.
      *
      * @param sample its name
-     * @param ageKa its own age
+     * @param age its own age, ka
      * @param rate of the sample read on the curve at its own age
      * @param whyNoRate the sentence that stands in place of a rate
      */
     public record SampleAnswer(
-            String sample, Optional<Quantity> ageKa, Optional<Rate> rate, Optional<String> whyNoRate) {}
+            String sample, Optional<Quantity> age, Optional<Rate> rate, Optional<String> whyNoRate) {}
 
     /**
      * How well the dates of a level agree.
@@ -106,5 +106,4 @@ public record LevelAnswer(
      * @param p probability of as large a value by chance
      */
     public record Agreement(double mswd, int degrees, double p) {}
-
 }
