@@ -18,7 +18,7 @@ public sealed interface Uncertain
     /** Probability that the number is at most {@code value}. */
     double cumulativeProbability(double value);
 
-    /** Probability density at {@code value}; infinite at the value of an {@link Exact} number, 0 elsewhere. */
+    /** Probability density at {@code value}; infinite at an {@link Exact} number's value and at a spike of a {@link Tabulated} one. */
     double density(double value);
 
     /** Expected value. */
@@ -46,10 +46,45 @@ public sealed interface Uncertain
     /** The same number moved up by {@code shift}. */
     Uncertain plus(double shift);
 
-    /** @throws IllegalArgumentException if {@code probability} is not strictly between 0 and 1, or is not a number */
+    /**
+     * A normal number, or an exact one where the standard deviation is 0.
+     *
+     * @throws IllegalArgumentException if {@code mean} is not finite or {@code sigma} is negative or not finite
+     */
+    static Uncertain normal(double mean, double sigma) {
+        return sigma == 0 ? new Exact(mean) : new Normal(mean, sigma);
+    }
+
+    /**
+     * Refuses what is not a probability strictly between 0 and 1.
+     *
+     * @throws IllegalArgumentException if {@code probability} is not strictly between 0 and 1, or is not a number
+     */
     static void requireProbability(double probability) {
         if (!(probability > 0 && probability < 1)) {
             throw new IllegalArgumentException("probability must lie strictly between 0 and 1 but is " + probability);
+        }
+    }
+
+    /**
+     * Refuses what is not a finite number.
+     *
+     * @throws IllegalArgumentException if {@code value} is infinite or not a number
+     */
+    static void requireFinite(String name, double value) {
+        if (!Double.isFinite(value)) {
+            throw new IllegalArgumentException(name + " must be finite but is " + value);
+        }
+    }
+
+    /**
+     * Refuses what is not a finite number above 0.
+     *
+     * @throws IllegalArgumentException if {@code value} is not a finite number above 0
+     */
+    static void requirePositive(String name, double value) {
+        if (!(value > 0 && value < Double.POSITIVE_INFINITY)) {
+            throw new IllegalArgumentException(name + " must be above 0 but is " + value);
         }
     }
 }
