@@ -72,12 +72,11 @@ public final class SobolPoints {
      */
     public void column(int dimension, double[] out) {
         if (dimension < 0 || dimension >= dimensions) {
-            throw new IllegalArgumentException(
-                    "dimension must be 0 to " + (dimensions - 1) + " but is " + dimension);
+            throw new IllegalArgumentException("dimension must be 0 to " + (dimensions - 1) + " but is " + dimension);
         }
         if (Integer.bitCount(out.length) != 1 || out.length > MAXIMUM_POINTS) {
-            throw new IllegalArgumentException("number of points must be a power of two up to " + MAXIMUM_POINTS
-                    + " but is " + out.length);
+            throw new IllegalArgumentException(
+                    "number of points must be a power of two up to " + MAXIMUM_POINTS + " but is " + out.length);
         }
         UniformRandomProvider random = streams.stream(key + " sobol dimension " + dimension, block);
         long digits = random.nextLong() >>> (Long.SIZE - DIGITS);

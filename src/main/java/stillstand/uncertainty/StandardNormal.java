@@ -151,7 +151,9 @@ public final class StandardNormal {
                 double distance = tail - Double.longBitsToDouble(bits >>> SHIFT << SHIFT);
                 int c = 4 * piece;
                 double value = COEFFICIENTS[c]
-                        + distance * (COEFFICIENTS[c + 1] + distance * (COEFFICIENTS[c + 2] + distance * COEFFICIENTS[c + 3]));
+                        + distance
+                                * (COEFFICIENTS[c + 1]
+                                        + distance * (COEFFICIENTS[c + 2] + distance * COEFFICIENTS[c + 3]));
                 column[i] = probability < 0.5 ? value : -value;
             }
         }
