@@ -19,7 +19,7 @@ final class RatePriorText {
 
     /** The prior, absent where the text is none or its numbers make none. */
     static Optional<RatePrior> parse(String text) {
-        String[] words = text.strip().split("\\s+");
+        List<String> words = List.of(text.strip().split("\\s+", -1));
         List<Double> numbers = new ArrayList<>();
         StringBuilder form = new StringBuilder();
         for (String word : words) {
