@@ -145,9 +145,9 @@ class TableSchemaTest {
             return constraints.path("required").asBoolean(false) ? List.of("required") : List.of();
         }
         String type = field.get("type").asString();
-        if (type.equals("number") && !cell.matches("[-+]?(\\d+(\\.\\d*)?|\\.\\d+)([eE][-+]?\\d+)?")
-                || type.equals("integer") && !cell.matches("[-+]?\\d+")
-                || type.equals("boolean") && !cell.matches("true|false")) {
+        if ((type.equals("number") && !cell.matches("[-+]?(\\d+(\\.\\d*)?|\\.\\d+)([eE][-+]?\\d+)?"))
+                || (type.equals("integer") && !cell.matches("[-+]?\\d+"))
+                || (type.equals("boolean") && !cell.matches("true|false"))) {
             return List.of(type);
         }
         List<String> faults = new ArrayList<>();
