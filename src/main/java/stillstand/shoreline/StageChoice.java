@@ -18,7 +18,8 @@ public record StageChoice(List<String> only, List<String> never) {
         only = List.copyOf(only);
         never = List.copyOf(never);
         if (only.stream().anyMatch(never::contains)) {
-            throw new IllegalArgumentException("a label must not be both asked for and forbidden: " + only + ", " + never);
+            throw new IllegalArgumentException(
+                    "a label must not be both asked for and forbidden: " + only + ", " + never);
         }
     }
 
