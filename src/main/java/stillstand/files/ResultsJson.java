@@ -13,6 +13,8 @@ import stillstand.study.StudyResult;
 import stillstand.uncertainty.Interval;
 import stillstand.uplift.LevelAnswer;
 import tools.jackson.core.JacksonException;
+import tools.jackson.core.JsonParser;
+import tools.jackson.core.JsonToken;
 import tools.jackson.core.StreamReadFeature;
 import tools.jackson.core.TokenStreamLocation;
 import tools.jackson.core.exc.StreamReadException;
@@ -20,6 +22,9 @@ import tools.jackson.databind.DeserializationFeature;
 import tools.jackson.databind.JsonNode;
 import tools.jackson.databind.MapperFeature;
 import tools.jackson.databind.PropertyNamingStrategies;
+import tools.jackson.databind.cfg.MapperConfig;
+import tools.jackson.databind.introspect.AnnotatedMember;
+import tools.jackson.databind.introspect.JacksonAnnotationIntrospector;
 import tools.jackson.databind.json.JsonMapper;
 
 /**
@@ -66,15 +71,21 @@ public final class ResultsJson {
                     FILE, place.getLineNr(), place.getColumnNr(), "", "broken json", "a file that Stillstand wrote")));
         } catch (JacksonException e) {
             return Loaded.failed(List.of(new InputProblem(
-                    FILE, 0, 0, path(e), "a key or value that does not belong", "what Stillstand writes there")));
+                    FILE, 0, 0, path(e), "nothing, or what does not belong there", "what Stillstand writes there")));
         }
     }
 
-    /** Whether the text is a results file of any version of Stillstand: json whose provenance names seed and generator. */
+    /** Whether the text begins as a results file of any version of Stillstand does: with the provenance. */
     static boolean isOurs(String text) {
-        try {
-            JsonNode provenance = MAPPER.readTree(text).path("provenance");
-            return provenance.path("version").isString() && provenance.has("seed") && provenance.has("generator");
+        try (JsonParser parser = MAPPER.createParser(text)) {
+            if (parser.nextToken() != JsonToken.START_OBJECT || !"provenance".equals(parser.nextName())) {
+                return false;
+            }
+            parser.nextToken();
+            JsonNode provenance = MAPPER.reader()
+                    .without(DeserializationFeature.FAIL_ON_TRAILING_TOKENS)
+                    .readTree(parser);
+            return provenance.has("version") && provenance.has("seed") && provenance.has("generator");
         } catch (JacksonException e) {
             return false;
         }
@@ -124,7 +135,8 @@ public final class ResultsJson {
 
     private static String path(JacksonException e) {
         return e.getPath().stream()
-                .map(step -> step.getPropertyName() == null ? "[" + step.getIndex() + "]" : "." + step.getPropertyName())
+                .map(step ->
+                        step.getPropertyName() == null ? "[" + step.getIndex() + "]" : "." + step.getPropertyName())
                 .collect(Collectors.joining())
                 .replaceFirst("^\\.", "");
     }
@@ -133,6 +145,7 @@ public final class ResultsJson {
         JsonFormat.Value array = JsonFormat.Value.forShape(JsonFormat.Shape.ARRAY);
         return JsonMapper.builder()
                 .propertyNamingStrategy(new KeyNames())
+                .annotationIntrospector(new AllRequired())
                 .withConfigOverride(Interval.class, type -> type.setFormat(array))
                 .withConfigOverride(LevelAnswer.Errors.class, type -> type.setFormat(array))
                 .changeDefaultPropertyInclusion(
@@ -147,8 +160,18 @@ public final class ResultsJson {
                 .build();
     }
 
+    /** Every component must be there, save those that may be absent by their type. */
+    private static final class AllRequired extends JacksonAnnotationIntrospector {
+        private static final long serialVersionUID = 1L;
+
+        @Override
+        public Boolean hasRequiredMarker(MapperConfig<?> config, AnnotatedMember member) {
+            return !member.getRawType().equals(Optional.class);
+        }
+    }
+
     /** From {@code levelSigmaMetres} to {@code level_1sigma_m}. */
-    static final class KeyNames extends PropertyNamingStrategies.NamingBase {
+    private static final class KeyNames extends PropertyNamingStrategies.NamingBase {
         private static final long serialVersionUID = 1L;
 
         @Override

@@ -25,8 +25,8 @@ public record TruncatedNormal(double centre, double sigma, double low, double hi
             throw new IllegalArgumentException("low must be below high but is " + low + " with high " + high);
         }
         if (!(probabilityKept(centre, sigma, low, high) > LEAST_PROBABILITY_KEPT)) {
-            throw new IllegalArgumentException("low and high must leave some of the normal distribution with mean " + centre
-                    + " and standard deviation " + sigma + " but are " + low + " and " + high);
+            throw new IllegalArgumentException("low and high must leave some of the normal distribution with mean "
+                    + centre + " and standard deviation " + sigma + " but are " + low + " and " + high);
         }
     }
 
