@@ -130,7 +130,7 @@ class ResultsJsonTest {
                 "results.json: levels[0].first_order.sigma: " + misfit,
                 problem(TEXT.replaceFirst("\"rate\": 0.4356, \"sigma\": 0.0198", "\"rate\": 0.4356")));
         assertEquals(
-                "results.json: levels[0].rate.interval68: " + misfit,
+                "results.json: levels[0].rate.interval68.high: " + misfit,
                 problem(TEXT.replaceFirst("\"interval68\": \\[[^,]*, ", "\"interval68\": [")));
         assertEquals(
                 "results.json: levels[0].first_order.rate: found no finite number or text, expected one, or no such key",
