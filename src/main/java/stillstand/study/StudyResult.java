@@ -48,6 +48,14 @@ public record StudyResult(
                 other, seaLevel, levels, waiting, intervals, impliedSeaLevel, warnings, failures, ledger);
     }
 
+    /** Why a level has no rate; empty where it has one. */
+    public Optional<String> whyWaiting(String site, String level) {
+        return waiting.stream()
+                .filter(waits -> waits.site().equals(site) && waits.level().equals(level))
+                .map(Waiting::reason)
+                .findFirst();
+    }
+
     /** Curves and highstands a run used. */
     public record SeaLevelUsed(List<CurveUsed> curves, List<HighstandUsed> highstands) {
         public SeaLevelUsed {
