@@ -2,6 +2,7 @@ package stillstand.uplift;
 
 import java.util.Optional;
 import stillstand.uncertainty.Interval;
+import stillstand.uncertainty.Summary;
 
 /**
  * A number with its uncertainty, as results hold it.
@@ -19,4 +20,10 @@ public record Quantity(
         Optional<Double> sd,
         Interval interval68,
         Interval interval95,
-        String unit) {}
+        String unit) {
+    /** A summary with its unit. */
+    static Quantity of(Summary summary, String unit) {
+        return new Quantity(
+                summary.median(), summary.mean(), summary.sd(), summary.interval68(), summary.interval95(), unit);
+    }
+}

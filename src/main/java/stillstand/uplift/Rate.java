@@ -1,7 +1,8 @@
 package stillstand.uplift;
 
-import java.util.List;
 import java.util.Optional;
+import stillstand.uncertainty.DensityBins;
+import stillstand.uncertainty.DrawDistribution;
 import stillstand.uncertainty.Interval;
 
 /**
@@ -14,7 +15,7 @@ import stillstand.uncertainty.Interval;
  * @param interval95 equal tails, probability 0.95
  * @param shortest68 the shortest interval of probability 0.6827
  * @param shortest95 the shortest interval of probability 0.95
- * @param density for figures
+ * @param density for figures; absent where all draws are alike
  * @param unit "m/kyr"
  */
 public record Rate(
@@ -25,21 +26,30 @@ public record Rate(
         Interval interval95,
         Interval shortest68,
         Interval shortest95,
-        Density density,
+        Optional<DensityBins> density,
         String unit) {
     /** The unit of every rate. */
     public static final String UNIT = "m/kyr";
 
+    /** Bins of a density. */
+    private static final int BINS = 200;
+
     /**
-     * Relative frequency in equal bins.
+     * The rate that draws add up to.
      *
-     * @param from lower edge of the first bin, m/kyr
-     * @param to upper edge of the last bin, m/kyr
-     * @param values share of the probability in each bin, at most 200
+     * @param draws rates, m/kyr
+     * @param hasMean whether mean and standard deviation exist
      */
-    public record Density(double from, double to, List<Double> values) {
-        public Density {
-            values = List.copyOf(values);
-        }
+    static Rate of(DrawDistribution draws, boolean hasMean) {
+        return new Rate(
+                draws.quantile(0.5),
+                hasMean ? Optional.of(draws.mean()) : Optional.empty(),
+                hasMean ? Optional.of(draws.sd()) : Optional.empty(),
+                draws.equalTailed(Interval.PROBABILITY_68),
+                draws.equalTailed(Interval.PROBABILITY_95),
+                draws.shortest(Interval.PROBABILITY_68),
+                draws.shortest(Interval.PROBABILITY_95),
+                draws.density(BINS),
+                UNIT);
     }
 }
