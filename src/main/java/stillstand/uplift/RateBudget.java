@@ -20,7 +20,9 @@ final class RateBudget {
     /** Place of each explanation's inputs among the columns of the whole. */
     private final List<int[]> places = new ArrayList<>();
 
-    private final Map<InputGroup, List<Integer>> columnsOfGroup = new EnumMap<>(InputGroup.class);
+    /** The columns of each group, in the order of the groups. */
+    private final List<List<Integer>> columnsOfGroup = new ArrayList<>();
+
     private final int dimensions;
 
     /** As {@link LevelRates#of}. */
@@ -43,20 +45,20 @@ final class RateBudget {
             for (int i = 0; i < most; i++) {
                 columns.add(next++);
             }
-            columnsOfGroup.put(group, columns);
+            columnsOfGroup.add(columns);
         }
         for (RateColumns function : functions) {
             int[] place = new int[function.dimensions()];
             for (InputGroup group : InputGroup.values()) {
                 int[] own = function.dimensionsOf(group);
                 for (int i = 0; i < own.length; i++) {
-                    place[own[i]] = columnsOfGroup.get(group).get(i);
+                    place[own[i]] = columnsOfGroup.get(group.ordinal()).get(i);
                 }
             }
             places.add(place);
         }
         if (explanations.size() > 1) {
-            columnsOfGroup.get(InputGroup.AGE).add(next++);
+            columnsOfGroup.get(InputGroup.AGE.ordinal()).add(next++);
         }
         dimensions = next;
     }
@@ -69,11 +71,12 @@ final class RateBudget {
      */
     Optional<LevelAnswer.Budget> shares(DrawStreams streams, String key, int scrambles) {
         List<SobolIndices.Group> groups = new ArrayList<>();
-        columnsOfGroup.forEach((group, columns) -> {
+        for (InputGroup group : InputGroup.values()) {
+            List<Integer> columns = columnsOfGroup.get(group.ordinal());
             if (!columns.isEmpty()) {
                 groups.add(new SobolIndices.Group(group.name(), columns));
             }
-        });
+        }
         if (groups.isEmpty()) {
             return Optional.empty();
         }
