@@ -26,27 +26,19 @@ final class PlainTable {
         rows.add(cells);
     }
 
-    /** A sentence under the first cell, across the others. */
-    void sentence(String name, String text) {
-        rows.add(List.of(name, text));
-    }
-
-    /** The lines of the table, header first. */
+    /** The lines of the table, header first; none where there are no rows. */
     List<String> lines() {
+        if (rows.isEmpty()) {
+            return List.of();
+        }
         int[] widths = new int[headers.size()];
-        for (List<String> row : rows) {
-            for (int i = 0; i < row.size() && (i == 0 || row.size() == headers.size()); i++) {
-                widths[i] = Math.max(widths[i], width(row.get(i)));
-            }
-        }
         for (int i = 0; i < widths.length; i++) {
-            widths[i] = widths[i] == 0 ? 0 : Math.max(widths[i], width(headers.get(i)));
+            int column = i;
+            int widest = rows.stream().mapToInt(row -> width(row.get(column))).max().orElse(0);
+            widths[i] = widest == 0 ? 0 : Math.max(widest, width(headers.get(i)));
         }
-        List<String> lines = new ArrayList<>();
-        lines.add(line(headers, widths));
-        for (List<String> row : rows) {
-            lines.add(row.size() == headers.size() ? line(row, widths) : pad(row.get(0), widths[0], true) + GAP + row.get(1));
-        }
+        List<String> lines = new ArrayList<>(List.of(line(headers, widths)));
+        rows.forEach(row -> lines.add(line(row, widths)));
         return lines;
     }
 

@@ -80,7 +80,7 @@ public final class TerminalReport {
 
     private static PlainTable table(List<LevelAnswer> levels) {
         PlainTable table = new PlainTable(
-                List.of("Level", "Stage", "Age (ka)", "Sea then (m)", "Rate", "95 %", "First order"), 2);
+                List.of("Level", "Stage", "Age (ka)", "RSL (m)", "Rate", "95 %", "First order"), 2);
         for (LevelAnswer level : levels) {
             String name = Wording.cut(level.level(), NAME_WIDTH);
             if (level.rate().isPresent()) {
