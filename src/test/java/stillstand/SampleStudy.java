@@ -22,6 +22,7 @@ import stillstand.study.StudyResult.HighstandUsed;
 import stillstand.study.StudyResult.ImpliedSeaLevel;
 import stillstand.study.StudyResult.SeaLevelUsed;
 import stillstand.study.StudyResult.Waiting;
+import stillstand.uncertainty.DensityBins;
 import stillstand.uncertainty.Exact;
 import stillstand.uncertainty.Interval;
 import stillstand.uncertainty.Normal;
@@ -148,7 +149,7 @@ public final class SampleStudy {
                 wide,
                 narrow,
                 wide,
-                new Rate.Density(median - 3 * sd, median + 3 * sd, List.of(0.25, 0.5, 0.25)),
+                Optional.of(new DensityBins(median - 3 * sd, median + 3 * sd, List.of(0.25, 0.5, 0.25))),
                 Rate.UNIT);
     }
 
