@@ -18,7 +18,7 @@ import stillstand.uncertainty.Uncertain;
  * ages is read in a few operations each. The curve is never extrapolated.
  */
 public final class SeaLevelCurve {
-    private static final double STEP_KA = 0.05;
+    private static final double STEP_KA = 0.025;
     private static final int FEWEST_CELLS = 4096;
     private static final int MOST_CELLS = 1 << 20;
     /** Standard deviations from the middle of a normal distribution to the bounds of its central 95 %. */
