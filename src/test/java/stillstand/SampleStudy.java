@@ -14,12 +14,12 @@ import stillstand.shoreline.StageChoice;
 import stillstand.study.InputFile;
 import stillstand.study.Provenance;
 import stillstand.study.StudyResult;
-import stillstand.study.StudyResult.BetweenLevels;
+import stillstand.uplift.BetweenLevels;
 import stillstand.study.StudyResult.CurvePoint;
 import stillstand.study.StudyResult.CurveUsed;
 import stillstand.study.StudyResult.Failure;
 import stillstand.study.StudyResult.HighstandUsed;
-import stillstand.study.StudyResult.ImpliedSeaLevel;
+import stillstand.uplift.ImpliedSeaLevel;
 import stillstand.study.StudyResult.SeaLevelUsed;
 import stillstand.study.StudyResult.Waiting;
 import stillstand.uncertainty.DensityBins;
@@ -63,7 +63,7 @@ public final class SampleStudy {
                 List.of(rising(), waiting(), slow()),
                 List.of(new Waiting("North cliff", "T2", "it is tied to no single highstand")),
                 List.of(new BetweenLevels("North cliff", "T1", "T4", rate(0.4, 0.05))),
-                List.of(new ImpliedSeaLevel("North cliff", "T4", age(), height(-8, 5), Optional.of("T1"), false)),
+                List.of(new ImpliedSeaLevel("North cliff", "T4", age(), height(-8, 5), "T1", false)),
                 List.of(new InputWarning("levels.csv", 3, 4, "elevation_m: 1200 looks like feet")),
                 List.of(new Failure("East bay", "its curve ends at 20 ka")),
                 List.of(

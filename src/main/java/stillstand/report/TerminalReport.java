@@ -7,6 +7,7 @@ import java.util.Map;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputWarning;
 import stillstand.study.StudyResult;
+import stillstand.uplift.BetweenLevels;
 import stillstand.uplift.LevelAnswer;
 import stillstand.uplift.LevelAnswer.MonteCarlo;
 import stillstand.uplift.LevelAnswer.SampleAnswer;
@@ -70,7 +71,7 @@ public final class TerminalReport {
         }
         table(levels).lines().forEach(line -> lines.add("  " + Wording.cut(line, WIDTH - 2)));
         levels.forEach(this::remarks);
-        for (StudyResult.BetweenLevels between : result.intervals()) {
+        for (BetweenLevels between : result.intervals()) {
             if (between.site().equals(name)) {
                 say("  Between " + between.fromLevel() + " and " + between.toLevel() + ": "
                         + Wording.rate(between.rate()) + " m/kyr, 95 % " + Wording.interval95(between.rate()) + ".");

@@ -50,7 +50,11 @@ public final class DrawHistogram {
      * @throws IllegalArgumentException if there are no draws or one is not finite
      */
     public static DrawHistogram forDrawsLike(double[] pilot) {
-        SortedDraws sorted = SortedDraws.of(pilot);
+        return forDrawsLike(SortedDraws.of(pilot));
+    }
+
+    /** An empty histogram with a range fit for weighted draws like these. */
+    public static DrawHistogram forDrawsLike(SortedDraws sorted) {
         double low = sorted.quantile(PILOT_TAIL);
         double high = sorted.quantile(1 - PILOT_TAIL);
         return new DrawHistogram(low + (high - low) / 2, (high - low) / CELLS);
