@@ -20,6 +20,9 @@ public record Provenance(
         List<InputFile> inputs,
         Optional<String> started,
         Optional<Double> seconds) {
+    /** The version of this Stillstand; the build file says the same. */
+    public static final String CURRENT_VERSION = "0.1.0";
+
     public Provenance {
         inputs = List.copyOf(inputs);
     }

@@ -4,9 +4,9 @@ import java.util.List;
 import java.util.Optional;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputWarning;
+import stillstand.uplift.BetweenLevels;
+import stillstand.uplift.ImpliedSeaLevel;
 import stillstand.uplift.LevelAnswer;
-import stillstand.uplift.Quantity;
-import stillstand.uplift.Rate;
 
 /**
  * Everything a run found: {@code results.json} is this record, key by key, and figures, report and window work from it
@@ -48,6 +48,14 @@ public record StudyResult(
                 other, seaLevel, levels, waiting, intervals, impliedSeaLevel, warnings, failures, ledger);
     }
 
+    /** Why a level has no rate; empty where it has one. */
+    public Optional<String> whyWaiting(String site, String level) {
+        return waiting.stream()
+                .filter(waits -> waits.site().equals(site) && waits.level().equals(level))
+                .map(Waiting::reason)
+                .findFirst();
+    }
+
     /** Curves and highstands a run used. */
     public record SeaLevelUsed(List<CurveUsed> curves, List<HighstandUsed> highstands) {
         public SeaLevelUsed {
@@ -84,27 +92,6 @@ public record StudyResult(
 
     /** A level without a rate, and the reason. */
     public record Waiting(String site, String level, String reason) {}
-
-    /** Rate of motion in the time between two levels of a site, the younger first. */
-    public record BetweenLevels(String site, String fromLevel, String toLevel, Rate rate) {}
-
-    /**
-     * Sea level that a dated level implies, given the uplift of the others.
-     *
-     * @param site name of the site
-     * @param level the dated level
-     * @param age its age, ka
-     * @param seaLevelMetres implied height of the sea above its present mean level
-     * @param upliftFrom the level whose rate was used
-     * @param circular whether that rate rests on the level itself or on its highstand
-     */
-    public record ImpliedSeaLevel(
-            String site,
-            String level,
-            Quantity age,
-            Quantity seaLevelMetres,
-            Optional<String> upliftFrom,
-            boolean circular) {}
 
     /** A site that could not be done, and why. */
     public record Failure(String site, String reason) {}

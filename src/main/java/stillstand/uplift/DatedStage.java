@@ -62,4 +62,11 @@ record DatedStage(double likelihood, Uncertain ageKa) {
         }
         return ageKa;
     }
+
+    /** Probability that the cut took away from an age. */
+    static double cutAway(Uncertain ageKa) {
+        return ageKa instanceof TruncatedNormal cut
+                ? new Normal(cut.centre(), cut.sigma()).cumulativeProbability(YOUNGEST_KA)
+                : 0;
+    }
 }

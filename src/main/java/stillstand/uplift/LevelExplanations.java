@@ -107,11 +107,7 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
             if (weights.get(i) / sum >= LEAST_PROBABILITY) {
                 Highstand row = allowed.get(i);
                 explanations.add(new SeaAtLevel.AtHighstand(
-                        row.stage(),
-                        Math.min(1, weights.get(i) / kept),
-                        dated.get(i).ageKa(),
-                        row.level(),
-                        sharedSigmaMetres(row, shared)));
+                        row, shared, Math.min(1, weights.get(i) / kept), dated.get(i).ageKa()));
             }
         }
         if (allowed.size() > 1) {
@@ -127,13 +123,6 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
                     where));
         }
         return new LevelExplanations(explanations, "", assumptions);
-    }
-
-    /** Offset, interstadial factor and local sea level of a row, as far as it takes them. */
-    private static double sharedSigmaMetres(Highstand row, SharedErrors shared) {
-        double all = row.marginalLevelSigmaMetres(shared);
-        double own = row.level().standardDeviation();
-        return Math.sqrt(Math.max(0, all * all - own * own));
     }
 
     private static LevelExplanations atItsAge(Level level, SeaLevelBasis basis, DateRules rules, String where) {
@@ -186,6 +175,12 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
         return level.samples().stream()
                 .filter(sample -> sample.used() && sample.ageKa().isPresent() && sample.dates() == role)
                 .toList();
+    }
+
+    /** The dates of a level by themselves, whatever stand of the sea they may belong to. */
+    static List<DateLikelihood> ownDates(Level level, DateRules rules) {
+        boolean alone = datesOf(level, DatedSample.Role.LEVEL).size() == 1;
+        return likelihoods(level, 0, alone ? 0 : rules.wrongProbability(), rules);
     }
 
     private static List<DateLikelihood> likelihoods(

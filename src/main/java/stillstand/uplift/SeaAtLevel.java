@@ -1,6 +1,8 @@
 package stillstand.uplift;
 
+import stillstand.sealevel.Highstand;
 import stillstand.sealevel.SeaLevelCurve;
+import stillstand.sealevel.SharedErrors;
 import stillstand.uncertainty.Uncertain;
 
 /** One explanation of a level: when it formed and where the sea stood then. */
@@ -14,23 +16,34 @@ public sealed interface SeaAtLevel {
     /**
      * The level records the top of a highstand.
      *
-     * @param stage label of the highstand
+     * @param highstand the row of the table
+     * @param shared the errors that rows share, as far as this row takes them
      * @param probability among the explanations of the level
      * @param ageKa of the highstand, given the dates of the level
-     * @param seaLevelMetres of the highstand itself
-     * @param sharedSigmaMetres standard deviation of what it shares with other highstands: offset, interstadial factor,
-     *     local sea level; 0 or more
      */
-    record AtHighstand(
-            String stage, double probability, Uncertain ageKa, Uncertain seaLevelMetres, double sharedSigmaMetres)
+    record AtHighstand(Highstand highstand, SharedErrors shared, double probability, Uncertain ageKa)
             implements SeaAtLevel {
         public AtHighstand {
             if (!(probability > 0 && probability <= 1)) {
                 throw new IllegalArgumentException("probability must lie in 0 to 1 but is " + probability);
             }
-            if (!(sharedSigmaMetres >= 0 && sharedSigmaMetres < Double.POSITIVE_INFINITY)) {
-                throw new IllegalArgumentException("sharedSigmaMetres must be 0 or more but is " + sharedSigmaMetres);
-            }
+        }
+
+        /** Label of the highstand. */
+        public String stage() {
+            return highstand.stage();
+        }
+
+        /** Height of the sea then, m, without what the row shares with others. */
+        public Uncertain seaLevelMetres() {
+            return highstand.level();
+        }
+
+        /** Standard deviation of offset, interstadial factor and local sea level together, m. */
+        public double sharedSigmaMetres() {
+            double offset = highstand.takesOffset() ? shared.offsetSigmaMetres() : 0;
+            double factor = highstand.takesInterstadialFactor() ? shared.interstadialSigmaMetres() : 0;
+            return Math.hypot(highstand.localOffsetSigmaMetres(), Math.hypot(offset, factor));
         }
     }
 

@@ -2,17 +2,36 @@ package stillstand.shoreline;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
+import stillstand.uncertainty.Exact;
+import stillstand.uncertainty.Normal;
+import stillstand.uncertainty.Uncertain;
 
 /**
  * Published sea-level index points: limits, elevation and its error in, reference water level, indicative range, relative sea
  * level and its error out. Source: WALIS v1.0 (Rovere et al. 2023, Earth System Science Data 15, 1-23), the record's number
  * first. The compilation cuts its results to two decimals, so each is met to 0.011 m.
  */
-class RelativeSeaLevelReferenceTest {
+class FormerSeaLevelReferenceTest {
     private static final double CUT_METRES = 0.011;
+
+    private static final Site SITE = new Site(
+            "published",
+            Optional.empty(),
+            Optional.empty(),
+            Optional.empty(),
+            new Exact(0),
+            Optional.empty(),
+            Optional.empty(),
+            List.of(),
+            List.of(),
+            "",
+            Map.of());
 
     @ParameterizedTest
     @CsvSource({
@@ -46,25 +65,42 @@ class RelativeSeaLevelReferenceTest {
             double seaLevel,
             double seaLevelError) {
         IndicativeMeaning meaning = IndicativeMeaning.ofLimits("published", upper, lower);
-        double reference = meaning.referenceWaterLevelMetres().mean();
-        assertEquals(level, reference, CUT_METRES, record);
+        assertEquals(level, meaning.referenceWaterLevelMetres().mean(), CUT_METRES, record);
         assertEquals(range, meaning.rangeMetres(), CUT_METRES, record);
-        assertEquals(seaLevel, RelativeSeaLevel.ofLandform(elevation, 0, 0, 0, 0, reference), CUT_METRES, record);
-        double half =
-                IndicativeRule.QUADRATURE.errorMetres(meaning.rangeMetres()).standardDeviation();
-        assertEquals(seaLevelError, Math.hypot(elevationError, half), CUT_METRES, record);
+        List<HeightTerm> terms = FormerSeaLevel.ofLandform(
+                SITE, level(new Normal(elevation, elevationError), meaning), IndicativeRule.QUADRATURE);
+        assertEquals(seaLevel, mean(terms), CUT_METRES, record);
+        double variance = terms.stream()
+                .mapToDouble(term -> Math.pow(term.metres().standardDeviation(), 2))
+                .sum();
+        assertEquals(seaLevelError, Math.sqrt(variance), CUT_METRES, record);
     }
 
-    /** A coral 27 m up that grew under 3 m of water or more stands for a shoreline at 30 m (published for Touce's Point). */
+    /** A coral 27 m up that grew under 3 m of water stands for a shoreline at 30 m (published for Touce's Point). */
     @Test
     void coralStandsBelowItsSea() {
-        assertEquals(30, RelativeSeaLevel.ofCoral(27, 0, 3));
+        assertEquals(30, mean(FormerSeaLevel.ofCoral(SITE, new Exact(27), new Exact(3))));
     }
 
-    /** By hand: 61.4 m in the datum, sea at 0.5 m, 2 m of fan, 0.05 m/kyr off for 120 kyr, inner edge 1 m above its sea. */
-    @Test
-    void everyTermHasItsSign() {
-        assertEquals(63.9, RelativeSeaLevel.ofLandform(61.4, 0.5, 2, 0.05, 120, 1), 1e-12);
-        assertEquals(64.9, RelativeSeaLevel.ofCoral(61.4, 0.5, 4), 1e-12);
+    private static double mean(List<HeightTerm> terms) {
+        return terms.stream().mapToDouble(HeightTerm::meanMetres).sum();
+    }
+
+    private static Level level(Uncertain elevationMetres, IndicativeMeaning meaning) {
+        return new Level(
+                "published",
+                elevationMetres,
+                meaning,
+                FormsAt.HIGHSTAND,
+                new Exact(0),
+                new Exact(0),
+                StageChoice.ANY,
+                Optional.empty(),
+                false,
+                Optional.empty(),
+                0,
+                List.of(),
+                "",
+                Map.of());
     }
 }

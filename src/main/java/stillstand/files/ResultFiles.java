@@ -1,0 +1,79 @@
+package stillstand.files;
+
+import java.io.IOException;
+import java.nio.charset.StandardCharsets;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Optional;
+import java.util.stream.Stream;
+import stillstand.ledger.Assumption;
+import stillstand.study.Study;
+import stillstand.study.StudyResult;
+import stillstand.uplift.LevelAnswer;
+import stillstand.uplift.LevelAnswer.Budget;
+import stillstand.uplift.LevelAnswer.Share;
+
+/** The files of a results folder, from a study and what was found. */
+public final class ResultFiles {
+    private ResultFiles() {}
+
+    /**
+     * Writes all of them.
+     *
+     * @param folder an empty folder
+     * @throws IOException if one cannot be written
+     */
+    public static void write(Path folder, Study study, StudyResult result) throws IOException {
+        Evidence evidence = Evidence.of(study);
+        write(folder, ResultsJson.FILE, ResultsJson.text(result));
+        write(folder, "table1.csv", PaperTable.text(evidence, result));
+        write(folder, "rates.csv", RatesTable.text(evidence, result));
+        write(folder, "budget.csv", budget(result));
+        write(folder, "ledger.csv", ledger(result));
+    }
+
+    private static void write(Path folder, String name, String text) throws IOException {
+        Files.writeString(folder.resolve(name), text, StandardCharsets.UTF_8);
+    }
+
+    /** A row for each group of inputs of each level that has a budget. */
+    static String budget(StudyResult result) {
+        List<BudgetRow> rows = result.levels().stream()
+                .flatMap(level -> level.budget().stream().flatMap(budget -> rows(level, budget)))
+                .toList();
+        return new CsvTable<>(rows)
+                .text("site", row -> row.level.site())
+                .text("level", row -> row.level.level())
+                .text("input", BudgetRow::input)
+                .number("share", row -> Optional.of(row.share.share()))
+                .number("total_share", row -> Optional.of(row.share.totalShare()))
+                .number("sd_if_exact_m_per_kyr", row -> Optional.of(row.share.sdIfExact()))
+                .write();
+    }
+
+    private static Stream<BudgetRow> rows(LevelAnswer level, Budget budget) {
+        return Stream.of(
+                        row(level, "elevation", budget.elevation()),
+                        row(level, "palaeodepth", budget.palaeodepth()),
+                        row(level, "age", budget.age()),
+                        row(level, "sea_level", budget.seaLevel()),
+                        row(level, "surface_lowering", budget.surfaceLowering()))
+                .flatMap(Optional::stream);
+    }
+
+    private static Optional<BudgetRow> row(LevelAnswer level, String input, Optional<Share> share) {
+        return share.map(found -> new BudgetRow(level, input, found));
+    }
+
+    private record BudgetRow(LevelAnswer level, String input, Share share) {}
+
+    static String ledger(StudyResult result) {
+        return new CsvTable<>(result.ledger())
+                .text("assumption", Assumption::assumption)
+                .text("value", Assumption::value)
+                .text("source", Assumption::source)
+                .text("applies_to", Assumption::appliesTo)
+                .write();
+    }
+}

@@ -1,0 +1,181 @@
+package stillstand.study;
+
+import java.util.ArrayList;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.Set;
+import java.util.concurrent.ExecutorService;
+import stillstand.ledger.Assumption;
+import stillstand.ledger.RunCancelledException;
+import stillstand.ledger.RunMonitor;
+import stillstand.shoreline.Level;
+import stillstand.uncertainty.DrawStreams;
+import stillstand.uplift.BetweenLevels;
+import stillstand.uplift.DateRules;
+import stillstand.uplift.DrawPlan;
+import stillstand.uplift.ImpliedSeaLevel;
+import stillstand.uplift.LevelAnswer;
+import stillstand.uplift.LevelAnswers;
+import stillstand.uplift.LevelRates;
+import stillstand.uplift.SeaLevelBasis;
+import stillstand.uplift.SiteRelations;
+
+/**
+ * Runs a study site by site. What comes out is a function of the study alone: threads and the order in which they work change
+ * no bit of it. A site that fails stands in {@code failures}; the others finish.
+ */
+public final class StudyRunner {
+    private final Study study;
+    private final ExecutorService executor;
+    private final RunMonitor monitor;
+    private final DrawStreams streams;
+    private final DrawPlan plan;
+    private final DateRules dates;
+    private final LevelAnswers answers;
+
+    private final List<LevelAnswer> levels = new ArrayList<>();
+    private final List<StudyResult.Waiting> waiting = new ArrayList<>();
+    private final List<BetweenLevels> intervals = new ArrayList<>();
+    private final List<ImpliedSeaLevel> implied = new ArrayList<>();
+    private final List<StudyResult.Failure> failures = new ArrayList<>();
+    private final Set<Assumption> ledger = new LinkedHashSet<>();
+
+    private StudyRunner(Study study, ExecutorService executor, RunMonitor monitor) {
+        this.study = study;
+        this.executor = executor;
+        this.monitor = monitor;
+        StudySettings settings = study.settings();
+        streams = new DrawStreams(settings.seed());
+        plan = new DrawPlan(
+                settings.draws().maximum(),
+                settings.draws().significantDigits(),
+                settings.draws().fixed());
+        dates = new DateRules(
+                settings.matching().wrongDateProbability().value(),
+                settings.matching().strayAgeMaximumKa());
+        answers = new LevelAnswers(
+                new LevelRates(streams, plan, executor, monitor),
+                streams,
+                plan,
+                executor,
+                settings.indicativeRange(),
+                dates);
+    }
+
+    /**
+     * Runs a whole study; blocks until it is done.
+     *
+     * @param executor runs the draws; not owned, and needs one thread at least that is not the caller's
+     * @param monitor is told of progress and asked whether to stop
+     * @throws RunCancelledException if the monitor asked to stop
+     */
+    public static StudyResult run(Study study, ExecutorService executor, RunMonitor monitor) {
+        return new StudyRunner(study, executor, monitor).result();
+    }
+
+    private StudyResult result() {
+        ledger.addAll(study.ledger());
+        ledger.addAll(Conventions.of(study.settings()));
+        for (SeaLevelCase sea : study.seaLevel()) {
+            ledger.addAll(sea.highstands().assumptions());
+        }
+        int allLevels = study.sites().stream()
+                .mapToInt(plan -> plan.site().levels().size())
+                .sum();
+        for (SitePlan site : study.sites()) {
+            try {
+                runSite(site, allLevels);
+            } catch (RunCancelledException e) {
+                throw e;
+            } catch (IllegalArgumentException | IllegalStateException e) {
+                failures.add(new StudyResult.Failure(site.site().name(), String.valueOf(e.getMessage())));
+            }
+        }
+        monitor.step("done", 1);
+        return new StudyResult(
+                new Provenance(
+                        Provenance.CURRENT_VERSION,
+                        study.settings().seed(),
+                        DrawStreams.GENERATOR,
+                        study.inputs(),
+                        Optional.empty(),
+                        Optional.empty()),
+                SeaLevelSummary.of(study),
+                levels,
+                waiting,
+                intervals,
+                implied,
+                study.warnings(),
+                failures,
+                List.copyOf(ledger));
+    }
+
+    private void runSite(SitePlan plan, int allLevels) {
+        SeaLevelCase sea = plan.seaLevel(study).get(0);
+        plan.localSeaLevel().ifPresent(local -> ledger.addAll(local.highstands().assumptions()));
+        SeaLevelBasis basis = new SeaLevelBasis(sea.id(), sea.curve(), sea.highstands());
+        for (Level level : plan.site().levels()) {
+            String what = plan.site().name() + " / " + level.name();
+            monitor.step(what, (double) levels.size() / Math.max(1, allLevels));
+            LevelAnswers.Answered answered = answers.of(plan.site(), level, basis, plan.prior());
+            levels.add(answered.answer());
+            answered.whyWaiting()
+                    .ifPresent(reason -> waiting.add(
+                            new StudyResult.Waiting(plan.site().name(), level.name(), reason)));
+            ledger.addAll(answered.assumptions());
+        }
+        if (monitor.isCancelled()) {
+            throw new RunCancelledException();
+        }
+        SiteRelations relations = SiteRelations.of(
+                plan.site(), basis, study.settings().indicativeRange(), dates, streams, this.plan);
+        intervals.addAll(relations.intervals());
+        implied.addAll(relations.impliedSeaLevel());
+        ledger.addAll(relations.assumptions());
+    }
+
+    /** What every study rests on, whatever its levels. */
+    private static final class Conventions {
+        private static final String ALL = "all";
+
+        private Conventions() {}
+
+        static List<Assumption> of(StudySettings settings) {
+            List<Assumption> said = new ArrayList<>();
+            said.add(new Assumption(
+                    "not a hazard assessment",
+                    "rates of vertical motion over thousands of years; local codes and licensed practice decide",
+                    "Stillstand",
+                    ALL));
+            said.add(new Assumption(
+                    "prior of the rate, m/kyr", settings.rate().prior().describe(), "study.json or its default", ALL));
+            said.add(new Assumption(
+                    "an indicative range means",
+                    settings.indicativeRange().id(),
+                    "study.json or its default (quadrature: Rovere et al. 2023, ESSD 15, 1-23)",
+                    ALL));
+            said.add(new Assumption(
+                    "probability that one of several dates is wrong",
+                    String.format(
+                            Locale.ROOT,
+                            "%.3g, from 0 to %.0f ka",
+                            settings.matching().wrongDateProbability().value(),
+                            settings.matching().strayAgeMaximumKa()),
+                    "study.json or its default",
+                    ALL));
+            said.add(new Assumption(
+                    "draws of a level",
+                    settings.draws()
+                            .fixed()
+                            .map(fixed -> fixed + ", rounded up to whole blocks of " + DrawStreams.BLOCK_DRAWS)
+                            .orElse("until " + settings.draws().significantDigits()
+                                    + " digits of the standard deviation are steady, at most "
+                                    + settings.draws().maximum()),
+                    "JCGM 101:2008, 7.9, with at least ten blocks",
+                    ALL));
+            return said;
+        }
+    }
+}

@@ -1,0 +1,260 @@
+package stillstand.uplift;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.concurrent.ExecutionException;
+import java.util.concurrent.ExecutorService;
+import java.util.concurrent.Future;
+import stillstand.dating.Replicates;
+import stillstand.ledger.Assumption;
+import stillstand.ledger.RunCancelledException;
+import stillstand.shoreline.DatedSample;
+import stillstand.shoreline.FormerSeaLevel;
+import stillstand.shoreline.HeightTerm;
+import stillstand.shoreline.IndicativeRule;
+import stillstand.shoreline.Level;
+import stillstand.shoreline.Site;
+import stillstand.uncertainty.DrawStreams;
+import stillstand.uncertainty.Exact;
+import stillstand.uncertainty.Interval;
+import stillstand.uncertainty.Summary;
+import stillstand.uncertainty.Uncertain;
+
+
+/** The answer of each level by itself, with the rates of its corals beside it. */
+public final class LevelAnswers {
+    private static final int SCRAMBLES_OF_A_BUDGET = 8;
+    private static final double SUPPOSED_CUT = 1e-3;
+
+    private final LevelRates rates;
+    private final DrawStreams streams;
+    private final DrawPlan plan;
+    private final ExecutorService executor;
+    private final IndicativeRule rule;
+    private final DateRules dates;
+
+    /**
+     * @param rates draws
+     * @param streams all randomness
+     * @param plan how many draws
+     * @param executor runs budgets beside the draws; not owned
+     * @param rule what an indicative range means
+     * @param dates how far dates are believed
+     */
+    public LevelAnswers(
+            LevelRates rates,
+            DrawStreams streams,
+            DrawPlan plan,
+            ExecutorService executor,
+            IndicativeRule rule,
+            DateRules dates) {
+        this.rates = rates;
+        this.streams = streams;
+        this.plan = plan;
+        this.executor = executor;
+        this.rule = rule;
+        this.dates = dates;
+    }
+
+    /**
+     * A level's answer.
+     *
+     * @param answer without a rate where the level waits
+     * @param whyWaiting why it has no rate
+     * @param assumptions what the answer rests on beside the study's own ledger
+     */
+    public record Answered(LevelAnswer answer, Optional<String> whyWaiting, List<Assumption> assumptions) {
+        public Answered {
+            assumptions = List.copyOf(assumptions);
+        }
+    }
+
+    /**
+     * The answer of one level.
+     *
+     * @param prior of the rate of its site
+     * @throws RunCancelledException if the monitor of the rates asks to stop
+     */
+    public Answered of(Site site, Level level, SeaLevelBasis basis, RatePrior prior) {
+        String where = site.name() + " / " + level.name();
+        LevelExplanations found = LevelExplanations.of(level, basis, dates, where);
+        List<Assumption> assumptions = new ArrayList<>(found.assumptions());
+        List<LevelAnswer.SampleAnswer> samples = new ArrayList<>();
+        for (DatedSample sample : level.samples()) {
+            samples.add(ofSample(site, sample, basis, prior, where));
+        }
+        Optional<LevelAnswer.Agreement> agreement = agreement(level);
+        if (found.explanations().isEmpty()) {
+            LevelAnswer waiting = new LevelAnswer(
+                    site.name(),
+                    level.name(),
+                    List.of(),
+                    Optional.empty(),
+                    Optional.empty(),
+                    Optional.empty(),
+                    Optional.empty(),
+                    Optional.empty(),
+                    Optional.empty(),
+                    Optional.empty(),
+                    Optional.empty(),
+                    Optional.empty(),
+                    samples,
+                    agreement);
+            return new Answered(waiting, Optional.of(found.whyNone()), assumptions);
+        }
+        List<HeightTerm> height = FormerSeaLevel.ofLandform(site, level, rule);
+        Uncertain lowering = level.loweringMetresPerKyr();
+        String key = site.name() + " / " + level.name();
+        Future<Optional<LevelAnswer.Budget>> budget = executor.submit(
+                () -> new RateBudget(height, lowering, found.explanations()).shares(streams, key, scrambles()));
+        LevelRates.Outcome outcome = rates.of(key, height, lowering, found.explanations(), prior);
+        assumptions.addAll(said(outcome, found, prior, where));
+        LevelAnswer answer = new LevelAnswer(
+                site.name(),
+                level.name(),
+                stages(found.explanations()),
+                Optional.of(outcome.rate()),
+                outcome.rateWithPrior(),
+                found.explanations().size() == 1
+                        ? Optional.of(FirstOrderRate.of(height, lowering, found.explanations().get(0)))
+                        : Optional.empty(),
+                Optional.of(outcome.age()),
+                Optional.of(outcome.relativeSeaLevelMetres()),
+                outcome.probabilityUplift(),
+                bound(outcome.rate()),
+                joined(budget).filter(shares -> outcome.rate().sd().isPresent()),
+                Optional.of(outcome.monteCarlo()),
+                samples,
+                agreement);
+        return new Answered(answer, Optional.empty(), assumptions);
+    }
+
+    private int scrambles() {
+        return Math.max(2, Math.min(SCRAMBLES_OF_A_BUDGET, plan.mostBlocks()));
+    }
+
+    private static Optional<LevelAnswer.Budget> joined(Future<Optional<LevelAnswer.Budget>> budget) {
+        try {
+            return budget.get();
+        } catch (InterruptedException e) {
+            Thread.currentThread().interrupt();
+            throw new RunCancelledException();
+        } catch (ExecutionException e) {
+            throw new IllegalStateException(e.getCause());
+        }
+    }
+
+    private static List<LevelAnswer.StageProbability> stages(List<SeaAtLevel> explanations) {
+        List<LevelAnswer.StageProbability> stages = new ArrayList<>();
+        for (SeaAtLevel sea : explanations) {
+            if (sea instanceof SeaAtLevel.AtHighstand stand) {
+                stages.add(new LevelAnswer.StageProbability(stand.stage(), stand.probability()));
+            }
+        }
+        stages.sort((a, b) -> Double.compare(b.probability(), a.probability()));
+        return stages;
+    }
+
+    /** Where the 95 % interval holds 0, all one may say is how slow the coast must be. */
+    private static Optional<LevelAnswer.Bound> bound(Rate rate) {
+        Interval interval = rate.interval95();
+        return interval.contains(0)
+                ? Optional.of(new LevelAnswer.Bound(interval.high(), -interval.low(), Interval.PROBABILITY_95))
+                : Optional.empty();
+    }
+
+    private static List<Assumption> said(
+            LevelRates.Outcome outcome, LevelExplanations found, RatePrior prior, String where) {
+        List<Assumption> said = new ArrayList<>();
+        if (outcome.beyondCurve() > 0) {
+            said.add(new Assumption(
+                    "draws whose age lies beyond the curve count for nothing",
+                    String.format(Locale.ROOT, "%.3g of the draws", outcome.beyondCurve()),
+                    "a curve is never extrapolated",
+                    where));
+        }
+        for (SeaAtLevel sea : found.explanations()) {
+            double cut = DatedStage.cutAway(sea.ageKa());
+            if (cut > SUPPOSED_CUT) {
+                said.add(new Assumption(
+                        "age is cut off at " + DatedStage.YOUNGEST_KA + " ka",
+                        String.format(Locale.ROOT, "%.2g of its probability lay below", cut),
+                        "a level cannot be younger than today",
+                        where));
+            }
+        }
+        if (outcome.rateWithPrior().isEmpty()) {
+            said.add(new Assumption(
+                    "no rate under the prior",
+                    prior.describe() + " excludes every draw",
+                    "the prior of the site or study",
+                    where));
+        }
+        if (!prior.isTwoSided()) {
+            said.add(new Assumption(
+                    "no probability of uplift",
+                    prior.describe() + " allows one sign only",
+                    "the prior of the site or study",
+                    where));
+        }
+        if (outcome.rate().mean().isEmpty()) {
+            said.add(new Assumption(
+                    "no mean and no budget of the rate",
+                    "the age may be near zero, where a quotient has no mean",
+                    "compare Hinkley 1969, Biometrika 56, 635-639 (recalled)",
+                    where));
+        }
+        return said;
+    }
+
+    /** A coral's own age, and its rate where its height, its depth and the curve allow one. */
+    private LevelAnswer.SampleAnswer ofSample(
+            Site site, DatedSample sample, SeaLevelBasis basis, RatePrior prior, String where) {
+        Optional<Quantity> age = sample.ageKa().map(a -> Quantity.of(Summary.of(a), "ka"));
+        Optional<String> whyNoRate = whyNoRate(sample, basis);
+        if (whyNoRate.isPresent()) {
+            return new LevelAnswer.SampleAnswer(sample.name(), age, Optional.empty(), whyNoRate);
+        }
+        List<HeightTerm> height = FormerSeaLevel.ofCoral(
+                site, sample.elevationMetres().orElseThrow(), sample.depthMetres().orElseThrow());
+        SeaAtLevel sea = LevelExplanations.onCurve(
+                basis.curve().orElseThrow(), sample.ageKa().orElseThrow(), basis);
+        LevelRates.Outcome outcome = rates.of(
+                where + " / sample " + sample.name(), height, new Exact(0), List.of(sea), prior);
+        return new LevelAnswer.SampleAnswer(sample.name(), age, Optional.of(outcome.rate()), Optional.empty());
+    }
+
+    private static Optional<String> whyNoRate(DatedSample sample, SeaLevelBasis basis) {
+        if (!sample.used()) {
+            return Optional.of(sample.reason().isEmpty() ? "set aside" : "set aside: " + sample.reason());
+        }
+        if (sample.ageKa().isEmpty()) {
+            return Optional.of("no age");
+        }
+        if (sample.dates() != DatedSample.Role.LEVEL) {
+            return Optional.of("its age bounds the level on one side only");
+        }
+        if (sample.growthPosition() == DatedSample.GrowthPosition.NO) {
+            return Optional.of("not where it grew");
+        }
+        if (sample.elevationMetres().isEmpty()) {
+            return Optional.of("no elevation of its own");
+        }
+        if (sample.depthMetres().isEmpty()) {
+            return Optional.of("no depth of growth is known for it");
+        }
+        if (basis.curve().isEmpty()) {
+            return Optional.of("the study reads no curve");
+        }
+        return CurveReading.whyNot(basis.curve().get(), sample.ageKa().get());
+    }
+
+    private static Optional<LevelAnswer.Agreement> agreement(Level level) {
+        List<Uncertain> ages = LevelExplanations.datesOf(level, DatedSample.Role.LEVEL).stream()
+                .flatMap(sample -> sample.ageKa().stream())
+                .toList();
+        return Replicates.of(ages).map(r -> new LevelAnswer.Agreement(r.mswd(), r.degrees(), r.p()));
+    }
+}

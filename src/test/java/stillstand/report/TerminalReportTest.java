@@ -1,0 +1,83 @@
+package stillstand.report;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.util.List;
+import org.junit.jupiter.api.Test;
+import stillstand.SampleStudy;
+import stillstand.uplift.LevelAnswer.Bound;
+import stillstand.uplift.LevelAnswer.StageProbability;
+
+class TerminalReportTest {
+    private static final String TEXT = TerminalReport.text("An invented coast", SampleStudy.result(), "mine/results");
+
+    @Test
+    void theWholeSummaryReadsWell() {
+        assertEquals(
+                """
+                An invented coast
+                This is not a hazard assessment: rates over thousands of years are no forecast of the next ones. For
+                building or planning, local codes and licensed practice decide.
+                Rates are in m/kyr (the same as mm/yr), uplift positive: median ± one standard deviation, and the
+                shortest interval that holds 95 %.
+
+                North cliff: 2 levels, 1 with a rate
+                  Level  Stage                Age (ka)     RSL (m)         Rate          95 %  First order
+                  T4     5e 75 %, 5a 25 %  122.5 ± 3.3  60.9 ± 1.8  0.44 ± 0.02  0.40 to 0.47  0.44 ± 0.02
+                    C-1  at its own age    122.5 ± 3.3              0.41 ± 0.03  0.35 to 0.47
+                  T4, C-2: the curve is too steep at this age to give a rate.
+                  T2 waits: it is tied to no single highstand.
+                  Between T1 and T4: 0.40 ± 0.05 m/kyr, 95 % 0.30 to 0.50.
+
+                Old shore: 1 level, 1 with a rate
+                  S1 moves slower than 0.024 m/kyr up and 0.032 m/kyr down, at 95 %.
+                  Level  Stage     Age (ka)    RSL (m)         Rate           95 %  First order
+                  S1     5e     122.5 ± 3.3  7.0 ± 1.0  0.00 ± 0.01  −0.03 to 0.02  0.00 ± 0.01
+                  S1: 4096 draws did not settle the digits asked for; its last digit may move with the seed.
+
+                Not done:
+                  East bay: its curve ends at 20 ka
+
+                Odd in the input:
+                  levels.csv:3:4: elevation_m: 1200 looks like feet
+
+                What it rests on:
+                  =prior of the rate: cauchy 0 0.5 from -10 to 15 (the study)
+                  datum offset: 0 m, exact (Stillstand's default) [North cliff]
+
+                In mine/results: table1.csv for a paper, rates.csv with all digits, budget.csv with what each input
+                does, ledger.csv with every assumption, results.json with all of it.
+                Stillstand 0.1.0, seed 20261201.
+                """,
+                TEXT);
+    }
+
+    @Test
+    void noLineIsWiderThanATerminal() {
+        String longName = "a".repeat(300);
+        TerminalReport.text(longName, SampleStudy.result(), longName + " " + longName)
+                .lines()
+                .filter(line -> !line.contains(longName))
+                .forEach(line -> assertTrue(line.length() <= TerminalReport.WIDTH, line));
+    }
+
+    @Test
+    void boundsAreRoundedUp() {
+        assertEquals(
+                "slower than 0.024 m/kyr up and 0.032 m/kyr down, at 95 %",
+                Wording.bound(new Bound(0.0234, 0.0311, 0.95), SampleStudy.rate(-0.004, 0.014)));
+    }
+
+    @Test
+    void stagesAreListedByProbability() {
+        assertEquals("5e", Wording.stages(List.of(new StageProbability("5e", 1))));
+        assertEquals(
+                "5c 60 %, 5a 30 %, …",
+                Wording.stages(List.of(
+                        new StageProbability("5a", 0.3),
+                        new StageProbability("5c", 0.6),
+                        new StageProbability("5e", 0.1))));
+        assertEquals("", Wording.stages(List.of()));
+    }
+}
