@@ -57,6 +57,12 @@ public record CurveFacts(
                 caveats);
     }
 
+    /** The same facts for a curve whose spread had to be guessed. */
+    public CurveFacts withGuessedSpread(String meaning) {
+        return new CurveFacts(
+                citation, zero, ageScale, meaning, true, correlationTimeKa, curveAgeSigmaKa, usableFromKa, caveats);
+    }
+
     /** The same facts for a curve moved to another zero. */
     CurveFacts withZero(String otherZero) {
         return new CurveFacts(

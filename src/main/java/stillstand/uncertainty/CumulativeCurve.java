@@ -26,14 +26,21 @@ final class CumulativeCurve {
 
     /** @param probability from 0 (the least value) to 1 (the greatest) */
     double quantile(double probability) {
-        int at = Arrays.binarySearch(probabilities, probability);
-        if (at >= 0) {
-            while (at > 0 && probabilities[at - 1] == probability) {
-                at--;
+        int above = 0;
+        int end = values.length;
+        while (above < end) {
+            int middle = (above + end) >>> 1;
+            if (probabilities[middle] >= probability) {
+                end = middle;
+            } else {
+                above = middle + 1;
             }
-            return values[at];
         }
-        int above = -at - 1;
+        return quantileBelowKnot(above, probability);
+    }
+
+    /** @param above the first knot whose probability is not below the one asked for */
+    private double quantileBelowKnot(int above, double probability) {
         if (above == 0) {
             return least();
         }
@@ -66,20 +73,20 @@ final class CumulativeCurve {
      * of draws and f1, f2 the densities at the ends: that of the draws between the ends.
      */
     Interval shortest(double probability, double draws) {
-        double[] low = new double[CANDIDATES + 1];
-        double[] width = new double[CANDIDATES + 1];
+        double step = (1 - probability) / CANDIDATES;
+        double[] low = quantiles(0, step);
+        double[] width = quantiles(probability, step);
         int best = 0;
         for (int k = 0; k <= CANDIDATES; k++) {
-            low[k] = quantile(tail(k, probability));
-            width[k] = quantile(Math.min(1, tail(k, probability) + probability)) - low[k];
+            width[k] -= low[k];
             best = width[k] < width[best] ? k : best;
         }
-        double error = errorPerRootOfDistance(best, low, width, probability, draws);
+        double error = errorPerRootOfDistance(best, low, width, step, draws);
         int[] countAndSum = {1, 0};
         walk(best, 1, width, error, countAndSum);
         walk(best, -1, width, error, countAndSum);
         double centre = best + (double) countAndSum[1] / countAndSum[0];
-        double lower = (1 - probability) * centre / CANDIDATES;
+        double lower = centre * step;
         return new Interval(quantile(lower), quantile(Math.min(1, lower + probability)));
     }
 
@@ -99,17 +106,26 @@ final class CumulativeCurve {
     }
 
     private static double errorPerRootOfDistance(
-            int best, double[] low, double[] width, double probability, double draws) {
+            int best, double[] low, double[] width, double step, double draws) {
         int from = Math.max(0, best - CANDIDATES / 50);
         int to = Math.min(CANDIDATES, best + CANDIDATES / 50);
-        double step = (1 - probability) / CANDIDATES;
         double lowSlope = (low[to] - low[from]) / ((to - from) * step);
         double highSlope = lowSlope + (width[to] - width[from]) / ((to - from) * step);
         return Math.sqrt(step / draws * (lowSlope * lowSlope + highSlope * highSlope));
     }
 
-    private static double tail(int candidate, double probability) {
-        return (1 - probability) * candidate / CANDIDATES;
+    /** Quantiles of evenly spaced probabilities, in one walk along the knots. */
+    private double[] quantiles(double from, double step) {
+        double[] quantiles = new double[CANDIDATES + 1];
+        int above = 0;
+        for (int k = 0; k <= CANDIDATES; k++) {
+            double probability = Math.min(1, from + k * step);
+            while (above < values.length && probabilities[above] < probability) {
+                above++;
+            }
+            quantiles[k] = quantileBelowKnot(above, probability);
+        }
+        return quantiles;
     }
 
     /** Takes knots and draws by rising value. */
@@ -142,7 +158,7 @@ final class CumulativeCurve {
         }
 
         private void knot(double value, double weightBelow) {
-            values[size] = size > 0 ? Math.max(value, values[size - 1]) : value;
+            values[size] = size > 0 && value < values[size - 1] ? values[size - 1] : value;
             weights[size++] = weightBelow;
         }
 

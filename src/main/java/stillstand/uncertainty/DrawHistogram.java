@@ -14,29 +14,31 @@ import java.util.Arrays;
  * <p>Not safe for use by several threads at once.
  */
 public final class DrawHistogram {
-    static final int CELLS = 1 << 14;
+    static final int CELLS = 1 << 12;
 
     /** The range leaves out this part of the pilot draws on either side: heavy tails must not widen the cells. */
     private static final double PILOT_TAIL = 0.005;
 
-    private final double origin;
+    private static final double HALF = CELLS / 2.0;
+
+    private final double middle;
     private final double cellWidth;
+    /** Infinite where the range has no width: then no draw falls in a cell and all are kept. */
     private final double cellsPerUnit;
+
     private final double[] cells = new double[CELLS];
     private final KeptDraws beyond = new KeptDraws();
 
     private long count;
     private double weight;
     private double squaredWeight;
-    /** Weighted sums of the distance from the middle of the range, and of its square. */
+    /** Weighted sum of the distances from the middle of the range. */
     private double sum;
 
     private double squaredSum;
-    private double least = Double.POSITIVE_INFINITY;
-    private double greatest = Double.NEGATIVE_INFINITY;
 
-    private DrawHistogram(double origin, double cellWidth) {
-        this.origin = origin;
+    private DrawHistogram(double middle, double cellWidth) {
+        this.middle = middle;
         this.cellWidth = cellWidth;
         this.cellsPerUnit = 1 / cellWidth;
     }
@@ -48,18 +50,19 @@ public final class DrawHistogram {
      * @throws IllegalArgumentException if there are no draws or one is not finite
      */
     public static DrawHistogram forDrawsLike(double[] pilot) {
-        SortedDraws sorted = SortedDraws.of(pilot);
+        return forDrawsLike(SortedDraws.of(pilot));
+    }
+
+    /** An empty histogram with a range fit for weighted draws like these. */
+    public static DrawHistogram forDrawsLike(SortedDraws sorted) {
         double low = sorted.quantile(PILOT_TAIL);
         double high = sorted.quantile(1 - PILOT_TAIL);
-        // draws that are all alike still need cells of some width
-        double least = 1e-9 * Math.max(Math.max(Math.abs(low), Math.abs(high)), 1e-100);
-        double width = Math.max(high - low, least);
-        return new DrawHistogram(low + (high - low) / 2 - width / 2, width / CELLS);
+        return new DrawHistogram(low + (high - low) / 2, (high - low) / CELLS);
     }
 
     /** An empty histogram with the range of this one. */
     public DrawHistogram emptyCopy() {
-        return new DrawHistogram(origin, cellWidth);
+        return new DrawHistogram(middle, cellWidth);
     }
 
     /**
@@ -68,40 +71,26 @@ public final class DrawHistogram {
      * @throws IllegalArgumentException if a draw is not finite; the histogram is then of no further use
      */
     public void add(double[] draws) {
-        double middle = middle();
-        double sum0 = 0;
-        double sum1 = 0;
-        double square0 = 0;
-        double square1 = 0;
-        // two chains of additions in turn: the processor does not wait for one before it begins the next
-        for (int i = 0; i + 1 < draws.length; i += 2) {
-            double d0 = draws[i] - middle;
-            double d1 = draws[i + 1] - middle;
-            sum0 += d0;
-            sum1 += d1;
-            square0 += d0 * d0;
-            square1 += d1 * d1;
-        }
-        if (draws.length % 2 == 1) {
-            double last = draws[draws.length - 1] - middle;
-            sum0 += last;
-            square0 += last * last;
-        }
-        requireFinite(sum0 + sum1);
+        double[] counts = cells;
+        double sumOfBlock = 0;
+        double squaresOfBlock = 0;
         for (double draw : draws) {
-            int cell = (int) Math.floor((draw - origin) * cellsPerUnit);
+            double distance = draw - middle;
+            sumOfBlock += distance;
+            squaresOfBlock += distance * distance;
+            double cell = distance * cellsPerUnit + HALF;
             if (cell >= 0 && cell < CELLS) {
-                cells[cell]++;
+                counts[(int) cell]++;
             } else {
                 beyond.add(draw, 1);
             }
         }
-        extend(draws);
+        requireFinite(sumOfBlock);
         count += draws.length;
         weight += draws.length;
         squaredWeight += draws.length;
-        sum += sum0 + sum1;
-        squaredSum += square0 + square1;
+        sum += sumOfBlock;
+        squaredSum += squaresOfBlock;
     }
 
     /**
@@ -116,7 +105,6 @@ public final class DrawHistogram {
             throw new IllegalArgumentException(
                     "draws and weights must be as many but are " + draws.length + " and " + weights.length);
         }
-        double middle = middle();
         for (int i = 0; i < draws.length; i++) {
             double draw = draws[i];
             double w = weights[i];
@@ -127,18 +115,17 @@ public final class DrawHistogram {
             if (w == 0) {
                 continue;
             }
-            int cell = (int) Math.floor((draw - origin) * cellsPerUnit);
+            double distance = draw - middle;
+            double cell = distance * cellsPerUnit + HALF;
             if (cell >= 0 && cell < CELLS) {
-                cells[cell] += w;
+                cells[(int) cell] += w;
             } else {
                 beyond.add(draw, w);
             }
             weight += w;
             squaredWeight += w * w;
-            sum += w * (draw - middle);
-            squaredSum += w * (draw - middle) * (draw - middle);
-            least = Math.min(least, draw);
-            greatest = Math.max(greatest, draw);
+            sum += w * distance;
+            squaredSum += w * distance * distance;
         }
         count += draws.length;
     }
@@ -149,7 +136,7 @@ public final class DrawHistogram {
      * @throws IllegalArgumentException if the other has another range
      */
     public void merge(DrawHistogram other) {
-        if (other.origin != origin || other.cellWidth != cellWidth) {
+        if (other.middle != middle || other.cellWidth != cellWidth) {
             throw new IllegalArgumentException("histograms to be merged must have the same range");
         }
         for (int cell = 0; cell < CELLS; cell++) {
@@ -161,8 +148,6 @@ public final class DrawHistogram {
         squaredWeight += other.squaredWeight;
         sum += other.sum;
         squaredSum += other.squaredSum;
-        least = Math.min(least, other.least);
-        greatest = Math.max(greatest, other.greatest);
     }
 
     /** How many draws were added. */
@@ -185,23 +170,31 @@ public final class DrawHistogram {
             throw new IllegalStateException("a distribution needs at least one draw of some weight");
         }
         double offset = sum / weight;
-        double variance = Math.max(0, squaredSum / weight - offset * offset);
+        double sd = Math.sqrt(Math.max(0, squaredSum / weight - offset * offset));
         double effective = weight * weight / squaredWeight;
-        double mean = Math.min(greatest, Math.max(least, middle() + offset));
-        double sd = least == greatest ? 0 : Math.sqrt(variance);
-        return new DrawDistribution(curve(), mean, sd, count, effective);
+        return new DrawDistribution(curve(), middle + offset, sd, count, effective);
     }
 
     private CumulativeCurve curve() {
         double[][] kept = beyond.sorted();
-        CumulativeCurve.Builder curve = new CumulativeCurve.Builder(CELLS + 1 + kept[0].length);
+        int first = 0;
+        while (first < CELLS && cells[first] == 0) {
+            first++;
+        }
+        int end = CELLS;
+        while (end > first && cells[end - 1] == 0) {
+            end--;
+        }
+        CumulativeCurve.Builder curve = new CumulativeCurve.Builder(end - first + 1 + kept[0].length);
         int next = 0;
-        for (; next < kept[0].length && kept[0][next] < origin; next++) {
+        for (; next < kept[0].length && kept[0][next] < middle; next++) {
             curve.draw(kept[0][next], kept[1][next]);
         }
-        curve.edge(clamped(origin));
-        for (int cell = 0; cell < CELLS; cell++) {
-            curve.rise(clamped(origin + (cell + 1) * cellWidth), cells[cell]);
+        if (first < end) {
+            curve.edge(edge(first));
+        }
+        for (int cell = first; cell < end; cell++) {
+            curve.rise(edge(cell + 1), cells[cell]);
         }
         for (; next < kept[0].length; next++) {
             curve.draw(kept[0][next], kept[1][next]);
@@ -209,23 +202,8 @@ public final class DrawHistogram {
         return curve.build();
     }
 
-    private double clamped(double edge) {
-        return Math.min(greatest, Math.max(least, edge));
-    }
-
-    private double middle() {
-        return origin + CELLS / 2 * cellWidth;
-    }
-
-    private void extend(double[] draws) {
-        double low = least;
-        double high = greatest;
-        for (double draw : draws) {
-            low = Math.min(low, draw);
-            high = Math.max(high, draw);
-        }
-        least = low;
-        greatest = high;
+    private double edge(int cell) {
+        return middle + (cell - HALF) * cellWidth;
     }
 
     private static void requireFinite(double sumOfDraws) {
@@ -234,13 +212,17 @@ public final class DrawHistogram {
         }
     }
 
-    /** Growing lists of draws and their weights. */
+    /** Growing lists of draws and their weights; draws that are all alike take one place. */
     private static final class KeptDraws {
         private double[] values = new double[64];
         private double[] weights = new double[64];
         private int size;
 
         void add(double value, double weight) {
+            if (size > 0 && values[size - 1] == value) {
+                weights[size - 1] += weight;
+                return;
+            }
             if (size == values.length) {
                 values = Arrays.copyOf(values, 2 * size);
                 weights = Arrays.copyOf(weights, 2 * size);

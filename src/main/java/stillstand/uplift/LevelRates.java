@@ -1,6 +1,7 @@
 package stillstand.uplift;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.concurrent.Callable;
@@ -19,6 +20,7 @@ import stillstand.uncertainty.DrawStreams;
 import stillstand.uncertainty.Interval;
 import stillstand.uncertainty.MonteCarloError;
 import stillstand.uncertainty.SobolPoints;
+import stillstand.uncertainty.SortedDraws;
 import stillstand.uncertainty.Summary;
 import stillstand.uncertainty.Uncertain;
 
@@ -170,27 +172,44 @@ public final class LevelRates {
 
         /** The first block, which also sets the ranges of all histograms. */
         Block pilot() {
+            int each = DrawStreams.BLOCK_DRAWS;
+            double[][] all = new double[3][explanations.size() * each];
+            double[] weights = new double[explanations.size() * each];
+            double[] posteriorWeights = new double[weights.length];
             RateColumns.Columns drawn = borrow();
-            double[][] shapes = new double[3][];
-            double[][] all = new double[3][explanations.size() * DrawStreams.BLOCK_DRAWS];
+            double[] ofOne = new double[each];
             for (int e = 0; e < explanations.size(); e++) {
                 evaluate(e, 0, drawn);
-                int at = e * DrawStreams.BLOCK_DRAWS;
-                System.arraycopy(drawn.rateMetresPerKyr, 0, all[0], at, DrawStreams.BLOCK_DRAWS);
-                System.arraycopy(drawn.heightMetres, 0, all[1], at, DrawStreams.BLOCK_DRAWS);
-                System.arraycopy(drawn.ageKa, 0, all[2], at, DrawStreams.BLOCK_DRAWS);
+                weigh(explanations.get(e).probability(), drawn, ofOne);
+                System.arraycopy(drawn.rateMetresPerKyr, 0, all[0], e * each, each);
+                System.arraycopy(drawn.heightMetres, 0, all[1], e * each, each);
+                System.arraycopy(drawn.ageKa, 0, all[2], e * each, each);
+                System.arraycopy(ofOne, 0, weights, e * each, each);
+                underPrior(drawn, ofOne);
+                System.arraycopy(ofOne, 0, posteriorWeights, e * each, each);
             }
             columns.add(drawn);
-            System.arraycopy(all, 0, shapes, 0, shapes.length);
-            DrawHistogram rate = DrawHistogram.forDrawsLike(shapes[0]);
+            boolean possible = Arrays.stream(posteriorWeights).anyMatch(w -> w > 0);
             Block shape = new Block(
-                    rate,
-                    rate.emptyCopy(),
-                    DrawHistogram.forDrawsLike(shapes[1]),
-                    DrawHistogram.forDrawsLike(shapes[2]),
+                    like(all[0], weights),
+                    like(all[0], possible ? posteriorWeights : weights),
+                    like(all[1], weights),
+                    like(all[2], weights),
                     0,
                     new BlockEstimates(0, 0, new Interval(0, 0)));
             return block(0, shape);
+        }
+
+        private DrawHistogram like(double[] draws, double[] weights) {
+            return DrawHistogram.forDrawsLike(SortedDraws.weighted(draws, weights));
+        }
+
+        /** Turns weights of propagation into weights of the posterior, in place. */
+        private void underPrior(RateColumns.Columns drawn, double[] weights) {
+            for (int i = 0; i < weights.length; i++) {
+                weights[i] /= drawn.ageKa[i];
+            }
+            prior.weigh(drawn.rateMetresPerKyr, weights);
         }
 
         /** Blocks {@code from} to below {@code upTo}, in order. */
@@ -222,7 +241,7 @@ public final class LevelRates {
                 throw new RunCancelledException();
             }
             DrawHistogram rate = shape.rate().emptyCopy();
-            DrawHistogram withPrior = rate.emptyCopy();
+            DrawHistogram withPrior = shape.rateWithPrior().emptyCopy();
             DrawHistogram height = shape.height().emptyCopy();
             DrawHistogram age = shape.age().emptyCopy();
             long beyondCurve = 0;
@@ -230,20 +249,16 @@ public final class LevelRates {
             double[] weights = new double[DrawStreams.BLOCK_DRAWS];
             for (int e = 0; e < explanations.size(); e++) {
                 evaluate(e, number, drawn);
-                boolean equal = explanations.size() == 1 && drawn.allValid;
-                if (equal) {
+                beyondCurve += weigh(explanations.get(e).probability(), drawn, weights);
+                if (explanations.size() == 1 && drawn.allValid) {
                     rate.add(drawn.rateMetresPerKyr);
                     height.add(drawn.heightMetres);
                 } else {
-                    beyondCurve += weigh(explanations.get(e).probability(), drawn, weights);
                     rate.add(drawn.rateMetresPerKyr, weights);
                     height.add(drawn.heightMetres, weights);
                     age.add(drawn.ageKa, weights);
                 }
-                for (int i = 0; i < weights.length; i++) {
-                    weights[i] = (equal ? 1 : weights[i]) / drawn.ageKa[i];
-                }
-                prior.weigh(drawn.rateMetresPerKyr, weights);
+                underPrior(drawn, weights);
                 withPrior.add(drawn.rateMetresPerKyr, weights);
             }
             columns.add(drawn);
@@ -281,7 +296,7 @@ public final class LevelRates {
         }
 
         Outcome outcome(List<Block> blocks, DrawHistogram rate, boolean converged) {
-            DrawHistogram withPrior = rate.emptyCopy();
+            DrawHistogram withPrior = blocks.get(0).rateWithPrior().emptyCopy();
             DrawHistogram height = blocks.get(0).height().emptyCopy();
             DrawHistogram age = blocks.get(0).age().emptyCopy();
             long beyondCurve = 0;
