@@ -32,7 +32,11 @@ public record InputProblem(String file, long line, int column, String header, St
         if (!header.isEmpty()) {
             text.append(header).append(": ");
         }
-        return text.append("found ").append(found).append(", expected ").append(expected).toString();
+        return text.append("found ")
+                .append(found)
+                .append(", expected ")
+                .append(expected)
+                .toString();
     }
 
     /** The text of the input in double quotes: at most 60 characters, control characters escaped. */

@@ -1,24 +1,31 @@
 package stillstand.uncertainty;
 
 /**
- * A stretch of the number line.
+ * A closed interval.
  *
- * @param low lower end
- * @param high upper end, at or above the lower
+ * @param low lower end, not above {@code high}
+ * @param high upper end
  */
 public record Interval(double low, double high) {
+    /** Probability of the interval reported as "68 %": that of one standard deviation either side of a normal mean. */
+    public static final double PROBABILITY_68 = 0.6827;
+
+    /** Probability of the interval reported as "95 %". */
+    public static final double PROBABILITY_95 = 0.95;
+
+    /** @throws IllegalArgumentException if not {@code low <= high} */
     public Interval {
-        if (!(high >= low)) {
-            throw new IllegalArgumentException("high must be at or above low (" + low + ") but is " + high);
+        if (!(low <= high)) {
+            throw new IllegalArgumentException("low must not be above high but is " + low + " with high " + high);
         }
     }
 
-    /** Upper less lower end. */
+    /** Upper end less lower end. */
     public double width() {
         return high - low;
     }
 
-    /** Whether a value lies in it, ends included. */
+    /** Whether {@code value} lies in the interval, its ends included. */
     public boolean contains(double value) {
         return value >= low && value <= high;
     }

@@ -62,8 +62,7 @@ public record SplitNormal(double centre, double sigmaLow, double sigmaHigh) impl
     @Override
     public double standardDeviation() {
         double difference = sigmaHigh - sigmaLow;
-        return Math.sqrt(
-                (sigmaLow * sigmaLow + sigmaHigh * sigmaHigh) / 2 - difference * difference / (2 * Math.PI));
+        return Math.sqrt((sigmaLow * sigmaLow + sigmaHigh * sigmaHigh) / 2 - difference * difference / (2 * Math.PI));
     }
 
     @Override

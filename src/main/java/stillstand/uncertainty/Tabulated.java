@@ -54,8 +54,9 @@ public record Tabulated(List<Point> points, List<Spike> spikes) implements Uncer
         for (int i = 0; i < spikes.size(); i++) {
             left -= spikes.get(i).probability();
             if (i > 0 && !(spikes.get(i - 1).value() < spikes.get(i).value())) {
-                throw new IllegalArgumentException("values of spikes must increase but "
-                        + spikes.get(i).value() + " follows " + spikes.get(i - 1).value());
+                throw new IllegalArgumentException(
+                        "values of spikes must increase but " + spikes.get(i).value() + " follows "
+                                + spikes.get(i - 1).value());
             }
         }
         if (!(left > 0)) {
@@ -162,8 +163,7 @@ public record Tabulated(List<Point> points, List<Spike> spikes) implements Uncer
         if (value >= to.value()) {
             return to.density();
         }
-        return from.density()
-                + (to.density() - from.density()) * (value - from.value()) / (to.value() - from.value());
+        return from.density() + (to.density() - from.density()) * (value - from.value()) / (to.value() - from.value());
     }
 
     private static List<Point> scaled(List<Point> points, double probability) {
@@ -175,7 +175,8 @@ public record Tabulated(List<Point> points, List<Spike> spikes) implements Uncer
             double width = points.get(i).value() - points.get(i - 1).value();
             if (!(width >= 0)) {
                 throw new IllegalArgumentException("values of points must not decrease but "
-                        + points.get(i).value() + " follows " + points.get(i - 1).value());
+                        + points.get(i).value() + " follows "
+                        + points.get(i - 1).value());
             }
             area += width * (points.get(i - 1).density() + points.get(i).density()) / 2;
         }

@@ -44,8 +44,8 @@ final class TabulatedPieces {
             for (; next < spikes.size() && spikes.get(next).value() < to.value(); next++) {
                 Tabulated.Spike spike = spikes.get(next);
                 if (spike.value() > from.value()) {
-                    Tabulated.Point cut = new Tabulated.Point(
-                            spike.value(), Tabulated.between(from, to, spike.value()));
+                    Tabulated.Point cut =
+                            new Tabulated.Point(spike.value(), Tabulated.between(from, to, spike.value()));
                     pieces.add(slope(from, cut));
                     from = cut;
                 }

@@ -14,6 +14,9 @@ public record TruncatedNormal(double centre, double sigma, double low, double hi
     /** Less probability than this between the bounds is a contradiction, not a distribution. */
     private static final double LEAST_PROBABILITY_KEPT = 1e-200;
 
+    /** From here on the digits lost by adding the lower tail do not matter. */
+    private static final double ENOUGH_FOR_THE_QUICK_WAY = 0.01;
+
     /**
      * @throws IllegalArgumentException if {@code centre} is not finite, {@code sigma} not a finite number above 0, not
      *     {@code low < high}, or the bounds lie so far from the centre that next to nothing is left between them
@@ -25,8 +28,8 @@ public record TruncatedNormal(double centre, double sigma, double low, double hi
             throw new IllegalArgumentException("low must be below high but is " + low + " with high " + high);
         }
         if (!(probabilityKept(centre, sigma, low, high) > LEAST_PROBABILITY_KEPT)) {
-            throw new IllegalArgumentException("low and high must leave some of the normal distribution with mean " + centre
-                    + " and standard deviation " + sigma + " but are " + low + " and " + high);
+            throw new IllegalArgumentException("low and high must leave some of the normal distribution with mean "
+                    + centre + " and standard deviation " + sigma + " but are " + low + " and " + high);
         }
     }
 
@@ -73,8 +76,19 @@ public record TruncatedNormal(double centre, double sigma, double low, double hi
     @Override
     public void toQuantiles(double[] column) {
         Cut cut = new Cut(this);
+        if (probabilityKept(centre, sigma, low, high) < ENOUGH_FOR_THE_QUICK_WAY) {
+            for (int i = 0; i < column.length; i++) {
+                column[i] = cut.quantile(column[i]);
+            }
+            return;
+        }
+        double kept = cut.notAbove - cut.below;
         for (int i = 0; i < column.length; i++) {
-            column[i] = cut.quantile(column[i]);
+            column[i] = Math.min(Math.nextDown(1.0), cut.below + kept * column[i]);
+        }
+        StandardNormal.toQuantiles(column);
+        for (int i = 0; i < column.length; i++) {
+            column[i] = Math.min(high, Math.max(low, centre + sigma * column[i]));
         }
     }
 

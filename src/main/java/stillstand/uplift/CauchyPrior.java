@@ -29,6 +29,17 @@ public record CauchyPrior(double location, double scale, double fromMetresPerKyr
     }
 
     @Override
+    public void weigh(double[] ratesMetresPerKyr, double[] weights) {
+        double peak = 1 / (scale * (angle(toMetresPerKyr) - angle(fromMetresPerKyr)));
+        for (int i = 0; i < weights.length; i++) {
+            double rate = ratesMetresPerKyr[i];
+            double distance = (rate - location) / scale;
+            boolean possible = rate >= fromMetresPerKyr && rate <= toMetresPerKyr;
+            weights[i] *= possible ? peak / (1 + distance * distance) : 0;
+        }
+    }
+
+    @Override
     public double quantile(double probability) {
         double low = angle(fromMetresPerKyr);
         double rate = location + scale * Math.tan(low + probability * (angle(toMetresPerKyr) - low));

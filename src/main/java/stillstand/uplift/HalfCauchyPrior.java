@@ -23,6 +23,11 @@ public record HalfCauchyPrior(double scale, double fromMetresPerKyr, double toMe
     }
 
     @Override
+    public void weigh(double[] ratesMetresPerKyr, double[] weights) {
+        whole().weigh(ratesMetresPerKyr, weights);
+    }
+
+    @Override
     public double quantile(double probability) {
         return whole().quantile(probability);
     }

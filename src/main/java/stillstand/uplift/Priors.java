@@ -26,6 +26,8 @@ final class Priors {
 
     /** A number as a user would write it: no trailing ".0". */
     static String text(double value) {
-        return value == Math.rint(value) && Math.abs(value) < 1e9 ? Long.toString((long) value) : Double.toString(value);
+        return value == Math.rint(value) && Math.abs(value) < 1e9
+                ? Long.toString((long) value)
+                : Double.toString(value);
     }
 }

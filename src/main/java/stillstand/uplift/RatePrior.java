@@ -8,6 +8,18 @@ public sealed interface RatePrior permits CauchyPrior, HalfCauchyPrior, LogUnifo
     /** Density at a rate, per m/kyr; 0 outside the range. */
     double density(double rateMetresPerKyr);
 
+    /**
+     * Multiplies weights by the density at each rate.
+     *
+     * @param ratesMetresPerKyr a column of rates
+     * @param weights as long; multiplied in place
+     */
+    default void weigh(double[] ratesMetresPerKyr, double[] weights) {
+        for (int i = 0; i < weights.length; i++) {
+            weights[i] *= density(ratesMetresPerKyr[i]);
+        }
+    }
+
     /** Lowest rate that is possible, m/kyr. */
     double fromMetresPerKyr();
 

@@ -1,0 +1,41 @@
+package stillstand.study;
+
+import java.util.List;
+import java.util.Optional;
+import stillstand.sealevel.SeaLevelCurve;
+import stillstand.sealevel.StageTable;
+
+/**
+ * What a study may name: the tool's own curves and tables, and after reading a study the user's beside them. Handed in by
+ * {@code files}.
+ *
+ * @param stages that curves are searched for
+ * @param curves each id once
+ * @param highstands tables of highstands, each id once
+ */
+public record Library(StageTable stages, List<SeaLevelCurve> curves, List<HighstandRows> highstands) {
+    public Library {
+        curves = List.copyOf(curves);
+        highstands = List.copyOf(highstands);
+    }
+
+    /** The curve of an id. */
+    public Optional<SeaLevelCurve> curve(String id) {
+        return curves.stream().filter(curve -> curve.id().equals(id)).findFirst();
+    }
+
+    /** The highstand table of an id. */
+    public Optional<HighstandRows> highstands(String id) {
+        return highstands.stream().filter(table -> table.id().equals(id)).findFirst();
+    }
+
+    /** Ids of all curves. */
+    public List<String> curveIds() {
+        return curves.stream().map(SeaLevelCurve::id).toList();
+    }
+
+    /** Ids of all highstand tables. */
+    public List<String> highstandIds() {
+        return highstands.stream().map(HighstandRows::id).toList();
+    }
+}

@@ -1,0 +1,21 @@
+package stillstand.study;
+
+import java.util.Optional;
+import stillstand.sealevel.HighstandTable;
+import stillstand.sealevel.SeaLevelCurve;
+
+/**
+ * One account of past sea level that a study runs under.
+ *
+ * @param id of the curve, or of the table where the highstands come from a table
+ * @param weight among the study's cases, above 0
+ * @param curve read where a level or coral uses its own age; absent where highstands come from a table and no curve is named
+ * @param highstands with overrides, defaults and the study's own settings in them
+ */
+public record SeaLevelCase(String id, double weight, Optional<SeaLevelCurve> curve, HighstandTable highstands) {
+    public SeaLevelCase {
+        if (!(weight > 0 && weight < Double.POSITIVE_INFINITY)) {
+            throw new IllegalArgumentException("weight must be above 0 but is " + weight);
+        }
+    }
+}

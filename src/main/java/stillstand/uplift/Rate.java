@@ -1,0 +1,55 @@
+package stillstand.uplift;
+
+import java.util.Optional;
+import stillstand.uncertainty.DensityBins;
+import stillstand.uncertainty.DrawDistribution;
+import stillstand.uncertainty.Interval;
+
+/**
+ * A rate of vertical motion with its uncertainty, in m/kyr (the same as mm/yr), uplift positive.
+ *
+ * @param median half the probability lies below
+ * @param mean expected value; absent where it does not exist
+ * @param sd standard deviation; absent where it does not exist
+ * @param interval68 equal tails, probability 0.6827
+ * @param interval95 equal tails, probability 0.95
+ * @param shortest68 the shortest interval of probability 0.6827
+ * @param shortest95 the shortest interval of probability 0.95
+ * @param density for figures; absent where all draws are alike
+ * @param unit "m/kyr"
+ */
+public record Rate(
+        double median,
+        Optional<Double> mean,
+        Optional<Double> sd,
+        Interval interval68,
+        Interval interval95,
+        Interval shortest68,
+        Interval shortest95,
+        Optional<DensityBins> density,
+        String unit) {
+    /** The unit of every rate. */
+    public static final String UNIT = "m/kyr";
+
+    /** Bins of a density. */
+    private static final int BINS = 200;
+
+    /**
+     * The rate that draws add up to.
+     *
+     * @param draws rates, m/kyr
+     * @param hasMean whether mean and standard deviation exist
+     */
+    static Rate of(DrawDistribution draws, boolean hasMean) {
+        return new Rate(
+                draws.quantile(0.5),
+                hasMean ? Optional.of(draws.mean()) : Optional.empty(),
+                hasMean ? Optional.of(draws.sd()) : Optional.empty(),
+                draws.equalTailed(Interval.PROBABILITY_68),
+                draws.equalTailed(Interval.PROBABILITY_95),
+                draws.shortest(Interval.PROBABILITY_68),
+                draws.shortest(Interval.PROBABILITY_95),
+                draws.density(BINS),
+                UNIT);
+    }
+}
