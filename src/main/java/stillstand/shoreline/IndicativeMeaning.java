@@ -1,5 +1,6 @@
 package stillstand.shoreline;
 
+import stillstand.uncertainty.Exact;
 import stillstand.uncertainty.Uncertain;
 
 /**
@@ -15,5 +16,16 @@ public record IndicativeMeaning(String indicator, Uncertain referenceWaterLevelM
         if (!(rangeMetres >= 0 && rangeMetres < Double.POSITIVE_INFINITY)) {
             throw new IllegalArgumentException("rangeMetres must be 0 or more but is " + rangeMetres);
         }
+    }
+
+    /**
+     * From the limits of the modern counterpart: the reference water level is half of their sum, the range their difference.
+     *
+     * @param upperMetres upper limit above mean sea level, up positive
+     * @param lowerMetres lower limit above mean sea level, up positive
+     * @throws IllegalArgumentException if the lower limit is above the upper, or one is not finite
+     */
+    public static IndicativeMeaning ofLimits(String indicator, double upperMetres, double lowerMetres) {
+        return new IndicativeMeaning(indicator, new Exact((upperMetres + lowerMetres) / 2), upperMetres - lowerMetres);
     }
 }

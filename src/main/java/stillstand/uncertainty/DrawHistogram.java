@@ -170,6 +170,11 @@ public final class DrawHistogram {
         return count;
     }
 
+    /** Sum of the weights of the draws that were added; each draw without a weight counts 1. */
+    public double totalWeight() {
+        return weight;
+    }
+
     /**
      * What the draws so far say; later draws do not change it.
      *

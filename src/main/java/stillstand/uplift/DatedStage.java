@@ -52,7 +52,7 @@ record DatedStage(double likelihood, Uncertain ageKa) {
             points.add(new Tabulated.Point(nodesKa[i], density));
             sum += i == 0 || i == NODES - 1 ? density / 2 : density;
         }
-        return sum > 0 ? new DatedStage(sum * stepKa, new Tabulated(points)) : new DatedStage(0, positive(prior));
+        return sum > 0 ? new DatedStage(sum * stepKa, Tabulated.of(points)) : new DatedStage(0, positive(prior));
     }
 
     /** The age cut off at the youngest that a level can have. */

@@ -1,0 +1,7 @@
+/**
+ * Ages: what dates say, alone and together. Knows nothing of levels, curves or rates.
+ */
+@NullMarked
+package stillstand.dating;
+
+import org.jspecify.annotations.NullMarked;
