@@ -51,6 +51,13 @@ final class RowCells {
     }
 
     void place(FlightRow row, UpliftHistory history, SharedNumbers shared, HeightCells cells) {
+        moments(row, history, shared);
+        existence = row.existence();
+        fill(cells, shared.recordingProbability(row), shared.expectedStrays());
+    }
+
+    /** Height and age of the row's shoreline, without the cells. */
+    void moments(FlightRow row, UpliftHistory history, SharedNumbers shared) {
         ageKa = row.ageKa() + (row.takesCurveAge() ? shared.ageShiftKa() : 0);
         double rate = history.rateMetresPerKyrAt(ageKa);
         double ageVariance = row.ageSigmaKa() * row.ageSigmaKa();
@@ -64,8 +71,6 @@ final class RowCells {
                 + 2 * rate * row.levelAgeCovarianceMetresKa();
         slopeKaPerMetre = varianceMetres2 > 0 ? covariance / varianceMetres2 : 0;
         ageVarianceKa2 = Math.max(0, ageVariance - slopeKaPerMetre * covariance);
-        existence = row.existence();
-        fill(cells, shared.recordingProbability(row), shared.expectedStrays());
     }
 
     private void fill(HeightCells cells, double recording, double strays) {
