@@ -29,6 +29,14 @@ sealed interface DateKernel permits NormalDates, GriddedDates {
     /** Mean and mean square of the age given the dates, where the age before them is normal; into {@code out[0]}, {@code out[1]}. */
     void ageMoments(double meanKa, double varianceKa2, double[] out);
 
+    /**
+     * A draw of the age given the dates, where the age before them is normal.
+     *
+     * @param choice uniform, strictly between 0 and 1
+     * @param normal standard normal
+     */
+    double drawAgeKa(double meanKa, double varianceKa2, double choice, double normal);
+
     static DateKernel of(List<Uncertain> datesKa, double durationKa, double wrongProbability, double strayAgeMaximumKa) {
         boolean normal = datesKa.stream().allMatch(date -> date instanceof Normal);
         return normal && datesKa.size() <= MOST_IN_CLOSED_FORM

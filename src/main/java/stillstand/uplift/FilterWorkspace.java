@@ -69,7 +69,7 @@ final class FilterWorkspace {
         int kept = forPairings ? 1 : 0;
         keptF = new double[kept * rows * counts * cells];
         keptBelow = new double[kept * rows];
-        keptAbove = new double[kept * (rows + 1) * counts];
+        keptAbove = new double[kept * rows * counts];
         keptLogScale = new double[kept * rows];
         g = new double[kept * counts * cells];
         gAbove = new double[kept * counts];

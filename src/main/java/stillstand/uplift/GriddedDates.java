@@ -96,6 +96,28 @@ final class GriddedDates implements DateKernel {
         out[1] = (allWrong * (meanKa * meanKa + varianceKa2) + sums[2]) / weight;
     }
 
+    @Override
+    public double drawAgeKa(double meanKa, double varianceKa2, double choice, double normal) {
+        double[] sums = new double[3];
+        sums(meanKa, varianceKa2, sums);
+        double left = choice * (allWrong + sums[0]) - allWrong;
+        double sigma = Math.sqrt(varianceKa2);
+        if (left <= 0 || sigma < stepKa) {
+            return meanKa + sigma * normal;
+        }
+        double scale = stepKa / (sigma * Math.sqrt(2 * Math.PI));
+        for (int k = 0; k < excess.length; k++) {
+            double ageKa = firstKa + k * stepKa;
+            double d = ageKa - meanKa;
+            double part = excess[k] * Math.exp(-d * d / (2 * varianceKa2)) * scale;
+            if (part >= left) {
+                return ageKa + (left / part - 0.5) * stepKa;
+            }
+            left -= part;
+        }
+        return meanKa + sigma * normal;
+    }
+
     /** Integrals of 1, t and t^2 times the excess and the normal density. */
     private void sums(double meanKa, double varianceKa2, double[] sums) {
         double sigma = Math.sqrt(varianceKa2);

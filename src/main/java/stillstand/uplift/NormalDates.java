@@ -118,4 +118,26 @@ final class NormalDates implements DateKernel {
         out[0] = weight > 0 ? first / weight : meanKa;
         out[1] = weight > 0 ? second / weight : meanKa * meanKa + varianceKa2;
     }
+
+    @Override
+    public double drawAgeKa(double meanKa, double varianceKa2, double choice, double normal) {
+        double[] parts = new double[subsets];
+        double sum = allWrong;
+        for (int i = 0; i < subsets; i++) {
+            double total = varianceKa2 + ownVarianceKa2[i];
+            double d = meanKa - centreKa[i];
+            parts[i] = Math.exp(logFactor[i] - Math.log(2 * Math.PI * total) / 2 - d * d / (2 * total));
+            sum += parts[i];
+        }
+        double left = choice * sum - allWrong;
+        for (int i = 0; i < subsets && left > 0; i++) {
+            left -= parts[i];
+            if (left <= 0) {
+                double total = varianceKa2 + ownVarianceKa2[i];
+                double mean = meanKa - varianceKa2 / total * (meanKa - centreKa[i]);
+                return mean + Math.sqrt(varianceKa2 * ownVarianceKa2[i] / total) * normal;
+            }
+        }
+        return meanKa + Math.sqrt(varianceKa2) * normal;
+    }
 }

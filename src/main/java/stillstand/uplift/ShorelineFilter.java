@@ -151,9 +151,6 @@ final class ShorelineFilter {
                 step(w, j);
             }
         }
-        if (w.isForPairings()) {
-            System.arraycopy(w.fAbove, 0, w.keptAbove, w.rowsPlaced * w.fAbove.length, w.fAbove.length);
-        }
         finish(w, shared.expectedStrays());
         return w.logEvidence;
     }
