@@ -1,17 +1,47 @@
 package stillstand.files;
 
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.InvalidPathException;
 import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.TreeMap;
 import java.util.function.UnaryOperator;
+import java.util.stream.Stream;
+import stillstand.ledger.Assumption;
 import stillstand.ledger.InputProblem;
+import stillstand.ledger.InputWarning;
 import stillstand.ledger.Loaded;
+import stillstand.study.AgeTable;
+import stillstand.study.InputFile;
 import stillstand.study.Library;
+import stillstand.study.StatedSettings;
 import stillstand.study.Study;
+import stillstand.study.StudyCheck;
+import stillstand.study.StudyInput;
 import stillstand.study.StudySettings;
+import stillstand.study.Table;
+import stillstand.uncertainty.Uncertain;
 
 /** A study on disk: {@code study.json}, its tables, its own curves and calibrated ages. */
 public final class StudyFolder {
-    private StudyFolder() {}
+    private static final List<String> LATER = List.of("points.csv", "gia.csv");
+    private static final String CURVES = "curves";
+    private static final String AGES = "ages";
+
+    private final Path folder;
+    private final List<InputProblem> problems = new ArrayList<>();
+    private final List<InputWarning> warnings = new ArrayList<>();
+    private final List<Assumption> ledger = new ArrayList<>();
+    private final List<InputFile> inputs = new ArrayList<>();
+
+    private StudyFolder(Path folder) {
+        this.folder = folder;
+    }
 
     /**
      * Reads and checks a whole study; all its problems come at once.
@@ -21,11 +51,125 @@ public final class StudyFolder {
      * @param changes to the settings from the command line, made before anything is checked against them
      */
     public static Loaded<Study> read(Path folder, Library library, UnaryOperator<StudySettings> changes) {
-        return Loaded.failed(List.of(InputProblem.ofFile("", "a study that cannot be read yet", "this to be written")));
+        if (!Files.isDirectory(folder)) {
+            String found = Files.exists(folder) ? "a file" : "no such folder";
+            return Loaded.failed(List.of(InputProblem.ofFile(
+                    String.valueOf(folder), found, "the folder of a study, with study.json in it")));
+        }
+        return new StudyFolder(folder).read(library, changes);
     }
 
     /** Reads and checks a whole study as it stands. */
     public static Loaded<Study> read(Path folder, Library library) {
         return read(folder, library, UnaryOperator.identity());
+    }
+
+    private Loaded<Study> read(Library library, UnaryOperator<StudySettings> changes) {
+        Optional<StatedSettings> settings =
+                keep(text(StudyJson.NAME)).flatMap(file -> keep(StudyJson.parse(file)));
+        Library whole = withOwnCurves(library);
+        Optional<Table> sites = table("sites.csv");
+        Optional<Table> levels = table("levels.csv");
+        Optional<Table> samples = Files.exists(folder.resolve("samples.csv")) ? table("samples.csv") : Optional.empty();
+        Map<String, Uncertain> ages = ages();
+        for (String name : LATER) {
+            if (Files.exists(folder.resolve(name))) {
+                warnings.add(new InputWarning(name, 0, 0, "this file is not used yet"));
+            }
+        }
+        inputs.sort(Comparator.comparing(InputFile::file));
+        StudyInput input = new StudyInput(
+                settings.map(stated -> stated.with(changes)),
+                sites,
+                levels,
+                samples,
+                ages,
+                problems,
+                warnings,
+                ledger,
+                inputs);
+        return StudyCheck.check(input, whole);
+    }
+
+    /** The text of a file in the study, which counts among its inputs. */
+    private Loaded<TextFile> text(String name) {
+        Loaded<TextFile> file = TextFile.read(folder.resolve(name), name);
+        file.value().ifPresent(read -> inputs.add(read.inputFile()));
+        return file;
+    }
+
+    private Optional<Table> table(String name) {
+        return keep(text(name)).flatMap(file -> keep(TableFile.parse(file))).map(file -> {
+            ledger.add(new Assumption(
+                    "cells of " + name + " stand between",
+                    file.separator().plural(),
+                    "found in its header",
+                    "all"));
+            return file.table();
+        });
+    }
+
+    private Library withOwnCurves(Library library) {
+        if (!Files.exists(folder.resolve(CURVES))) {
+            return library;
+        }
+        Optional<CurvePackage> own = keep(CurvePackage.read(
+                CURVES + "/", name -> inCurves(CURVES + "/" + name), Optional.of(library.stages())));
+        if (own.isEmpty()) {
+            return library;
+        }
+        inputs.addAll(own.get().inputs());
+        own.get().curves().forEach(curve -> checkId(curve.id(), library.curveIds()));
+        own.get().highstands().forEach(table -> checkId(table.id(), library.highstandIds()));
+        return library.with(own.get().curves(), own.get().highstands());
+    }
+
+    private Loaded<TextFile> inCurves(String name) {
+        try {
+            return TextFile.read(folder.resolve(name), name);
+        } catch (InvalidPathException e) {
+            return Loaded.failed(List.of(InputProblem.ofFile(name, "a path that cannot be", "a path of a file")));
+        }
+    }
+
+    private void checkId(String id, List<String> shipped) {
+        if (shipped.contains(id)) {
+            problems.add(InputProblem.ofFile(
+                    CURVES + "/" + CurvePackage.NAME,
+                    InputProblem.quote(id) + ", which the tool ships already",
+                    "an id of your own"));
+        }
+    }
+
+    /** Calibrated ages by the name of their file. */
+    private Map<String, Uncertain> ages() {
+        Map<String, Uncertain> ages = new TreeMap<>();
+        Path place = folder.resolve(AGES);
+        if (!Files.isDirectory(place)) {
+            return ages;
+        }
+        List<String> names;
+        try (Stream<Path> files = Files.list(place)) {
+            names = files.map(file -> String.valueOf(file.getFileName()))
+                    .filter(name -> name.endsWith(".csv"))
+                    .sorted()
+                    .toList();
+        } catch (IOException e) {
+            problems.add(InputProblem.ofFile(AGES, "a folder that cannot be read", "permission to read it"));
+            return ages;
+        }
+        for (String name : names) {
+            keep(text(AGES + "/" + name))
+                    .flatMap(file -> keep(TableFile.parse(file)))
+                    .flatMap(file -> keep(AgeTable.read(file.table())))
+                    .ifPresent(age -> ages.put(name.substring(0, name.length() - ".csv".length()), age));
+        }
+        return ages;
+    }
+
+    private <T> Optional<T> keep(Loaded<T> loaded) {
+        problems.addAll(loaded.problems());
+        warnings.addAll(loaded.warnings());
+        return loaded.value();
     }
 }

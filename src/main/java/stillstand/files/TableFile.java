@@ -6,6 +6,7 @@ import java.io.UncheckedIOException;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
 import java.util.Optional;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
@@ -37,6 +38,11 @@ record TableFile(Table table, Separator separator) {
 
         Separator(char character) {
             this.character = character;
+        }
+
+        /** As the ledger names it. */
+        String plural() {
+            return name().toLowerCase(Locale.ROOT) + "s";
         }
     }
 

@@ -11,7 +11,7 @@ import stillstand.uncertainty.Uncertain;
  * @param taxon id of the coral or shell
  * @param method id of the dating method
  * @param elevationMetres height of the sample itself in the site's datum, up positive
- * @param ageKa age, before the zero of its method; absent where the sample has no age of its own yet
+ * @param ageKa age in ka before 1950; absent where the sample has no age of its own yet
  * @param growthPosition whether it stands where it grew
  * @param dates what its age says of its level
  * @param used false where the user sets it aside, with the reason

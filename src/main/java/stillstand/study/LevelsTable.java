@@ -14,6 +14,7 @@ import stillstand.ledger.InputProblem;
 import stillstand.shoreline.DatedSample;
 import stillstand.shoreline.FormsAt;
 import stillstand.shoreline.IndicativeMeaning;
+import stillstand.shoreline.Indicator;
 import stillstand.shoreline.Level;
 import stillstand.shoreline.StageChoice;
 import stillstand.uncertainty.Exact;
@@ -122,8 +123,8 @@ final class LevelsTable {
         if (row.hasColumn(ELEVATION.header()) && row.text(ELEVATION.header()).isEmpty()) {
             row.problem(ELEVATION.header(), "nothing", "a height in metres");
         }
-        IndicativeMeaning meaning = meaning(row, where);
         FormsAt formsAt = row.word("forms_at", FORMS_AT, FormsAt.HIGHSTAND);
+        IndicativeMeaning meaning = meaning(row, where, formsAt);
         Uncertain cover = cover(row, where);
         Uncertain lowering = row.measuredLength(LOWERING, where).orElse(new Exact(0));
         StageChoice highstand = stages.map(labels -> StageChoiceText.read(row, "highstand", labels))
@@ -151,13 +152,29 @@ final class LevelsTable {
                 key, row, elevation, formsAt, highstand, Optional.of(toLevel).filter(make -> whole));
     }
 
-    private IndicativeMeaning meaning(RowReader row, String where) {
-        Optional<IndicativeMeaning> usual = Optional.empty();
+    private IndicativeMeaning meaning(RowReader row, String where, FormsAt formsAt) {
+        Optional<Indicator> indicator = row.known("indicator", library.indicators().ids(), "the id of an indicator")
+                .flatMap(library.indicators()::find);
         Optional<Uncertain> reference = row.measured(REFERENCE_WATER_LEVEL, where);
         Optional<Double> range = row.length("indicative_range_m");
-        if (usual.isEmpty() && row.text("indicator").isEmpty() && reference.isEmpty() && range.isEmpty()) {
+        Optional<IndicativeMeaning> usual = indicator.flatMap(Indicator::meaning);
+        if (row.text("indicator").isEmpty() && reference.isEmpty() && range.isEmpty()) {
+            row.assume("no indicator is named", "reference water level 0 m, exact", "Stillstand's default", where);
+        }
+        boolean stated = reference.isPresent() && range.isPresent();
+        if (indicator.isPresent() && usual.isEmpty() && !stated && !isLimiting(formsAt)) {
+            row.problem(
+                    "indicator",
+                    quote(row.text("indicator")) + ", of which no usual values are known",
+                    "reference_water_level_m and indicative_range_m beside it");
+        }
+        if (usual.isPresent() && !stated) {
             row.assume(
-                    "no indicator is named", "reference water level 0 m, exact", "Stillstand's default", where);
+                    "usual meaning of indicator " + row.text("indicator"),
+                    usual.get().referenceWaterLevelMetres().mean() + " m, range "
+                            + usual.get().rangeMetres() + " m",
+                    indicator.map(Indicator::source).orElse(""),
+                    where);
         }
         IndicativeMeaning start =
                 usual.orElseGet(() -> new IndicativeMeaning(row.text("indicator"), new Exact(0), 0));
@@ -165,6 +182,10 @@ final class LevelsTable {
                 start.indicator(),
                 reference.orElse(start.referenceWaterLevelMetres()),
                 range.orElse(start.rangeMetres()));
+    }
+
+    private static boolean isLimiting(FormsAt formsAt) {
+        return formsAt == FormsAt.MARINE_LIMITING || formsAt == FormsAt.TERRESTRIAL_LIMITING;
     }
 
     private Uncertain cover(RowReader row, String where) {

@@ -2,8 +2,12 @@ package stillstand.study;
 
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Stream;
+import stillstand.dating.DatingMethodTable;
 import stillstand.sealevel.SeaLevelCurve;
 import stillstand.sealevel.StageTable;
+import stillstand.shoreline.HabitatTable;
+import stillstand.shoreline.IndicatorTable;
 
 /**
  * What a study may name: the tool's own curves and tables, and after reading a study the user's beside them. Handed in by
@@ -12,8 +16,17 @@ import stillstand.sealevel.StageTable;
  * @param stages that curves are searched for
  * @param curves each id once
  * @param highstands tables of highstands, each id once
+ * @param indicators landforms and deposits, and their usual meaning
+ * @param habitats taxa, and their depths of growth
+ * @param methods of dating
  */
-public record Library(StageTable stages, List<SeaLevelCurve> curves, List<HighstandRows> highstands) {
+public record Library(
+        StageTable stages,
+        List<SeaLevelCurve> curves,
+        List<HighstandRows> highstands,
+        IndicatorTable indicators,
+        HabitatTable habitats,
+        DatingMethodTable methods) {
     public Library {
         curves = List.copyOf(curves);
         highstands = List.copyOf(highstands);
@@ -27,6 +40,17 @@ public record Library(StageTable stages, List<SeaLevelCurve> curves, List<Highst
     /** The highstand table of an id. */
     public Optional<HighstandRows> highstands(String id) {
         return highstands.stream().filter(table -> table.id().equals(id)).findFirst();
+    }
+
+    /** The same with a user's own curves and tables beside its own. */
+    public Library with(List<SeaLevelCurve> moreCurves, List<HighstandRows> moreHighstands) {
+        return new Library(
+                stages,
+                Stream.concat(curves.stream(), moreCurves.stream()).toList(),
+                Stream.concat(highstands.stream(), moreHighstands.stream()).toList(),
+                indicators,
+                habitats,
+                methods);
     }
 
     /** Ids of all curves. */

@@ -1,0 +1,155 @@
+package stillstand.study;
+
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.HashMap;
+import java.util.HashSet;
+import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.Set;
+import java.util.function.Function;
+import stillstand.ledger.InputWarning;
+import stillstand.ledger.Loaded;
+import stillstand.shoreline.DatedSample;
+import stillstand.shoreline.Level;
+import stillstand.shoreline.Site;
+import stillstand.study.StatedSettings.Place;
+import stillstand.study.StudySettings.Changes;
+
+/**
+ * Every check of a study, on tables: all problems at once, in reading order, before anything is computed. Terminal and
+ * window go through here alike.
+ */
+public final class StudyCheck {
+    private final StudyInput input;
+    private final Library library;
+    private final Findings findings = new Findings();
+
+    private StudyCheck(StudyInput input, Library library) {
+        this.input = input;
+        this.library = library;
+    }
+
+    /**
+     * Checks a study.
+     *
+     * @param input what was read
+     * @param library the tool's curves and tables, the user's own among them
+     */
+    public static Loaded<Study> check(StudyInput input, Library library) {
+        return new StudyCheck(input, library).run();
+    }
+
+    private Loaded<Study> run() {
+        input.problems().forEach(findings::add);
+        input.warnings().forEach(findings::add);
+        input.ledger().forEach(findings::add);
+        input.settings().ifPresent(this::checkSettings);
+        Optional<SeaLevelCheck> seaLevel =
+                input.settings().map(settings -> new SeaLevelCheck(settings, library, findings));
+        List<SeaLevelCase> cases = seaLevel.map(SeaLevelCheck::cases).orElse(List.of());
+
+        List<SitesTable.SiteRow> sites = input.sites()
+                .map(table -> new SitesTable(library, findings).read(table))
+                .orElse(List.of());
+        Map<String, SeaLevelCase> local = new HashMap<>();
+        for (SitesTable.SiteRow site : sites) {
+            seaLevel.flatMap(check -> check.local(site.reader(), cases))
+                    .ifPresent(account -> local.put(site.name(), account));
+        }
+        Set<String> names = new LinkedHashSet<>();
+        sites.forEach(site -> names.add(site.name()));
+        Function<String, Optional<SeaLevelCase>> at = site ->
+                Optional.ofNullable(local.get(site)).or(() -> cases.stream().findFirst());
+        List<LevelsTable.LevelRow> levels = input.levels()
+                .map(table -> new LevelsTable(library, findings)
+                        .read(
+                                table,
+                                names,
+                                site -> at.apply(site)
+                                        .map(each -> new StageLabels(each.highstands(), library.stages()))))
+                .orElse(List.of());
+        List<SamplesTable.SampleRow> samples = input.samples()
+                .map(table -> new SamplesTable(library, input.ages(), findings).read(table, names, byName(levels)))
+                .orElse(List.of());
+        Plausibility.check(sites, levels, samples, at);
+
+        List<InputWarning> warnings = sorted(findings.warnings());
+        if (findings.problemCount() > 0 || input.settings().isEmpty()) {
+            return new Loaded<>(Optional.empty(), findings.problems(), warnings);
+        }
+        Study study = new Study(
+                input.settings().get().settings(),
+                plans(sites, levels, samples, local),
+                cases,
+                warnings,
+                findings.ledger(),
+                input.inputs());
+        return new Loaded<>(Optional.of(study), List.of(), warnings);
+    }
+
+    private void checkSettings(StatedSettings stated) {
+        stated.defaults().forEach(findings::add);
+        warnUnused(stated, "matching", stated.states("matching"));
+        warnUnused(stated, "screening", stated.states("screening"));
+        warnUnused(stated, "rate.changes", stated.settings().rate().changes() != Changes.NONE);
+    }
+
+    private void warnUnused(StatedSettings stated, String keyPath, boolean isStated) {
+        if (isStated) {
+            Place place = stated.places().getOrDefault(keyPath, new Place(0, 0));
+            findings.add(
+                    new InputWarning(stated.file(), place.line(), place.column(), keyPath + " is not used yet"));
+        }
+    }
+
+    private static Map<String, Set<String>> byName(List<LevelsTable.LevelRow> levels) {
+        Map<String, Set<String>> names = new HashMap<>();
+        for (LevelsTable.LevelRow level : levels) {
+            names.computeIfAbsent(level.key().site(), site -> new HashSet<>())
+                    .add(level.key().level());
+        }
+        return names;
+    }
+
+    private List<SitePlan> plans(
+            List<SitesTable.SiteRow> siteRows,
+            List<LevelsTable.LevelRow> levelRows,
+            List<SamplesTable.SampleRow> sampleRows,
+            Map<String, SeaLevelCase> local) {
+        Map<LevelsTable.Key, List<DatedSample>> samples = new HashMap<>();
+        for (SamplesTable.SampleRow row : sampleRows) {
+            samples.computeIfAbsent(row.key(), key -> new ArrayList<>())
+                    .add(row.sample().orElseThrow());
+        }
+        Map<String, List<Level>> levels = new LinkedHashMap<>();
+        for (LevelsTable.LevelRow row : levelRows) {
+            levels.computeIfAbsent(row.key().site(), site -> new ArrayList<>())
+                    .add(row.toLevel().orElseThrow().apply(samples.getOrDefault(row.key(), List.of())));
+        }
+        List<SitePlan> plans = new ArrayList<>();
+        for (SitesTable.SiteRow row : siteRows) {
+            Site site = row.toSite()
+                    .orElseThrow()
+                    .apply(
+                            levels.getOrDefault(row.name(), List.of()),
+                            samples.getOrDefault(new LevelsTable.Key(row.name(), ""), List.of()));
+            plans.add(new SitePlan(
+                    site,
+                    row.prior().orElseGet(() -> input.settings().orElseThrow().settings().rate().prior()),
+                    Optional.ofNullable(local.get(row.name()))));
+        }
+        return plans;
+    }
+
+    private static List<InputWarning> sorted(List<InputWarning> warnings) {
+        return warnings.stream()
+                .sorted(Comparator.comparing(InputWarning::file)
+                        .thenComparingLong(InputWarning::line)
+                        .thenComparingInt(InputWarning::column))
+                .toList();
+    }
+}
