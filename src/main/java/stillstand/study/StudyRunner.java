@@ -28,7 +28,6 @@ import stillstand.uplift.SiteRelations;
  */
 public final class StudyRunner {
     private final Study study;
-    private final ExecutorService executor;
     private final RunMonitor monitor;
     private final DrawStreams streams;
     private final DrawPlan plan;
@@ -44,7 +43,6 @@ public final class StudyRunner {
 
     private StudyRunner(Study study, ExecutorService executor, RunMonitor monitor) {
         this.study = study;
-        this.executor = executor;
         this.monitor = monitor;
         StudySettings settings = study.settings();
         streams = new DrawStreams(settings.seed());
