@@ -5,27 +5,38 @@ import java.util.Map;
 import java.util.Optional;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputWarning;
+import stillstand.sealevel.Highstand;
+import stillstand.sealevel.HighstandClass;
+import stillstand.sealevel.HighstandTable;
+import stillstand.sealevel.SharedErrors;
 import stillstand.shoreline.DatedSample;
 import stillstand.shoreline.FormsAt;
 import stillstand.shoreline.IndicativeMeaning;
+import stillstand.shoreline.IndicativeRule;
 import stillstand.shoreline.Level;
 import stillstand.shoreline.Site;
 import stillstand.shoreline.StageChoice;
 import stillstand.study.InputFile;
 import stillstand.study.Provenance;
+import stillstand.study.SeaLevelCase;
+import stillstand.study.SitePlan;
+import stillstand.study.Study;
 import stillstand.study.StudyResult;
-import stillstand.uplift.BetweenLevels;
 import stillstand.study.StudyResult.CurvePoint;
 import stillstand.study.StudyResult.CurveUsed;
 import stillstand.study.StudyResult.Failure;
 import stillstand.study.StudyResult.HighstandUsed;
-import stillstand.uplift.ImpliedSeaLevel;
 import stillstand.study.StudyResult.SeaLevelUsed;
 import stillstand.study.StudyResult.Waiting;
+import stillstand.study.StudySettings;
 import stillstand.uncertainty.DensityBins;
 import stillstand.uncertainty.Exact;
 import stillstand.uncertainty.Interval;
 import stillstand.uncertainty.Normal;
+import stillstand.uncertainty.Uncertain;
+import stillstand.uplift.BetweenLevels;
+import stillstand.uplift.CauchyPrior;
+import stillstand.uplift.ImpliedSeaLevel;
 import stillstand.uplift.LevelAnswer;
 import stillstand.uplift.LevelAnswer.Agreement;
 import stillstand.uplift.LevelAnswer.Bound;
@@ -69,6 +80,21 @@ public final class SampleStudy {
                 List.of(
                         new Assumption("datum offset", "0 m, exact", "Stillstand's default", "North cliff"),
                         new Assumption("=prior of the rate", "cauchy 0 0.5 from -10 to 15", "the study", "all")));
+    }
+
+    /** The same results, with all sites done. */
+    public static StudyResult withoutFailure() {
+        StudyResult all = result();
+        return new StudyResult(
+                all.provenance(),
+                all.seaLevel(),
+                all.levels(),
+                all.waiting(),
+                all.intervals(),
+                all.impliedSeaLevel(),
+                all.warnings(),
+                List.of(),
+                all.ledger());
     }
 
     private static LevelAnswer rising() {
@@ -173,12 +199,75 @@ public final class SampleStudy {
 
     /** The sites of {@link #result}, with columns of the user's own. */
     public static List<Site> sites() {
-        Level t4 = level("T4", new Normal(61.4, 1.5), List.of(sample("C-1", true), sample("C-2", false)));
-        Level t2 = level("T2", new Normal(20, 1), List.of());
-        Level s1 = level("S1", new Exact(7), List.of());
+        Level t4 = level("T4", "5e", new Normal(61.4, 1.5), List.of(sample("C-1", true), sample("C-2", false)));
+        Level t2 = level("T2", "", new Normal(20, 1), List.of());
+        Level s1 = level("S1", "5e", new Exact(7), List.of());
         return List.of(
                 site("North cliff", 0.5, List.of(t4, t2), Map.of("x_team", "@both")),
                 site("Old shore", 0, List.of(s1), Map.of()));
+    }
+
+    /** The study of those sites: T4 and S1 are tied to stage 5e of an invented table, T2 to nothing. */
+    public static Study study() {
+        HighstandTable table = new HighstandTable(
+                "made-up-table",
+                true,
+                List.of(
+                        highstand("5a", HighstandClass.INTERSTADIAL, 80, 2, new Normal(-8.5, 4.6)),
+                        highstand("5e", HighstandClass.INTERGLACIAL, 122.5, 3.3, new Normal(7.5, 1.5))),
+                SharedErrors.NONE,
+                List.of());
+        return new Study(
+                settings(),
+                sites().stream()
+                        .map(site -> new SitePlan(site, CauchyPrior.DEFAULT, Optional.empty()))
+                        .toList(),
+                List.of(new SeaLevelCase("made-up-table", 1, Optional.empty(), table)),
+                result().warnings(),
+                result().ledger(),
+                result().provenance().inputs());
+    }
+
+    private static Highstand highstand(
+            String stage, HighstandClass highstandClass, double ageKa, double ageSigmaKa, Normal level) {
+        return new Highstand(
+                stage, highstandClass, ageKa, ageSigmaKa, level, 0, 1, false, false, false, 0, "an invented source");
+    }
+
+    /** Settings with few draws. */
+    public static StudySettings settings() {
+        return new StudySettings(
+                "An invented coast",
+                "",
+                20261201,
+                new StudySettings.Draws(1 << 16, 1, Optional.empty()),
+                new StudySettings.SeaLevelChoice(
+                        List.of(),
+                        Optional.of("made-up-table"),
+                        Optional.empty(),
+                        true,
+                        Optional.empty(),
+                        new StudySettings.Setting(0, true),
+                        new StudySettings.Setting(0, true),
+                        Optional.empty(),
+                        false),
+                new StudySettings.RateChoice(CauchyPrior.DEFAULT, StudySettings.Changes.NONE),
+                new StudySettings.Matching(
+                        new StudySettings.Recording.Beta(4, 2.5),
+                        new StudySettings.Decay.Marginalised(),
+                        Optional.empty(),
+                        1000,
+                        new StudySettings.Setting(0.05, false),
+                        0.95),
+                IndicativeRule.QUADRATURE,
+                new StudySettings.Screening(
+                        Optional.empty(),
+                        Optional.empty(),
+                        Optional.empty(),
+                        Optional.empty(),
+                        Optional.empty(),
+                        Optional.empty(),
+                        Optional.empty()));
     }
 
     private static Site site(String name, double datumOffsetMetres, List<Level> levels, Map<String, String> own) {
@@ -196,8 +285,7 @@ public final class SampleStudy {
                 own);
     }
 
-    private static Level level(
-            String name, stillstand.uncertainty.Uncertain elevationMetres, List<DatedSample> samples) {
+    private static Level level(String name, String stage, Uncertain elevationMetres, List<DatedSample> samples) {
         return new Level(
                 name,
                 elevationMetres,
@@ -205,7 +293,7 @@ public final class SampleStudy {
                 FormsAt.HIGHSTAND,
                 new Exact(0),
                 new Exact(0),
-                StageChoice.ANY,
+                stage.isEmpty() ? StageChoice.ANY : new StageChoice(List.of(stage), List.of()),
                 Optional.empty(),
                 false,
                 Optional.empty(),

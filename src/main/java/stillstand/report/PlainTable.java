@@ -34,7 +34,8 @@ final class PlainTable {
         int[] widths = new int[headers.size()];
         for (int i = 0; i < widths.length; i++) {
             int column = i;
-            int widest = rows.stream().mapToInt(row -> width(row.get(column))).max().orElse(0);
+            int widest =
+                    rows.stream().mapToInt(row -> width(row.get(column))).max().orElse(0);
             widths[i] = widest == 0 ? 0 : Math.max(widest, width(headers.get(i)));
         }
         List<String> lines = new ArrayList<>(List.of(line(headers, widths)));

@@ -56,18 +56,21 @@ public final class TerminalReport {
 
     private void sites() {
         Map<String, List<LevelAnswer>> sites = new LinkedHashMap<>();
-        result.levels().forEach(level -> sites.computeIfAbsent(level.site(), name -> new ArrayList<>())
-                .add(level));
+        result.levels()
+                .forEach(level -> sites.computeIfAbsent(level.site(), name -> new ArrayList<>())
+                        .add(level));
         sites.forEach(this::site);
     }
 
     private void site(String name, List<LevelAnswer> levels) {
         long rates = levels.stream().filter(level -> level.rate().isPresent()).count();
         lines.add("");
-        say(name + ": " + counted(levels.size(), "level") + ", " + rates + " with a rate");
+        say(name + ": " + Wording.counted(levels.size(), "level") + ", " + rates + " with a rate");
         for (LevelAnswer level : levels) {
-            level.bound().ifPresent(bound -> level.rate()
-                    .ifPresent(rate -> say("  " + level.level() + " moves " + Wording.bound(bound, rate) + ".")));
+            level.bound()
+                    .ifPresent(bound -> level.rate()
+                            .ifPresent(
+                                    rate -> say("  " + level.level() + " moves " + Wording.bound(bound, rate) + ".")));
         }
         table(levels).lines().forEach(line -> lines.add("  " + Wording.cut(line, WIDTH - 2)));
         levels.forEach(this::remarks);
@@ -80,8 +83,8 @@ public final class TerminalReport {
     }
 
     private static PlainTable table(List<LevelAnswer> levels) {
-        PlainTable table = new PlainTable(
-                List.of("Level", "Stage", "Age (ka)", "RSL (m)", "Rate", "95 %", "First order"), 2);
+        PlainTable table =
+                new PlainTable(List.of("Level", "Stage", "Age (ka)", "RSL (m)", "Rate", "95 %", "First order"), 2);
         for (LevelAnswer level : levels) {
             String name = Wording.cut(level.level(), NAME_WIDTH);
             if (level.rate().isPresent()) {
@@ -122,7 +125,8 @@ public final class TerminalReport {
                 .ifPresent(agreement -> say("  The dates of " + level.level() + " disagree: so large a scatter comes by"
                         + " chance with probability below " + DATES_DISAGREE_BELOW + "."));
         if (level.monteCarlo().isPresent() && !level.monteCarlo().get().converged()) {
-            say("  " + level.level() + ": " + level.monteCarlo().map(MonteCarlo::draws).orElse(0)
+            say("  " + level.level() + ": "
+                    + level.monteCarlo().map(MonteCarlo::draws).orElse(0)
                     + " draws did not settle the digits asked for; its last digit may move with the seed.");
         }
     }
@@ -173,9 +177,11 @@ public final class TerminalReport {
 
     private void closing(String folder) {
         lines.add("");
-        say("In " + folder + ": table1.csv for a paper, rates.csv with all digits, budget.csv with what each input does,"
+        say("In " + folder
+                + ": table1.csv for a paper, rates.csv with all digits, budget.csv with what each input does,"
                 + " ledger.csv with every assumption, results.json with all of it.");
-        say("Stillstand " + result.provenance().version() + ", seed " + result.provenance().seed() + ".");
+        say("Stillstand " + result.provenance().version() + ", seed "
+                + result.provenance().seed() + ".");
     }
 
     private void say(String text) {
@@ -183,9 +189,5 @@ public final class TerminalReport {
         lines.addAll(Wording.wrapped(text, WIDTH - indent.length(), indent.isEmpty() ? "" : "  ").stream()
                 .map(line -> line.startsWith(indent) ? line : indent + line)
                 .toList());
-    }
-
-    private static String counted(int number, String thing) {
-        return number + " " + thing + (number == 1 ? "" : "s");
     }
 }

@@ -90,8 +90,13 @@ final class Wording {
         return sd.orElse(interval68.width() / 2);
     }
 
-    /** With the true minus. */
-    private static String number(String text) {
+    /** {@code 1 level}, {@code 2 levels}. */
+    static String counted(int number, String thing) {
+        return number + " " + thing + (number == 1 ? "" : "s");
+    }
+
+    /** A number's text with the true minus. */
+    static String number(String text) {
         return text.replace('-', '−');
     }
 
@@ -110,7 +115,8 @@ final class Wording {
                 lines.add(line.toString());
                 line = new StringBuilder(indent).append(word);
             } else {
-                line.append(line.length() == 0 || line.toString().isBlank() ? "" : " ").append(word);
+                line.append(line.length() == 0 || line.toString().isBlank() ? "" : " ")
+                        .append(word);
             }
         }
         lines.add(line.toString());

@@ -14,8 +14,7 @@ class TerminalReportTest {
 
     @Test
     void theWholeSummaryReadsWell() {
-        assertEquals(
-                """
+        assertEquals("""
                 An invented coast
                 This is not a hazard assessment: rates over thousands of years are no forecast of the next ones. For
                 building or planning, local codes and licensed practice decide.
@@ -49,8 +48,7 @@ class TerminalReportTest {
                 In mine/results: table1.csv for a paper, rates.csv with all digits, budget.csv with what each input
                 does, ledger.csv with every assumption, results.json with all of it.
                 Stillstand 0.1.0, seed 20261201.
-                """,
-                TEXT);
+                """, TEXT);
     }
 
     @Test

@@ -1,0 +1,47 @@
+package stillstand.cli;
+
+import java.util.List;
+import java.util.Optional;
+import java.util.function.UnaryOperator;
+import stillstand.study.StudySettings;
+import stillstand.study.StudySettings.Draws;
+import stillstand.study.StudySettings.SeaLevelChoice;
+import stillstand.study.StudySettings.WeightedCurve;
+
+/**
+ * What the command line changes in a study's settings.
+ *
+ * @param seed in place of the study's
+ * @param draws so many for each level, without an adaptive stop
+ * @param curves in place of the study's, with equal weights; empty = the study's own
+ */
+record SettingsChanges(Optional<Long> seed, Optional<Integer> draws, List<String> curves)
+        implements UnaryOperator<StudySettings> {
+    @Override
+    public StudySettings apply(StudySettings settings) {
+        Draws own = settings.draws();
+        return new StudySettings(
+                settings.title(),
+                settings.note(),
+                seed.orElse(settings.seed()),
+                draws.isPresent() ? new Draws(own.maximum(), own.significantDigits(), draws) : own,
+                curves.isEmpty() ? settings.seaLevel() : withCurves(settings.seaLevel()),
+                settings.rate(),
+                settings.matching(),
+                settings.indicativeRange(),
+                settings.screening());
+    }
+
+    private SeaLevelChoice withCurves(SeaLevelChoice own) {
+        return new SeaLevelChoice(
+                curves.stream().map(id -> new WeightedCurve(id, 1)).toList(),
+                own.highstandTable(),
+                own.overrides(),
+                own.olderThanCurve(),
+                own.correlationTimeKa(),
+                own.sharedLevelSigmaMetres(),
+                own.interstadialSigmaMetres(),
+                own.curveAgeSigmaKa(),
+                own.rezero());
+    }
+}
