@@ -52,7 +52,10 @@ public final class StudyJson {
             return Loaded.failed(json.problems());
         }
         List<InputProblem> problems = new ArrayList<>(json.problems());
-        problems.addAll(SCHEMA.problems(json, json.root().get()));
+        Set<String> seen = badPaths(problems);
+        SCHEMA.problems(json, json.root().get()).stream()
+                .filter(problem -> !seen.contains(problem.header()))
+                .forEach(problems::add);
         StudyJson reader = new StudyJson(json, new Keys("", json.root().get(), badPaths(problems)));
         if (problems.stream().noneMatch(problem -> problem.header().isEmpty())) {
             StudySettings settings = reader.settings();
