@@ -2,13 +2,14 @@ package stillstand.files;
 
 import java.io.IOException;
 import java.nio.file.Files;
-import java.nio.file.InvalidPathException;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Comparator;
+import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 import java.util.TreeMap;
 import java.util.function.UnaryOperator;
 import java.util.stream.Stream;
@@ -110,35 +111,12 @@ public final class StudyFolder {
     }
 
     private Library withOwnCurves(Library library) {
-        if (!Files.exists(folder.resolve(CURVES))) {
-            return library;
-        }
-        Optional<CurvePackage> own = keep(CurvePackage.read(
-                CURVES + "/", name -> inCurves(CURVES + "/" + name), Optional.of(library.stages())));
-        if (own.isEmpty()) {
-            return library;
-        }
-        inputs.addAll(own.get().inputs());
-        own.get().curves().forEach(curve -> checkId(curve.id(), library.curveIds()));
-        own.get().highstands().forEach(table -> checkId(table.id(), library.highstandIds()));
-        return library.with(own.get().curves(), own.get().highstands());
-    }
-
-    private Loaded<TextFile> inCurves(String name) {
-        try {
-            return TextFile.read(folder.resolve(name), name);
-        } catch (InvalidPathException e) {
-            return Loaded.failed(List.of(InputProblem.ofFile(name, "a path that cannot be", "a path of a file")));
-        }
-    }
-
-    private void checkId(String id, List<String> shipped) {
-        if (shipped.contains(id)) {
-            problems.add(InputProblem.ofFile(
-                    CURVES + "/" + CurvePackage.NAME,
-                    InputProblem.quote(id) + ", which the tool ships already",
-                    "an id of your own"));
-        }
+        Set<String> taken = new HashSet<>(library.curveIds());
+        taken.addAll(library.highstandIds());
+        Optional<CurvePackage> own =
+                keep(CurvePackage.read(folder.resolve(CURVES), CURVES, library.stages(), taken));
+        own.ifPresent(read -> inputs.addAll(read.inputs()));
+        return own.map(read -> library.with(read.curves(), read.highstands())).orElse(library);
     }
 
     /** Calibrated ages by the name of their file. */

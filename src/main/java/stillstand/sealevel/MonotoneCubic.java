@@ -28,7 +28,23 @@ final class MonotoneCubic {
 
     /** Value at {@code at}, which must lie between the first and the last knot. */
     double valueAt(double at) {
-        int i = segment(at);
+        return valueIn(segment(at), at);
+    }
+
+    /** Values at many places in ascending order, each between the first and the last knot. */
+    double[] valuesAt(double[] ascending) {
+        double[] values = new double[ascending.length];
+        int i = 0;
+        for (int k = 0; k < values.length; k++) {
+            while (i < x.length - 2 && x[i + 1] <= ascending[k]) {
+                i++;
+            }
+            values[k] = valueIn(i, ascending[k]);
+        }
+        return values;
+    }
+
+    private double valueIn(int i, double at) {
         double width = x[i + 1] - x[i];
         double t = (at - x[i]) / width;
         double rise = y[i + 1] - y[i];

@@ -3,7 +3,6 @@ package stillstand.sealevel;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
-import java.util.function.DoubleUnaryOperator;
 import stillstand.ledger.Assumption;
 import stillstand.uncertainty.Exact;
 import stillstand.uncertainty.SplitNormal;
@@ -14,8 +13,8 @@ import stillstand.uncertainty.Uncertain;
  * Ages in ka before 1950, levels in metres above (positive) the curve's own zero.
  *
  * <p>Between the rows of its table the curve is interpolated by a {@link MonotoneCubic} of each column as published, and
- * resampled once to a uniform grid of at most {@value #STEP_KA} ka; all reading is linear on that grid, so that a column of
- * ages is read in a few operations each. The curve is never extrapolated.
+ * resampled once to a uniform grid of {@value #STEP_KA} ka (finer for short curves, coarser for those beyond 26 Ma); all
+ * reading is linear on that grid, so that a column of ages is read in a few operations each. The curve is never extrapolated.
  */
 public final class SeaLevelCurve {
     private static final double STEP_KA = 0.025;
@@ -44,22 +43,21 @@ public final class SeaLevelCurve {
             String id,
             CurveFacts facts,
             List<CurveKnot> knots,
-            DoubleUnaryOperator sigmaLow,
-            DoubleUnaryOperator sigmaHigh,
+            double[] sigmasLowMetres,
+            double[] sigmasHighMetres,
             List<Assumption> assumptions) {
         this.id = id;
         this.facts = facts;
         this.knots = List.copyOf(knots);
         this.assumptions = List.copyOf(assumptions);
+        this.sigmasLowMetres = sigmasLowMetres;
+        this.sigmasHighMetres = sigmasHighMetres;
         line = lineThrough(this.knots);
-        fromKa = this.knots.get(0).ageKa();
-        toKa = this.knots.get(this.knots.size() - 1).ageKa();
-        double spanKa = toKa - fromKa;
-        int cells = (int) Math.min(MOST_CELLS, Math.max(FEWEST_CELLS, Math.round(spanKa / STEP_KA)));
-        cellsPerKa = cells / spanKa;
-        levelsMetres = resample(line::valueAt, cells);
-        sigmasLowMetres = resample(sigmaLow, cells);
-        sigmasHighMetres = resample(sigmaHigh, cells);
+        double[] grid = grid(this.knots);
+        levelsMetres = line.valuesAt(grid);
+        fromKa = grid[0];
+        toKa = grid[grid.length - 1];
+        cellsPerKa = (grid.length - 1) / (toKa - fromKa);
     }
 
     /**
@@ -73,8 +71,8 @@ public final class SeaLevelCurve {
     public static SeaLevelCurve withSigmas(
             String id, CurveFacts facts, double[] agesKa, double[] levelsMetres, double[] sigmasMetres) {
         List<CurveKnot> knots = knots(id, agesKa, levelsMetres, sigmasMetres, sigmasMetres);
-        MonotoneCubic sigma = new MonotoneCubic(agesKa, sigmasMetres);
-        return new SeaLevelCurve(id, facts, knots, sigma::valueAt, sigma::valueAt, List.of());
+        double[] sigmas = new MonotoneCubic(agesKa, sigmasMetres).valuesAt(grid(knots));
+        return new SeaLevelCurve(id, facts, knots, sigmas, sigmas, List.of());
     }
 
     /**
@@ -101,17 +99,16 @@ public final class SeaLevelCurve {
             above[i] = (highs95Metres[i] - levelsMetres[i]) / SIGMAS_TO_95;
         }
         List<CurveKnot> knots = knots(id, agesKa, levelsMetres, below, above);
-        MonotoneCubic level = lineThrough(knots);
-        MonotoneCubic low = new MonotoneCubic(agesKa, lows95Metres);
-        MonotoneCubic high = new MonotoneCubic(agesKa, highs95Metres);
-        // two interpolated columns could cross where they nearly touch
-        return new SeaLevelCurve(
-                id,
-                facts,
-                knots,
-                age -> Math.max(0, level.valueAt(age) - low.valueAt(age)) / SIGMAS_TO_95,
-                age -> Math.max(0, high.valueAt(age) - level.valueAt(age)) / SIGMAS_TO_95,
-                List.of());
+        double[] grid = grid(knots);
+        double[] levels = lineThrough(knots).valuesAt(grid);
+        double[] sigmasLow = new MonotoneCubic(agesKa, lows95Metres).valuesAt(grid);
+        double[] sigmasHigh = new MonotoneCubic(agesKa, highs95Metres).valuesAt(grid);
+        for (int i = 0; i < grid.length; i++) {
+            // two interpolated columns could cross where they nearly touch
+            sigmasLow[i] = Math.max(0, levels[i] - sigmasLow[i]) / SIGMAS_TO_95;
+            sigmasHigh[i] = Math.max(0, sigmasHigh[i] - levels[i]) / SIGMAS_TO_95;
+        }
+        return new SeaLevelCurve(id, facts, knots, sigmasLow, sigmasHigh, List.of());
     }
 
     /**
@@ -135,14 +132,14 @@ public final class SeaLevelCurve {
             sigmas[i] = guess.sigmaMetresAt(agesKa[i], stages);
         }
         List<CurveKnot> knots = knots(id, agesKa, levelsMetres, sigmas, sigmas);
-        MonotoneCubic sigma = new MonotoneCubic(agesKa, sigmas);
+        double[] column = new MonotoneCubic(agesKa, sigmas).valuesAt(grid(knots));
         Assumption guessed = new Assumption(
                 "spread of curve " + id + " is a guess",
                 guess.interglacialSigmaMetres() + " m in interglacials, " + guess.elsewhereSigmaMetres()
                         + " m elsewhere (1 sigma)",
                 "Stillstand's default",
                 "all");
-        return new SeaLevelCurve(id, facts, knots, sigma::valueAt, sigma::valueAt, List.of(guessed));
+        return new SeaLevelCurve(id, facts, knots, column, column, List.of(guessed));
     }
 
     /** Lower-case words joined by hyphens, such as {@code spratt-lisiecki-2016}. */
@@ -297,7 +294,7 @@ public final class SeaLevelCurve {
 
     /** The same curve under other facts. */
     public SeaLevelCurve with(CurveFacts other) {
-        return new SeaLevelCurve(id, other, knots, this::sigmaLowMetresAt, this::sigmaHighMetresAt, assumptions);
+        return new SeaLevelCurve(id, other, knots, sigmasLowMetres, sigmasHighMetres, assumptions);
     }
 
     /**
@@ -320,7 +317,7 @@ public final class SeaLevelCurve {
         String by = String.format(Locale.ROOT, "%+.2f m", shift);
         more.add(new Assumption("curve " + id + " is moved to read 0 m today", by, "the study", "all"));
         CurveFacts movedFacts = facts.withZero(facts.zero() + "; moved by " + by + " to read 0 m today");
-        return new SeaLevelCurve(id, movedFacts, moved, this::sigmaLowMetresAt, this::sigmaHighMetresAt, more);
+        return new SeaLevelCurve(id, movedFacts, moved, sigmasLowMetres, sigmasHighMetres, more);
     }
 
     private double read(double[] column, double ageKa) {
@@ -337,13 +334,17 @@ public final class SeaLevelCurve {
         }
     }
 
-    private double[] resample(DoubleUnaryOperator column, int cells) {
-        double[] values = new double[cells + 1];
+    private static double[] grid(List<CurveKnot> knots) {
+        double fromKa = knots.get(0).ageKa();
+        double toKa = knots.get(knots.size() - 1).ageKa();
+        double spanKa = toKa - fromKa;
+        int cells = (int) Math.min(MOST_CELLS, Math.max(FEWEST_CELLS, Math.round(spanKa / STEP_KA)));
+        double[] grid = new double[cells + 1];
         for (int i = 0; i < cells; i++) {
-            values[i] = column.applyAsDouble(Math.min(toKa, fromKa + i / cellsPerKa));
+            grid[i] = Math.min(toKa, fromKa + i * (spanKa / cells));
         }
-        values[cells] = column.applyAsDouble(toKa);
-        return values;
+        grid[cells] = toKa;
+        return grid;
     }
 
     private static MonotoneCubic lineThrough(List<CurveKnot> knots) {

@@ -105,8 +105,7 @@ final class CumulativeCurve {
         }
     }
 
-    private static double errorPerRootOfDistance(
-            int best, double[] low, double[] width, double step, double draws) {
+    private static double errorPerRootOfDistance(int best, double[] low, double[] width, double step, double draws) {
         int from = Math.max(0, best - CANDIDATES / 50);
         int to = Math.min(CANDIDATES, best + CANDIDATES / 50);
         double lowSlope = (low[to] - low[from]) / ((to - from) * step);

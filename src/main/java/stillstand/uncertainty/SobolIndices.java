@@ -148,9 +148,8 @@ public final class SobolIndices {
     }
 
     private Optional<Budget> budget(List<Scramble> scrambles) {
-        double variance =
-                mean(scrambles.stream().mapToDouble(Scramble::variance).toArray());
-        if (!(variance > 0)) {
+        double[] variances = scrambles.stream().mapToDouble(Scramble::variance).toArray();
+        if (!(mean(variances) > 0)) {
             return Optional.empty();
         }
         List<Share> shares = new ArrayList<>();
@@ -158,23 +157,32 @@ public final class SobolIndices {
             int group = g;
             List<Effect> effects =
                     scrambles.stream().map(s -> s.effects().get(group)).toList();
-            shares.add(share(groups.get(g).name(), effects, variance));
+            shares.add(share(groups.get(g).name(), effects, variances));
         }
-        return Optional.of(new Budget(Math.sqrt(variance), shares));
+        return Optional.of(new Budget(Math.sqrt(mean(variances)), shares));
     }
 
-    private static Share share(String group, List<Effect> effects, double variance) {
-        double[] firstOrder =
-                effects.stream().mapToDouble(e -> e.firstOrder() / variance).toArray();
-        double[] total = effects.stream().mapToDouble(e -> e.total() / variance).toArray();
+    private static Share share(String group, List<Effect> effects, double[] variances) {
+        double[] firstOrder = effects.stream().mapToDouble(Effect::firstOrder).toArray();
+        double[] total = effects.stream().mapToDouble(Effect::total).toArray();
         double[] ifExact = effects.stream().mapToDouble(Effect::varianceIfExact).toArray();
         return new Share(
                 group,
-                mean(firstOrder),
-                MonteCarloError.ofAverage(firstOrder),
-                mean(total),
-                MonteCarloError.ofAverage(total),
+                mean(firstOrder) / mean(variances),
+                errorOfRatio(firstOrder, variances),
+                mean(total) / mean(variances),
+                errorOfRatio(total, variances),
                 Math.sqrt(mean(ifExact)));
+    }
+
+    /** Standard error, to first order, of the ratio of two averages over scrambles, whose errors go together. */
+    private static double errorOfRatio(double[] parts, double[] wholes) {
+        double ratio = mean(parts) / mean(wholes);
+        double[] residuals = new double[parts.length];
+        for (int i = 0; i < parts.length; i++) {
+            residuals[i] = (parts[i] - ratio * wholes[i]) / mean(wholes);
+        }
+        return MonteCarloError.ofAverage(residuals);
     }
 
     private double[][] columns(SobolPoints points, int first) {

@@ -55,7 +55,9 @@ class CurveChoiceReferenceTest {
                 ShippedPackage.SPRATT, ShippedPackage.STAGES, HighstandOverrides.NONE, HighstandOptions.DEFAULT);
         Normal plainRate = rateOf(plain, 6, 1);
         // the figures of sea-level-curves/README.md
+        assertEquals(-0.012, rate.mean(), 0.0005);
         assertEquals(0.033, rate.sigma(), 0.0005);
+        assertEquals(0.037, plainRate.mean(), 0.0005);
         assertEquals(0.074, plainRate.sigma(), 0.0005);
     }
 

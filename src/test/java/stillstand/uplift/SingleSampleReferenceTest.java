@@ -124,7 +124,8 @@ class SingleSampleReferenceTest {
         assertEquals(31.163690082651947, drawn.rate().interval95().high(), 0.3);
         Rate posterior = drawn.rateWithPrior().orElseThrow();
         assertEquals(1.4713070992745585, posterior.median(), 0.01);
-        assertEquals(0.0775990604466534, posterior.interval95().low(), 0.003);
+        // weights 1/t are uneven here: one block scatters by 0.012, forty by 0.0019; this is five of that
+        assertEquals(0.0775990604466534, posterior.interval95().low(), 0.0095);
         assertEquals(7.683623379854089, posterior.interval95().high(), 0.03);
     }
 

@@ -1,0 +1,34 @@
+package stillstand.uplift;
+
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * One joint draw: a rate, a whole correlation, and for each level that is a shoreline its height, age and former sea level.
+ *
+ * @param rateMetresPerKyr the rate, m/kyr
+ * @param shared the shared numbers
+ * @param matches by level; absent where the level is a stray
+ */
+public record FlightDraw(double rateMetresPerKyr, SharedNumbers shared, List<Optional<Match>> matches) {
+    /**
+     * A level's shoreline.
+     *
+     * @param row number of the row it records, from 0
+     * @param heightMetres where it stands today, m above present mean sea level
+     * @param ageKa its age, ka
+     * @param seaLevelMetres sea level when it formed, m: height less uplift since
+     */
+    public record Match(int row, double heightMetres, double ageKa, double seaLevelMetres) {}
+
+    public FlightDraw {
+        matches = List.copyOf(matches);
+    }
+
+    /** By level, the row it records, or -1 where it is a stray. */
+    public List<Integer> rows() {
+        return matches.stream()
+                .map(match -> match.map(Match::row).orElse(-1))
+                .toList();
+    }
+}
