@@ -120,15 +120,15 @@ public final class StudyRunner {
             LevelAnswers.Answered answered = answers.of(plan.site(), level, basis, plan.prior());
             levels.add(answered.answer());
             answered.whyWaiting()
-                    .ifPresent(reason -> waiting.add(
-                            new StudyResult.Waiting(plan.site().name(), level.name(), reason)));
+                    .ifPresent(reason ->
+                            waiting.add(new StudyResult.Waiting(plan.site().name(), level.name(), reason)));
             ledger.addAll(answered.assumptions());
         }
         if (monitor.isCancelled()) {
             throw new RunCancelledException();
         }
-        SiteRelations relations = SiteRelations.of(
-                plan.site(), basis, study.settings().indicativeRange(), dates, streams, this.plan);
+        SiteRelations relations =
+                SiteRelations.of(plan.site(), basis, study.settings().indicativeRange(), dates, streams, this.plan);
         intervals.addAll(relations.intervals());
         implied.addAll(relations.impliedSeaLevel());
         ledger.addAll(relations.assumptions());

@@ -31,8 +31,7 @@ final class JointLevels {
      * @param loweringMetresPerKyr rate at which its surface was lowered
      * @param explanations with probabilities that sum to 1
      */
-    record Entry(
-            String name, List<HeightTerm> height, Uncertain loweringMetresPerKyr, List<SeaAtLevel> explanations) {
+    record Entry(String name, List<HeightTerm> height, Uncertain loweringMetresPerKyr, List<SeaAtLevel> explanations) {
         Entry {
             height = List.copyOf(height);
             explanations = List.copyOf(explanations);
@@ -140,7 +139,8 @@ final class JointLevels {
             for (int i = 0; i < N; i++) {
                 double left = probabilities[i];
                 int last = entry.explanations().size() - 1;
-                while (chosen[i] < last && left > entry.explanations().get(chosen[i]).probability()) {
+                while (chosen[i] < last
+                        && left > entry.explanations().get(chosen[i]).probability()) {
                     left -= entry.explanations().get(chosen[i]).probability();
                     chosen[i]++;
                 }
@@ -218,7 +218,8 @@ final class JointLevels {
     private void readCurves(List<CurveRead> reads, Shared shared, int block) {
         Map<String, List<CurveRead>> byCurve = new LinkedHashMap<>();
         for (CurveRead read : reads) {
-            byCurve.computeIfAbsent(read.sea.curve().id(), id -> new ArrayList<>()).add(read);
+            byCurve.computeIfAbsent(read.sea.curve().id(), id -> new ArrayList<>())
+                    .add(read);
         }
         byCurve.forEach((id, ofCurve) -> readCurve(ofCurve, shared, block));
     }
