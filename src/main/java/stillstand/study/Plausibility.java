@@ -78,7 +78,8 @@ final class Plausibility {
         double highest = Double.NEGATIVE_INFINITY;
         boolean warned = false;
         for (LevelsTable.LevelRow level : levels) {
-            if (level.elevationMetres().isEmpty()) {
+            // the range says where a terrace would have been seen: it binds no level that formed at its own age
+            if (level.elevationMetres().isEmpty() || level.formsAt() != FormsAt.HIGHSTAND) {
                 continue;
             }
             Uncertain elevation = level.elevationMetres().get();

@@ -74,11 +74,11 @@ public final class StudyRunner {
     }
 
     private StudyResult result() {
-        ledger.addAll(study.ledger());
         ledger.addAll(Conventions.of(study.settings()));
         for (SeaLevelCase sea : study.seaLevel()) {
             ledger.addAll(sea.highstands().assumptions());
         }
+        ledger.addAll(study.ledger());
         int allLevels = study.sites().stream()
                 .mapToInt(plan -> plan.site().levels().size())
                 .sum();
