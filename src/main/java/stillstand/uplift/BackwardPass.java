@@ -75,9 +75,9 @@ final class BackwardPass {
     }
 
     private void clear() {
-        for (double[] sums : new double[][] {
-            w.pair, w.pairAge, w.pairAgeSquare, w.pairHeight, w.unseen, w.over, w.outside, w.absent
-        }) {
+        for (double[] sums :
+                new double[][] {w.pair, w.pairAge, w.pairAgeSquare, w.pairHeight, w.unseen, w.over, w.outside, w.absent
+                }) {
             Arrays.fill(sums, 0);
         }
     }

@@ -80,14 +80,14 @@ final class JointLevels {
         List<CurveRead> reads = new ArrayList<>();
         for (Entry entry : entries) {
             Drawn drawn = new Drawn();
-            drawHeight(entry, shared, block, drawn);
+            drawHeight(entry, block, drawn);
             int[] chosen = chosen(entry, block);
             for (int e = 0; e < entry.explanations().size(); e++) {
                 SeaAtLevel sea = entry.explanations().get(e);
                 if (sea instanceof SeaAtLevel.AtHighstand stand) {
                     drawHighstand(stand, shared, chosen, e, drawn);
                 } else if (sea instanceof SeaAtLevel.OnCurve read) {
-                    reads.add(new CurveRead(read, drawn, chosen, e, column(own(entry, "age"), block)));
+                    reads.add(new CurveRead(read, drawn, column(own(entry, "age"), block)));
                 }
             }
             addLowering(entry, block, drawn);
@@ -107,7 +107,7 @@ final class JointLevels {
         return probabilities;
     }
 
-    private void drawHeight(Entry entry, Shared shared, int block, Drawn drawn) {
+    private void drawHeight(Entry entry, int block, Drawn drawn) {
         int number = 0;
         for (HeightTerm term : entry.height()) {
             number++;
@@ -214,44 +214,50 @@ final class JointLevels {
     }
 
     /** A curve to be read at the drawn ages of one level. */
-    private record CurveRead(SeaAtLevel.OnCurve sea, Drawn drawn, int[] chosen, int index, double[] ages) {}
+    private static final class CurveRead {
+        final SeaAtLevel.OnCurve sea;
+        final Drawn drawn;
+        final double[] agesKa;
+
+        CurveRead(SeaAtLevel.OnCurve sea, Drawn drawn, double[] ageProbabilities) {
+            this.sea = sea;
+            this.drawn = drawn;
+            this.agesKa = ageProbabilities;
+            sea.ageKa().toQuantiles(agesKa);
+        }
+    }
 
     private void readCurves(List<CurveRead> reads, Shared shared, int block) {
         Map<String, List<CurveRead>> byCurve = new LinkedHashMap<>();
         for (CurveRead read : reads) {
-            byCurve.computeIfAbsent(read.sea().curve().id(), id -> new ArrayList<>())
+            byCurve.computeIfAbsent(read.sea.curve().id(), id -> new ArrayList<>())
                     .add(read);
         }
         byCurve.forEach((id, ofCurve) -> readCurve(ofCurve, shared, block));
     }
 
     private void readCurve(List<CurveRead> reads, Shared shared, int block) {
-        SeaLevelCurve curve = reads.get(0).sea().curve();
+        SeaLevelCurve curve = reads.get(0).sea.curve();
         double[] curveAge = shared.deviates("sea level / curve age");
         double[] offset = shared.deviates("sea level / offset");
         CurveErrorPath path = new CurveErrorPath(
                 curve.facts().correlationTimeKa(), streams.stream("curve / " + curve.id() + " / error", block));
-        for (CurveRead read : reads) {
-            read.sea().ageKa().toQuantiles(read.ages());
-        }
         double[] readAt = new double[reads.size()];
         double[] deviates = new double[reads.size()];
         double[] levels = new double[reads.size()];
         for (int i = 0; i < N; i++) {
             for (int r = 0; r < readAt.length; r++) {
                 CurveRead read = reads.get(r);
-                double ageKa = read.ages()[i] + read.sea().curveAgeSigmaKa() * curveAge[i];
-                read.drawn().valid[i] = ageKa >= curve.fromKa() && ageKa <= curve.toKa();
+                double ageKa = read.agesKa[i] + read.sea.curveAgeSigmaKa() * curveAge[i];
+                read.drawn.valid[i] = ageKa >= curve.fromKa() && ageKa <= curve.toKa();
                 readAt[r] = Math.min(Math.max(ageKa, curve.fromKa()), curve.toKa());
             }
             path.drawAt(readAt, deviates);
             curve.readAt(readAt, deviates, levels);
             for (int r = 0; r < readAt.length; r++) {
                 CurveRead read = reads.get(r);
-                if (read.chosen()[i] == read.index()) {
-                    read.drawn().ageKa[i] = read.ages()[i];
-                    read.drawn().seaLevelMetres[i] = levels[r] + read.sea().sharedSigmaMetres() * offset[i];
-                }
+                read.drawn.ageKa[i] = read.agesKa[i];
+                read.drawn.seaLevelMetres[i] = levels[r] + read.sea.sharedSigmaMetres() * offset[i];
             }
         }
     }

@@ -9,6 +9,8 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
+import java.util.Optional;
 import java.util.TreeMap;
 import java.util.concurrent.TimeUnit;
 import java.util.stream.Stream;
@@ -32,7 +34,7 @@ class ProcessTest {
     @BeforeEach
     void write() throws IOException {
         study = folder.resolve("study");
-        assertEquals(java.util.Optional.empty(), StudyTemplate.write(study));
+        assertEquals(Optional.empty(), StudyTemplate.write(study));
     }
 
     private Process start(List<String> javaOptions, String... arguments) throws IOException {
@@ -53,7 +55,7 @@ class ProcessTest {
     }
 
     /** Every file of the results, without the two lines that tell the time. */
-    private TreeMap<String, String> results() throws IOException {
+    private Map<String, String> results() throws IOException {
         TreeMap<String, String> texts = new TreeMap<>();
         try (Stream<Path> files = Files.list(study.resolve("results"))) {
             for (Path file : files.toList()) {
@@ -69,7 +71,7 @@ class ProcessTest {
 
     @Test
     void processesLocalesAndThreadsChangeNoByte() throws Exception {
-        List<TreeMap<String, String>> runs = new ArrayList<>();
+        List<Map<String, String>> runs = new ArrayList<>();
         List<String> languages = List.of("en", "tr", "ar");
         List<String> threads = List.of("1", "2", "7");
         for (int i = 0; i < threads.size(); i++) {
@@ -96,7 +98,7 @@ class ProcessTest {
     void signalsEndARunAndLeaveEarlierResults() throws Exception {
         assertEquals(
                 0, start(List.of(), "run", study.toString(), "--draws", "4096").waitFor(), read("err"));
-        TreeMap<String, String> before = results();
+        Map<String, String> before = results();
         Process killed = startLong();
         killed.destroy();
         assertEquals(143, killed.waitFor());
