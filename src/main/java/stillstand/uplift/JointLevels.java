@@ -1,6 +1,7 @@
 package stillstand.uplift;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -164,6 +165,7 @@ final class JointLevels {
         double sharedAgeKa = row.takesCurveAgeError() ? stand.shared().sharedAgeSigmaKa() : 0;
         double ownAgeKa = row.ownAgeSigmaKa(stand.shared());
         double allAgeKa = Math.hypot(sharedAgeKa, ownAgeKa);
+        double[] ageDeviates = new double[N];
         for (int i = 0; i < N; i++) {
             if (chosen[i] == index) {
                 drawn.valid[i] = true;
@@ -171,22 +173,32 @@ final class JointLevels {
                         + row.localOffsetSigmaMetres() * local[i]
                         + offsetMetres * offset[i]
                         + factorMetres * factor[i];
-                double deviate = allAgeKa == 0 ? 0 : (sharedAgeKa * curveAge[i] + ownAgeKa * ownAge[i]) / allAgeKa;
-                drawn.ageKa[i] = at(stand.ageKa(), deviate);
+                ageDeviates[i] = allAgeKa == 0 ? 0 : (sharedAgeKa * curveAge[i] + ownAgeKa * ownAge[i]) / allAgeKa;
+            }
+        }
+        toValues(stand.ageKa(), ageDeviates);
+        for (int i = 0; i < N; i++) {
+            if (chosen[i] == index) {
+                drawn.ageKa[i] = ageDeviates[i];
             }
         }
     }
 
-    /** The value of a number at a standard normal deviate: its own marginal, another's dependence. */
-    private static double at(Uncertain number, double deviate) {
+    /** From standard normal deviates to values of a number, in place: its own marginal, another's dependence. */
+    private static void toValues(Uncertain number, double[] column) {
         if (number instanceof Normal normal) {
-            return normal.mean() + normal.sigma() * deviate;
+            for (int i = 0; i < N; i++) {
+                column[i] = normal.mean() + normal.sigma() * column[i];
+            }
+        } else if (number.isExact()) {
+            Arrays.fill(column, number.mean());
+        } else {
+            for (int i = 0; i < N; i++) {
+                double probability = StandardNormal.cumulativeProbability(column[i]);
+                column[i] = Math.min(Math.max(probability, Double.MIN_NORMAL), 1 - 0x1p-53);
+            }
+            number.toQuantiles(column);
         }
-        if (number.isExact()) {
-            return number.mean();
-        }
-        double probability = StandardNormal.cumulativeProbability(deviate);
-        return number.quantile(Math.min(Math.max(probability, Double.MIN_NORMAL), 1 - 0x1p-53));
     }
 
     private void addLowering(Entry entry, int block, Drawn drawn) {
