@@ -130,7 +130,7 @@ final class ShorelineFilter {
 
     /**
      * Natural logarithm of the probability density of the flight's heights (1/m each) and dates (1/ka each); minus infinity
-     * where the model cannot have left it.
+     * where the model cannot have left it. Limiting points multiply it.
      */
     double logEvidence(UpliftHistory history, SharedNumbers shared, FilterWorkspace w) {
         start(w);
@@ -151,6 +151,9 @@ final class ShorelineFilter {
             }
         }
         finish(w, shared.expectedStrays());
+        w.logLimiting = model.logLimiting(history, shared);
+        w.logEvidence += w.logLimiting;
+        w.logNothingRecorded += w.logLimiting;
         return w.logEvidence;
     }
 
