@@ -40,6 +40,7 @@ class ProcessTest {
     private Process start(List<String> javaOptions, String... arguments) throws IOException {
         List<String> command = new ArrayList<>();
         command.add(Path.of(System.getProperty("java.home"), "bin", "java").toString());
+        command.add("-XX:TieredStopAtLevel=1"); // quicker to start
         command.addAll(javaOptions);
         command.addAll(List.of("-cp", CLASSES, "stillstand.Main"));
         command.addAll(List.of(arguments));
