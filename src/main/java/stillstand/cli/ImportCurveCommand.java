@@ -21,6 +21,7 @@ import stillstand.ledger.Loaded;
 import stillstand.study.ImportChoices;
 import stillstand.study.ImportChoices.AgeUnit;
 import stillstand.study.ImportChoices.SpreadKind;
+import stillstand.uncertainty.Digits;
 
 /** {@code stillstand curves import FILE --into STUDY --id ID}. */
 @Command(
@@ -110,8 +111,8 @@ final class ImportCurveCommand implements Callable<Integer> {
         imported.remarks().forEach(workshop.out()::println);
         warnings.forEach(warning -> workshop.out().println("Odd: " + warning.placed()));
         workshop.out().println("Written to " + study + ": " + imported.file() + " ("
-                + imported.curve().knots().size() + " rows, " + imported.curve().fromKa() + " to "
-                + imported.curve().toKa() + " ka) and its entry in curves/datapackage.json.");
+                + imported.curve().knots().size() + " rows, " + Digits.text(imported.curve().fromKa()) + " to "
+                + Digits.text(imported.curve().toKa()) + " ka) and its entry in curves/datapackage.json.");
         if (citation.isEmpty()) {
             workshop.out().println("Its source is not stated: add \"citation\" to that entry. There, too, belong zero,"
                     + " age_scale, usable_from_ka and caveats.");

@@ -8,6 +8,7 @@ import java.util.regex.Pattern;
 import java.util.stream.IntStream;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.Loaded;
+import stillstand.study.NumberForm;
 import stillstand.study.Table;
 
 /**
@@ -19,7 +20,7 @@ import stillstand.study.Table;
  * @param description how it was read, in a sentence
  */
 record ArchivedTable(Table table, String description) {
-    private static final int MOST_ROWS = 500_000;
+    private static final int MOST_LINES = 500_000;
     /** What a cell of numbers looks like, well or badly written: so that a bad number is named and not taken for text. */
     private static final Pattern LIKE_A_NUMBER =
             Pattern.compile("[-+\u2212]?[0-9.][0-9.,'\u2019]*([eE][-+\u2212]?[0-9]+)?%?|(?i:nan|na|n/a|null|--?)|");
@@ -84,27 +85,35 @@ record ArchivedTable(Table table, String description) {
             }
         }
         List<Line> content = lines.stream().filter(line -> !line.isComment()).toList();
-        for (Between between : Between.values()) {
-            int start = firstRow(content, between);
-            if (start >= 0) {
-                return new Parts(file.name(), between, lines, content, start).table();
+        if (content.size() > MOST_LINES) {
+            return Loaded.failed(List.of(
+                    InputProblem.ofFile(file.name(), content.size() + " lines of table", "at most " + MOST_LINES)));
+        }
+        for (int together : List.of(2, 1)) {
+            for (Between between : Between.values()) {
+                int start = firstRow(content, between, together);
+                if (start >= 0) {
+                    return new Parts(file.name(), between, lines, content, start).table();
+                }
             }
         }
-        String found = lines.isEmpty() ? "an empty file" : "no two lines of numbers that could be rows of one table";
+        String found = lines.isEmpty() ? "an empty file" : "no line of numbers that could be a row of a table";
         return Loaded.failed(List.of(InputProblem.ofFile(
                 file.name(),
                 found,
                 "a table of numbers with at least 2 rows, cells between commas, semicolons, tabs or blanks")));
     }
 
-    /** Index of the first of two lines in succession that hold equally many numbers; -1 where there are none. */
-    private static int firstRow(List<Line> content, Between between) {
+    /** Index of the first of so many lines in succession that hold equally many numbers, at least two; -1 without such. */
+    private static int firstRow(List<Line> content, Between between, int together) {
         int lastCount = 0;
+        int run = 0;
         for (int i = 0; i < content.size(); i++) {
             List<String> cells = between.cells(content.get(i).text());
             int count = isRow(cells) ? cells.size() : 0;
-            if (count > 1 && count == lastCount) {
-                return i - 1;
+            run = count > 1 && count == lastCount ? run + 1 : 1;
+            if (count > 1 && run == together) {
+                return i - together + 1;
             }
             lastCount = count;
         }
@@ -119,20 +128,16 @@ record ArchivedTable(Table table, String description) {
     /** The parts of a file whose first row is found. */
     private record Parts(String name, Between between, List<Line> lines, List<Line> content, int start) {
         Loaded<ArchivedTable> table() {
-            if (content.size() - start > MOST_ROWS) {
-                return Loaded.failed(List.of(InputProblem.ofFile(
-                        name, "a table of " + (content.size() - start) + " rows", "at most " + MOST_ROWS)));
-            }
             int width = cells(content.get(start)).size();
             int top = start;
             while (top > 0 && cells(content.get(top - 1)).size() == width) {
                 top--;
             }
-            Optional<Line> header = top < start ? Optional.of(content.get(top)) : commentAbove(width);
+            boolean headed = top < start && isHeader(content.get(top));
+            Optional<Line> header = headed ? Optional.of(content.get(top)) : commentAbove(content.get(top), width);
             List<String> names = header.map(this::namesIn).orElse(Collections.nCopies(width, ""));
-            int first = top < start ? top + 1 : start;
             List<Table.Row> rows = new ArrayList<>();
-            for (Line line : content.subList(first, content.size())) {
+            for (Line line : content.subList(headed ? top + 1 : top, content.size())) {
                 rows.add(new Table.Row(line.number(), cells(line)));
             }
             Table table = new Table(name, header.map(Line::number).orElse(0L), names, rows);
@@ -151,17 +156,23 @@ record ArchivedTable(Table table, String description) {
             return between.cells(line.text());
         }
 
+        /** Whether most cells hold names: a row with one bad number is no header. */
+        private boolean isHeader(Line line) {
+            List<String> cells = cells(line);
+            long numbers = cells.stream().filter(cell -> NumberForm.parse(cell).isPresent()).count();
+            return 2 * numbers < cells.size();
+        }
+
         private List<String> namesIn(Line header) {
             return between.cells(header.isComment() ? header.text().strip().replaceFirst("^[#%]+", "").strip() : header.text());
         }
 
-        /** The comment right above the first row, if it has a word for each column. */
-        private Optional<Line> commentAbove(int width) {
-            int at = lines.indexOf(content.get(start));
+        /** The nearest of the comments right above the first row that has a word for each column. */
+        private Optional<Line> commentAbove(Line first, int width) {
+            int at = lines.indexOf(first);
             return IntStream.iterate(at - 1, i -> i >= 0, i -> i - 1)
-                    .limit(1)
                     .mapToObj(lines::get)
-                    .filter(Line::isComment)
+                    .takeWhile(Line::isComment)
                     .filter(line -> namesIn(line).size() == width && !isRow(namesIn(line)))
                     .findFirst();
         }

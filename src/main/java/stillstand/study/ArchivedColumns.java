@@ -85,6 +85,18 @@ final class ArchivedColumns {
         return columns.stream().map(this::named).collect(Collectors.joining(", "));
     }
 
+    /** All columns; one without a header by the first number in it. */
+    private String shown() {
+        return where(header -> true).stream()
+                .map(at -> headers.get(at).text().isEmpty() ? named(at) + ": " + firstCell(at) + " …" : named(at))
+                .collect(Collectors.joining(", "));
+    }
+
+    private String firstCell(int column) {
+        List<String> cells = table.rows().get(0).cells();
+        return column < cells.size() ? cells.get(column) : "";
+    }
+
     private Optional<Integer> column(
             String option, Optional<String> told, Predicate<ArchivedHeader> fits, String what) {
         if (told.isPresent()) {
@@ -95,7 +107,7 @@ final class ArchivedColumns {
             return Optional.of(fitting.get(0));
         }
         String found = fitting.isEmpty()
-                ? "no column that is plainly " + what + " (" + named(where(header -> true)) + ")"
+                ? "no column that is plainly " + what + " (" + shown() + ")"
                 : fitting.size() + " columns that may be " + what + " (" + named(fitting) + ")";
         ask(-1, found, "to be told which it is: " + option + NAME_OR_NUMBER);
         return Optional.empty();

@@ -25,9 +25,9 @@ record ArchivedHeader(String text, List<String> words) {
     private static final Pattern LEVEL = Pattern.compile("[reg]?sls?|[reg]sl|gms?l|gmgsl|msl|sealev(els?)?|levels?|depth|lowering");
     private static final Set<String> DOWNWARD = Set.of("depth", "lowering", "below");
     private static final Set<String> NOT_METRES = Set.of("mm", "cm", "dm", "km", "ft", "feet", "foot", "inch");
-    private static final Pattern LOW = Pattern.compile("lo|low(er|95)?|lo95|min(imum)?|minus|2\\.50*%?|q?0?025");
-    private static final Pattern HIGH = Pattern.compile("up(per|95)?|hi|high(er|95)?|hi95|max(imum)?|plus|97\\.50*%?|q?975");
-    private static final Pattern OF_95 = Pattern.compile("(low|lo|up|hi|high|lower|upper)?95%?|2\\.50*%?|97\\.50*%?|q?0?025|q?975");
+    private static final Pattern LOW = Pattern.compile("(lo|low|lower|min|minimum|minus)(95)?|2\\.50*%?|q?0?025");
+    private static final Pattern HIGH = Pattern.compile("(up|upper|hi|high|higher|max|maximum|plus)(95)?|97\\.50*%?|q?975");
+    private static final Pattern OF_95 = Pattern.compile("[a-z]*95%?|2\\.50*%?|97\\.50*%?|q?0?025|q?975");
     private static final Pattern SIGMA = Pattern.compile(
             "[12]?(sigma|sig|sd|\\u03c3)|[12]s|stdevs?|std(dev)?|err(or)?s?|se|unc(ert(ainty)?)?|spread|\\u00b1|\\+-");
     private static final Pattern ONE_SIGMA = Pattern.compile("1(sigma|sig|sd|s|\\u03c3)|sd|std(dev)?|stdevs?");
