@@ -66,8 +66,7 @@ public final class StudyFolder {
     }
 
     private Loaded<Study> read(Library library, UnaryOperator<StudySettings> changes) {
-        Optional<StatedSettings> settings =
-                keep(text(StudyJson.NAME)).flatMap(file -> keep(StudyJson.parse(file)));
+        Optional<StatedSettings> settings = keep(text(StudyJson.NAME)).flatMap(file -> keep(StudyJson.parse(file)));
         Library whole = withOwnCurves(library);
         Optional<Table> sites = table("sites.csv");
         Optional<Table> levels = table("levels.csv");
@@ -102,10 +101,7 @@ public final class StudyFolder {
     private Optional<Table> table(String name) {
         return keep(text(name)).flatMap(file -> keep(TableFile.parse(file))).map(file -> {
             ledger.add(new Assumption(
-                    "cells of " + name + " stand between",
-                    file.separator().plural(),
-                    "found in its header",
-                    "all"));
+                    "cells of " + name + " stand between", file.separator().plural(), "found in its header", "all"));
             return file.table();
         });
     }
@@ -113,8 +109,7 @@ public final class StudyFolder {
     private Library withOwnCurves(Library library) {
         Set<String> taken = new HashSet<>(library.curveIds());
         taken.addAll(library.highstandIds());
-        Optional<CurvePackage> own =
-                keep(CurvePackage.read(folder.resolve(CURVES), CURVES, library.stages(), taken));
+        Optional<CurvePackage> own = keep(CurvePackage.read(folder.resolve(CURVES), CURVES, library.stages(), taken));
         own.ifPresent(read -> inputs.addAll(read.inputs()));
         return own.map(read -> library.with(read.curves(), read.highstands())).orElse(library);
     }

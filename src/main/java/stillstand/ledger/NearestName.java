@@ -40,10 +40,8 @@ public final class NearestName {
             for (int j = 1; j <= b.length(); j++) {
                 int change = previous[j - 1] + (a.charAt(i - 1) == b.charAt(j - 1) ? 0 : 1);
                 row[j] = Math.min(change, Math.min(previous[j], row[j - 1]) + 1);
-                boolean swapped = i > 1
-                        && j > 1
-                        && a.charAt(i - 1) == b.charAt(j - 2)
-                        && a.charAt(i - 2) == b.charAt(j - 1);
+                boolean swapped =
+                        i > 1 && j > 1 && a.charAt(i - 1) == b.charAt(j - 2) && a.charAt(i - 2) == b.charAt(j - 1);
                 if (swapped) {
                     row[j] = Math.min(row[j], beforePrevious[j - 2] + 1);
                 }

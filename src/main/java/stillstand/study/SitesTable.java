@@ -104,7 +104,7 @@ final class SitesTable {
             }
         }
         Optional<Interval> surveyed = surveyed(row);
-        Optional<String> localCurve = row.known("local_curve", library.curveIds(), "the id of a curve");
+        Optional<String> localCurve = row.known("local_curve", library::curveIds, "the id of a curve");
         Optional<RatePrior> prior = row.optionalText("rate_prior").flatMap(RatePriorText::parse);
         if (prior.isEmpty() && !row.text("rate_prior").isEmpty()) {
             row.problem("rate_prior", quote(row.text("rate_prior")), RatePriorText.EXPECTED);
@@ -125,7 +125,8 @@ final class SitesTable {
                 samples,
                 row.text("note"),
                 row.own());
-        return new SiteRow(name, row, prior, surveyed, offset, Optional.of(toSite).filter(make -> row.isGood()));
+        return new SiteRow(
+                name, row, prior, surveyed, offset, Optional.of(toSite).filter(make -> row.isGood()));
     }
 
     private Optional<Position> position(RowReader row) {

@@ -84,13 +84,19 @@ class StudyJsonTest {
     static List<Case> cases() {
         return List.of(
                 bad("", "study.json: found an empty file, expected a json object"),
-                bad("{\"title\": \"x\",\n \"seed\": 1,}", "study.json:2:12: found text that is not json here, expected json"),
-                bad("{\"title\": \"x\"} {}", "study.json:1:16: found more text after the end of the json, expected nothing there"),
+                bad(
+                        "{\"title\": \"x\",\n \"seed\": 1,}",
+                        "study.json:2:12: found text that is not json here, expected json"),
+                bad(
+                        "{\"title\": \"x\"} {}",
+                        "study.json:1:16: found more text after the end of the json, expected nothing there"),
                 bad("[1]", "study.json:1:1: found a list [ … ], expected an object { … }"),
                 bad("{\"note\": \"y\"}", "study.json:1:1: title: found nothing, expected a title in words"),
                 bad("{\"title\": \"\"}", "study.json:1:11: title: found \"\", expected a title in words"),
                 bad("{\"title\": 3}", "study.json:1:11: title: found 3, expected a title in words"),
-                bad("{\"title\": \"x\",\n  \"sede\": 1}", "study.json:2:3: sede: found an unknown key, expected \"seed\""),
+                bad(
+                        "{\"title\": \"x\",\n  \"sede\": 1}",
+                        "study.json:2:3: sede: found an unknown key, expected \"seed\""),
                 bad(
                         "{\"title\": \"x\", \"qqqqqqqqq\": 1}",
                         "study.json:1:16: qqqqqqqqq: found an unknown key, expected one of title, note, seed, draws, sea_level, rate, matching, indicative_range, screening"),
@@ -156,13 +162,16 @@ class StudyJsonTest {
 
     @Test
     void aTitleAloneIsEnough() {
-        assertEquals(DEFAULTS, parse("{\"title\": \"A coast\"}").value().orElseThrow().settings());
+        assertEquals(
+                DEFAULTS,
+                parse("{\"title\": \"A coast\"}").value().orElseThrow().settings());
         assertEquals(DEFAULTS, StudyJson.defaults("A coast"));
     }
 
     @Test
     void defaultsStandInTheLedgerAndStatedKeysDoNot() {
-        List<Assumption> defaults = parse("{\"title\": \"x\", \"seed\": 7}").value().orElseThrow().defaults();
+        List<Assumption> defaults =
+                parse("{\"title\": \"x\", \"seed\": 7}").value().orElseThrow().defaults();
         assertTrue(defaults.contains(new Assumption(
                 "rate.prior is not stated", "cauchy 0 0.5 from -10 to 15", "Stillstand's default", "all")));
         assertTrue(defaults.contains(new Assumption(
@@ -172,16 +181,17 @@ class StudyJsonTest {
 
     @Test
     void everyKeyIsRead() {
-        String json = "{\"title\": \"A\", \"note\": \"b\", \"seed\": -5, \"draws\": {\"maximum\": 1000, \"significant_digits\": 1},"
-                + "\"sea_level\": {\"curves\": [{\"id\": \"own\", \"weight\": 2}], \"highstands\": {\"from\": \"table\", \"table\": \"mine\","
-                + "\"older_than_curve\": false}, \"correlation_time_ka\": 4, \"shared_level_1sigma_m\": 0,"
-                + "\"interstadial_1sigma_m\": 8, \"curve_age_1sigma_ka\": 2, \"rezero\": true},"
-                + "\"rate\": {\"prior\": {\"kind\": \"half-cauchy\", \"scale\": 1, \"from\": 0.005, \"to\": 5}, \"changes\": \"up-to-two\"},"
-                + "\"matching\": {\"recording_probability\": 0.7, \"recording_decay_ka\": 400, \"expected_strays\": {\"gamma_mean\": 0.8},"
-                + "\"stray_age_maximum_ka\": 500, \"wrong_date_probability\": 0.1, \"trace_probability\": 0.9},"
-                + "\"indicative_range\": \"uniform\","
-                + "\"screening\": {\"calcite_maximum_percent\": 2, \"initial_d234u_permil\": [140, 152], \"th232_maximum_ppb\": 1,"
-                + "\"th230_th232_minimum\": 20, \"replicates\": \"mean\", \"stratigraphic_order\": true}}";
+        String json =
+                "{\"title\": \"A\", \"note\": \"b\", \"seed\": -5, \"draws\": {\"maximum\": 1000, \"significant_digits\": 1},"
+                        + "\"sea_level\": {\"curves\": [{\"id\": \"own\", \"weight\": 2}], \"highstands\": {\"from\": \"table\", \"table\": \"mine\","
+                        + "\"older_than_curve\": false}, \"correlation_time_ka\": 4, \"shared_level_1sigma_m\": 0,"
+                        + "\"interstadial_1sigma_m\": 8, \"curve_age_1sigma_ka\": 2, \"rezero\": true},"
+                        + "\"rate\": {\"prior\": {\"kind\": \"half-cauchy\", \"scale\": 1, \"from\": 0.005, \"to\": 5}, \"changes\": \"up-to-two\"},"
+                        + "\"matching\": {\"recording_probability\": 0.7, \"recording_decay_ka\": 400, \"expected_strays\": {\"gamma_mean\": 0.8},"
+                        + "\"stray_age_maximum_ka\": 500, \"wrong_date_probability\": 0.1, \"trace_probability\": 0.9},"
+                        + "\"indicative_range\": \"uniform\","
+                        + "\"screening\": {\"calcite_maximum_percent\": 2, \"initial_d234u_permil\": [140, 152], \"th232_maximum_ppb\": 1,"
+                        + "\"th230_th232_minimum\": 20, \"replicates\": \"mean\", \"stratigraphic_order\": true}}";
         StudySettings expected = new StudySettings(
                 "A",
                 "b",
@@ -216,7 +226,9 @@ class StudyJsonTest {
                         Optional.of(true)));
         StudySettings read = parse(json).value().orElseThrow().settings();
         assertEquals(expected, read);
-        assertEquals(expected, parse(StudyJsonWriter.write(read)).value().orElseThrow().settings());
+        assertEquals(
+                expected,
+                parse(StudyJsonWriter.write(read)).value().orElseThrow().settings());
     }
 
     @Test

@@ -77,7 +77,8 @@ class TableFileTest {
 
     @Test
     void separatorsAreDetectedInTheHeader() throws IOException {
-        TableFile semicolons = read("site;\"a,b,c,d\";x_note\nN;1;2,5\n").value().orElseThrow();
+        TableFile semicolons =
+                read("site;\"a,b,c,d\";x_note\nN;1;2,5\n").value().orElseThrow();
         assertEquals(Separator.SEMICOLON, semicolons.separator());
         assertEquals(List.of("N", "1", "2,5"), semicolons.table().rows().get(0).cells());
         TableFile tabs = read("site\tlevel\nN\t\n").value().orElseThrow();
@@ -107,11 +108,9 @@ class TableFileTest {
                 List.of(
                         "levels.csv:2: found the byte E9, which is no UTF-8 (text in windows-1252 or another old encoding), expected UTF-8 (in a spreadsheet: save as CSV UTF-8)"),
                 messages(read("site,note\nN,Plage \u00e9lev\u00e9e\n".getBytes(Charset.forName("windows-1252")))));
-        for (Charset charset :
-                List.of(StandardCharsets.UTF_16, StandardCharsets.UTF_16LE, StandardCharsets.UTF_16BE)) {
+        for (Charset charset : List.of(StandardCharsets.UTF_16, StandardCharsets.UTF_16LE, StandardCharsets.UTF_16BE)) {
             assertEquals(
-                    List.of(
-                            "levels.csv: found text in UTF-16, expected UTF-8 (in a spreadsheet: save as CSV UTF-8)"),
+                    List.of("levels.csv: found text in UTF-16, expected UTF-8 (in a spreadsheet: save as CSV UTF-8)"),
                     messages(read("site,level\nN,1\n".getBytes(charset))));
         }
     }
@@ -121,7 +120,8 @@ class TableFileTest {
         assertEquals(
                 List.of("levels.csv: found no such file, expected one"), messages(TableFile.read(file, "levels.csv")));
         Files.createDirectories(file);
-        assertEquals(List.of("levels.csv: found a folder, expected a file"), messages(TableFile.read(file, "levels.csv")));
+        assertEquals(
+                List.of("levels.csv: found a folder, expected a file"), messages(TableFile.read(file, "levels.csv")));
     }
 
     @Test
