@@ -78,7 +78,8 @@ final class Plausibility {
         double highest = Double.NEGATIVE_INFINITY;
         boolean warned = false;
         for (LevelsTable.LevelRow level : levels) {
-            if (level.elevationMetres().isEmpty() || !isMatched(level)) {
+            // the range says where a terrace would have been seen: it binds no level that formed at its own age
+            if (level.elevationMetres().isEmpty() || level.formsAt() != FormsAt.HIGHSTAND) {
                 continue;
             }
             Uncertain elevation = level.elevationMetres().get();
@@ -110,12 +111,6 @@ final class Plausibility {
                                     + " ends within 5 % of its highest level (" + text(highest)
                                     + " m above mean sea level)");
         }
-    }
-
-    /** Whether the surveyed range matters to a level: whether it is a shoreline whose highstand is to be found. */
-    private static boolean isMatched(LevelsTable.LevelRow level) {
-        return level.formsAt() == FormsAt.HIGHSTAND
-                && level.highstand().pinned().isEmpty();
     }
 
     private static void checkHeight(SamplesTable.SampleRow row, DatedSample sample, LevelsTable.LevelRow level) {

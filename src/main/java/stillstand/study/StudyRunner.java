@@ -74,11 +74,11 @@ public final class StudyRunner {
     }
 
     private StudyResult result() {
-        ledger.addAll(study.ledger());
         ledger.addAll(Conventions.of(study.settings()));
         for (SeaLevelCase sea : study.seaLevel()) {
             ledger.addAll(sea.highstands().assumptions());
         }
+        ledger.addAll(study.ledger());
         int allLevels = study.sites().stream()
                 .mapToInt(plan -> plan.site().levels().size())
                 .sum();
@@ -120,15 +120,15 @@ public final class StudyRunner {
             LevelAnswers.Answered answered = answers.of(plan.site(), level, basis, plan.prior());
             levels.add(answered.answer());
             answered.whyWaiting()
-                    .ifPresent(reason -> waiting.add(
-                            new StudyResult.Waiting(plan.site().name(), level.name(), reason)));
+                    .ifPresent(reason ->
+                            waiting.add(new StudyResult.Waiting(plan.site().name(), level.name(), reason)));
             ledger.addAll(answered.assumptions());
         }
         if (monitor.isCancelled()) {
             throw new RunCancelledException();
         }
-        SiteRelations relations = SiteRelations.of(
-                plan.site(), basis, study.settings().indicativeRange(), dates, streams, this.plan);
+        SiteRelations relations =
+                SiteRelations.of(plan.site(), basis, study.settings().indicativeRange(), dates, streams, this.plan);
         intervals.addAll(relations.intervals());
         implied.addAll(relations.impliedSeaLevel());
         ledger.addAll(relations.assumptions());

@@ -109,7 +109,9 @@ public final class CoralsTogether {
                         k,
                         l,
                         sharedSigmaMetres * sharedSigmaMetres
-                                + one.seaSigmaMetres() * other.seaSigmaMetres() * Math.exp(-apartKa / correlationTimeKa));
+                                + one.seaSigmaMetres()
+                                        * other.seaSigmaMetres()
+                                        * Math.exp(-apartKa / correlationTimeKa));
             }
             double ofAge = (rateMetresPerKyr + one.slopeMetresPerKa()) * one.ageSigmaKa();
             covariance.addToEntry(k, k, one.heightSigmaMetres() * one.heightSigmaMetres() + ofAge * ofAge);

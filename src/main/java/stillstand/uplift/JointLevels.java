@@ -1,6 +1,7 @@
 package stillstand.uplift;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -31,8 +32,7 @@ final class JointLevels {
      * @param loweringMetresPerKyr rate at which its surface was lowered
      * @param explanations with probabilities that sum to 1
      */
-    record Entry(
-            String name, List<HeightTerm> height, Uncertain loweringMetresPerKyr, List<SeaAtLevel> explanations) {
+    record Entry(String name, List<HeightTerm> height, Uncertain loweringMetresPerKyr, List<SeaAtLevel> explanations) {
         Entry {
             height = List.copyOf(height);
             explanations = List.copyOf(explanations);
@@ -140,7 +140,8 @@ final class JointLevels {
             for (int i = 0; i < N; i++) {
                 double left = probabilities[i];
                 int last = entry.explanations().size() - 1;
-                while (chosen[i] < last && left > entry.explanations().get(chosen[i]).probability()) {
+                while (chosen[i] < last
+                        && left > entry.explanations().get(chosen[i]).probability()) {
                     left -= entry.explanations().get(chosen[i]).probability();
                     chosen[i]++;
                 }
@@ -164,6 +165,7 @@ final class JointLevels {
         double sharedAgeKa = row.takesCurveAgeError() ? stand.shared().sharedAgeSigmaKa() : 0;
         double ownAgeKa = row.ownAgeSigmaKa(stand.shared());
         double allAgeKa = Math.hypot(sharedAgeKa, ownAgeKa);
+        double[] ageDeviates = new double[N];
         for (int i = 0; i < N; i++) {
             if (chosen[i] == index) {
                 drawn.valid[i] = true;
@@ -171,22 +173,32 @@ final class JointLevels {
                         + row.localOffsetSigmaMetres() * local[i]
                         + offsetMetres * offset[i]
                         + factorMetres * factor[i];
-                double deviate = allAgeKa == 0 ? 0 : (sharedAgeKa * curveAge[i] + ownAgeKa * ownAge[i]) / allAgeKa;
-                drawn.ageKa[i] = at(stand.ageKa(), deviate);
+                ageDeviates[i] = allAgeKa == 0 ? 0 : (sharedAgeKa * curveAge[i] + ownAgeKa * ownAge[i]) / allAgeKa;
+            }
+        }
+        toValues(stand.ageKa(), ageDeviates);
+        for (int i = 0; i < N; i++) {
+            if (chosen[i] == index) {
+                drawn.ageKa[i] = ageDeviates[i];
             }
         }
     }
 
-    /** The value of a number at a standard normal deviate: its own marginal, another's dependence. */
-    private static double at(Uncertain number, double deviate) {
+    /** From standard normal deviates to values of a number, in place: its own marginal, another's dependence. */
+    private static void toValues(Uncertain number, double[] column) {
         if (number instanceof Normal normal) {
-            return normal.mean() + normal.sigma() * deviate;
+            for (int i = 0; i < N; i++) {
+                column[i] = normal.mean() + normal.sigma() * column[i];
+            }
+        } else if (number.isExact()) {
+            Arrays.fill(column, number.mean());
+        } else {
+            for (int i = 0; i < N; i++) {
+                double probability = StandardNormal.cumulativeProbability(column[i]);
+                column[i] = Math.min(Math.max(probability, Double.MIN_NORMAL), 1 - 0x1p-53);
+            }
+            number.toQuantiles(column);
         }
-        if (number.isExact()) {
-            return number.mean();
-        }
-        double probability = StandardNormal.cumulativeProbability(deviate);
-        return number.quantile(Math.min(Math.max(probability, Double.MIN_NORMAL), 1 - 0x1p-53));
     }
 
     private void addLowering(Entry entry, int block, Drawn drawn) {
@@ -218,7 +230,8 @@ final class JointLevels {
     private void readCurves(List<CurveRead> reads, Shared shared, int block) {
         Map<String, List<CurveRead>> byCurve = new LinkedHashMap<>();
         for (CurveRead read : reads) {
-            byCurve.computeIfAbsent(read.sea.curve().id(), id -> new ArrayList<>()).add(read);
+            byCurve.computeIfAbsent(read.sea.curve().id(), id -> new ArrayList<>())
+                    .add(read);
         }
         byCurve.forEach((id, ofCurve) -> readCurve(ofCurve, shared, block));
     }

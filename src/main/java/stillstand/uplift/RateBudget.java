@@ -25,8 +25,7 @@ final class RateBudget {
     private final int dimensions;
 
     /** As {@link LevelRates#of}. */
-    RateBudget(
-            List<HeightTerm> height, Uncertain loweringMetresPerKyr, List<? extends SeaAtLevel> explanations) {
+    RateBudget(List<HeightTerm> height, Uncertain loweringMetresPerKyr, List<? extends SeaAtLevel> explanations) {
         upToProbability = new double[explanations.size()];
         double below = 0;
         for (int e = 0; e < explanations.size(); e++) {

@@ -515,16 +515,11 @@ class StudyCheckTest {
     }
 
     @Test
-    void levelsThatAreNotMatchedMayLieOutsideTheSurvey() {
+    void levelsThatAreNoHighstandMayLieOutsideTheSurvey() {
         Loaded<Study> loaded = check(input(
                 settings(),
                 Grid.table("sites.csv", "site,surveyed_from_m,surveyed_to_m", "North,2,61"),
-                Grid.table(
-                        "levels.csv",
-                        LEVELS + ",forms_at,highstand",
-                        "North,T1,80,1,,5e",
-                        "North,T2,-17,1,any,",
-                        "North,T3,1,0.1,event,"),
+                Grid.table("levels.csv", LEVELS + ",forms_at", "North,T2,-17,1,any", "North,T3,1,0.1,event"),
                 Optional.empty()));
         assertEquals(List.of(), messages(loaded));
     }

@@ -21,7 +21,13 @@ class CoralsTogetherReferenceTest {
     }
 
     private static Coral coral(
-            double elevation, double depth, double depthSigma, double age, double ageSigma, double sea, double seaSigma) {
+            double elevation,
+            double depth,
+            double depthSigma,
+            double age,
+            double ageSigma,
+            double sea,
+            double seaSigma) {
         return new Coral(elevation + depth, Math.hypot(0.5, depthSigma), age, ageSigma, sea, 0, seaSigma);
     }
 
