@@ -43,7 +43,9 @@ record TableFile(Table table, Separator separator) {
     /** Reads a table of a study, or says why it cannot. */
     static Loaded<TableFile> read(Path path, String name) {
         Loaded<TextFile> text = TextFile.read(path, name);
-        return text.value().isEmpty() ? Loaded.failed(text.problems()) : parse(text.value().get());
+        return text.value().isEmpty()
+                ? Loaded.failed(text.problems())
+                : parse(text.value().get());
     }
 
     /** Reads the table that a text holds. */
@@ -85,8 +87,8 @@ record TableFile(Table table, Separator separator) {
                     rows.add(new Table.Row(parser.getCurrentLineNumber(), cells));
                 }
                 if (rows.size() > MOST_ROWS) {
-                    return Loaded.failed(List.of(InputProblem.ofFile(
-                            name, "more than " + MOST_ROWS + " rows", "at most " + MOST_ROWS)));
+                    return Loaded.failed(List.of(
+                            InputProblem.ofFile(name, "more than " + MOST_ROWS + " rows", "at most " + MOST_ROWS)));
                 }
             }
         } catch (UncheckedIOException e) {

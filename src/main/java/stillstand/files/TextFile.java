@@ -71,12 +71,7 @@ record TextFile(String name, String text, String sha256) {
                     "the byte %02X, which is no UTF-8 (text in windows-1252 or another old encoding)",
                     bytes[in.position()] & 0xFF);
             return failed(new InputProblem(
-                    name,
-                    lineOf(bytes, in.position()),
-                    0,
-                    "",
-                    found,
-                    "UTF-8 (in a spreadsheet: save as CSV UTF-8)"));
+                    name, lineOf(bytes, in.position()), 0, "", found, "UTF-8 (in a spreadsheet: save as CSV UTF-8)"));
         }
         text.flip();
         boolean marked = text.length() > 0 && text.charAt(0) == '\uFEFF';

@@ -59,8 +59,8 @@ record Columns(List<Column> known, List<String> required) {
         for (Column column : known) {
             if (column.headers().contains(header)) {
                 if (!column.isUsed()) {
-                    findings.add(new InputWarning(
-                            table.name(), table.headerLine(), index + 1, header + " is not used yet"));
+                    findings.add(
+                            new InputWarning(table.name(), table.headerLine(), index + 1, header + " is not used yet"));
                 }
                 return;
             }

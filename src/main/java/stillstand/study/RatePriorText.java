@@ -12,8 +12,9 @@ import stillstand.uplift.RatePrior;
 /** The prior of a rate as a cell of {@code sites.csv} writes it. */
 final class RatePriorText {
     /** What to write, for problems. */
-    static final String EXPECTED = "a prior such as \"cauchy 0 0.5 from -10 to 15\", \"half-cauchy 1 from 0.005 to 5\", "
-            + "\"log-uniform 0.01 15\" or \"normal 0 2\"";
+    static final String EXPECTED =
+            "a prior such as \"cauchy 0 0.5 from -10 to 15\", \"half-cauchy 1 from 0.005 to 5\", "
+                    + "\"log-uniform 0.01 15\" or \"normal 0 2\"";
 
     private RatePriorText() {}
 

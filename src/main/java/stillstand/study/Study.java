@@ -35,8 +35,9 @@ public record Study(
 
     /** The same study with only the sites of these names, in its own order; unknown names are passed over. */
     public Study only(Collection<String> names) {
-        List<SitePlan> kept =
-                sites.stream().filter(plan -> names.contains(plan.site().name())).toList();
+        List<SitePlan> kept = sites.stream()
+                .filter(plan -> names.contains(plan.site().name()))
+                .toList();
         return new Study(settings, kept, seaLevel, warnings, ledger, inputs);
     }
 }

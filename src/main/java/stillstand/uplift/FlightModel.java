@@ -35,16 +35,16 @@ public record FlightModel(
         rows = List.copyOf(rows);
         limitingPoints = List.copyOf(limitingPoints);
         if (levels.isEmpty() || rows.isEmpty()) {
-            throw new IllegalArgumentException("a flight must have levels and rows but has " + levels.size() + " and "
-                    + rows.size());
+            throw new IllegalArgumentException(
+                    "a flight must have levels and rows but has " + levels.size() + " and " + rows.size());
         }
-        if (!(surveyedFromMetres < surveyedToMetres && surveyedToMetres - surveyedFromMetres < Double.POSITIVE_INFINITY)) {
+        if (!(surveyedFromMetres < surveyedToMetres
+                && surveyedToMetres - surveyedFromMetres < Double.POSITIVE_INFINITY)) {
             throw new IllegalArgumentException("surveyedFromMetres must be below surveyedToMetres but they are "
                     + surveyedFromMetres + " and " + surveyedToMetres);
         }
         if (!(!todaysSeaIsFloor || surveyedToMetres > 0)) {
-            throw new IllegalArgumentException(
-                    "surveyedToMetres must be above today's sea but is " + surveyedToMetres);
+            throw new IllegalArgumentException("surveyedToMetres must be above today's sea but is " + surveyedToMetres);
         }
         if (!(strayAgeMaximumKa > 0 && strayAgeMaximumKa < Double.POSITIVE_INFINITY)) {
             throw new IllegalArgumentException("strayAgeMaximumKa must be above 0 but is " + strayAgeMaximumKa);

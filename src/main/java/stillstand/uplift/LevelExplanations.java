@@ -41,9 +41,12 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
         return switch (level.formsAt()) {
             case HIGHSTAND -> atHighstand(level, basis, rules, where);
             case ANY -> atItsAge(level, basis, rules, where);
-            case DROWNING -> none("a reef that drowned records a lowstand, and a rate of its own needs its dated age (forms_at any)");
+            case DROWNING ->
+                none(
+                        "a reef that drowned records a lowstand, and a rate of its own needs its dated age (forms_at any)");
             case MARINE_LIMITING -> none("it formed somewhere below the sea, which bounds a rate on one side only");
-            case TERRESTRIAL_LIMITING -> none("it formed somewhere above the sea, which bounds a rate on one side only");
+            case TERRESTRIAL_LIMITING ->
+                none("it formed somewhere above the sea, which bounds a rate on one side only");
             case EVENT -> none("it is one earthquake's step and records no sea level");
         };
     }
@@ -52,8 +55,7 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
         return new LevelExplanations(List.of(), reason, List.of());
     }
 
-    private static LevelExplanations atHighstand(
-            Level level, SeaLevelBasis basis, DateRules rules, String where) {
+    private static LevelExplanations atHighstand(Level level, SeaLevelBasis basis, DateRules rules, String where) {
         List<Highstand> allowed = basis.highstands().rows().stream()
                 .filter(row -> level.highstand().allows(row.stage()))
                 .toList();
@@ -62,10 +64,12 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
         }
         boolean pinned = level.highstand().pinned().isPresent();
         if (!pinned && datesOf(level, DatedSample.Role.LEVEL).isEmpty()) {
-            return none(level.highstand().only().isEmpty()
-                    ? "no date and no highstand given: which highstand made it is a question of the whole flight"
-                    : "tied to several highstands (" + String.join(", ", level.highstand().only())
-                            + ") and no date to choose between them");
+            return none(
+                    level.highstand().only().isEmpty()
+                            ? "no date and no highstand given: which highstand made it is a question of the whole flight"
+                            : "tied to several highstands ("
+                                    + String.join(", ", level.highstand().only())
+                                    + ") and no date to choose between them");
         }
         List<Assumption> assumptions = new ArrayList<>();
         double wrong = wrongProbability(level, rules, where, assumptions);
@@ -145,7 +149,9 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
         List<DateLikelihood> likelihoods = likelihoods(level, 0, wrong, rules);
         Uncertain ageKa = likelihoods.size() == 1
                 ? likelihoods.get(0).ageKa()
-                : CombinedAge.of(likelihoods).map(Uncertain.class::cast).orElse(likelihoods.get(0).ageKa());
+                : CombinedAge.of(likelihoods)
+                        .map(Uncertain.class::cast)
+                        .orElse(likelihoods.get(0).ageKa());
         SeaLevelCurve curve = basis.curve().get();
         Optional<String> whyNot = CurveReading.whyNot(curve, ageKa);
         if (whyNot.isPresent()) {
@@ -188,8 +194,9 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
         for (DatedSample.Role role : DatedSample.Role.values()) {
             for (DatedSample sample : datesOf(level, role)) {
                 double wrong = role == DatedSample.Role.LEVEL ? wrongProbability : rules.wrongProbability();
-                sample.ageKa().ifPresent(ageKa -> likelihoods.add(
-                        new DateLikelihood(ageKa, bearing(role), durationKa, wrong, rules.oldestKa())));
+                sample.ageKa()
+                        .ifPresent(ageKa -> likelihoods.add(
+                                new DateLikelihood(ageKa, bearing(role), durationKa, wrong, rules.oldestKa())));
             }
         }
         return likelihoods;

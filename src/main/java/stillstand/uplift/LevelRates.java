@@ -120,8 +120,8 @@ public final class LevelRates {
                 blocks.add(block);
                 rate.merge(block.rate());
                 if (plan.fixedDraws().isEmpty()) {
-                    AdaptiveStop.Decision decision = stop.after(
-                            blocks.stream().map(Block::estimates).toList(), spread(rate, question.hasMean));
+                    AdaptiveStop.Decision decision =
+                            stop.after(blocks.stream().map(Block::estimates).toList(), spread(rate, question.hasMean));
                     converged = decision == AdaptiveStop.Decision.CONVERGED;
                     goOn = decision == AdaptiveStop.Decision.GO_ON;
                 } else {
@@ -300,9 +300,7 @@ public final class LevelRates {
             return new Outcome(
                     Rate.of(rate.distribution(), hasMean),
                     posterior.map(p -> Rate.of(p, true)),
-                    prior.isTwoSided()
-                            ? posterior.map(p -> 1 - p.cumulativeProbability(0))
-                            : Optional.empty(),
+                    prior.isTwoSided() ? posterior.map(p -> 1 - p.cumulativeProbability(0)) : Optional.empty(),
                     Quantity.of(ages, "ka"),
                     Quantity.of(height.distribution().summary(), "m"),
                     settled(blocks, (int) draws, converged),
@@ -310,8 +308,8 @@ public final class LevelRates {
         }
 
         private LevelAnswer.MonteCarlo settled(List<Block> blocks, int draws, boolean converged) {
-            Optional<MonteCarloError> error =
-                    MonteCarloError.between(blocks.stream().map(Block::estimates).toList());
+            Optional<MonteCarloError> error = MonteCarloError.between(
+                    blocks.stream().map(Block::estimates).toList());
             return new LevelAnswer.MonteCarlo(
                     draws,
                     converged,

@@ -128,9 +128,7 @@ final class RateColumns {
 
     /** The columns of a group, in order. */
     int[] dimensionsOf(InputGroup group) {
-        return IntStream.range(0, inputs.size())
-                .filter(d -> group(d) == group)
-                .toArray();
+        return IntStream.range(0, inputs.size()).filter(d -> group(d) == group).toArray();
     }
 
     /**

@@ -63,8 +63,7 @@ final class ShorelineFilter {
         double logs = 0;
         for (int i = 0; i < levels; i++) {
             FlightLevel level = model.levels().get(i);
-            double strayDensity =
-                    level.strayFactor() / (model.surveyedToMetres() - model.surveyedFromMetres());
+            double strayDensity = level.strayFactor() / (model.surveyedToMetres() - model.surveyedFromMetres());
             placeKernel(i, level, strayDensity);
             logs += Math.log(strayDensity) - level.datesKa().size() * Math.log(model.strayAgeMaximumKa());
             for (int j = 0; j < rows; j++) {
