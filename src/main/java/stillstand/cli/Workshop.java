@@ -1,16 +1,22 @@
 package stillstand.cli;
 
+import java.io.FileDescriptor;
+import java.io.FileOutputStream;
 import java.io.PrintStream;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
 import java.time.Clock;
 import java.util.List;
 import java.util.concurrent.ExecutorService;
 import java.util.function.UnaryOperator;
+import stillstand.files.ShippedLibrary;
+import stillstand.files.StudyFolder;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.Loaded;
 import stillstand.ledger.RunMonitor;
 import stillstand.study.Study;
 import stillstand.study.StudyResult;
+import stillstand.study.StudyRunner;
 import stillstand.study.StudySettings;
 
 /**
@@ -24,6 +30,21 @@ import stillstand.study.StudySettings;
  */
 public record Workshop(PrintStream out, PrintStream err, Clock clock, Reader reader, Engine engine) {
     private static final int PROBLEMS_LISTED = 200;
+
+    /** The process's own streams and clock, and the whole program behind the commands. */
+    public static Workshop ofProcess() {
+        return new Workshop(
+                stream(FileDescriptor.out),
+                stream(FileDescriptor.err),
+                Clock.systemUTC(),
+                (folder, changes) -> StudyFolder.read(folder, ShippedLibrary.load(), changes),
+                StudyRunner::run);
+    }
+
+    /** UTF-8 whatever the locale says. */
+    private static PrintStream stream(FileDescriptor descriptor) {
+        return new PrintStream(new FileOutputStream(descriptor), true, StandardCharsets.UTF_8);
+    }
 
     /** Reads a study folder, with changes to its settings. */
     @FunctionalInterface

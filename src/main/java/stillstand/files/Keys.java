@@ -51,7 +51,9 @@ record Keys(String path, JsonNode node, Set<String> bad) {
     }
 
     Optional<Long> whole(String key) {
-        return value(key).filter(JsonNode::isNumber).map(number -> number.decimalValue().longValue());
+        return value(key)
+                .filter(JsonNode::isNumber)
+                .map(number -> number.decimalValue().longValue());
     }
 
     Optional<Boolean> flag(String key) {
@@ -61,11 +63,12 @@ record Keys(String path, JsonNode node, Set<String> bad) {
     /** A list of numbers, empty where there is none. */
     List<Double> numbers(String key) {
         List<Double> numbers = new ArrayList<>();
-        value(key).ifPresent(list -> list.forEach(item -> {
-            if (item.isNumber()) {
-                numbers.add(item.doubleValue());
-            }
-        }));
+        value(key)
+                .ifPresent(list -> list.forEach(item -> {
+                    if (item.isNumber()) {
+                        numbers.add(item.doubleValue());
+                    }
+                }));
         return numbers;
     }
 

@@ -124,7 +124,9 @@ final class PaperTable {
         }
 
         String ofHighstand(Function<HighstandUsed, Double> what) {
-            return highstand.map(used -> Digits.text(what.apply(used))).orElse("");
+            return highstand
+                    .map(used -> Digits.text(what.apply(used), used.levelSigmaMetres(), OTHER_DIGITS))
+                    .orElse("");
         }
 
         String ofRate(Function<Rate, Double> what) {

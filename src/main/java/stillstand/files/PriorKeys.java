@@ -83,8 +83,7 @@ final class PriorKeys {
         }
         if (!(to > from)) {
             String at = keys.has("to") ? "to" : "from";
-            problems.add(json.problem(
-                    keys.pathOf(at), "a range from " + from + " to " + to, "\"to\" above \"from\""));
+            problems.add(json.problem(keys.pathOf(at), "a range from " + from + " to " + to, "\"to\" above \"from\""));
             return false;
         }
         return true;

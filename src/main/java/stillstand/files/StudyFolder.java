@@ -2,13 +2,14 @@ package stillstand.files;
 
 import java.io.IOException;
 import java.nio.file.Files;
-import java.nio.file.InvalidPathException;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Comparator;
+import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 import java.util.TreeMap;
 import java.util.function.UnaryOperator;
 import java.util.stream.Stream;
@@ -65,8 +66,7 @@ public final class StudyFolder {
     }
 
     private Loaded<Study> read(Library library, UnaryOperator<StudySettings> changes) {
-        Optional<StatedSettings> settings =
-                keep(text(StudyJson.NAME)).flatMap(file -> keep(StudyJson.parse(file)));
+        Optional<StatedSettings> settings = keep(text(StudyJson.NAME)).flatMap(file -> keep(StudyJson.parse(file)));
         Library whole = withOwnCurves(library);
         Optional<Table> sites = table("sites.csv");
         Optional<Table> levels = table("levels.csv");
@@ -101,44 +101,17 @@ public final class StudyFolder {
     private Optional<Table> table(String name) {
         return keep(text(name)).flatMap(file -> keep(TableFile.parse(file))).map(file -> {
             ledger.add(new Assumption(
-                    "cells of " + name + " stand between",
-                    file.separator().plural(),
-                    "found in its header",
-                    "all"));
+                    "cells of " + name + " stand between", file.separator().plural(), "found in its header", "all"));
             return file.table();
         });
     }
 
     private Library withOwnCurves(Library library) {
-        if (!Files.exists(folder.resolve(CURVES))) {
-            return library;
-        }
-        Optional<CurvePackage> own = keep(CurvePackage.read(
-                CURVES + "/", name -> inCurves(CURVES + "/" + name), Optional.of(library.stages())));
-        if (own.isEmpty()) {
-            return library;
-        }
-        inputs.addAll(own.get().inputs());
-        own.get().curves().forEach(curve -> checkId(curve.id(), library.curveIds()));
-        own.get().highstands().forEach(table -> checkId(table.id(), library.highstandIds()));
-        return library.with(own.get().curves(), own.get().highstands());
-    }
-
-    private Loaded<TextFile> inCurves(String name) {
-        try {
-            return TextFile.read(folder.resolve(name), name);
-        } catch (InvalidPathException e) {
-            return Loaded.failed(List.of(InputProblem.ofFile(name, "a path that cannot be", "a path of a file")));
-        }
-    }
-
-    private void checkId(String id, List<String> shipped) {
-        if (shipped.contains(id)) {
-            problems.add(InputProblem.ofFile(
-                    CURVES + "/" + CurvePackage.NAME,
-                    InputProblem.quote(id) + ", which the tool ships already",
-                    "an id of your own"));
-        }
+        Set<String> taken = new HashSet<>(library.curveIds());
+        taken.addAll(library.highstandIds());
+        Optional<CurvePackage> own = keep(CurvePackage.read(folder.resolve(CURVES), CURVES, library.stages(), taken));
+        own.ifPresent(read -> inputs.addAll(read.inputs()));
+        return own.map(read -> library.with(read.curves(), read.highstands())).orElse(library);
     }
 
     /** Calibrated ages by the name of their file. */

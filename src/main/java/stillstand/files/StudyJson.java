@@ -52,7 +52,10 @@ public final class StudyJson {
             return Loaded.failed(json.problems());
         }
         List<InputProblem> problems = new ArrayList<>(json.problems());
-        problems.addAll(SCHEMA.problems(json, json.root().get()));
+        Set<String> seen = badPaths(problems);
+        SCHEMA.problems(json, json.root().get()).stream()
+                .filter(problem -> !seen.contains(problem.header()))
+                .forEach(problems::add);
         StudyJson reader = new StudyJson(json, new Keys("", json.root().get(), badPaths(problems)));
         if (problems.stream().noneMatch(problem -> problem.header().isEmpty())) {
             StudySettings settings = reader.settings();
@@ -76,9 +79,7 @@ public final class StudyJson {
                 root.text("note").orElse(""),
                 root.whole("seed").orElseGet(() -> assumed("seed", 20261201L)),
                 new Draws(
-                        draws.whole("maximum")
-                                .map(Long::intValue)
-                                .orElseGet(() -> assumed("draws.maximum", 1 << 20)),
+                        draws.whole("maximum").map(Long::intValue).orElseGet(() -> assumed("draws.maximum", 1 << 20)),
                         draws.whole("significant_digits")
                                 .map(Long::intValue)
                                 .orElseGet(() -> assumed("draws.significant_digits", 2)),
@@ -113,7 +114,9 @@ public final class StudyJson {
                 curves(keys, fromTable),
                 table,
                 overrides(highstands, fromTable),
-                highstands.flag("older_than_curve").orElseGet(() -> assumed("sea_level.highstands.older_than_curve", true)),
+                highstands
+                        .flag("older_than_curve")
+                        .orElseGet(() -> assumed("sea_level.highstands.older_than_curve", true)),
                 keys.number("correlation_time_ka"),
                 keys.setting("shared_level_1sigma_m", 3),
                 keys.setting("interstadial_1sigma_m", 6),
@@ -240,7 +243,9 @@ public final class StudyJson {
         Map<String, Object> stated = new LinkedHashMap<>();
         stated.put("title", title);
         TextFile text = new TextFile(NAME, StudyJsonWriter.text(stated), "");
-        return parse(text).value().orElseThrow(() -> new IllegalArgumentException("title must not be empty"))
+        return parse(text)
+                .value()
+                .orElseThrow(() -> new IllegalArgumentException("title must not be empty"))
                 .settings();
     }
 }

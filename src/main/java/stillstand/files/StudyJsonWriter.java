@@ -125,9 +125,7 @@ public final class StudyJsonWriter {
         if (matching.recordingDecay() instanceof Decay.Fixed fixed) {
             keys.put("recording_decay_ka", fixed.timeKa());
         } else {
-            keys.put(
-                    "recording_decay_ka",
-                    matching.recordingDecay() instanceof Decay.None ? "none" : "marginalised");
+            keys.put("recording_decay_ka", matching.recordingDecay() instanceof Decay.None ? "none" : "marginalised");
         }
         matching.expectedStrays().ifPresent(strays -> {
             if (strays instanceof Strays.Fixed fixed) {
@@ -145,9 +143,11 @@ public final class StudyJsonWriter {
     private static Map<String, Object> screening(Screening screening) {
         Map<String, Object> keys = new LinkedHashMap<>();
         screening.calciteMaximumPercent().ifPresent(value -> keys.put("calcite_maximum_percent", value));
-        screening.initialDelta234ULowPermil().ifPresent(low -> screening
-                .initialDelta234UHighPermil()
-                .ifPresent(high -> keys.put("initial_d234u_permil", List.of(low, high))));
+        screening
+                .initialDelta234ULowPermil()
+                .ifPresent(low -> screening
+                        .initialDelta234UHighPermil()
+                        .ifPresent(high -> keys.put("initial_d234u_permil", List.of(low, high))));
         screening.th232MaximumPpb().ifPresent(value -> keys.put("th232_maximum_ppb", value));
         screening.th230Th232Minimum().ifPresent(value -> keys.put("th230_th232_minimum", value));
         screening.replicates().ifPresent(value -> keys.put("replicates", value));

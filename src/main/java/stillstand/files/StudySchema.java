@@ -67,9 +67,7 @@ final class StudySchema {
     private static String knownKey(String key, JsonNode known) {
         List<String> names = new ArrayList<>(known.propertyNames());
         names.remove("$schema");
-        return NearestName.of(key, names)
-                .map(name -> "\"" + name + "\"")
-                .orElse("one of " + String.join(", ", names));
+        return NearestName.of(key, names).map(name -> "\"" + name + "\"").orElse("one of " + String.join(", ", names));
     }
 
     /**

@@ -9,7 +9,7 @@ public final class NearestName {
     private NearestName() {}
 
     /**
-     * The known name with the fewest letters changed, added or left out (case does not count); the first of several.
+     * The known name with the fewest letters changed, added, left out or swapped (case does not count); the first of several.
      *
      * @return empty where more than a third of the letters, and more than one, would have to change
      */
@@ -27,8 +27,9 @@ public final class NearestName {
         return nearest;
     }
 
-    /** Levenshtein's distance, row by row. */
+    /** Letters changed, added, left out or swapped with their neighbour, row by row (optimal string alignment). */
     private static int distance(String a, String b) {
+        int[] beforePrevious = new int[b.length() + 1];
         int[] previous = new int[b.length() + 1];
         for (int j = 0; j <= b.length(); j++) {
             previous[j] = j;
@@ -37,9 +38,15 @@ public final class NearestName {
             int[] row = new int[b.length() + 1];
             row[0] = i;
             for (int j = 1; j <= b.length(); j++) {
-                int swap = previous[j - 1] + (a.charAt(i - 1) == b.charAt(j - 1) ? 0 : 1);
-                row[j] = Math.min(swap, Math.min(previous[j], row[j - 1]) + 1);
+                int change = previous[j - 1] + (a.charAt(i - 1) == b.charAt(j - 1) ? 0 : 1);
+                row[j] = Math.min(change, Math.min(previous[j], row[j - 1]) + 1);
+                boolean swapped =
+                        i > 1 && j > 1 && a.charAt(i - 1) == b.charAt(j - 2) && a.charAt(i - 2) == b.charAt(j - 1);
+                if (swapped) {
+                    row[j] = Math.min(row[j], beforePrevious[j - 2] + 1);
+                }
             }
+            beforePrevious = previous;
             previous = row;
         }
         return previous[b.length()];

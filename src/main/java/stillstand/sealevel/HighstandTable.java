@@ -219,7 +219,7 @@ public record HighstandTable(
             String what = replaced
                     ? String.format(
                             Locale.ROOT,
-                            "%.1f +- %.1f m at %.1f +- %.1f ka (1 sigma)",
+                            "%.1f ± %.1f m at %.1f ± %.1f ka (1 sigma)",
                             entry.level().mean(),
                             entry.level().standardDeviation(),
                             entry.ageKa(),
@@ -241,13 +241,13 @@ public record HighstandTable(
             ledger.add(new Assumption(
                     "older highstands beyond the table",
                     "one every 41 ka from " + kiloyears(lastKa + OLDER_STEP_KA)
-                            + " to 2600 ka: -10 +- 15 m, age +- 12 ka (1 sigma)",
+                            + " to 2600 ka: -10 ± 15 m, age ± 12 ka (1 sigma)",
                     OURS,
                     "all"));
         }
         if (rows.stream().anyMatch(row -> row.equals(Highstand.holocene()))) {
             ledger.add(new Assumption(
-                    "highstand of today's interglacial", "0.7 +- 0.7 m at 5.25 +- 1.3 ka (1 sigma)", OURS, "all"));
+                    "highstand of today's interglacial", "0.7 ± 0.7 m at 5.25 ± 1.3 ka (1 sigma)", OURS, "all"));
         }
         List<Assumption> lines = sharedLines(shared, OURS);
         ledger.add(lines.get(0));

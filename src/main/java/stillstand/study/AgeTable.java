@@ -45,8 +45,6 @@ public final class AgeTable {
         } else if (findings.problemCount() == 0 && !anyDensity) {
             findings.add(InputProblem.ofFile(table.name(), "no density above 0", "one somewhere"));
         }
-        return findings.problemCount() > 0
-                ? Loaded.failed(findings.problems())
-                : Loaded.of(Tabulated.of(points));
+        return findings.problemCount() > 0 ? Loaded.failed(findings.problems()) : Loaded.of(Tabulated.of(points));
     }
 }

@@ -94,10 +94,7 @@ final class LevelsTable {
             String site = row.requiredText("site", "the name of a site");
             String name = row.requiredText("level", "the name of a level");
             if (!site.isEmpty() && !sites.contains(site)) {
-                row.problem(
-                        "site",
-                        quote(site),
-                        "a site of " + SitesTable.NAME + RowReader.nearest(site, sites));
+                row.problem("site", quote(site), "a site of " + SitesTable.NAME + RowReader.nearest(site, sites));
             }
             Key key = new Key(site, name);
             Long before = name.isEmpty() ? null : seen.putIfAbsent(key, row.line());
@@ -116,8 +113,7 @@ final class LevelsTable {
         return levels;
     }
 
-    private LevelRow level(
-            RowReader row, Key key, Optional<StageLabels> stages, Map<List<Object>, String> orders) {
+    private LevelRow level(RowReader row, Key key, Optional<StageLabels> stages, Map<List<Object>, String> orders) {
         String where = key.site() + " / " + key.level();
         Optional<Uncertain> elevation = row.measured(ELEVATION, where);
         if (row.hasColumn(ELEVATION.header()) && row.text(ELEVATION.header()).isEmpty()) {
@@ -153,7 +149,8 @@ final class LevelsTable {
     }
 
     private IndicativeMeaning meaning(RowReader row, String where, FormsAt formsAt) {
-        Optional<Indicator> indicator = row.known("indicator", library.indicators().ids(), "the id of an indicator")
+        Optional<Indicator> indicator = row.known(
+                        "indicator", library.indicators().ids(), "the id of an indicator")
                 .flatMap(library.indicators()::find);
         Optional<Uncertain> reference = row.measured(REFERENCE_WATER_LEVEL, where);
         Optional<Double> range = row.length("indicative_range_m");
@@ -176,8 +173,7 @@ final class LevelsTable {
                     indicator.map(Indicator::source).orElse(""),
                     where);
         }
-        IndicativeMeaning start =
-                usual.orElseGet(() -> new IndicativeMeaning(row.text("indicator"), new Exact(0), 0));
+        IndicativeMeaning start = usual.orElseGet(() -> new IndicativeMeaning(row.text("indicator"), new Exact(0), 0));
         return new IndicativeMeaning(
                 start.indicator(),
                 reference.orElse(start.referenceWaterLevelMetres()),

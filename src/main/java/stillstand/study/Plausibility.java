@@ -33,8 +33,8 @@ final class Plausibility {
             List<LevelsTable.LevelRow> levels,
             List<SamplesTable.SampleRow> samples,
             Function<String, Optional<SeaLevelCase>> seaLevel) {
-        Map<String, List<LevelsTable.LevelRow>> bySite =
-                levels.stream().collect(Collectors.groupingBy(level -> level.key().site()));
+        Map<String, List<LevelsTable.LevelRow>> bySite = levels.stream()
+                .collect(Collectors.groupingBy(level -> level.key().site()));
         for (SitesTable.SiteRow site : sites) {
             List<LevelsTable.LevelRow> own = bySite.getOrDefault(site.name(), List.of());
             checkUnit(site, own);
@@ -78,7 +78,8 @@ final class Plausibility {
         double highest = Double.NEGATIVE_INFINITY;
         boolean warned = false;
         for (LevelsTable.LevelRow level : levels) {
-            if (level.elevationMetres().isEmpty()) {
+            // the range says where a terrace would have been seen: it binds no level that formed at its own age
+            if (level.elevationMetres().isEmpty() || level.formsAt() != FormsAt.HIGHSTAND) {
                 continue;
             }
             Uncertain elevation = level.elevationMetres().get();
@@ -150,7 +151,8 @@ final class Plausibility {
                     .problem(
                             header,
                             quote(row.reader().text(header)),
-                            "an age on curve " + quote(curve.get().id()) + " (" + text(curve.get().fromKa()) + " to "
+                            "an age on curve " + quote(curve.get().id()) + " ("
+                                    + text(curve.get().fromKa()) + " to "
                                     + text(curve.get().toKa()) + " ka), at which level "
                                     + quote(level.key().level()) + " is read");
         }
@@ -168,8 +170,8 @@ final class Plausibility {
     }
 
     private static void checkDates(LevelsTable.LevelRow level, List<DatedSample> used) {
-        boolean onlyMinimum = !used.isEmpty()
-                && used.stream().allMatch(sample -> sample.dates() == DatedSample.Role.MINIMUM);
+        boolean onlyMinimum =
+                !used.isEmpty() && used.stream().allMatch(sample -> sample.dates() == DatedSample.Role.MINIMUM);
         if (onlyMinimum && level.highstand().pinned().isEmpty()) {
             level.reader()
                     .warn(

@@ -209,11 +209,13 @@ final class RowReader {
             return column.spread() == Column.Spread.REQUIRED ? Optional.empty() : Optional.of(0.0);
         }
         String spread = text(header.get());
-        if (value.isEmpty() && !spread.isEmpty()) {
+        if (value.isEmpty() && !spread.isEmpty() && hasColumn(column.header())) {
             problem(header.get(), quote(spread) + " beside a blank " + column.header(), "both or neither");
+        }
+        if (value.isEmpty()) {
             return Optional.empty();
         }
-        if (!value.isEmpty() && spread.isEmpty()) {
+        if (spread.isEmpty()) {
             problem(header.get(), "nothing", "the spread of " + column.header() + " (0 where it is exact)");
             return Optional.empty();
         }

@@ -21,9 +21,8 @@ final class SampleDepth {
     static Optional<Uncertain> read(RowReader row, String where, HabitatTable habitats) {
         Optional<DepthHabitat> taxon =
                 row.known("taxon", habitats.ids(), "the id of a taxon").flatMap(habitats::find);
-        Optional<Uncertain> depth = row.text("depth_habitat").isEmpty()
-                ? usual(row, where, taxon)
-                : stated(row, where, habitats);
+        Optional<Uncertain> depth =
+                row.text("depth_habitat").isEmpty() ? usual(row, where, taxon) : stated(row, where, habitats);
         Optional<Double> cap = row.number("depth_max_m").filter(metres -> {
             if (!(metres > 0)) {
                 row.problem("depth_max_m", quote(row.text("depth_max_m")), "a depth above 0");

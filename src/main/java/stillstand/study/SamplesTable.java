@@ -115,8 +115,7 @@ final class SamplesTable {
         return samples;
     }
 
-    private static void checkPlace(
-            RowReader row, String site, String level, Set<String> sites, Set<String> levels) {
+    private static void checkPlace(RowReader row, String site, String level, Set<String> sites, Set<String> levels) {
         if (site.isEmpty()) {
             return;
         }

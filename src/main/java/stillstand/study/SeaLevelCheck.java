@@ -82,13 +82,14 @@ final class SeaLevelCheck {
     private Optional<SeaLevelCurve> curve(String id, String path) {
         Optional<SeaLevelCurve> curve = library.curve(id);
         if (curve.isEmpty()) {
-            findings.add(stated.problem(
-                    path, quote(id), "the id of a curve" + RowReader.nearest(id, library.curveIds())));
+            findings.add(
+                    stated.problem(path, quote(id), "the id of a curve" + RowReader.nearest(id, library.curveIds())));
         }
         if (choice.rezero() && curve.isPresent() && !canBeRezeroed(curve.get())) {
             findings.add(stated.problem(
                     "sea_level.rezero",
-                    "true, while curve " + quote(id) + " starts at " + curve.get().fromKa() + " ka",
+                    "true, while curve " + quote(id) + " starts at "
+                            + curve.get().fromKa() + " ka",
                     "a curve that reaches today, or false"));
             return Optional.empty();
         }
@@ -133,8 +134,7 @@ final class SeaLevelCheck {
                 id,
                 1,
                 curves.stream().findFirst(),
-                underSettings(HighstandTable.own(
-                        id, each.complete(), each.entries(), library.stages(), options()))));
+                underSettings(HighstandTable.own(id, each.complete(), each.entries(), library.stages(), options()))));
     }
 
     private HighstandOptions options() {
@@ -152,8 +152,9 @@ final class SeaLevelCheck {
                         ? choice.interstadialSigmaMetres().value()
                         : own.interstadialSigmaMetres(),
                 choice.curveAgeSigmaKa().orElse(own.curveAgeSigmaKa()));
-        choice.curveAgeSigmaKa().ifPresent(sigma -> findings.add(new Assumption(
-                "curve age error is stated", sigma + " ka (1 sigma)", "the study", "all")));
+        choice.curveAgeSigmaKa()
+                .ifPresent(sigma -> findings.add(
+                        new Assumption("curve age error is stated", sigma + " ka (1 sigma)", "the study", "all")));
         return set.equals(own) ? table : table.with(set);
     }
 

@@ -24,8 +24,8 @@ final class SeaLevelSummary {
         List<StudyResult.CurveUsed> curves = new ArrayList<>();
         List<StudyResult.HighstandUsed> highstands = new ArrayList<>();
         for (SeaLevelCase sea : cases.values()) {
-            sea.curve().ifPresent(curve ->
-                    curves.add(new StudyResult.CurveUsed(curve.id(), sea.weight(), points(curve))));
+            sea.curve()
+                    .ifPresent(curve -> curves.add(new StudyResult.CurveUsed(curve.id(), sea.weight(), points(curve))));
             SharedErrors shared = sea.highstands().sharedErrors();
             for (Highstand row : sea.highstands().rows()) {
                 highstands.add(new StudyResult.HighstandUsed(

@@ -125,7 +125,8 @@ final class SitesTable {
                 samples,
                 row.text("note"),
                 row.own());
-        return new SiteRow(name, row, prior, surveyed, offset, Optional.of(toSite).filter(make -> row.isGood()));
+        return new SiteRow(
+                name, row, prior, surveyed, offset, Optional.of(toSite).filter(make -> row.isGood()));
     }
 
     private Optional<Position> position(RowReader row) {

@@ -19,7 +19,9 @@ record StageLabels(HighstandTable table, StageTable stages) {
         if (table.find(name).isPresent()) {
             return Optional.of(name);
         }
-        return stages.find(name).map(Stage::label).filter(label -> table.find(label).isPresent());
+        return stages.find(name)
+                .map(Stage::label)
+                .filter(label -> table.find(label).isPresent());
     }
 
     /** Whether it is a stage, though perhaps one that the table lacks. */

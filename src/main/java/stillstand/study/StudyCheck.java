@@ -101,8 +101,7 @@ public final class StudyCheck {
     private void warnUnused(StatedSettings stated, String keyPath, boolean isStated) {
         if (isStated) {
             Place place = stated.places().getOrDefault(keyPath, new Place(0, 0));
-            findings.add(
-                    new InputWarning(stated.file(), place.line(), place.column(), keyPath + " is not used yet"));
+            findings.add(new InputWarning(stated.file(), place.line(), place.column(), keyPath + " is not used yet"));
         }
     }
 
@@ -139,7 +138,12 @@ public final class StudyCheck {
                             samples.getOrDefault(new LevelsTable.Key(row.name(), ""), List.of()));
             plans.add(new SitePlan(
                     site,
-                    row.prior().orElseGet(() -> input.settings().orElseThrow().settings().rate().prior()),
+                    row.prior()
+                            .orElseGet(() -> input.settings()
+                                    .orElseThrow()
+                                    .settings()
+                                    .rate()
+                                    .prior()),
                     Optional.ofNullable(local.get(row.name()))));
         }
         return plans;

@@ -28,7 +28,6 @@ import stillstand.uplift.SiteRelations;
  */
 public final class StudyRunner {
     private final Study study;
-    private final ExecutorService executor;
     private final RunMonitor monitor;
     private final DrawStreams streams;
     private final DrawPlan plan;
@@ -44,7 +43,6 @@ public final class StudyRunner {
 
     private StudyRunner(Study study, ExecutorService executor, RunMonitor monitor) {
         this.study = study;
-        this.executor = executor;
         this.monitor = monitor;
         StudySettings settings = study.settings();
         streams = new DrawStreams(settings.seed());
@@ -76,11 +74,11 @@ public final class StudyRunner {
     }
 
     private StudyResult result() {
-        ledger.addAll(study.ledger());
         ledger.addAll(Conventions.of(study.settings()));
         for (SeaLevelCase sea : study.seaLevel()) {
             ledger.addAll(sea.highstands().assumptions());
         }
+        ledger.addAll(study.ledger());
         int allLevels = study.sites().stream()
                 .mapToInt(plan -> plan.site().levels().size())
                 .sum();
@@ -122,15 +120,15 @@ public final class StudyRunner {
             LevelAnswers.Answered answered = answers.of(plan.site(), level, basis, plan.prior());
             levels.add(answered.answer());
             answered.whyWaiting()
-                    .ifPresent(reason -> waiting.add(
-                            new StudyResult.Waiting(plan.site().name(), level.name(), reason)));
+                    .ifPresent(reason ->
+                            waiting.add(new StudyResult.Waiting(plan.site().name(), level.name(), reason)));
             ledger.addAll(answered.assumptions());
         }
         if (monitor.isCancelled()) {
             throw new RunCancelledException();
         }
-        SiteRelations relations = SiteRelations.of(
-                plan.site(), basis, study.settings().indicativeRange(), dates, streams, this.plan);
+        SiteRelations relations =
+                SiteRelations.of(plan.site(), basis, study.settings().indicativeRange(), dates, streams, this.plan);
         intervals.addAll(relations.intervals());
         implied.addAll(relations.impliedSeaLevel());
         ledger.addAll(relations.assumptions());

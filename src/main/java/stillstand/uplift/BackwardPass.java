@@ -45,7 +45,7 @@ final class BackwardPass {
         if (logEvidence == Double.NEGATIVE_INFINITY) {
             return logEvidence;
         }
-        double logTotal = logEvidence - filter.logUnit(shared.expectedStrays());
+        double logTotal = logEvidence - w.logLimiting - filter.logUnit(shared.expectedStrays());
         for (int l = 0; l <= w.levels; l++) {
             w.gAbove[l] = filter.endWeight(l);
             Arrays.fill(w.g, l * w.cells, (l + 1) * w.cells, w.gAbove[l]);
@@ -75,9 +75,9 @@ final class BackwardPass {
     }
 
     private void clear() {
-        for (double[] sums : new double[][] {
-            w.pair, w.pairAge, w.pairAgeSquare, w.pairHeight, w.unseen, w.over, w.outside, w.absent
-        }) {
+        for (double[] sums :
+                new double[][] {w.pair, w.pairAge, w.pairAgeSquare, w.pairHeight, w.unseen, w.over, w.outside, w.absent
+                }) {
             Arrays.fill(sums, 0);
         }
     }

@@ -206,8 +206,7 @@ final class CorrelationSampler {
         double height = filter.cells.edgeMetres(c) + random.nextDouble() * filter.cells.widthMetres();
         double normal = StandardNormal.quantile(((random.nextLong() >>> 12) + 0.5) * 0x1p-52);
         double ageKa = filter.isDated(level)
-                ? filter.dates(level, j)
-                        .drawAgeKa(meanAgeKa(c), w.row.ageVarianceKa2, random.nextDouble(), normal)
+                ? filter.dates(level, j).drawAgeKa(meanAgeKa(c), w.row.ageVarianceKa2, random.nextDouble(), normal)
                 : meanAgeKa(c) + Math.sqrt(w.row.ageVarianceKa2) * normal;
         return new FlightDraw.Match(j, height, ageKa, height - history.upliftMetresSince(ageKa));
     }

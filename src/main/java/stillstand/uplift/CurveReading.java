@@ -47,7 +47,7 @@ final class CurveReading {
         }
         return Optional.of(String.format(
                 Locale.ROOT,
-                "the curve is too steep at this age to give a rate: '%s' varies by %.0f m within %.1f +- %.1f ka",
+                "the curve is too steep at this age to give a rate: '%s' varies by %.0f m within %.1f ± %.1f ka",
                 curve.id(),
                 variationMetres,
                 centreKa,

@@ -24,7 +24,8 @@ sealed interface DateKernel permits NormalDates, GriddedDates {
      * Multiplies {@code values[c]}, c from {@code from} to {@code to}, by the agreement at mean age
      * {@code firstMeanKa + (c - from) stepKa} and variance {@code varianceKa2}.
      */
-    void multiply(double[] values, int from, int to, double firstMeanKa, double stepKa, double varianceKa2, double[] scratch);
+    void multiply(
+            double[] values, int from, int to, double firstMeanKa, double stepKa, double varianceKa2, double[] scratch);
 
     /** Mean and mean square of the age given the dates, where the age before them is normal; into {@code out[0]}, {@code out[1]}. */
     void ageMoments(double meanKa, double varianceKa2, double[] out);
@@ -37,7 +38,8 @@ sealed interface DateKernel permits NormalDates, GriddedDates {
      */
     double drawAgeKa(double meanKa, double varianceKa2, double choice, double normal);
 
-    static DateKernel of(List<Uncertain> datesKa, double durationKa, double wrongProbability, double strayAgeMaximumKa) {
+    static DateKernel of(
+            List<Uncertain> datesKa, double durationKa, double wrongProbability, double strayAgeMaximumKa) {
         boolean normal = datesKa.stream().allMatch(date -> date instanceof Normal);
         return normal && datesKa.size() <= MOST_IN_CLOSED_FORM
                 ? new NormalDates(datesKa, durationKa, wrongProbability, strayAgeMaximumKa)

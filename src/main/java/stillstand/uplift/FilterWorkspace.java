@@ -29,6 +29,7 @@ final class FilterWorkspace {
 
     double logScale;
     double logEvidence;
+    double logLimiting;
     double logNothingRecorded;
 
     /** Messages before each row, kept for the backward pass and for draws; empty where only the evidence is wanted. */

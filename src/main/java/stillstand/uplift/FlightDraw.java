@@ -27,8 +27,6 @@ public record FlightDraw(double rateMetresPerKyr, SharedNumbers shared, List<Opt
 
     /** By level, the row it records, or -1 where it is a stray. */
     public List<Integer> rows() {
-        return matches.stream()
-                .map(match -> match.map(Match::row).orElse(-1))
-                .toList();
+        return matches.stream().map(match -> match.map(Match::row).orElse(-1)).toList();
     }
 }

@@ -103,7 +103,8 @@ public final class FlightIntegration {
         for (double rate : candidates) {
             logs.computeIfAbsent(rate, logEvidence::applyAsDouble);
         }
-        return RatePosterior.of(keys(logs), logs.values().stream().mapToDouble(v -> v).toArray(), prior);
+        return RatePosterior.of(
+                keys(logs), logs.values().stream().mapToDouble(v -> v).toArray(), prior);
     }
 
     private static double[] keys(Map<Double, ?> map) {
@@ -128,8 +129,8 @@ public final class FlightIntegration {
         FilterWorkspace coarseWorkspace = coarse.workspace(false);
         FilterWorkspace fineWorkspace = fine.workspace(false);
         TreeMap<Double, Double> log = new TreeMap<>();
-        DoubleUnaryOperator logDensity = rate -> evaluate(rate, coarseWorkspace, fineWorkspace).logEvidence
-                + Math.log(prior.density(rate));
+        DoubleUnaryOperator logDensity =
+                rate -> evaluate(rate, coarseWorkspace, fineWorkspace).logEvidence + Math.log(prior.density(rate));
         for (double rate : nodes) {
             log.computeIfAbsent(rate, logDensity::applyAsDouble);
         }
@@ -138,9 +139,8 @@ public final class FlightIntegration {
                 break;
             }
         }
-        double[] logEvidences = evaluated.values().stream()
-                .mapToDouble(one -> one.logEvidence)
-                .toArray();
+        double[] logEvidences =
+                evaluated.values().stream().mapToDouble(one -> one.logEvidence).toArray();
         return RatePosterior.of(keys(evaluated), logEvidences, prior);
     }
 
@@ -251,9 +251,8 @@ public final class FlightIntegration {
     }
 
     private double allStray(RatePosterior posterior) {
-        double[] logs = evaluated.values().stream()
-                .mapToDouble(one -> one.logAllStray)
-                .toArray();
+        double[] logs =
+                evaluated.values().stream().mapToDouble(one -> one.logAllStray).toArray();
         double log = RatePosterior.of(keys(evaluated), logs, prior).logEvidence() - posterior.logEvidence();
         double ratio = Math.exp(log);
         return model.countsAllStray() ? Math.min(1, ratio) : ratio / (1 + ratio);

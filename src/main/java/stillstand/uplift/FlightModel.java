@@ -13,6 +13,7 @@ import java.util.List;
  * @param wrongDateProbability probability that one date is wrong, 0 or more, below 1
  * @param todaysSeaIsFloor whether a shoreline must stand above today's sea to survive
  * @param countsAllStray whether the answer counts the case that no level is a shoreline
+ * @param limitingPoints what bounds the rate on one side
  */
 public record FlightModel(
         List<FlightLevel> levels,
@@ -22,7 +23,8 @@ public record FlightModel(
         double strayAgeMaximumKa,
         double wrongDateProbability,
         boolean todaysSeaIsFloor,
-        boolean countsAllStray) {
+        boolean countsAllStray,
+        List<LimitingPoint> limitingPoints) {
     /**
      * @throws IllegalArgumentException if there is no level or no row, the surveyed range is upside down (or, where today's sea
      *     is the floor, wholly below it), {@code strayAgeMaximumKa} is not above 0, or {@code wrongDateProbability} is out of
@@ -31,17 +33,18 @@ public record FlightModel(
     public FlightModel {
         levels = List.copyOf(levels);
         rows = List.copyOf(rows);
+        limitingPoints = List.copyOf(limitingPoints);
         if (levels.isEmpty() || rows.isEmpty()) {
-            throw new IllegalArgumentException("a flight must have levels and rows but has " + levels.size() + " and "
-                    + rows.size());
+            throw new IllegalArgumentException(
+                    "a flight must have levels and rows but has " + levels.size() + " and " + rows.size());
         }
-        if (!(surveyedFromMetres < surveyedToMetres && surveyedToMetres - surveyedFromMetres < Double.POSITIVE_INFINITY)) {
+        if (!(surveyedFromMetres < surveyedToMetres
+                && surveyedToMetres - surveyedFromMetres < Double.POSITIVE_INFINITY)) {
             throw new IllegalArgumentException("surveyedFromMetres must be below surveyedToMetres but they are "
                     + surveyedFromMetres + " and " + surveyedToMetres);
         }
         if (!(!todaysSeaIsFloor || surveyedToMetres > 0)) {
-            throw new IllegalArgumentException(
-                    "surveyedToMetres must be above today's sea but is " + surveyedToMetres);
+            throw new IllegalArgumentException("surveyedToMetres must be above today's sea but is " + surveyedToMetres);
         }
         if (!(strayAgeMaximumKa > 0 && strayAgeMaximumKa < Double.POSITIVE_INFINITY)) {
             throw new IllegalArgumentException("strayAgeMaximumKa must be above 0 but is " + strayAgeMaximumKa);
@@ -50,6 +53,28 @@ public record FlightModel(
             throw new IllegalArgumentException(
                     "wrongDateProbability must be 0 or more and below 1 but is " + wrongDateProbability);
         }
+    }
+
+    /** A model without limiting points. */
+    public FlightModel(
+            List<FlightLevel> levels,
+            List<FlightRow> rows,
+            double surveyedFromMetres,
+            double surveyedToMetres,
+            double strayAgeMaximumKa,
+            double wrongDateProbability,
+            boolean todaysSeaIsFloor,
+            boolean countsAllStray) {
+        this(
+                levels,
+                rows,
+                surveyedFromMetres,
+                surveyedToMetres,
+                strayAgeMaximumKa,
+                wrongDateProbability,
+                todaysSeaIsFloor,
+                countsAllStray,
+                List.of());
     }
 
     /** The model of a table taken as it stands: dates are right, today's sea is no floor, all levels may be strays. */
@@ -65,27 +90,39 @@ public record FlightModel(
 
     /** The same model with these levels. */
     public FlightModel withLevels(List<FlightLevel> otherLevels) {
-        return new FlightModel(
-                otherLevels,
-                rows,
-                surveyedFromMetres,
-                surveyedToMetres,
-                strayAgeMaximumKa,
-                wrongDateProbability,
-                todaysSeaIsFloor,
-                countsAllStray);
+        return with(otherLevels, rows, limitingPoints);
     }
 
     /** The same model with these rows. */
     public FlightModel withRows(List<FlightRow> otherRows) {
+        return with(levels, otherRows, limitingPoints);
+    }
+
+    /** The same model with these limiting points. */
+    public FlightModel withLimitingPoints(List<LimitingPoint> otherPoints) {
+        return with(levels, rows, otherPoints);
+    }
+
+    private FlightModel with(
+            List<FlightLevel> otherLevels, List<FlightRow> otherRows, List<LimitingPoint> otherPoints) {
         return new FlightModel(
-                levels,
+                otherLevels,
                 otherRows,
                 surveyedFromMetres,
                 surveyedToMetres,
                 strayAgeMaximumKa,
                 wrongDateProbability,
                 todaysSeaIsFloor,
-                countsAllStray);
+                countsAllStray,
+                otherPoints);
+    }
+
+    /** Natural logarithm of the factor of all limiting points. */
+    double logLimiting(UpliftHistory history, SharedNumbers shared) {
+        double sum = 0;
+        for (LimitingPoint point : limitingPoints) {
+            sum += point.logFactor(history, shared);
+        }
+        return sum;
     }
 }

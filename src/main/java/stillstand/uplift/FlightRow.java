@@ -37,8 +37,9 @@ public record FlightRow(
             throw new IllegalArgumentException("levelMetres must be finite but is " + levelMetres);
         }
         if (!(Math.abs(levelAgeCovarianceMetresKa) <= ageSigmaKa * levelSigmaMetres)) {
-            throw new IllegalArgumentException("levelAgeCovarianceMetresKa must be at most the product of the two sigmas but is "
-                    + levelAgeCovarianceMetresKa);
+            throw new IllegalArgumentException(
+                    "levelAgeCovarianceMetresKa must be at most the product of the two sigmas but is "
+                            + levelAgeCovarianceMetresKa);
         }
         if (!(existence > 0 && existence <= 1)) {
             throw new IllegalArgumentException("existence must be above 0 and at most 1 but is " + existence);
@@ -53,9 +54,8 @@ public record FlightRow(
 
     /** The same row with the half of the curve's age variance that is its own added to its age, where it takes the curve's age. */
     public FlightRow withOwnHalfOfCurveAge(double curveAgeSigmaKa) {
-        double sigmaKa = takesCurveAge
-                ? Math.sqrt(ageSigmaKa * ageSigmaKa + curveAgeSigmaKa * curveAgeSigmaKa / 2)
-                : ageSigmaKa;
+        double sigmaKa =
+                takesCurveAge ? Math.sqrt(ageSigmaKa * ageSigmaKa + curveAgeSigmaKa * curveAgeSigmaKa / 2) : ageSigmaKa;
         return withSigmas(sigmaKa, levelSigmaMetres);
     }
 

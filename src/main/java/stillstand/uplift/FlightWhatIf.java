@@ -58,32 +58,33 @@ public final class FlightWhatIf {
     /** The same model with the standard deviations of one kind of error halved; to 0 would make conflicts and mislead. */
     public static FlightModel halved(FlightModel model, ErrorGroup group) {
         return switch (group) {
-            case ELEVATION -> model.withLevels(model.levels().stream()
-                    .map(level -> with(level, halved(level.shorelineMetres()), level.datesKa()))
-                    .toList());
-            case DATES -> model.withLevels(model.levels().stream()
-                    .map(level -> with(
-                            level,
-                            level.shorelineMetres(),
-                            level.datesKa().stream().map(FlightWhatIf::halved).toList()))
-                    .toList());
-            case HIGHSTAND_LEVELS -> model.withRows(model.rows().stream()
-                    .map(row -> row.withSigmas(row.ageSigmaKa(), row.levelSigmaMetres() / 2))
-                    .toList());
-            case HIGHSTAND_AGES -> model.withRows(model.rows().stream()
-                    .map(row -> row.withSigmas(row.ageSigmaKa() / 2, row.levelSigmaMetres()))
-                    .toList());
+            case ELEVATION ->
+                model.withLevels(model.levels().stream()
+                        .map(level -> with(level, halved(level.shorelineMetres()), level.datesKa()))
+                        .toList());
+            case DATES ->
+                model.withLevels(model.levels().stream()
+                        .map(level -> with(
+                                level,
+                                level.shorelineMetres(),
+                                level.datesKa().stream()
+                                        .map(FlightWhatIf::halved)
+                                        .toList()))
+                        .toList());
+            case HIGHSTAND_LEVELS ->
+                model.withRows(model.rows().stream()
+                        .map(row -> row.withSigmas(row.ageSigmaKa(), row.levelSigmaMetres() / 2))
+                        .toList());
+            case HIGHSTAND_AGES ->
+                model.withRows(model.rows().stream()
+                        .map(row -> row.withSigmas(row.ageSigmaKa() / 2, row.levelSigmaMetres()))
+                        .toList());
         };
     }
 
     private static FlightLevel with(FlightLevel level, Uncertain shorelineMetres, List<Uncertain> datesKa) {
         return new FlightLevel(
-                level.name(),
-                shorelineMetres,
-                datesKa,
-                level.strayFactor(),
-                level.allowedRows(),
-                level.mayBeStray());
+                level.name(), shorelineMetres, datesKa, level.strayFactor(), level.allowedRows(), level.mayBeStray());
     }
 
     /** The number drawn in to half its distance from the mean. */

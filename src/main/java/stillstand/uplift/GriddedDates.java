@@ -75,7 +75,13 @@ final class GriddedDates implements DateKernel {
 
     @Override
     public void multiply(
-            double[] values, int from, int to, double firstMeanKa, double stepMeanKa, double varianceKa2, double[] scratch) {
+            double[] values,
+            int from,
+            int to,
+            double firstMeanKa,
+            double stepMeanKa,
+            double varianceKa2,
+            double[] scratch) {
         for (int c = from; c <= to; c++) {
             sums(firstMeanKa + (c - from) * stepMeanKa, varianceKa2, scratch);
             values[c] *= allWrong + scratch[0];

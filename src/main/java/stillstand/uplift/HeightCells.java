@@ -36,7 +36,8 @@ record HeightCells(double lowestMetres, double highestMetres, int count) {
             double low = edgeMetres(c);
             double high = edgeMetres(c + 1);
             double mass = heightMetres instanceof Normal normal
-                    ? NormalTail.between((low - normal.mean()) / normal.sigma(), (high - normal.mean()) / normal.sigma())
+                    ? NormalTail.between(
+                            (low - normal.mean()) / normal.sigma(), (high - normal.mean()) / normal.sigma())
                     : heightMetres.cumulativeProbability(high) - heightMetres.cumulativeProbability(low);
             out[at + c] = Math.max(0, mass) / width;
         }

@@ -1,6 +1,7 @@
 package stillstand.uplift;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -31,8 +32,7 @@ final class JointLevels {
      * @param loweringMetresPerKyr rate at which its surface was lowered
      * @param explanations with probabilities that sum to 1
      */
-    record Entry(
-            String name, List<HeightTerm> height, Uncertain loweringMetresPerKyr, List<SeaAtLevel> explanations) {
+    record Entry(String name, List<HeightTerm> height, Uncertain loweringMetresPerKyr, List<SeaAtLevel> explanations) {
         Entry {
             height = List.copyOf(height);
             explanations = List.copyOf(explanations);
@@ -80,14 +80,14 @@ final class JointLevels {
         List<CurveRead> reads = new ArrayList<>();
         for (Entry entry : entries) {
             Drawn drawn = new Drawn();
-            drawHeight(entry, shared, block, drawn);
+            drawHeight(entry, block, drawn);
             int[] chosen = chosen(entry, block);
             for (int e = 0; e < entry.explanations().size(); e++) {
                 SeaAtLevel sea = entry.explanations().get(e);
                 if (sea instanceof SeaAtLevel.AtHighstand stand) {
                     drawHighstand(stand, shared, chosen, e, drawn);
                 } else if (sea instanceof SeaAtLevel.OnCurve read) {
-                    reads.add(new CurveRead(read, drawn, chosen, e, column(own(entry, "age"), block)));
+                    reads.add(new CurveRead(read, drawn, column(own(entry, "age"), block)));
                 }
             }
             addLowering(entry, block, drawn);
@@ -107,7 +107,7 @@ final class JointLevels {
         return probabilities;
     }
 
-    private void drawHeight(Entry entry, Shared shared, int block, Drawn drawn) {
+    private void drawHeight(Entry entry, int block, Drawn drawn) {
         int number = 0;
         for (HeightTerm term : entry.height()) {
             number++;
@@ -140,7 +140,8 @@ final class JointLevels {
             for (int i = 0; i < N; i++) {
                 double left = probabilities[i];
                 int last = entry.explanations().size() - 1;
-                while (chosen[i] < last && left > entry.explanations().get(chosen[i]).probability()) {
+                while (chosen[i] < last
+                        && left > entry.explanations().get(chosen[i]).probability()) {
                     left -= entry.explanations().get(chosen[i]).probability();
                     chosen[i]++;
                 }
@@ -164,6 +165,7 @@ final class JointLevels {
         double sharedAgeKa = row.takesCurveAgeError() ? stand.shared().sharedAgeSigmaKa() : 0;
         double ownAgeKa = row.ownAgeSigmaKa(stand.shared());
         double allAgeKa = Math.hypot(sharedAgeKa, ownAgeKa);
+        double[] ageDeviates = new double[N];
         for (int i = 0; i < N; i++) {
             if (chosen[i] == index) {
                 drawn.valid[i] = true;
@@ -171,22 +173,32 @@ final class JointLevels {
                         + row.localOffsetSigmaMetres() * local[i]
                         + offsetMetres * offset[i]
                         + factorMetres * factor[i];
-                double deviate = allAgeKa == 0 ? 0 : (sharedAgeKa * curveAge[i] + ownAgeKa * ownAge[i]) / allAgeKa;
-                drawn.ageKa[i] = at(stand.ageKa(), deviate);
+                ageDeviates[i] = allAgeKa == 0 ? 0 : (sharedAgeKa * curveAge[i] + ownAgeKa * ownAge[i]) / allAgeKa;
+            }
+        }
+        toValues(stand.ageKa(), ageDeviates);
+        for (int i = 0; i < N; i++) {
+            if (chosen[i] == index) {
+                drawn.ageKa[i] = ageDeviates[i];
             }
         }
     }
 
-    /** The value of a number at a standard normal deviate: its own marginal, another's dependence. */
-    private static double at(Uncertain number, double deviate) {
+    /** From standard normal deviates to values of a number, in place: its own marginal, another's dependence. */
+    private static void toValues(Uncertain number, double[] column) {
         if (number instanceof Normal normal) {
-            return normal.mean() + normal.sigma() * deviate;
+            for (int i = 0; i < N; i++) {
+                column[i] = normal.mean() + normal.sigma() * column[i];
+            }
+        } else if (number.isExact()) {
+            Arrays.fill(column, number.mean());
+        } else {
+            for (int i = 0; i < N; i++) {
+                double probability = StandardNormal.cumulativeProbability(column[i]);
+                column[i] = Math.min(Math.max(probability, Double.MIN_NORMAL), 1 - 0x1p-53);
+            }
+            number.toQuantiles(column);
         }
-        if (number.isExact()) {
-            return number.mean();
-        }
-        double probability = StandardNormal.cumulativeProbability(deviate);
-        return number.quantile(Math.min(Math.max(probability, Double.MIN_NORMAL), 1 - 0x1p-53));
     }
 
     private void addLowering(Entry entry, int block, Drawn drawn) {
@@ -202,43 +214,50 @@ final class JointLevels {
     }
 
     /** A curve to be read at the drawn ages of one level. */
-    private record CurveRead(SeaAtLevel.OnCurve sea, Drawn drawn, int[] chosen, int index, double[] ages) {}
+    private static final class CurveRead {
+        final SeaAtLevel.OnCurve sea;
+        final Drawn drawn;
+        final double[] agesKa;
+
+        CurveRead(SeaAtLevel.OnCurve sea, Drawn drawn, double[] ageProbabilities) {
+            this.sea = sea;
+            this.drawn = drawn;
+            this.agesKa = ageProbabilities;
+            sea.ageKa().toQuantiles(agesKa);
+        }
+    }
 
     private void readCurves(List<CurveRead> reads, Shared shared, int block) {
         Map<String, List<CurveRead>> byCurve = new LinkedHashMap<>();
         for (CurveRead read : reads) {
-            byCurve.computeIfAbsent(read.sea().curve().id(), id -> new ArrayList<>()).add(read);
+            byCurve.computeIfAbsent(read.sea.curve().id(), id -> new ArrayList<>())
+                    .add(read);
         }
         byCurve.forEach((id, ofCurve) -> readCurve(ofCurve, shared, block));
     }
 
     private void readCurve(List<CurveRead> reads, Shared shared, int block) {
-        SeaLevelCurve curve = reads.get(0).sea().curve();
+        SeaLevelCurve curve = reads.get(0).sea.curve();
         double[] curveAge = shared.deviates("sea level / curve age");
         double[] offset = shared.deviates("sea level / offset");
         CurveErrorPath path = new CurveErrorPath(
                 curve.facts().correlationTimeKa(), streams.stream("curve / " + curve.id() + " / error", block));
-        for (CurveRead read : reads) {
-            read.sea().ageKa().toQuantiles(read.ages());
-        }
         double[] readAt = new double[reads.size()];
         double[] deviates = new double[reads.size()];
         double[] levels = new double[reads.size()];
         for (int i = 0; i < N; i++) {
             for (int r = 0; r < readAt.length; r++) {
                 CurveRead read = reads.get(r);
-                double ageKa = read.ages()[i] + read.sea().curveAgeSigmaKa() * curveAge[i];
-                read.drawn().valid[i] = ageKa >= curve.fromKa() && ageKa <= curve.toKa();
+                double ageKa = read.agesKa[i] + read.sea.curveAgeSigmaKa() * curveAge[i];
+                read.drawn.valid[i] = ageKa >= curve.fromKa() && ageKa <= curve.toKa();
                 readAt[r] = Math.min(Math.max(ageKa, curve.fromKa()), curve.toKa());
             }
             path.drawAt(readAt, deviates);
             curve.readAt(readAt, deviates, levels);
             for (int r = 0; r < readAt.length; r++) {
                 CurveRead read = reads.get(r);
-                if (read.chosen()[i] == read.index()) {
-                    read.drawn().ageKa[i] = read.ages()[i];
-                    read.drawn().seaLevelMetres[i] = levels[r] + read.sea().sharedSigmaMetres() * offset[i];
-                }
+                read.drawn.ageKa[i] = read.agesKa[i];
+                read.drawn.seaLevelMetres[i] = levels[r] + read.sea.sharedSigmaMetres() * offset[i];
             }
         }
     }

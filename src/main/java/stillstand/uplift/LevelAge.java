@@ -34,15 +34,18 @@ public record LevelAge(List<Part> parts) {
 
     /** Mean age, ka. */
     public double meanKa() {
-        return parts.stream().mapToDouble(part -> part.probability * part.meanKa).sum() / total();
+        return parts.stream()
+                        .mapToDouble(part -> part.probability * part.meanKa)
+                        .sum()
+                / total();
     }
 
     /** Standard deviation of the age, ka. */
     public double sigmaKa() {
         double mean = meanKa();
         double square = parts.stream()
-                .mapToDouble(part -> part.probability
-                        * (part.sigmaKa * part.sigmaKa + (part.meanKa - mean) * (part.meanKa - mean)))
+                .mapToDouble(part ->
+                        part.probability * (part.sigmaKa * part.sigmaKa + (part.meanKa - mean) * (part.meanKa - mean)))
                 .sum();
         return Math.sqrt(square / total());
     }

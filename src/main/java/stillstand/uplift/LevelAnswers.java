@@ -22,7 +22,6 @@ import stillstand.uncertainty.Interval;
 import stillstand.uncertainty.Summary;
 import stillstand.uncertainty.Uncertain;
 
-
 /** The answer of each level by itself, with the rates of its corals beside it. */
 public final class LevelAnswers {
     private static final int SCRAMBLES_OF_A_BUDGET = 8;
@@ -118,7 +117,8 @@ public final class LevelAnswers {
                 Optional.of(outcome.rate()),
                 outcome.rateWithPrior(),
                 found.explanations().size() == 1
-                        ? Optional.of(FirstOrderRate.of(height, lowering, found.explanations().get(0)))
+                        ? Optional.of(FirstOrderRate.of(
+                                height, lowering, found.explanations().get(0)))
                         : Optional.empty(),
                 Optional.of(outcome.age()),
                 Optional.of(outcome.relativeSeaLevelMetres()),
@@ -218,11 +218,13 @@ public final class LevelAnswers {
             return new LevelAnswer.SampleAnswer(sample.name(), age, Optional.empty(), whyNoRate);
         }
         List<HeightTerm> height = FormerSeaLevel.ofCoral(
-                site, sample.elevationMetres().orElseThrow(), sample.depthMetres().orElseThrow());
+                site,
+                sample.elevationMetres().orElseThrow(),
+                sample.depthMetres().orElseThrow());
         SeaAtLevel sea = LevelExplanations.onCurve(
                 basis.curve().orElseThrow(), sample.ageKa().orElseThrow(), basis);
-        LevelRates.Outcome outcome = rates.of(
-                where + " / sample " + sample.name(), height, new Exact(0), List.of(sea), prior);
+        LevelRates.Outcome outcome =
+                rates.of(where + " / sample " + sample.name(), height, new Exact(0), List.of(sea), prior);
         return new LevelAnswer.SampleAnswer(sample.name(), age, Optional.of(outcome.rate()), Optional.empty());
     }
 

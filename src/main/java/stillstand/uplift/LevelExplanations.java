@@ -107,7 +107,10 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
             if (weights.get(i) / sum >= LEAST_PROBABILITY) {
                 Highstand row = allowed.get(i);
                 explanations.add(new SeaAtLevel.AtHighstand(
-                        row, shared, Math.min(1, weights.get(i) / kept), dated.get(i).ageKa()));
+                        row,
+                        shared,
+                        Math.min(1, weights.get(i) / kept),
+                        dated.get(i).ageKa()));
             }
         }
         if (allowed.size() > 1) {

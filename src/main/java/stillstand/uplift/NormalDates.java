@@ -40,7 +40,9 @@ final class NormalDates implements DateKernel {
                 precision += 1 / variance;
                 weighted += date.mean() / variance;
                 squares += date.mean() * date.mean() / variance;
-                log += Math.log1p(-wrongProbability) + Math.log(strayAgeMaximumKa) - Math.log(2 * Math.PI * variance) / 2;
+                log += Math.log1p(-wrongProbability)
+                        + Math.log(strayAgeMaximumKa)
+                        - Math.log(2 * Math.PI * variance) / 2;
             }
             double centre = weighted / precision;
             logFactor[kept] = log + Math.log(2 * Math.PI / precision) / 2 - (squares - centre * weighted) / 2;
@@ -53,7 +55,13 @@ final class NormalDates implements DateKernel {
 
     @Override
     public void multiply(
-            double[] values, int from, int to, double firstMeanKa, double stepKa, double varianceKa2, double[] scratch) {
+            double[] values,
+            int from,
+            int to,
+            double firstMeanKa,
+            double stepKa,
+            double varianceKa2,
+            double[] scratch) {
         for (int c = from; c <= to; c++) {
             scratch[c] = allWrong;
         }

@@ -63,6 +63,19 @@ final class PairingSums {
         return out;
     }
 
+    /** Largest standard error of a pairing probability, by the jackknife over the parts that these sums consist of. */
+    double largestError(PairingSums[] parts) {
+        double largest = 0;
+        double[] without = new double[parts.length];
+        for (int k = 0; k < pair.length; k++) {
+            for (int block = 0; block < parts.length; block++) {
+                without[block] = (pair[k] - parts[block].pair[k]) / (weight - parts[block].weight);
+            }
+            largest = Math.max(largest, FlightMonteCarlo.jackknife(without));
+        }
+        return largest;
+    }
+
     /** Age of a level's shoreline where it records a row; meaningful where the pair has some probability. */
     LevelAge.Part agePart(int level, int row, double probability) {
         int k = level * rows + row;

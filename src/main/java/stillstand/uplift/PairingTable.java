@@ -13,7 +13,8 @@ public final class PairingTable {
     private final double[] outside;
     private final double[] absent;
 
-    PairingTable(int levels, int rows, double[] pair, double[] unseen, double[] over, double[] outside, double[] absent) {
+    PairingTable(
+            int levels, int rows, double[] pair, double[] unseen, double[] over, double[] outside, double[] absent) {
         this.levels = levels;
         this.rows = rows;
         this.pair = pair;

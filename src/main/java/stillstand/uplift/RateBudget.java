@@ -20,14 +20,12 @@ final class RateBudget {
     /** Place of each explanation's inputs among the columns of the whole. */
     private final List<int[]> places = new ArrayList<>();
 
-    /** The columns of each group, in the order of the groups. */
-    private final List<List<Integer>> columnsOfGroup = new ArrayList<>();
+    private final Map<InputGroup, List<Integer>> columnsOfGroup = new EnumMap<>(InputGroup.class);
 
     private final int dimensions;
 
     /** As {@link LevelRates#of}. */
-    RateBudget(
-            List<HeightTerm> height, Uncertain loweringMetresPerKyr, List<? extends SeaAtLevel> explanations) {
+    RateBudget(List<HeightTerm> height, Uncertain loweringMetresPerKyr, List<? extends SeaAtLevel> explanations) {
         upToProbability = new double[explanations.size()];
         double below = 0;
         for (int e = 0; e < explanations.size(); e++) {
@@ -45,20 +43,20 @@ final class RateBudget {
             for (int i = 0; i < most; i++) {
                 columns.add(next++);
             }
-            columnsOfGroup.add(columns);
+            columnsOfGroup.put(group, columns);
         }
         for (RateColumns function : functions) {
             int[] place = new int[function.dimensions()];
             for (InputGroup group : InputGroup.values()) {
                 int[] own = function.dimensionsOf(group);
                 for (int i = 0; i < own.length; i++) {
-                    place[own[i]] = columnsOfGroup.get(group.ordinal()).get(i);
+                    place[own[i]] = columnsOf(group).get(i);
                 }
             }
             places.add(place);
         }
         if (explanations.size() > 1) {
-            columnsOfGroup.get(InputGroup.AGE.ordinal()).add(next++);
+            columnsOf(InputGroup.AGE).add(next++);
         }
         dimensions = next;
     }
@@ -72,7 +70,7 @@ final class RateBudget {
     Optional<LevelAnswer.Budget> shares(DrawStreams streams, String key, int scrambles) {
         List<SobolIndices.Group> groups = new ArrayList<>();
         for (InputGroup group : InputGroup.values()) {
-            List<Integer> columns = columnsOfGroup.get(group.ordinal());
+            List<Integer> columns = columnsOf(group);
             if (!columns.isEmpty()) {
                 groups.add(new SobolIndices.Group(group.name(), columns));
             }
@@ -82,6 +80,10 @@ final class RateBudget {
         }
         return SobolIndices.of(this::evaluate, dimensions, groups, streams, key + " / budget", scrambles)
                 .map(RateBudget::named);
+    }
+
+    private List<Integer> columnsOf(InputGroup group) {
+        return columnsOfGroup.getOrDefault(group, List.of());
     }
 
     private void evaluate(double[][] probabilities, double[] out) {

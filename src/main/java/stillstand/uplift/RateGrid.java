@@ -21,8 +21,7 @@ final class RateGrid {
     /** Logarithm of the density, up to a constant, at rates chosen so that no interval that matters is coarse. */
     static NavigableMap<Double, Double> explored(RatePrior prior, DoubleUnaryOperator logLikelihood, int most) {
         TreeMap<Double, Double> log = new TreeMap<>();
-        DoubleUnaryOperator logDensity =
-                rate -> logLikelihood.applyAsDouble(rate) + Math.log(prior.density(rate));
+        DoubleUnaryOperator logDensity = rate -> logLikelihood.applyAsDouble(rate) + Math.log(prior.density(rate));
         double from = asinh(prior.fromMetresPerKyr() / BEND);
         double to = asinh(prior.toMetresPerKyr() / BEND);
         for (int k = 0; k <= SWEEP; k++) {
@@ -59,7 +58,8 @@ final class RateGrid {
         before = log.firstEntry();
         for (Map.Entry<Double, Double> now : log.tailMap(before.getKey(), false).entrySet()) {
             double top = Math.max(before.getValue(), now.getValue());
-            boolean steep = top > highest - OF_INTEREST && !(Math.abs(now.getValue() - before.getValue()) <= jump)
+            boolean steep = top > highest - OF_INTEREST
+                    && !(Math.abs(now.getValue() - before.getValue()) <= jump)
                     && mass(before, now, highest) > total * 1e-5;
             if (steep || mass(before, now, highest) > total * share) {
                 double middle = (before.getKey() + now.getKey()) / 2;

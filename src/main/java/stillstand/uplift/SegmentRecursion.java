@@ -91,7 +91,7 @@ final class SegmentRecursion {
             place(j, history, shared);
         }
         forward();
-        return Math.log(total) + logStrayDensities - shared.expectedStrays()
+        return Math.log(total) + model.logLimiting(history, shared) + logStrayDensities - shared.expectedStrays()
                 + levels * Math.log(shared.expectedStrays());
     }
 

@@ -19,7 +19,8 @@ public record SharedNumbers(
         double expectedStrays) {
     /** @throws IllegalArgumentException if a number is out of the range given for it */
     public SharedNumbers {
-        if (!(Math.abs(offsetMetres) + Math.abs(interstadialMetres) + Math.abs(ageShiftKa) < Double.POSITIVE_INFINITY)) {
+        if (!(Math.abs(offsetMetres) + Math.abs(interstadialMetres) + Math.abs(ageShiftKa)
+                < Double.POSITIVE_INFINITY)) {
             throw new IllegalArgumentException("shared errors must be finite but are " + offsetMetres + ", "
                     + interstadialMetres + ", " + ageShiftKa);
         }

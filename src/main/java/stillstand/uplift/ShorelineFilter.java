@@ -63,8 +63,7 @@ final class ShorelineFilter {
         double logs = 0;
         for (int i = 0; i < levels; i++) {
             FlightLevel level = model.levels().get(i);
-            double strayDensity =
-                    level.strayFactor() / (model.surveyedToMetres() - model.surveyedFromMetres());
+            double strayDensity = level.strayFactor() / (model.surveyedToMetres() - model.surveyedFromMetres());
             placeKernel(i, level, strayDensity);
             logs += Math.log(strayDensity) - level.datesKa().size() * Math.log(model.strayAgeMaximumKa());
             for (int j = 0; j < rows; j++) {
@@ -131,7 +130,7 @@ final class ShorelineFilter {
 
     /**
      * Natural logarithm of the probability density of the flight's heights (1/m each) and dates (1/ka each); minus infinity
-     * where the model cannot have left it.
+     * where the model cannot have left it. Limiting points multiply it.
      */
     double logEvidence(UpliftHistory history, SharedNumbers shared, FilterWorkspace w) {
         start(w);
@@ -152,6 +151,9 @@ final class ShorelineFilter {
             }
         }
         finish(w, shared.expectedStrays());
+        w.logLimiting = model.logLimiting(history, shared);
+        w.logEvidence += w.logLimiting;
+        w.logNothingRecorded += w.logLimiting;
         return w.logEvidence;
     }
 

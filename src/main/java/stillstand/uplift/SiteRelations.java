@@ -48,12 +48,7 @@ public record SiteRelations(
      * @param plan joint draws are no more than a level gets
      */
     public static SiteRelations of(
-            Site site,
-            SeaLevelBasis basis,
-            IndicativeRule rule,
-            DateRules dates,
-            DrawStreams streams,
-            DrawPlan plan) {
+            Site site, SeaLevelBasis basis, IndicativeRule rule, DateRules dates, DrawStreams streams, DrawPlan plan) {
         List<Level> levels = new ArrayList<>();
         List<JointLevels.Entry> entries = new ArrayList<>();
         for (Level level : site.levels()) {
@@ -72,8 +67,7 @@ public record SiteRelations(
         if (entries.size() < 2) {
             return new SiteRelations(List.of(), List.of(), List.of());
         }
-        JointLevels joint =
-                new JointLevels(site.name(), site.coast().orElse(site.name()), entries, streams);
+        JointLevels joint = new JointLevels(site.name(), site.coast().orElse(site.name()), entries, streams);
         List<List<JointLevels.Drawn>> blocks = new ArrayList<>();
         for (int block = 0; block < Math.min(BLOCKS, plan.mostBlocks()); block++) {
             blocks.add(joint.draw(block));
@@ -174,8 +168,7 @@ public record SiteRelations(
             double[][] weights = new double[blocks.size()][DrawStreams.BLOCK_DRAWS];
             for (int b = 0; b < levelsMetres.length; b++) {
                 double[] ages = new double[DrawStreams.BLOCK_DRAWS];
-                streams.probabilities(
-                        site.name() + " / " + entries.get(dated).name() + " / dated age", b, ages);
+                streams.probabilities(site.name() + " / " + entries.get(dated).name() + " / dated age", b, ages);
                 ageKa.toQuantiles(ages);
                 JointLevels.Drawn own = blocks.get(b).get(dated);
                 JointLevels.Drawn uplift = blocks.get(b).get(other);

@@ -59,7 +59,8 @@ public sealed interface UpliftHistory {
         }
 
         /** One change of rate. */
-        public static SteppedRate oneChange(double recentRateMetresPerKyr, double changeKa, double olderRateMetresPerKyr) {
+        public static SteppedRate oneChange(
+                double recentRateMetresPerKyr, double changeKa, double olderRateMetresPerKyr) {
             return new SteppedRate(List.of(changeKa), List.of(recentRateMetresPerKyr, olderRateMetresPerKyr));
         }
 

@@ -256,7 +256,7 @@ class CommandsTest {
         assertEquals("--draws must be 1 or more but is 0\nSee stillstand run --help\n", err());
         assertEquals(2, execute("run", folder.toString(), "--seed", "x"));
         assertEquals("Invalid value for option '--seed': 'x' is not a long\nSee stillstand run --help\n", err());
-        assertEquals(2, execute("rnu", folder.toString()));
+        assertEquals(2, execute("runn", folder.toString()));
         assertTrue(err().contains("Did you mean: stillstand run"), err());
         assertEquals(2, execute());
         assertTrue(err().startsWith("Usage: stillstand"), err());

@@ -17,6 +17,12 @@ class NearestNameTest {
     }
 
     @Test
+    void twoLettersSwappedAreOneChange() {
+        assertEquals(Optional.of("seed"), NearestName.of("sede", List.of("note", "seed")));
+        assertEquals(Optional.of("title"), NearestName.of("titel", List.of("title")));
+    }
+
+    @Test
     void caseDoesNotCountWhateverTheLocale() {
         assertEquals(Optional.of("INDICATOR"), NearestName.of("indicator", KNOWN));
     }

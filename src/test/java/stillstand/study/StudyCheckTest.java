@@ -92,22 +92,30 @@ class StudyCheckTest {
                         "North,T1,10",
                         "levels.csv:2: found 3 cells, expected 4, as many as the header has",
                         "levels.csv:2:4: elevation_1sigma_m: found nothing, expected the spread of elevation_m (0 where it is exact)"),
-                levels(
-                        LEVELS,
-                        "North,T1,10,5,1",
-                        "levels.csv:2: found 5 cells, expected 4, as many as the header has"),
+                levels(LEVELS, "North,T1,10,5,1", "levels.csv:2: found 5 cells, expected 4, as many as the header has"),
                 levels(
                         LEVELS + ",",
                         "North,T1,10,1,what",
                         "levels.csv:2:5: found \"what\" in a column without a name, expected a name above it"),
-                new Case("levels.csv", List.of(LEVELS), List.of("levels.csv:1: found no row below the header, expected one row a level")),
-                new Case("sites.csv", List.of(SITES), List.of("levels.csv:2:1: site: found \"North\", expected a site of sites.csv", "sites.csv:1: found no row below the header, expected one row a site")));
+                new Case(
+                        "levels.csv",
+                        List.of(LEVELS),
+                        List.of("levels.csv:1: found no row below the header, expected one row a level")),
+                new Case(
+                        "sites.csv",
+                        List.of(SITES),
+                        List.of(
+                                "levels.csv:2:1: site: found \"North\", expected a site of sites.csv",
+                                "sites.csv:1: found no row below the header, expected one row a site")));
     }
 
     static List<Case> sitesRows() {
         return List.of(
                 sites(SITES, "North,95,20", "sites.csv:2:2: latitude: found \"95\", expected degrees from -90 to 90"),
-                sites(SITES, "North,5,", "sites.csv:2:3: longitude: found nothing, expected a value, since latitude has one"),
+                sites(
+                        SITES,
+                        "North,5,",
+                        "sites.csv:2:3: longitude: found nothing, expected a value, since latitude has one"),
                 sites(
                         "site,surveyed_from_m,surveyed_to_m",
                         "North,60,5",
@@ -127,7 +135,8 @@ class StudyCheckTest {
                 new Case(
                         "sites.csv",
                         List.of(SITES, "North,5,5", "North,6,6"),
-                        List.of("sites.csv:3:1: site: found \"North\" a second time (first in line 2), expected each site once")));
+                        List.of(
+                                "sites.csv:3:1: site: found \"North\" a second time (first in line 2), expected each site once")));
     }
 
     static List<Case> levelRows() {
@@ -136,51 +145,162 @@ class StudyCheckTest {
                 levels(LEVELS, "North,T1,12d,1", "levels.csv:2:3: elevation_m: found \"12d\", expected a number"),
                 levels(LEVELS, "North,T1,NaN,1", "levels.csv:2:3: elevation_m: found \"NaN\", expected a number"),
                 levels(LEVELS, "North,T1,0x1F,1", "levels.csv:2:3: elevation_m: found \"0x1F\", expected a number"),
-                levels(LEVELS, "North,T1,1e400,1", "levels.csv:2:3: elevation_m: found \"1e400\", expected a number that is finite"),
+                levels(
+                        LEVELS,
+                        "North,T1,1e400,1",
+                        "levels.csv:2:3: elevation_m: found \"1e400\", expected a number that is finite"),
                 levels(LEVELS, "North,T1,,", "levels.csv:2:3: elevation_m: found nothing, expected a height in metres"),
-                levels(LEVELS, "North,T1,12,", "levels.csv:2:4: elevation_1sigma_m: found nothing, expected the spread of elevation_m (0 where it is exact)"),
-                levels(LEVELS, "North,T1,12,-1", "levels.csv:2:4: elevation_1sigma_m: found \"-1\", expected 0 or more"),
+                levels(
+                        LEVELS,
+                        "North,T1,12,",
+                        "levels.csv:2:4: elevation_1sigma_m: found nothing, expected the spread of elevation_m (0 where it is exact)"),
+                levels(
+                        LEVELS,
+                        "North,T1,12,-1",
+                        "levels.csv:2:4: elevation_1sigma_m: found \"-1\", expected 0 or more"),
                 levels(LEVELS, ",T1,12,1", "levels.csv:2:1: site: found nothing, expected the name of a site"),
                 levels(LEVELS, "North,,12,1", "levels.csv:2:2: level: found nothing, expected the name of a level"),
-                levels(LEVELS, "Nort,T1,12,1", "levels.csv:2:1: site: found \"Nort\", expected a site of sites.csv (nearest: \"North\")"),
-                levels(LEVELS + ",highstand", "North,T1,12,1,5f", "levels.csv:2:5: highstand: found \"5f\", expected a highstand of \"spratt-lisiecki-2016\" (nearest: \"5a\")"),
-                levels(LEVELS + ",highstand", "North,T1,12,1,5a|", "levels.csv:2:5: highstand: found \"5a|\", expected stages such as \"5e\", \"5a|5c\" or \"!5e\""),
-                levels(LEVELS + ",highstand", "North,T1,12,1,5e|!5e", "levels.csv:2:5: highstand: found \"5e|!5e\", expected no stage both asked for and forbidden"),
-                levels(LEVELS + ",indicator", "North,T1,12,1,shorline-angle", "levels.csv:2:5: indicator: found \"shorline-angle\", expected the id of an indicator (nearest: \"shoreline-angle\")"),
-                levels(LEVELS + ",indicator", "North,T1,12,1,mangrove", "levels.csv:2:5: indicator: found \"mangrove\", of which no usual values are known, expected reference_water_level_m and indicative_range_m beside it"),
-                levels(LEVELS + ",forms_at", "North,T1,12,1,always", "levels.csv:2:5: forms_at: found \"always\", expected highstand, drowning, any, marine-limiting, terrestrial-limiting or event"),
-                levels(LEVELS + ",certainty", "North,T1,12,1,maybe", "levels.csv:2:5: certainty: found \"maybe\", expected sure or doubtful"),
-                levels(LEVELS + ",order", "North,T1,12,1,1.5", "levels.csv:2:5: order: found \"1.5\", expected a whole number, 1 or more (1 = lowest)"),
-                levels(LEVELS + ",cover_m,cover_up_to_m", "North,T1,12,1,2,3", "levels.csv:2:6: cover_up_to_m: found \"3\" beside cover_m, expected one of the two, never both"),
-                levels(LEVELS + ",cover_m,cover_1sigma_m", "North,T1,12,1,,3", "levels.csv:2:6: cover_1sigma_m: found \"3\" beside a blank cover_m, expected both or neither"),
-                levels(LEVELS + ",lowering_m_per_kyr", "North,T1,12,1,-0.1", "levels.csv:2:5: lowering_m_per_kyr: found \"-0.1\", expected 0 or more"),
-                new Case("levels.csv", List.of(LEVELS, "North,T1,12,1", "North,T1,13,1"), List.of("levels.csv:3:2: level: found \"T1\" a second time at \"North\" (first in line 2), expected each level of a site once")),
-                new Case("levels.csv", List.of(LEVELS + ",order", "North,T1,12,1,1", "North,T2,13,1,1"), List.of("levels.csv:3:5: order: found \"1\", which level \"T1\" has already, expected each place in a flight once")));
+                levels(
+                        LEVELS,
+                        "Nort,T1,12,1",
+                        "levels.csv:2:1: site: found \"Nort\", expected a site of sites.csv (nearest: \"North\")"),
+                levels(
+                        LEVELS + ",highstand",
+                        "North,T1,12,1,5f",
+                        "levels.csv:2:5: highstand: found \"5f\", expected a highstand of \"spratt-lisiecki-2016\" (nearest: \"5a\")"),
+                levels(
+                        LEVELS + ",highstand",
+                        "North,T1,12,1,5a|",
+                        "levels.csv:2:5: highstand: found \"5a|\", expected stages such as \"5e\", \"5a|5c\" or \"!5e\""),
+                levels(
+                        LEVELS + ",highstand",
+                        "North,T1,12,1,5e|!5e",
+                        "levels.csv:2:5: highstand: found \"5e|!5e\", expected no stage both asked for and forbidden"),
+                levels(
+                        LEVELS + ",indicator",
+                        "North,T1,12,1,shorline-angle",
+                        "levels.csv:2:5: indicator: found \"shorline-angle\", expected the id of an indicator (nearest: \"shoreline-angle\")"),
+                levels(
+                        LEVELS + ",indicator",
+                        "North,T1,12,1,mangrove",
+                        "levels.csv:2:5: indicator: found \"mangrove\", of which no usual values are known, expected reference_water_level_m and indicative_range_m beside it"),
+                levels(
+                        LEVELS + ",forms_at",
+                        "North,T1,12,1,always",
+                        "levels.csv:2:5: forms_at: found \"always\", expected highstand, drowning, any, marine-limiting, terrestrial-limiting or event"),
+                levels(
+                        LEVELS + ",certainty",
+                        "North,T1,12,1,maybe",
+                        "levels.csv:2:5: certainty: found \"maybe\", expected sure or doubtful"),
+                levels(
+                        LEVELS + ",order",
+                        "North,T1,12,1,1.5",
+                        "levels.csv:2:5: order: found \"1.5\", expected a whole number, 1 or more (1 = lowest)"),
+                levels(
+                        LEVELS + ",cover_m,cover_up_to_m",
+                        "North,T1,12,1,2,3",
+                        "levels.csv:2:6: cover_up_to_m: found \"3\" beside cover_m, expected one of the two, never both"),
+                levels(
+                        LEVELS + ",cover_m,cover_1sigma_m",
+                        "North,T1,12,1,,3",
+                        "levels.csv:2:6: cover_1sigma_m: found \"3\" beside a blank cover_m, expected both or neither"),
+                levels(
+                        LEVELS + ",lowering_m_per_kyr",
+                        "North,T1,12,1,-0.1",
+                        "levels.csv:2:5: lowering_m_per_kyr: found \"-0.1\", expected 0 or more"),
+                new Case(
+                        "levels.csv",
+                        List.of(LEVELS, "North,T1,12,1", "North,T1,13,1"),
+                        List.of(
+                                "levels.csv:3:2: level: found \"T1\" a second time at \"North\" (first in line 2), expected each level of a site once")),
+                new Case(
+                        "levels.csv",
+                        List.of(LEVELS + ",order", "North,T1,12,1,1", "North,T2,13,1,1"),
+                        List.of(
+                                "levels.csv:3:5: order: found \"1\", which level \"T1\" has already, expected each place in a flight once")));
     }
 
     static List<Case> sampleRows() {
         return List.of(
                 samples(SAMPLES, "North,S1,T1,0,1", "samples.csv:2:4: age_ka: found \"0\", expected an age above 0"),
                 samples(SAMPLES, "North,S1,T1,-5,1", "samples.csv:2:4: age_ka: found \"-5\", expected an age above 0"),
-                samples(SAMPLES, "North,S1,T1,120,", "samples.csv:2:5: age_1sigma_ka: found nothing, expected the spread of age_ka (0 where it is exact)"),
-                samples(SAMPLES, "North,S1,T1,,", "samples.csv:2:4: age_ka: found no age, expected age_ka with its spread, age_min_ka and age_max_ka, age_table, or isotope ratios"),
-                samples(SAMPLES + ",age_min_ka,age_max_ka", "North,S1,T1,120,1,110,130", "samples.csv:2:6: age_min_ka: found \"110\" beside age_ka, expected one of the two, never both"),
-                samples("site,sample,level,age_min_ka,age_max_ka", "North,S1,T1,130,110", "samples.csv:2:5: age_max_ka: found \"110\", expected an age above age_min_ka (130)"),
-                samples("site,sample,level,age_min_ka,age_max_ka", "North,S1,T1,130,", "samples.csv:2:5: age_max_ka: found nothing, expected the other end of the range"),
-                samples("site,sample,level,age_table", "North,S1,T1,wod-1", "samples.csv:2:4: age_table: found \"wod-1\", expected a table in ages/ (nearest: \"wood-1\")"),
-                samples(SAMPLES, "Nort,S1,T1,120,1", "samples.csv:2:1: site: found \"Nort\", expected a site of sites.csv (nearest: \"North\")"),
-                samples(SAMPLES, "North,S1,T2,120,1", "samples.csv:2:3: level: found \"T2\", expected a level of \"North\" in levels.csv (nearest: \"T1\")"),
-                samples(SAMPLES + ",taxon", "North,S1,T1,120,1,acropora-palmatta", "samples.csv:2:6: taxon: found \"acropora-palmatta\", expected the id of a taxon (nearest: \"acropora-palmata\")"),
-                samples(SAMPLES + ",method", "North,S1,T1,120,1,u-serie", "samples.csv:2:6: method: found \"u-serie\", expected the id of a dating method (nearest: \"u-series\")"),
-                samples(SAMPLES + ",depth_habitat", "North,S1,T1,120,1,6-1", "samples.csv:2:6: depth_habitat: found \"6-1\", expected the lesser depth first, such as \"1-6\""),
-                samples(SAMPLES + ",depth_max_m", "North,S1,T1,120,1,5", "samples.csv:2:6: depth_max_m: found \"5\" without a depth of growth, expected a taxon whose depths are known, or depth_habitat, beside it"),
-                samples(SAMPLES + ",depth_habitat,depth_max_m", "North,S1,T1,120,1,10-12,5", "samples.csv:2:7: depth_max_m: found \"5\", where next to none of its kind grow, expected a cap that leaves some of the depths of growth"),
-                samples(SAMPLES + ",growth_position", "North,S1,T1,120,1,maybe", "samples.csv:2:6: growth_position: found \"maybe\", expected yes, no or unknown"),
-                samples(SAMPLES + ",dates", "North,S1,T1,120,1,both", "samples.csv:2:6: dates: found \"both\", expected level, minimum or maximum"),
-                samples(SAMPLES + ",use,reason", "North,S1,T1,120,1,no,", "samples.csv:2:7: reason: found nothing, expected why the sample is not used"),
-                samples(SAMPLES + ",age_zero", "North,S1,T1,120,1,now", "samples.csv:2:6: age_zero: found \"now\", expected bp1950, b2k or a year such as 2015"),
-                samples(SAMPLES + ",constants", "North,S1,T1,120,1,cheng", "samples.csv:2:6: constants: found \"cheng\", expected cheng-2013, cheng-2000 or pre-2000"),
-                new Case("samples.csv", List.of(SAMPLES, "North,S1,T1,120,1", "North,S1,T1,121,1"), List.of("samples.csv:3:2: sample: found \"S1\" a second time at \"North\" (first in line 2), expected each sample of a site once")));
+                samples(
+                        SAMPLES,
+                        "North,S1,T1,120,",
+                        "samples.csv:2:5: age_1sigma_ka: found nothing, expected the spread of age_ka (0 where it is exact)"),
+                samples(
+                        SAMPLES,
+                        "North,S1,T1,,",
+                        "samples.csv:2:4: age_ka: found no age, expected age_ka with its spread, age_min_ka and age_max_ka, age_table, or isotope ratios"),
+                samples(
+                        SAMPLES + ",age_min_ka,age_max_ka",
+                        "North,S1,T1,120,1,110,130",
+                        "samples.csv:2:6: age_min_ka: found \"110\" beside age_ka, expected one of the two, never both"),
+                samples(
+                        "site,sample,level,age_min_ka,age_max_ka",
+                        "North,S1,T1,130,110",
+                        "samples.csv:2:5: age_max_ka: found \"110\", expected an age above age_min_ka (130)"),
+                samples(
+                        "site,sample,level,age_min_ka,age_max_ka",
+                        "North,S1,T1,130,",
+                        "samples.csv:2:5: age_max_ka: found nothing, expected the other end of the range"),
+                samples(
+                        "site,sample,level,age_table",
+                        "North,S1,T1,wod-1",
+                        "samples.csv:2:4: age_table: found \"wod-1\", expected a table in ages/ (nearest: \"wood-1\")"),
+                samples(
+                        SAMPLES,
+                        "Nort,S1,T1,120,1",
+                        "samples.csv:2:1: site: found \"Nort\", expected a site of sites.csv (nearest: \"North\")"),
+                samples(
+                        SAMPLES,
+                        "North,S1,T2,120,1",
+                        "samples.csv:2:3: level: found \"T2\", expected a level of \"North\" in levels.csv (nearest: \"T1\")"),
+                samples(
+                        SAMPLES + ",taxon",
+                        "North,S1,T1,120,1,acropora-palmatta",
+                        "samples.csv:2:6: taxon: found \"acropora-palmatta\", expected the id of a taxon (nearest: \"acropora-palmata\")"),
+                samples(
+                        SAMPLES + ",method",
+                        "North,S1,T1,120,1,u-serie",
+                        "samples.csv:2:6: method: found \"u-serie\", expected the id of a dating method (nearest: \"u-series\")"),
+                samples(
+                        SAMPLES + ",depth_habitat",
+                        "North,S1,T1,120,1,6-1",
+                        "samples.csv:2:6: depth_habitat: found \"6-1\", expected the lesser depth first, such as \"1-6\""),
+                samples(
+                        SAMPLES + ",depth_max_m",
+                        "North,S1,T1,120,1,5",
+                        "samples.csv:2:6: depth_max_m: found \"5\" without a depth of growth, expected a taxon whose depths are known, or depth_habitat, beside it"),
+                samples(
+                        SAMPLES + ",depth_habitat,depth_max_m",
+                        "North,S1,T1,120,1,10-12,5",
+                        "samples.csv:2:7: depth_max_m: found \"5\", where next to none of its kind grow, expected a cap that leaves some of the depths of growth"),
+                samples(
+                        SAMPLES + ",growth_position",
+                        "North,S1,T1,120,1,maybe",
+                        "samples.csv:2:6: growth_position: found \"maybe\", expected yes, no or unknown"),
+                samples(
+                        SAMPLES + ",dates",
+                        "North,S1,T1,120,1,both",
+                        "samples.csv:2:6: dates: found \"both\", expected level, minimum or maximum"),
+                samples(
+                        SAMPLES + ",use,reason",
+                        "North,S1,T1,120,1,no,",
+                        "samples.csv:2:7: reason: found nothing, expected why the sample is not used"),
+                samples(
+                        SAMPLES + ",age_zero",
+                        "North,S1,T1,120,1,now",
+                        "samples.csv:2:6: age_zero: found \"now\", expected bp1950, b2k or a year such as 2015"),
+                samples(
+                        SAMPLES + ",constants",
+                        "North,S1,T1,120,1,cheng",
+                        "samples.csv:2:6: constants: found \"cheng\", expected cheng-2013, cheng-2000 or pre-2000"),
+                new Case(
+                        "samples.csv",
+                        List.of(SAMPLES, "North,S1,T1,120,1", "North,S1,T1,121,1"),
+                        List.of(
+                                "samples.csv:3:2: sample: found \"S1\" a second time at \"North\" (first in line 2), expected each sample of a site once")));
     }
 
     @ParameterizedTest
@@ -254,7 +374,8 @@ class StudyCheckTest {
                 settings(),
                 Grid.table(
                         "sites.csv",
-                        SITES + ",datum_offset_m,datum_offset_1sigma_m,surveyed_from_m,surveyed_to_m,rate_prior,x_who,note",
+                        SITES
+                                + ",datum_offset_m,datum_offset_1sigma_m,surveyed_from_m,surveyed_to_m,rate_prior,x_who,note",
                         "North,5.5,\u221220,0.5,0.1,0,90,log-uniform 0.01 15,me,a cape"),
                 Grid.table(
                         "levels.csv",
@@ -294,7 +415,9 @@ class StudyCheckTest {
         assertEquals(new Exact(60), second.elevationMetres());
         assertEquals(new StageChoice(List.of(), List.of("5e")), second.highstand());
         assertEquals(FormsAt.ANY, second.formsAt());
-        assertEquals(Optional.of(new Uniform(60 - 0.05, 70 - 0.05)), second.samples().get(0).ageKa());
+        assertEquals(
+                Optional.of(new Uniform(60 - 0.05, 70 - 0.05)),
+                second.samples().get(0).ageKa());
         assertEquals(DatedSample.Role.MINIMUM, second.samples().get(0).dates());
 
         DatedSample loose = north.samples().get(0);
@@ -310,15 +433,18 @@ class StudyCheckTest {
                         settings(),
                         Grid.table("sites.csv", SITES, "North,5,5"),
                         Grid.table("levels.csv", LEVELS + ",cover_m", "North,T1,10,0,2"),
-                        Optional.of(Grid.table(
-                                "samples.csv", SAMPLES + ",use,reason", "North,S1,T1,120,1,no,reworked"))))
+                        Optional.of(
+                                Grid.table("samples.csv", SAMPLES + ",use,reason", "North,S1,T1,120,1,no,reworked"))))
                 .value()
                 .orElseThrow();
         List<Assumption> ledger = study.ledger();
         for (Assumption line : List.of(
                 new Assumption("elevation_m is exact", "spread 0", "the study", "North / T1"),
                 new Assumption(
-                        "cover_m has no spread column and is taken as exact", "spread 0", "Stillstand's default", "all"),
+                        "cover_m has no spread column and is taken as exact",
+                        "spread 0",
+                        "Stillstand's default",
+                        "all"),
                 new Assumption("datum_offset_m is blank", "0 m, exact", "Stillstand's default", "North"),
                 new Assumption(
                         "no indicator is named",
@@ -335,14 +461,14 @@ class StudyCheckTest {
     void oddInputIsWarnedAboutAndGoesOn() {
         Loaded<Study> loaded = check(input(
                 settings(),
-                Grid.table("sites.csv", "site,surveyed_from_m,surveyed_to_m,coast", "North,2,61,east", "South,,,west", "East,0,102,west"),
                 Grid.table(
-                        "levels.csv",
-                        LEVELS,
-                        "North,T1,10,1",
-                        "North,T2,60,1",
-                        "South,T1,2350,5",
-                        "East,T1,100,0.1"),
+                        "sites.csv",
+                        "site,surveyed_from_m,surveyed_to_m,coast",
+                        "North,2,61,east",
+                        "South,,,west",
+                        "East,0,102,west"),
+                Grid.table(
+                        "levels.csv", LEVELS, "North,T1,10,1", "North,T2,60,1", "South,T1,2350,5", "East,T1,100,0.1"),
                 Optional.of(Grid.table(
                         "samples.csv",
                         SAMPLES + ",dates,elevation_m,elevation_1sigma_m",
@@ -370,7 +496,8 @@ class StudyCheckTest {
                 Grid.table("levels.csv", LEVELS, "North,T1,61400,500"),
                 Optional.empty()));
         assertEquals(
-                List.of("levels.csv:2:3: heights at \"North\" look like millimetres (up to 61400): they are read as metres"),
+                List.of(
+                        "levels.csv:2:3: heights at \"North\" look like millimetres (up to 61400): they are read as metres"),
                 warnings(loaded));
     }
 
@@ -412,6 +539,13 @@ class StudyCheckTest {
                 Grid.table("levels.csv", LEVELS + ",terrace,certainty", "North,T1,10,1,Main,doubtful"),
                 Optional.empty()));
         assertEquals(expected, warnings(loaded));
-        assertTrue(loaded.value().orElseThrow().sites().get(0).site().levels().get(0).doubtful());
+        assertTrue(loaded.value()
+                .orElseThrow()
+                .sites()
+                .get(0)
+                .site()
+                .levels()
+                .get(0)
+                .doubtful());
     }
 }

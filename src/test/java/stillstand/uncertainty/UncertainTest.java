@@ -70,7 +70,7 @@ class UncertainTest {
     @ParameterizedTest
     @MethodSource("all")
     void momentsAreThoseOfTheQuantiles(Uncertain number) {
-        int cells = 1 << 20;
+        int cells = 1 << 17;
         double sum = 0;
         double squares = 0;
         for (int i = 0; i < cells; i++) {
@@ -83,7 +83,7 @@ class UncertainTest {
             squares += weight * distance * distance;
         }
         double scale = Math.max(1e-3, number.standardDeviation());
-        assertEquals(0, sum / scale, 1e-6);
+        assertEquals(0, sum / scale, 1e-5); // a jump between two spikes costs a cell
         assertEquals(number.standardDeviation(), Math.sqrt(squares), 1e-5 * scale);
     }
 

@@ -34,8 +34,16 @@ class BackwardPassTest {
         skewed.set(2, FlightLevel.undated("skewed", new LogNormal(36, 3, 0.6)));
         skewed.set(4, FlightLevel.dated("uniform", new Uniform(120, 128), List.of(new Uniform(200, 230))));
         return Stream.of(
-                new Case("plain", FlightModel.complete(ToyFlights.datedFlight(), ToyFlights.plainRows(), 2, 200), usual, plain),
-                new Case("default", new FlightModel(ToyFlights.datedFlight(), older, -20, 200, 1000, 0.05, true, false), usual, all),
+                new Case(
+                        "plain",
+                        FlightModel.complete(ToyFlights.datedFlight(), ToyFlights.plainRows(), 2, 200),
+                        usual,
+                        plain),
+                new Case(
+                        "default",
+                        new FlightModel(ToyFlights.datedFlight(), older, -20, 200, 1000, 0.05, true, false),
+                        usual,
+                        all),
                 new Case(
                         "sinking",
                         new FlightModel(ToyFlights.datedFlight(), older, -20, 200, 1000, 0.05, true, true),
@@ -48,7 +56,11 @@ class BackwardPassTest {
                         FlightModel.complete(ToyFlights.datedFlight(), ToyFlights.plainRows(), 2, 200),
                         UpliftHistory.SteppedRate.oneChange(0.3, 150, 0.75),
                         plain),
-                new Case("twenty dated levels", FlightModel.complete(twentyDated(), ToyFlights.plainRows(), 2, 700), usual, plain));
+                new Case(
+                        "twenty dated levels",
+                        FlightModel.complete(twentyDated(), ToyFlights.plainRows(), 2, 700),
+                        usual,
+                        plain));
     }
 
     /** Twenty levels, each with eight dates of 0.5 ka: density ratios beyond 1e400. */
@@ -61,7 +73,8 @@ class BackwardPassTest {
                     new Normal(row.levelMetres() + 0.62 * ageKa, 2),
                     java.util.Collections.nCopies(8, new Normal(ageKa, 0.5))));
         }
-        levels.sort(java.util.Comparator.comparingDouble(level -> level.shorelineMetres().mean()));
+        levels.sort(java.util.Comparator.comparingDouble(
+                level -> level.shorelineMetres().mean()));
         return levels;
     }
 

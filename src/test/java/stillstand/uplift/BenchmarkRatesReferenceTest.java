@@ -57,10 +57,8 @@ class BenchmarkRatesReferenceTest {
      * Mean and variance of a quotient of independent normals, by the moments of 1/t to fourth order in sigma_t/t = 0.0488:
      * {@code E[1/t] = (1 + r^2 + 3 r^4)/t}, {@code E[1/t^2] = (1 + 3 r^2 + 15 r^4)/t^2}.
      */
-    private static void assertDraws(
-            List<HeightTerm> height, SeaAtLevel sea, LevelAnswer.FirstOrder firstOrder) {
-        LevelRates.Outcome drawn =
-                TestRates.rate(20, height, TestRates.NO_LOWERING, List.of(sea), CauchyPrior.DEFAULT);
+    private static void assertDraws(List<HeightTerm> height, SeaAtLevel sea, LevelAnswer.FirstOrder firstOrder) {
+        LevelRates.Outcome drawn = TestRates.rate(20, height, TestRates.NO_LOWERING, List.of(sea), CauchyPrior.DEFAULT);
         double r2 = Math.pow(AGE_SIGMA_KA / AGE_KA, 2);
         double rise = firstOrder.rate() * AGE_KA;
         double riseVariance = Math.pow(height.get(0).metres().standardDeviation(), 2) + Math.pow(SEA_SIGMA_METRES, 2);
@@ -68,7 +66,8 @@ class BenchmarkRatesReferenceTest {
         double square = (rise * rise + riseVariance) * (1 + 3 * r2 + 15 * r2 * r2) / (AGE_KA * AGE_KA);
         double sd = Math.sqrt(square - mean * mean);
         double draws = drawn.monteCarlo().draws();
-        // four errors of plain draws, which randomised Sobol' points undercut; the next order of r adds 1e-6 of the rate
+        // four errors of plain draws, which randomised Sobol' points undercut; the next order of r adds 1e-6 of the
+        // rate
         assertEquals(mean, drawn.rate().mean().orElseThrow(), 4 * sd / Math.sqrt(draws) + 2e-6);
         assertEquals(sd, drawn.rate().sd().orElseThrow(), 4 * sd / Math.sqrt(2 * draws) + 1e-4 * sd);
         assertTrue(drawn.rate().mean().orElseThrow() > firstOrder.rate() * (1 + 0.5 * r2));

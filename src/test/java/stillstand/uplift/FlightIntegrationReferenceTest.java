@@ -46,8 +46,15 @@ class FlightIntegrationReferenceTest {
     void pairingsOfTheDatedFlight() {
         PairingTable table = dated.pairings();
         double[][] expected = {
-            {0, 0, 0.9999939}, {1, 2, 0.99981401}, {2, 3, 0.98623959}, {3, 5, 0.98369741}, {4, 6, 0.98302185},
-            {4, 5, 0.0057747856}, {5, 7, 0.99851118}, {6, 8, 0.70951333}, {6, 9, 0.26828227}
+            {0, 0, 0.9999939},
+            {1, 2, 0.99981401},
+            {2, 3, 0.98623959},
+            {3, 5, 0.98369741},
+            {4, 6, 0.98302185},
+            {4, 5, 0.0057747856},
+            {5, 7, 0.99851118},
+            {6, 8, 0.70951333},
+            {6, 9, 0.26828227}
         };
         for (double[] one : expected) {
             assertEquals(one[2], table.probability((int) one[0], (int) one[1]), 0.003, one[0] + " to " + one[1]);

@@ -62,7 +62,9 @@ class FlightWhatIfReferenceTest {
     void halvingKeepsMeanAndHalvesSpreadOfASkewedHeight() {
         LogNormal skewed = new LogNormal(20, 4, 0.5);
         FlightModel model = DATED.withLevels(List.of(FlightLevel.undated("skewed", skewed)));
-        FlightLevel level = FlightWhatIf.halved(model, FlightWhatIf.ErrorGroup.ELEVATION).levels().get(0);
+        FlightLevel level = FlightWhatIf.halved(model, FlightWhatIf.ErrorGroup.ELEVATION)
+                .levels()
+                .get(0);
         assertEquals(skewed.mean(), level.shorelineMetres().mean(), 0.01);
         assertEquals(skewed.standardDeviation() / 2, level.shorelineMetres().standardDeviation(), 0.01);
     }
@@ -70,22 +72,29 @@ class FlightWhatIfReferenceTest {
     @Test
     void mostProbableCorrelationHasThePairsOfTheAnswer() {
         RatePosterior rate = rate(DATED);
-        JointDraws draws =
-                JointDraws.of(DATED, rate, PLAIN, 200, 1000, new DrawStreams(1).stream("joint draws", 0));
+        JointDraws draws = JointDraws.of(DATED, rate, PLAIN, 200, 1000, new DrawStreams(1).stream("joint draws", 0));
         JointDraws.Correlation best = draws.correlations().get(0);
         assertEquals(List.of(0, 2, 3, 5, 6, 7, 8), best.rows());
         // the pin of every level to that correlation has this share of the evidence
         List<FlightLevel> pinned = new java.util.ArrayList<>();
         for (int i = 0; i < 7; i++) {
-            pinned.add(DATED.levels().get(i).onlyRows(Set.of(best.rows().get(i))).neverStray());
+            pinned.add(
+                    DATED.levels().get(i).onlyRows(Set.of(best.rows().get(i))).neverStray());
         }
         double exact = Math.exp(rate(DATED.withLevels(pinned)).logEvidence() - rate.logEvidence());
         assertEquals(exact, best.share(), 0.06); // 4 standard errors of 1000 draws
-        assertEquals(rate.mean(), draws.draws().stream().mapToDouble(FlightDraw::rateMetresPerKyr).average().orElseThrow(), 1e-3);
+        assertEquals(
+                rate.mean(),
+                draws.draws().stream()
+                        .mapToDouble(FlightDraw::rateMetresPerKyr)
+                        .average()
+                        .orElseThrow(),
+                1e-3);
         for (FlightDraw draw : draws.draws()) {
             FlightDraw.Match match = draw.matches().get(0).orElseThrow();
             assertEquals(match.heightMetres(), match.seaLevelMetres() + draw.rateMetresPerKyr() * match.ageKa(), 1e-9);
-            assertTrue(Math.abs(match.seaLevelMetres() - 1) < 8, "Holocene sea level drawn at " + match.seaLevelMetres());
+            assertTrue(
+                    Math.abs(match.seaLevelMetres() - 1) < 8, "Holocene sea level drawn at " + match.seaLevelMetres());
         }
     }
 
@@ -105,7 +114,6 @@ class FlightWhatIfReferenceTest {
     }
 
     private static RatePosterior rate(FlightModel model) {
-        return FlightIntegration.rate(
-                model, PRIOR, PLAIN, new FlightIntegration.Effort(400, 200), RunMonitor.SILENT);
+        return FlightIntegration.rate(model, PRIOR, PLAIN, new FlightIntegration.Effort(400, 200), RunMonitor.SILENT);
     }
 }

@@ -149,7 +149,8 @@ class JointLevelsTest {
                     CauchyPrior.DEFAULT);
             double[] together = rates(blocks, level);
             double sd = alone.rate().sd().orElseThrow();
-            assertEquals(alone.rate().mean().orElseThrow(), mean(together), 5 * sd / Math.sqrt(DRAWS), "level " + level);
+            assertEquals(
+                    alone.rate().mean().orElseThrow(), mean(together), 5 * sd / Math.sqrt(DRAWS), "level " + level);
             assertEquals(sd, Math.sqrt(covariance(together, together)), 0.01 * sd, "level " + level);
         }
     }

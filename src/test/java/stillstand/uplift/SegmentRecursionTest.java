@@ -43,7 +43,9 @@ class SegmentRecursionTest {
     void equalsEnumerationOfPinnedLevels() {
         check(List.of(
                 FlightLevel.undated("1", new Normal(12, 2)),
-                FlightLevel.undated("2", new Normal(52, 2)).onlyRows(Set.of(1, 2)).neverStray(),
+                FlightLevel.undated("2", new Normal(52, 2))
+                        .onlyRows(Set.of(1, 2))
+                        .neverStray(),
                 FlightLevel.undated("3", new Normal(86, 2)).onlyRows(Set.of(3))));
     }
 
@@ -137,7 +139,8 @@ class SegmentRecursionTest {
 
     private static double variance(int j) {
         FlightRow row = ROWS.get(j);
-        return Math.pow(row.levelSigmaMetres(), 2) + Math.pow(0.4 * row.ageSigmaKa(), 2)
+        return Math.pow(row.levelSigmaMetres(), 2)
+                + Math.pow(0.4 * row.ageSigmaKa(), 2)
                 + 0.8 * row.levelAgeCovarianceMetresKa();
     }
 

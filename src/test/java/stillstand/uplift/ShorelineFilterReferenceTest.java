@@ -18,10 +18,7 @@ class ShorelineFilterReferenceTest {
      * probability, log Z at 100, 200, 400 cells.
      */
     @ParameterizedTest(name = "{0}")
-    @CsvSource(
-            delimiter = '|',
-            textBlock =
-                    """
+    @CsvSource(delimiter = '|', textBlock = """
             plain | DATED | - | 2.0 | 200.0 | 0.62 | 0.0 | 0.0 | 0.0 | Infinity | 0.0 | -32.43878073753 | -32.387824575805 | -32.372693990589
             everything on | DATED | agoxd0 | 2.0 | 200.0 | 0.62 | 2.0 | -4.0 | 1.5 | 400.0 | 0.1 | -35.424408336818 | -35.373041171175 | -35.358161355763
             everything on low rate older rows several dates z lo negative | LOW_RATE | agoxd0 | -20.0 | 160.0 | 0.15 | 2.0 | -4.0 | 1.5 | 400.0 | 0.1 | -56.518556445263 | -56.577716335282 | -56.593696605358
@@ -86,12 +83,11 @@ class ShorelineFilterReferenceTest {
     }
 
     private static List<FlightLevel> flight(String name) {
-        List<FlightLevel> levels =
-                switch (name) {
-                    case "LOW_RATE" -> ToyFlights.undatedFlight();
-                    case "UNDATED" -> ToyFlights.undatedSeven();
-                    default -> ToyFlights.datedFlight();
-                };
+        List<FlightLevel> levels = switch (name) {
+            case "LOW_RATE" -> ToyFlights.undatedFlight();
+            case "UNDATED" -> ToyFlights.undatedSeven();
+            default -> ToyFlights.datedFlight();
+        };
         switch (name) {
             case "LOW_RATE" -> ToyFlights.date(levels, 4, 580, 20, 610, 25, 700, 30);
             case "THREE_DATES" -> ToyFlights.date(levels, 5, 231.5, 4.7, 240, 6, 298, 6);

@@ -35,15 +35,11 @@ class SingleSampleReferenceTest {
     private record Expected(double low, double median, double high, double mean, double sd) {}
 
     private static final SeaAtLevel STEEP_LIMB = onCurve(
-            linear(
-                    new double[] {110, 118, 122, 126, 129, 132, 140},
-                    new double[] {-20, 3, 6, 5, -5, -40, -90},
-                    2),
+            linear(new double[] {110, 118, 122, 126, 129, 132, 140}, new double[] {-20, 3, 6, 5, -5, -40, -90}, 2),
             new Normal(125, 3));
 
     private static final SeaAtLevel LATE_INTERSTADIAL = onCurve(
-            linear(new double[] {70, 80, 84, 90, 100}, new double[] {-40, -15, -12, -30, -45}, 5),
-            new Uniform(75, 95));
+            linear(new double[] {70, 80, 84, 90, 100}, new double[] {-40, -15, -12, -30, -45}, 5), new Uniform(75, 95));
 
     private static final List<HeightTerm> CORAL_OF_THE_STEEP_LIMB =
             List.of(survey(new Normal(12, 0.5)), depth(new LogNormal(0, 3, 0.6)));
@@ -55,7 +51,8 @@ class SingleSampleReferenceTest {
     private static void assertRate(Expected expected, Rate rate, LevelAnswer.MonteCarlo monteCarlo) {
         LevelAnswer.Errors errors = monteCarlo.errorInterval95().orElseThrow();
         assertEquals(expected.low(), rate.interval95().low(), 5 * errors.low() + 1e-5);
-        assertEquals(expected.median(), rate.median(), 5 * monteCarlo.errorMedian().orElseThrow() + 1e-5);
+        assertEquals(
+                expected.median(), rate.median(), 5 * monteCarlo.errorMedian().orElseThrow() + 1e-5);
         assertEquals(expected.high(), rate.interval95().high(), 5 * errors.high() + 1e-5);
         assertEquals(expected.mean(), rate.mean().orElseThrow(), 5e-3 * expected.sd());
         assertEquals(expected.sd(), rate.sd().orElseThrow(), 5e-3 * expected.sd());
@@ -206,7 +203,8 @@ class SingleSampleReferenceTest {
         assertEquals(0.084133792, atHighstand.rate().median(), 1e-3);
         assertEquals(0.14794173, atHighstand.rate().interval95().high(), 1.5e-3);
         LevelRates.Outcome atAge = draw(CORAL_OF_THE_STEEP_LIMB, STEEP_LIMB);
-        assertTrue(atAge.rate().interval95().width() > 2 * atHighstand.rate().interval95().width());
+        assertTrue(atAge.rate().interval95().width()
+                > 2 * atHighstand.rate().interval95().width());
     }
 
     /** First-order shares of elevation, age, sea level and depth (Saltelli 2010), of the same implementation. */
@@ -216,8 +214,7 @@ class SingleSampleReferenceTest {
                 List.of(0.19073238, 0.046173437, 0.76293502, 0.0),
                 List.of(survey(new Normal(45, 1))),
                 highstand(new Normal(122, 1.5), new Normal(5, 2)));
-        assertShares(
-                List.of(0.0034917992, 0.86248054, 0.055870462, 0.078074241), CORAL_OF_THE_STEEP_LIMB, STEEP_LIMB);
+        assertShares(List.of(0.0034917992, 0.86248054, 0.055870462, 0.078074241), CORAL_OF_THE_STEEP_LIMB, STEEP_LIMB);
         assertShares(
                 List.of(0.027291331, 0.44790979, 0.30324035, 0.21900421),
                 List.of(survey(new Normal(30, 1.5)), depth(new Triangular(0, 5, 20))),

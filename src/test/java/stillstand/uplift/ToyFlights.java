@@ -8,25 +8,20 @@ import stillstand.uncertainty.Uncertain;
 /** Invented flights and an invented table of round numbers, for tests only: no science in them. */
 final class ToyFlights {
     private static final String[] NAMES = {
-        "H1", "H3", "H5a", "H5c", "H5e", "H7a", "H7c", "H7e", "H8", "H9a", "H9e", "H11", "H13a", "H13c", "H15a", "H15e", "H17",
-        "H19", "H21", "H25"
+        "H1", "H3", "H5a", "H5c", "H5e", "H7a", "H7c", "H7e", "H8", "H9a", "H9e", "H11", "H13a", "H13c", "H15a", "H15e",
+        "H17", "H19", "H21", "H25"
     };
     private static final double[] AGE_KA = {
         6, 52, 81, 100, 122, 198, 214, 238, 285, 310, 330, 405, 485, 525, 578, 615, 695, 785, 860, 955
     };
-    private static final double[] AGE_SIGMA_KA = {
-        0.5, 2, 1.5, 1.5, 2, 3, 3, 3, 4, 4, 4, 5, 6, 6, 7, 7, 8, 8, 9, 10
-    };
+    private static final double[] AGE_SIGMA_KA = {0.5, 2, 1.5, 1.5, 2, 3, 3, 3, 4, 4, 4, 5, 6, 6, 7, 7, 8, 8, 9, 10};
     private static final double[] LEVEL_METRES = {
         1, -60, -22, -20, 5, -15, -10, -8, -35, -20, 2, 8, -8, -18, -6, -4, -12, -8, -14, -8
     };
-    private static final double[] LEVEL_SIGMA_METRES = {
-        1, 10, 6, 6, 2.5, 7, 7, 7, 10, 9, 6, 5, 8, 9, 8, 8, 9, 9, 10, 10
+    private static final double[] LEVEL_SIGMA_METRES = {1, 10, 6, 6, 2.5, 7, 7, 7, 10, 9, 6, 5, 8, 9, 8, 8, 9, 9, 10, 10
     };
     private static final double[] DURATION_KA = {4, 5, 6, 6, 13, 6, 6, 6, 6, 6, 8, 12, 8, 6, 8, 8, 8, 8, 8, 8};
-    private static final double[] EXISTENCE = {
-        1, 0.7, 1, 1, 1, 1, 0.8, 1, 0.6, 0.8, 1, 1, 1, 0.5, 1, 1, 1, 1, 0.7, 1
-    };
+    private static final double[] EXISTENCE = {1, 0.7, 1, 1, 1, 1, 0.8, 1, 0.6, 0.8, 1, 1, 1, 0.5, 1, 1, 1, 1, 0.7, 1};
     private static final String INTERSTADIAL = "01110000110001000000";
     private static final String TAKES_INTERSTADIAL = "01010000110001000000";
     private static final String TAKES_CURVE_AGE = "01010011111011111111";

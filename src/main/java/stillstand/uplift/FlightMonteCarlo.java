@@ -1,0 +1,355 @@
+package stillstand.uplift;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import org.apache.commons.rng.UniformRandomProvider;
+import stillstand.ledger.RunCancelledException;
+import stillstand.ledger.RunMonitor;
+import stillstand.uncertainty.DrawStreams;
+import stillstand.uncertainty.SobolPoints;
+
+/**
+ * A constant rate from a flight, with the shared numbers integrated by importance sampling: randomised Sobol' points in seven
+ * dimensions, the shared numbers from their priors, the rate from a mixture of a pilot's posterior, its square root, and a
+ * part flat in {@code asinh(u / 0.02)}. Each point is a weighted draw; the filter is evaluated at two cell counts and
+ * extrapolated. Independent scrambles give the error (delete-one jackknife).
+ */
+public final class FlightMonteCarlo {
+    private static final double BEND = 0.02;
+    private static final int PILOT_POINTS = 64;
+    private static final int PILOT_CELLS = 48;
+    private static final int PILOT_RATES = 300;
+    private static final double FLAT = 0.2;
+    private static final double ROOT = 0.3;
+    private static final double HOPELESS = 25;
+    private static final double NEGLIGIBLE = 1e-6;
+    private static final double[] PROBABILITIES = {0.025, 0.15865, 0.5, 0.84135, 0.975};
+
+    private final FlightModel model;
+    private final RatePrior prior;
+    private final SharedPriors shared;
+    private final Effort effort;
+    private final DrawStreams streams;
+    private final String key;
+    private final RunMonitor monitor;
+    private final ShorelineFilter coarse;
+    private final ShorelineFilter fine;
+
+    private final double[] rates;
+    private final SharedNumbers[] numbers;
+    private final double[] logCoarse;
+    private final double[] logFine;
+    private final double[] logNothing;
+    private final int[] blocks;
+
+    /**
+     * How much to compute.
+     *
+     * @param scrambles independent scrambles, 4 or more
+     * @param points in each, a power of two
+     * @param cells cells of height in the coarser of the two passes, 10 or more
+     * @param draws joint draws, from which the pairings are averaged, 100 or more
+     */
+    public record Effort(int scrambles, int points, int cells, int draws) {
+        /** 16 scrambles of 512 points, 100 and 200 cells, 1000 draws. */
+        public static final Effort FULL = new Effort(16, 512, 100, 1000);
+
+        /** @throws IllegalArgumentException if a number is too small or {@code points} no power of two */
+        public Effort {
+            if (!(scrambles >= 4 && cells >= 10 && draws >= 100 && Integer.bitCount(points) == 1)) {
+                throw new IllegalArgumentException("effort is too small: " + scrambles + " scrambles, " + points
+                        + " points, " + cells + " cells, " + draws + " draws");
+            }
+        }
+    }
+
+    private FlightMonteCarlo(
+            FlightModel model,
+            RatePrior prior,
+            SharedPriors shared,
+            Effort effort,
+            DrawStreams streams,
+            String key,
+            RunMonitor monitor) {
+        this.model = model;
+        this.prior = prior;
+        this.shared = shared;
+        this.effort = effort;
+        this.streams = streams;
+        this.key = key;
+        this.monitor = monitor;
+        coarse = new ShorelineFilter(model, effort.cells());
+        fine = new ShorelineFilter(model, 2 * effort.cells());
+        int count = effort.scrambles() * effort.points();
+        rates = new double[count];
+        numbers = new SharedNumbers[count];
+        logCoarse = new double[count];
+        logFine = new double[count];
+        logNothing = new double[count];
+        blocks = new int[count];
+    }
+
+    /**
+     * The whole answer.
+     *
+     * @param key names the flight, such as its site: with the streams' seed it fixes every draw
+     * @throws IllegalArgumentException if no rate of the prior can have left the flight
+     * @throws RunCancelledException if the monitor asks to stop
+     */
+    public static SampledFlightAnswer answer(
+            FlightModel model,
+            RatePrior prior,
+            SharedPriors shared,
+            Effort effort,
+            DrawStreams streams,
+            String key,
+            RunMonitor monitor) {
+        return new FlightMonteCarlo(model, prior, shared, effort, streams, key, monitor).answer();
+    }
+
+    private SampledFlightAnswer answer() {
+        RatePosterior proposal = proposal();
+        evaluate(proposal);
+        double highest = Double.NEGATIVE_INFINITY;
+        for (int k = 0; k < rates.length; k++) {
+            highest = Math.max(highest, Math.max(logCoarse[k], logFine[k]));
+        }
+        double[] weights = new double[rates.length];
+        for (int k = 0; k < rates.length; k++) {
+            double one = Math.exp(logCoarse[k] - highest);
+            double two = Math.exp(logFine[k] - highest);
+            weights[k] = Math.max(0, two + (two - one) / 3);
+        }
+        WeightedRates weighted = new WeightedRates(rates, weights, blocks);
+        double logEvidence = highest + Math.log(weighted.total(-1) / rates.length);
+        RatePosterior posterior = weighted.posterior(logEvidence);
+        int[] chosen = weighted.chosen(effort.draws());
+        PairingSums[] parts = new PairingSums[effort.scrambles()];
+        PairingSums coarseSums = sums(coarse, chosen, weights, logCoarse, highest, parts);
+        PairingSums fineSums = sums(fine, chosen, weights, logFine, highest, new PairingSums[effort.scrambles()]);
+        PairingTable table = coarseSums.extrapolatedWith(fineSums);
+        double stray = Math.exp(logAllStray(highest) - Math.log(weighted.total(-1)));
+        double probabilityAllStray = model.countsAllStray() ? Math.min(1, stray) : stray / (1 + stray);
+        FlightAnswer answer =
+                new FlightAnswer(posterior, table, ages(table, fineSums), positions(chosen), probabilityAllStray);
+        return new SampledFlightAnswer(
+                answer, error(weighted, coarseSums, parts), draws(chosen), weighted.effectiveDraws());
+    }
+
+    /** The density that rates are drawn from. */
+    private RatePosterior proposal() {
+        ShorelineFilter pilot = new ShorelineFilter(model, PILOT_CELLS);
+        FilterWorkspace workspace = pilot.workspace(false);
+        SharedNumbers[] some = new SharedNumbers[PILOT_POINTS];
+        drawShared(SobolPoints.scrambled(streams, key + " pilot", SharedPriors.DIMENSIONS + 1, 0), some, 0);
+        double[] logs = new double[PILOT_POINTS];
+        Map<Double, Double> explored = RateGrid.explored(
+                prior,
+                rate -> {
+                    stopIfCancelled();
+                    UpliftHistory history = new UpliftHistory.ConstantRate(rate);
+                    double top = Double.NEGATIVE_INFINITY;
+                    for (int k = 0; k < PILOT_POINTS; k++) {
+                        logs[k] = pilot.logEvidence(history, some[k], workspace);
+                        top = Math.max(top, logs[k]);
+                    }
+                    double sum = 0;
+                    for (int k = 0; k < PILOT_POINTS && top > Double.NEGATIVE_INFINITY; k++) {
+                        sum += Math.exp(logs[k] - top);
+                    }
+                    return top + Math.log(sum / PILOT_POINTS);
+                },
+                PILOT_RATES);
+        double[] at = explored.keySet().stream().mapToDouble(v -> v).toArray();
+        double top = explored.values().stream().mapToDouble(v -> v).max().orElseThrow();
+        double[] whole = explored.values().stream().mapToDouble(v -> Math.exp(v - top)).toArray();
+        double[] root = explored.values().stream().mapToDouble(v -> Math.exp((v - top) / 2)).toArray();
+        double[] flat = new double[at.length];
+        for (int k = 0; k < at.length; k++) {
+            flat[k] = 1 / Math.hypot(at[k], BEND);
+        }
+        double[] mixture = new double[at.length];
+        addNormalised(mixture, at, whole, 1 - FLAT - ROOT);
+        addNormalised(mixture, at, root, ROOT);
+        addNormalised(mixture, at, flat, FLAT);
+        return RatePosterior.ofDensity(at, mixture, 0);
+    }
+
+    private static void addNormalised(double[] mixture, double[] at, double[] density, double share) {
+        double total = Math.exp(RatePosterior.ofDensity(at, density, 0).logEvidence());
+        if (!(total > 0 && total < Double.POSITIVE_INFINITY)) {
+            throw new IllegalArgumentException("no rate of the prior can have left this flight");
+        }
+        for (int k = 0; k < at.length; k++) {
+            mixture[k] += share * density[k] / total;
+        }
+    }
+
+    private void drawShared(SobolPoints points, SharedNumbers[] out, int from) {
+        int count = Math.min(effort.points(), out.length - from);
+        double[][] column = new double[SharedPriors.DIMENSIONS][count];
+        for (int d = 0; d < SharedPriors.DIMENSIONS; d++) {
+            points.column(d + 1, column[d]);
+        }
+        for (int k = 0; k < count; k++) {
+            out[from + k] = shared.at(
+                    column[0][k], column[1][k], column[2][k], column[3][k], column[4][k], column[5][k]);
+        }
+    }
+
+    private void evaluate(RatePosterior proposal) {
+        FilterWorkspace coarseWorkspace = coarse.workspace(false);
+        FilterWorkspace fineWorkspace = fine.workspace(false);
+        double highest = Double.NEGATIVE_INFINITY;
+        for (int block = 0; block < effort.scrambles(); block++) {
+            int from = block * effort.points();
+            SobolPoints points = SobolPoints.scrambled(streams, key + " flight", SharedPriors.DIMENSIONS + 1, block);
+            double[] first = new double[effort.points()];
+            points.column(0, first);
+            drawShared(points, numbers, from);
+            double blockHighest = Double.NEGATIVE_INFINITY;
+            for (int k = from; k < from + effort.points(); k++) {
+                stopIfCancelled();
+                rates[k] = proposal.quantile(first[k - from]);
+                blocks[k] = block;
+                UpliftHistory history = new UpliftHistory.ConstantRate(rates[k]);
+                double log = Math.log(prior.density(rates[k])) - Math.log(proposal.density(rates[k]));
+                logCoarse[k] = log + coarse.logEvidence(history, numbers[k], coarseWorkspace);
+                logNothing[k] = log + coarseWorkspace.logNothingRecorded;
+                blockHighest = Math.max(blockHighest, logCoarse[k]);
+                logFine[k] = logCoarse[k] < highest - HOPELESS
+                        ? logCoarse[k]
+                        : log + fine.logEvidence(history, numbers[k], fineWorkspace);
+            }
+            highest = block == 0 ? blockHighest : highest;
+            monitor.step("flight " + key, (block + 1.0) / effort.scrambles());
+        }
+    }
+
+    private void stopIfCancelled() {
+        if (monitor.isCancelled()) {
+            throw new RunCancelledException();
+        }
+    }
+
+    private PairingSums sums(
+            ShorelineFilter filter,
+            int[] chosen,
+            double[] weights,
+            double[] logs,
+            double highest,
+            PairingSums[] parts) {
+        FilterWorkspace workspace = filter.workspace(true);
+        BackwardPass pass = new BackwardPass(filter, workspace);
+        PairingSums all = new PairingSums(model.levels().size(), model.rows().size());
+        for (int block = 0; block < parts.length; block++) {
+            parts[block] = new PairingSums(model.levels().size(), model.rows().size());
+        }
+        int before = -1;
+        for (int k : chosen) {
+            if (k != before) {
+                stopIfCancelled();
+                pass.run(new UpliftHistory.ConstantRate(rates[k]), numbers[k]);
+                before = k;
+            }
+            double share = Math.exp(logs[k] - highest) / weights[k];
+            all.add(workspace, share);
+            parts[blocks[k]].add(workspace, share);
+        }
+        return all;
+    }
+
+    private List<Optional<LevelAge>> ages(PairingTable table, PairingSums sums) {
+        List<Optional<LevelAge>> ages = new ArrayList<>();
+        for (int i = 0; i < table.levels(); i++) {
+            List<LevelAge.Part> parts = new ArrayList<>();
+            for (int j = 0; j < table.rows(); j++) {
+                if (table.probability(i, j) > NEGLIGIBLE) {
+                    parts.add(sums.agePart(i, j, table.probability(i, j)));
+                }
+            }
+            ages.add(parts.isEmpty() ? Optional.empty() : Optional.of(new LevelAge(parts)));
+        }
+        return ages;
+    }
+
+    private List<RowPosition> positions(int[] chosen) {
+        RowCells cells = new RowCells(coarse.cells.count());
+        List<RowPosition> positions = new ArrayList<>();
+        for (FlightRow row : model.rows()) {
+            double first = 0;
+            double second = 0;
+            for (int k : chosen) {
+                cells.moments(row, new UpliftHistory.ConstantRate(rates[k]), numbers[k]);
+                first += cells.meanMetres / chosen.length;
+                second += (cells.varianceMetres2 + cells.meanMetres * cells.meanMetres) / chosen.length;
+            }
+            positions.add(new RowPosition(first, Math.sqrt(Math.max(0, second - first * first))));
+        }
+        return positions;
+    }
+
+    /** All strays, summed over points as the weights are: no draw of the expected strays is needed. */
+    private double logAllStray(double highest) {
+        double log = shared.strays().logMeanOfAllStray(model.levels().size()) + coarse.logStrayDensities();
+        double sum = 0;
+        for (double nothing : logNothing) {
+            sum += Math.exp(nothing + log - highest);
+        }
+        return Math.log(sum);
+    }
+
+    private JointDraws draws(int[] chosen) {
+        CorrelationSampler sampler = new CorrelationSampler(coarse);
+        UniformRandomProvider random = streams.stream(key + " correlations", 0);
+        List<FlightDraw> draws = new ArrayList<>();
+        int before = -1;
+        for (int k : chosen) {
+            if (k != before) {
+                stopIfCancelled();
+                sampler.prepare(new UpliftHistory.ConstantRate(rates[k]), numbers[k]);
+                before = k;
+            }
+            draws.add(new FlightDraw(rates[k], numbers[k], sampler.draw(random)));
+        }
+        return new JointDraws(draws);
+    }
+
+    private SampledFlightAnswer.NumericalError error(
+            WeightedRates weighted, PairingSums all, PairingSums[] parts) {
+        int count = effort.scrambles();
+        double[][] without = new double[2 + PROBABILITIES.length][count];
+        for (int block = 0; block < count; block++) {
+            without[0][block] = Math.log(weighted.total(block));
+            without[1][block] = weighted.mean(block);
+            double[] quantiles = weighted.quantiles(PROBABILITIES, block);
+            for (int i = 0; i < quantiles.length; i++) {
+                without[2 + i][block] = quantiles[i];
+            }
+        }
+        return new SampledFlightAnswer.NumericalError(
+                jackknife(without[0]),
+                jackknife(without[1]),
+                jackknife(without[4]),
+                jackknife(without[3]),
+                jackknife(without[5]),
+                jackknife(without[2]),
+                jackknife(without[6]),
+                all.largestError(parts));
+    }
+
+    /** Standard error of an estimate from its values without one block each. */
+    static double jackknife(double[] without) {
+        double mean = 0;
+        for (double value : without) {
+            mean += value / without.length;
+        }
+        double squares = 0;
+        for (double value : without) {
+            squares += (value - mean) * (value - mean);
+        }
+        return Math.sqrt(squares * (without.length - 1) / without.length);
+    }
+}
