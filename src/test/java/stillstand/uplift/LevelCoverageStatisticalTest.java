@@ -76,8 +76,9 @@ class LevelCoverageStatisticalTest {
         List<Answered> answered = simulate(world, Rates.NORMAL, NORMAL, 3000, 4);
         Map<Boolean, List<Answered>> fastAndSlow = answered.stream()
                 .collect(Collectors.partitioningBy(each -> each.looksFasterThan(NORMAL.quantile(0.8))));
-        fastAndSlow.values().forEach(part -> Tally.of(part, Answered::underPrior)
-                .assertCalibrated());
+        fastAndSlow
+                .values()
+                .forEach(part -> Tally.of(part, Answered::underPrior).assertCalibrated());
     }
 
     @ParameterizedTest
@@ -96,7 +97,7 @@ class LevelCoverageStatisticalTest {
     }
 
     /** How many of the answers hold the truth, and in which part of them it lies. */
-    private record Tally(int levels, int in68, int in95, int[] parts) {
+    private record Tally(int levels, int in68, int in95, List<Integer> parts) {
         static Tally of(List<Answered> answered, Function<Answered, Place> which) {
             List<Place> places = answered.stream().map(which).toList();
             int[] parts = new int[PARTS];
@@ -107,12 +108,12 @@ class LevelCoverageStatisticalTest {
                     places.size(),
                     (int) places.stream().filter(Place::in68).count(),
                     (int) places.stream().filter(Place::in95).count(),
-                    parts);
+                    Arrays.stream(parts).boxed().toList());
         }
 
         double chiSquare() {
             double expected = (double) levels / PARTS;
-            return Arrays.stream(parts)
+            return parts.stream()
                     .mapToDouble(count -> (count - expected) * (count - expected) / expected)
                     .sum();
         }
@@ -147,7 +148,7 @@ class LevelCoverageStatisticalTest {
                     100.0 * in68 / levels,
                     100.0 * in95 / levels,
                     chiSquare(),
-                    Arrays.toString(parts));
+                    parts);
         }
     }
 
@@ -184,8 +185,7 @@ class LevelCoverageStatisticalTest {
                     .map(each -> {
                         SimulatedLevel level = world.simulate(each, rates);
                         DrawStreams streams = new DrawStreams(each.nextLong());
-                        return answered(
-                                level, prior, new LevelRates(streams, oneBlock, threads, RunMonitor.SILENT));
+                        return answered(level, prior, new LevelRates(streams, oneBlock, threads, RunMonitor.SILENT));
                     })
                     .toList();
         } finally {
@@ -194,8 +194,7 @@ class LevelCoverageStatisticalTest {
     }
 
     private static Answered answered(SimulatedLevel level, RatePrior prior, LevelRates engine) {
-        LevelRates.Outcome outcome =
-                engine.of("level", level.height(), level.lowering(), level.explanations(), prior);
+        LevelRates.Outcome outcome = engine.of("level", level.height(), level.lowering(), level.explanations(), prior);
         return new Answered(
                 outcome.rate().median(),
                 Place.of(level.rateMetresPerKyr(), outcome.rate()),

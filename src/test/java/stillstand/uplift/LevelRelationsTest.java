@@ -141,7 +141,10 @@ class LevelRelationsTest {
 
     private static void assertTimes(double factor, LevelRates.Outcome plain, LevelRates.Outcome other) {
         assertTimes(factor, plain.rate(), other.rate());
-        assertTimes(factor, plain.rateWithPrior().orElseThrow(), other.rateWithPrior().orElseThrow());
+        assertTimes(
+                factor,
+                plain.rateWithPrior().orElseThrow(),
+                other.rateWithPrior().orElseThrow());
         assertEquals(
                 plain.probabilityUplift().orElseThrow(),
                 other.probabilityUplift().orElseThrow(),
@@ -245,9 +248,7 @@ class LevelRelationsTest {
             return new LevelRates(new DrawStreams(7), plan, executor, RunMonitor.SILENT)
                     .of(
                             "young",
-                            List.of(
-                                    TestRates.survey(new Normal(2, 0.3)),
-                                    TestRates.depth(new LogNormal(0, 0.5, 0.8))),
+                            List.of(TestRates.survey(new Normal(2, 0.3)), TestRates.depth(new LogNormal(0, 0.5, 0.8))),
                             TestRates.NO_LOWERING,
                             List.of(TestRates.highstand(
                                     new TruncatedNormal(2, 1, 0.7, Double.POSITIVE_INFINITY), new Normal(0.5, 0.5))),
@@ -316,7 +317,10 @@ class LevelRelationsTest {
                             .shares(new DrawStreams(seed), "case", 2)
                             .orElseThrow()))
                     .toArray();
-            double mean = IntStream.range(0, streams).mapToDouble(k -> sums[k]).average().orElseThrow();
+            double mean = IntStream.range(0, streams)
+                    .mapToDouble(k -> sums[k])
+                    .average()
+                    .orElseThrow();
             double squares = IntStream.range(0, streams)
                     .mapToDouble(k -> (sums[k] - mean) * (sums[k] - mean))
                     .sum();

@@ -52,8 +52,8 @@ class OneLevelHighstandRuleTest {
             new Row("5e", 123, 1.5, 13, 1),
             new Row("7a", 200, 3, 6, 1));
 
-    private static final SeaLevelBasis SPRATT_LISIECKI = new SeaLevelBasis(
-            "spratt-lisiecki-2016", Optional.of(SprattLisiecki.CURVE), table(LAST_INTERGLACIAL));
+    private static final SeaLevelBasis SPRATT_LISIECKI =
+            new SeaLevelBasis("spratt-lisiecki-2016", Optional.of(SprattLisiecki.CURVE), table(LAST_INTERGLACIAL));
 
     /** A highstand of a table, in numbers. */
     private record Row(String stage, double ageKa, double sigmaKa, double durationKa, double exists) {
@@ -142,8 +142,8 @@ class OneLevelHighstandRuleTest {
 
     @Test
     void threeDatesWeighStagesAndSayTheirAges() {
-        List<Row> rows = List.of(
-                new Row("5a", 82, 2, 6, 0.7), new Row("5c", 103, 3, 6, 0.9), new Row("5e", 123, 1, 13, 1));
+        List<Row> rows =
+                List.of(new Row("5a", 82, 2, 6, 0.7), new Row("5c", 103, 3, 6, 0.9), new Row("5e", 123, 1, 13, 1));
         Date[] dates = {new Date(106, 12), new Date(112, 15), new Date(95, 10)};
         List<SeaAtLevel.AtHighstand> explained = explain(rows, dates);
         List<Weighed> expected =
@@ -178,8 +178,7 @@ class OneLevelHighstandRuleTest {
         assertEquals(best.probability(), still.probability(), 0.01);
         assertTrue(still.probability() > 0.98, () -> "5e has " + still.probability());
         assertEquals(best.ageKa().mean(), still.ageKa().mean(), 0.05);
-        assertEquals(
-                best.ageKa().standardDeviation(), still.ageKa().standardDeviation(), 0.05);
+        assertEquals(best.ageKa().standardDeviation(), still.ageKa().standardDeviation(), 0.05);
     }
 
     @Test
@@ -317,9 +316,7 @@ class OneLevelHighstandRuleTest {
         /** Highest less lowest of the rows and of straight lines between them over t +- half. */
         static double variationMetres(double ageKa, double halfKa) {
             List<Double> levels = new ArrayList<>(List.of(levelMetres(ageKa - halfKa), levelMetres(ageKa + halfKa)));
-            ROWS.stream()
-                    .filter(row -> Math.abs(row[0] - ageKa) < halfKa)
-                    .forEach(row -> levels.add(row[1]));
+            ROWS.stream().filter(row -> Math.abs(row[0] - ageKa) < halfKa).forEach(row -> levels.add(row[1]));
             return levels.stream().mapToDouble(x -> x).max().orElseThrow()
                     - levels.stream().mapToDouble(x -> x).min().orElseThrow();
         }
