@@ -126,14 +126,10 @@ public final class LevelRates {
                 if (blocks.size() < plan.leastBlocks()) {
                     continue;
                 }
-                if (plan.fixedDraws().isEmpty()) {
-                    AdaptiveStop.Decision decision =
-                            stop.after(blocks.stream().map(Block::estimates).toList(), spread(rate, question.hasMean));
-                    converged = decision == AdaptiveStop.Decision.CONVERGED;
-                    goOn = decision == AdaptiveStop.Decision.GO_ON;
-                } else {
-                    goOn = blocks.size() < plan.mostBlocks();
-                }
+                AdaptiveStop.Decision decision = stop.after(
+                        blocks.stream().map(Block::estimates).toList(), spread(rate, question.hasMean));
+                converged = decision == AdaptiveStop.Decision.CONVERGED;
+                goOn = decision == AdaptiveStop.Decision.GO_ON;
                 if (!goOn) {
                     break;
                 }
