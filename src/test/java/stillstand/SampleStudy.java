@@ -47,6 +47,7 @@ import stillstand.uplift.LevelAnswer.MonteCarlo;
 import stillstand.uplift.LevelAnswer.SampleAnswer;
 import stillstand.uplift.LevelAnswer.Share;
 import stillstand.uplift.LevelAnswer.StageProbability;
+import stillstand.uplift.LevelResidual;
 import stillstand.uplift.Quantity;
 import stillstand.uplift.Rate;
 
@@ -73,8 +74,10 @@ public final class SampleStudy {
                 seaLevel,
                 List.of(rising(), waiting(), slow()),
                 List.of(new Waiting("North cliff", "T2", "it is tied to no single highstand")),
+                List.of(SampleFlight.result()),
                 List.of(new BetweenLevels("North cliff", "T1", "T4", rate(0.4, 0.05))),
                 List.of(new ImpliedSeaLevel("North cliff", "T4", age(), height(-8, 5), "T1", false)),
+                List.of(new LevelResidual("North cliff", "T4", 60.8, 60.9, 3.5)),
                 List.of(new InputWarning("levels.csv", 3, 4, "elevation_m: 1200 looks like feet")),
                 List.of(new Failure("East bay", "its curve ends at 20 ka")),
                 List.of(
@@ -90,8 +93,10 @@ public final class SampleStudy {
                 all.seaLevel(),
                 all.levels(),
                 all.waiting(),
+                all.flights(),
                 all.intervals(),
                 all.impliedSeaLevel(),
+                all.residuals(),
                 all.warnings(),
                 List.of(),
                 all.ledger());
@@ -124,6 +129,7 @@ public final class SampleStudy {
                                 Optional.empty(),
                                 Optional.empty(),
                                 Optional.of("the curve is too steep at this age to give a rate"))),
+                Optional.empty(),
                 Optional.of(new Agreement(1.25, 3, 0.28)));
     }
 
@@ -142,6 +148,7 @@ public final class SampleStudy {
                 Optional.empty(),
                 Optional.empty(),
                 List.of(),
+                Optional.empty(),
                 Optional.empty());
     }
 
@@ -160,6 +167,7 @@ public final class SampleStudy {
                 Optional.empty(),
                 Optional.of(new MonteCarlo(4096, false, Optional.empty(), Optional.empty())),
                 List.of(),
+                Optional.empty(),
                 Optional.empty());
     }
 

@@ -149,8 +149,7 @@ final class LevelsTable {
     }
 
     private IndicativeMeaning meaning(RowReader row, String where, FormsAt formsAt) {
-        Optional<Indicator> indicator = row.known(
-                        "indicator", library.indicators().ids(), "the id of an indicator")
+        Optional<Indicator> indicator = row.known("indicator", library.indicators()::ids, "the id of an indicator")
                 .flatMap(library.indicators()::find);
         Optional<Uncertain> reference = row.measured(REFERENCE_WATER_LEVEL, where);
         Optional<Double> range = row.length("indicative_range_m");
@@ -171,7 +170,7 @@ final class LevelsTable {
                     usual.get().referenceWaterLevelMetres().mean() + " m, range "
                             + usual.get().rangeMetres() + " m",
                     indicator.map(Indicator::source).orElse(""),
-                    where);
+                    "all");
         }
         IndicativeMeaning start = usual.orElseGet(() -> new IndicativeMeaning(row.text("indicator"), new Exact(0), 0));
         return new IndicativeMeaning(

@@ -8,6 +8,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.function.Supplier;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.InputWarning;
@@ -151,11 +152,12 @@ final class RowReader {
     }
 
     /** A name that must be known, absent where the cell is blank. */
-    Optional<String> known(String header, Collection<String> names, String what) {
+    Optional<String> known(String header, Supplier<? extends Collection<String>> names, String what) {
         return optionalText(header).filter(text -> {
-            boolean isKnown = names.contains(text);
+            Collection<String> known = names.get();
+            boolean isKnown = known.contains(text);
             if (!isKnown) {
-                problem(header, quote(text), what + nearest(text, names));
+                problem(header, quote(text), what + nearest(text, known));
             }
             return isKnown;
         });

@@ -39,7 +39,7 @@ final class SampleAge {
         Optional<Uncertain> value = value(row, where);
         Optional<Uncertain> range = range(row);
         Optional<Uncertain> table =
-                row.known("age_table", tables.keySet(), "a table in ages/").map(tables::get);
+                row.known("age_table", tables::keySet, "a table in ages/").map(tables::get);
         Optional<Uncertain> age = value.isPresent() ? value : range.isPresent() ? range : table;
         if (age.isPresent() && shiftKa.filter(shift -> shift != 0).isPresent()) {
             row.assume(

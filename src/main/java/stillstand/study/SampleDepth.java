@@ -20,9 +20,9 @@ final class SampleDepth {
     /** Depth below mean sea level, down positive; absent where nothing is known of it. */
     static Optional<Uncertain> read(RowReader row, String where, HabitatTable habitats) {
         Optional<DepthHabitat> taxon =
-                row.known("taxon", habitats.ids(), "the id of a taxon").flatMap(habitats::find);
+                row.known("taxon", habitats::ids, "the id of a taxon").flatMap(habitats::find);
         Optional<Uncertain> depth =
-                row.text("depth_habitat").isEmpty() ? usual(row, where, taxon) : stated(row, where, habitats);
+                row.text("depth_habitat").isEmpty() ? usual(row, taxon) : stated(row, where, habitats);
         Optional<Double> cap = row.number("depth_max_m").filter(metres -> {
             if (!(metres > 0)) {
                 row.problem("depth_max_m", quote(row.text("depth_max_m")), "a depth above 0");
@@ -51,14 +51,14 @@ final class SampleDepth {
         return capped;
     }
 
-    private static Optional<Uncertain> usual(RowReader row, String where, Optional<DepthHabitat> taxon) {
+    private static Optional<Uncertain> usual(RowReader row, Optional<DepthHabitat> taxon) {
         Optional<Uncertain> depth = taxon.flatMap(DepthHabitat::depthMetres);
         if (depth.isPresent()) {
             row.assume(
                     "depth of growth of " + row.text("taxon"),
                     "as compiled",
                     taxon.map(DepthHabitat::source).orElse(""),
-                    where);
+                    "all");
         }
         return depth;
     }

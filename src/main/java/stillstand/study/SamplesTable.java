@@ -131,7 +131,7 @@ final class SamplesTable {
 
     private Optional<DatedSample> sample(RowReader row, String site, String level, String name) {
         String where = site + " / " + (level.isEmpty() ? "" : level + " / ") + name;
-        Optional<String> method = row.known("method", library.methods().ids(), "the id of a dating method");
+        Optional<String> method = row.known("method", library.methods()::ids, "the id of a dating method");
         Optional<Uncertain> elevation = row.measured(ELEVATION, where);
         Optional<Uncertain> age = SampleAge.read(row, where, ages);
         boolean hasRatios = ratios(row, where);

@@ -104,7 +104,7 @@ final class SitesTable {
             }
         }
         Optional<Interval> surveyed = surveyed(row);
-        Optional<String> localCurve = row.known("local_curve", library.curveIds(), "the id of a curve");
+        Optional<String> localCurve = row.known("local_curve", library::curveIds, "the id of a curve");
         Optional<RatePrior> prior = row.optionalText("rate_prior").flatMap(RatePriorText::parse);
         if (prior.isEmpty() && !row.text("rate_prior").isEmpty()) {
             row.problem("rate_prior", quote(row.text("rate_prior")), RatePriorText.EXPECTED);

@@ -5,8 +5,10 @@ import java.util.Optional;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputWarning;
 import stillstand.uplift.BetweenLevels;
+import stillstand.uplift.FlightResult;
 import stillstand.uplift.ImpliedSeaLevel;
 import stillstand.uplift.LevelAnswer;
+import stillstand.uplift.LevelResidual;
 
 /**
  * Everything a run found: {@code results.json} is this record, key by key, and figures, report and window work from it
@@ -16,8 +18,10 @@ import stillstand.uplift.LevelAnswer;
  * @param seaLevel curves and highstands in use
  * @param levels every level of the study, in the order of the table
  * @param waiting levels without a rate, and why
+ * @param flights one for each site with a level to be matched
  * @param intervals rates between levels of a site
  * @param impliedSeaLevel sea level that dated levels imply, given the uplift of the others
+ * @param residuals measured against predicted heights of the flights
  * @param warnings what was odd in the input
  * @param failures sites that could not be done
  * @param ledger what it rests on
@@ -27,16 +31,20 @@ public record StudyResult(
         SeaLevelUsed seaLevel,
         List<LevelAnswer> levels,
         List<Waiting> waiting,
+        List<FlightResult> flights,
         List<BetweenLevels> intervals,
         List<ImpliedSeaLevel> impliedSeaLevel,
+        List<LevelResidual> residuals,
         List<InputWarning> warnings,
         List<Failure> failures,
         List<Assumption> ledger) {
     public StudyResult {
         levels = List.copyOf(levels);
         waiting = List.copyOf(waiting);
+        flights = List.copyOf(flights);
         intervals = List.copyOf(intervals);
         impliedSeaLevel = List.copyOf(impliedSeaLevel);
+        residuals = List.copyOf(residuals);
         warnings = List.copyOf(warnings);
         failures = List.copyOf(failures);
         ledger = List.copyOf(ledger);
@@ -45,7 +53,22 @@ public record StudyResult(
     /** The same result with another provenance. */
     public StudyResult with(Provenance other) {
         return new StudyResult(
-                other, seaLevel, levels, waiting, intervals, impliedSeaLevel, warnings, failures, ledger);
+                other,
+                seaLevel,
+                levels,
+                waiting,
+                flights,
+                intervals,
+                impliedSeaLevel,
+                residuals,
+                warnings,
+                failures,
+                ledger);
+    }
+
+    /** The flight of a site; empty where it has none. */
+    public Optional<FlightResult> flight(String site) {
+        return flights.stream().filter(each -> each.site().equals(site)).findFirst();
     }
 
     /** Why a level has no rate; empty where it has one. */

@@ -15,10 +15,12 @@ import stillstand.uncertainty.DrawStreams;
 import stillstand.uplift.BetweenLevels;
 import stillstand.uplift.DateRules;
 import stillstand.uplift.DrawPlan;
+import stillstand.uplift.FlightResult;
 import stillstand.uplift.ImpliedSeaLevel;
 import stillstand.uplift.LevelAnswer;
 import stillstand.uplift.LevelAnswers;
 import stillstand.uplift.LevelRates;
+import stillstand.uplift.LevelResidual;
 import stillstand.uplift.SeaLevelBasis;
 import stillstand.uplift.SiteRelations;
 
@@ -36,6 +38,8 @@ public final class StudyRunner {
 
     private final List<LevelAnswer> levels = new ArrayList<>();
     private final List<StudyResult.Waiting> waiting = new ArrayList<>();
+    private final List<FlightResult> flights = new ArrayList<>();
+    private final List<LevelResidual> residuals = new ArrayList<>();
     private final List<BetweenLevels> intervals = new ArrayList<>();
     private final List<ImpliedSeaLevel> implied = new ArrayList<>();
     private final List<StudyResult.Failure> failures = new ArrayList<>();
@@ -103,11 +107,13 @@ public final class StudyRunner {
                 SeaLevelSummary.of(study),
                 levels,
                 waiting,
+                flights,
                 intervals,
                 implied,
+                residuals,
                 study.warnings(),
                 failures,
-                List.copyOf(ledger));
+                JoinedLedger.of(ledger));
     }
 
     private void runSite(SitePlan plan, int allLevels) {

@@ -97,19 +97,26 @@ final class BackwardPass {
             double under = l == 0 ? w.keptBelow[j] : 0;
             double overSum = 0;
             double unseenSum = 0;
-            for (int c = 0; c < w.cells; c++) {
+            int first = Math.min(row.from, w.cells);
+            for (int c = 0; c < first; c++) {
+                under += w.keptF[kept + c];
+                all += w.keptF[kept + c] * w.g[at + c];
+            }
+            for (int c = first; c <= row.to; c++) {
                 double f = w.keptF[kept + c];
                 double g = w.g[at + c];
+                double below = under + 0.5 * f;
                 all += f * g;
-                if (c >= row.from && c <= row.to) {
-                    double below = under + 0.5 * f;
-                    overSum += (row.stay[c] - (1 - x)) * f * g;
-                    unseenSum += row.unseen[c] * below * g;
-                    w.skipped[c] += below;
-                } else if (c > row.to) {
-                    overSum += x * f * g;
-                }
+                overSum += (row.stay[c] - (1 - x)) * f * g;
+                unseenSum += row.unseen[c] * below * g;
+                w.skipped[c] += below;
                 under += f;
+            }
+            for (int c = Math.max(first, row.to + 1); c < w.cells; c++) {
+                double product = w.keptF[kept + c] * w.g[at + c];
+                under += w.keptF[kept + c];
+                all += product;
+                overSum += x * product;
             }
             double passed = w.keptAbove[j * counts + l] * w.gAbove[l];
             w.over[j] += scale * overSum;

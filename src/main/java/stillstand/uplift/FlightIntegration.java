@@ -16,7 +16,7 @@ import stillstand.ledger.RunMonitor;
  */
 public final class FlightIntegration {
     private static final int MOST_PILOT_RATES = 1200;
-    private static final int LAST_ROUNDS = 3;
+    private static final int LAST_ROUNDS = 14;
     private static final double NEGLIGIBLE_WEIGHT = 1e-7;
 
     private final FlightModel model;
@@ -235,17 +235,18 @@ public final class FlightIntegration {
             for (Map.Entry<Double, Evaluated> entry : evaluated.entrySet()) {
                 double[] logs = entry.getValue().logFine;
                 double weight = weights[at++];
+                double mean = mean(logs, shared);
                 for (int k = 0; k < logs.length && weight > NEGLIGIBLE_WEIGHT; k++) {
                     SharedNodes.Node node = shared.nodes().get(k);
-                    double share = weight * node.weight() * Math.exp(logs[k] - mean(logs, shared));
+                    double share = weight * node.weight() * Math.exp(logs[k] - mean);
                     cells.moments(row, new UpliftHistory.ConstantRate(entry.getKey()), node.shared());
                     all += share;
                     first += share * cells.meanMetres;
                     second += share * (cells.varianceMetres2 + cells.meanMetres * cells.meanMetres);
                 }
             }
-            double mean = first / all;
-            positions.add(new RowPosition(mean, Math.sqrt(Math.max(0, second / all - mean * mean))));
+            double centre = first / all;
+            positions.add(new RowPosition(centre, Math.sqrt(Math.max(0, second / all - centre * centre))));
         }
         return positions;
     }

@@ -164,8 +164,11 @@ public final class FlightMonteCarlo {
                 PILOT_RATES);
         double[] at = explored.keySet().stream().mapToDouble(v -> v).toArray();
         double top = explored.values().stream().mapToDouble(v -> v).max().orElseThrow();
-        double[] whole = explored.values().stream().mapToDouble(v -> Math.exp(v - top)).toArray();
-        double[] root = explored.values().stream().mapToDouble(v -> Math.exp((v - top) / 2)).toArray();
+        double[] whole =
+                explored.values().stream().mapToDouble(v -> Math.exp(v - top)).toArray();
+        double[] root = explored.values().stream()
+                .mapToDouble(v -> Math.exp((v - top) / 2))
+                .toArray();
         double[] flat = new double[at.length];
         for (int k = 0; k < at.length; k++) {
             flat[k] = 1 / Math.hypot(at[k], BEND);
@@ -194,8 +197,8 @@ public final class FlightMonteCarlo {
             points.column(d + 1, column[d]);
         }
         for (int k = 0; k < count; k++) {
-            out[from + k] = shared.at(
-                    column[0][k], column[1][k], column[2][k], column[3][k], column[4][k], column[5][k]);
+            out[from + k] =
+                    shared.at(column[0][k], column[1][k], column[2][k], column[3][k], column[4][k], column[5][k]);
         }
     }
 
@@ -317,8 +320,7 @@ public final class FlightMonteCarlo {
         return new JointDraws(draws);
     }
 
-    private SampledFlightAnswer.NumericalError error(
-            WeightedRates weighted, PairingSums all, PairingSums[] parts) {
+    private SampledFlightAnswer.NumericalError error(WeightedRates weighted, PairingSums all, PairingSums[] parts) {
         int count = effort.scrambles();
         double[][] without = new double[2 + PROBABILITIES.length][count];
         for (int block = 0; block < count; block++) {

@@ -11,7 +11,6 @@ import stillstand.uncertainty.Uncertain;
 final class GriddedDates implements DateKernel {
     private static final int STEPS_PER_SIGMA = 12;
     private static final int MOST_NODES = 8192;
-    private static final double REACH = 8.5;
 
     private final double allWrong;
     private final double firstKa;
@@ -30,8 +29,8 @@ final class GriddedDates implements DateKernel {
             high = Math.max(high, date.quantile(1 - 1e-12));
             narrowest = Math.min(narrowest, date.standardDeviation());
         }
-        low -= REACH * spreadKa;
-        high += REACH * spreadKa;
+        low -= NormalTail.REACH * spreadKa;
+        high += NormalTail.REACH * spreadKa;
         int nodes = (int) Math.min(MOST_NODES, Math.ceil((high - low) / (narrowest / STEPS_PER_SIGMA)) + 1);
         stepKa = (high - low) / (nodes - 1);
         firstKa = low;
@@ -59,7 +58,7 @@ final class GriddedDates implements DateKernel {
         if (spreadKa == 0) {
             return own;
         }
-        int reach = (int) Math.ceil(REACH * spreadKa / stepKa);
+        int reach = (int) Math.ceil(NormalTail.REACH * spreadKa / stepKa);
         double[] weights = new double[reach + 1];
         for (int k = 0; k <= reach; k++) {
             weights[k] = NormalTail.between((k - 0.5) * stepKa / spreadKa, (k + 0.5) * stepKa / spreadKa);
@@ -140,8 +139,8 @@ final class GriddedDates implements DateKernel {
             }
             return;
         }
-        int first = (int) Math.max(0, Math.ceil(place - REACH * sigma / stepKa));
-        int last = (int) Math.min(excess.length - 1, Math.floor(place + REACH * sigma / stepKa));
+        int first = (int) Math.max(0, Math.ceil(place - NormalTail.REACH * sigma / stepKa));
+        int last = (int) Math.min(excess.length - 1, Math.floor(place + NormalTail.REACH * sigma / stepKa));
         double scale = stepKa / (sigma * Math.sqrt(2 * Math.PI));
         double d = firstKa + first * stepKa - meanKa;
         double value = Math.exp(-d * d / (2 * varianceKa2));

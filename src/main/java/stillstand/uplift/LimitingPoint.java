@@ -1,5 +1,7 @@
 package stillstand.uplift;
 
+import stillstand.uncertainty.StandardNormal;
+
 /**
  * Something that formed on a known side of the sea, and so bounds the rate on one side: never a level of its own.
  *
@@ -56,10 +58,12 @@ public record LimitingPoint(
     public double logFactor(UpliftHistory history, SharedNumbers shared) {
         double sea = seaLevelMetres + (takesOffset ? shared.offsetMetres() : 0) + history.upliftMetresSince(ageKa);
         double ageTerm = (history.rateMetresPerKyrAt(ageKa) + slopeMetresPerKa) * ageSigmaKa;
-        double sigma = Math.sqrt(heightSigmaMetres * heightSigmaMetres
-                + seaLevelSigmaMetres * seaLevelSigmaMetres
-                + ageTerm * ageTerm);
+        double sigma = Math.sqrt(
+                heightSigmaMetres * heightSigmaMetres + seaLevelSigmaMetres * seaLevelSigmaMetres + ageTerm * ageTerm);
         double x = (side == Side.BELOW_SEA ? sea - heightMetres : heightMetres - sea) / sigma;
-        return x < -12 ? -x * x / 2 - Math.log(-x * Math.sqrt(2 * Math.PI)) : Math.log(NormalTail.atMost(x));
+        // far out the leading term of the asymptotic series is right to 0.1 %
+        return x < -30
+                ? -x * x / 2 - Math.log(-x * Math.sqrt(2 * Math.PI))
+                : Math.log(StandardNormal.cumulativeProbability(x));
     }
 }

@@ -1,5 +1,7 @@
 package stillstand.uplift;
 
+import java.util.ArrayList;
+import java.util.List;
 import java.util.Optional;
 import stillstand.uncertainty.DensityBins;
 import stillstand.uncertainty.DrawDistribution;
@@ -51,5 +53,37 @@ public record Rate(
                 draws.shortest(Interval.PROBABILITY_95),
                 draws.density(BINS),
                 UNIT);
+    }
+
+    /** The rate of a flight's posterior. */
+    static Rate of(RatePosterior posterior) {
+        return new Rate(
+                posterior.quantile(0.5),
+                Optional.of(posterior.mean()),
+                Optional.of(posterior.standardDeviation()),
+                interval(posterior.equalTails(Interval.PROBABILITY_68)),
+                interval(posterior.equalTails(Interval.PROBABILITY_95)),
+                interval(posterior.shortestInterval(Interval.PROBABILITY_68)),
+                interval(posterior.shortestInterval(Interval.PROBABILITY_95)),
+                Optional.of(density(posterior)),
+                UNIT);
+    }
+
+    private static Interval interval(RateRegion region) {
+        return new Interval(region.fromMetresPerKyr(), region.toMetresPerKyr());
+    }
+
+    /** Relative frequencies in equal bins over the central 99.8 %. */
+    private static DensityBins density(RatePosterior posterior) {
+        double from = posterior.quantile(0.001);
+        double to = posterior.quantile(0.999);
+        List<Double> values = new ArrayList<>();
+        double below = posterior.cumulativeProbability(from);
+        for (int bin = 1; bin <= BINS; bin++) {
+            double upTo = posterior.cumulativeProbability(from + (to - from) * bin / BINS);
+            values.add(Math.max(0, upTo - below));
+            below = upTo;
+        }
+        return new DensityBins(from, to, values);
     }
 }

@@ -97,8 +97,7 @@ public final class RateChangeIntegration {
         FilterWorkspace coarseWorkspace = coarse.workspace(false);
         FilterWorkspace fineWorkspace = fine.workspace(false);
         ToDoubleFunction<UpliftHistory> exact = history -> ShorelineFilter.richardson(
-                coarse.logEvidence(history, shared, coarseWorkspace),
-                fine.logEvidence(history, shared, fineWorkspace));
+                coarse.logEvidence(history, shared, coarseWorkspace), fine.logEvidence(history, shared, fineWorkspace));
         List<Point> last = new ArrayList<>();
         for (int block = 0; block < BLOCKS; block++) {
             last.addAll(draw(" last", block, points, exact));
@@ -212,7 +211,10 @@ public final class RateChangeIntegration {
         for (int k = 0; k < weights.length; k++) {
             for (int d = 0; d < dimensions; d++) {
                 for (int e = 0; e < dimensions; e++) {
-                    covariance[d][e] += weights[k] / total * width * width
+                    covariance[d][e] += weights[k]
+                            / total
+                            * width
+                            * width
                             * (population.get(k).at[d] - mean[d] / total)
                             * (population.get(k).at[e] - mean[e] / total);
                 }

@@ -15,11 +15,9 @@ package stillstand.uplift;
  * </pre>
  *
  * F is the probability below the window plus the cells below plus half of the own cell: the normal distribution function at
- * the cell's middle would break the sum rule. Cells further than {@value #REACH} standard deviations hold nothing.
+ * the cell's middle would break the sum rule. Cells further than 8 standard deviations hold nothing.
  */
 final class RowCells {
-    private static final double REACH = 8.5;
-
     final double[] stay;
     final double[] unseen;
     final double[] match;
@@ -76,8 +74,8 @@ final class RowCells {
     private void fill(HeightCells cells, double recording, double strays) {
         double width = cells.widthMetres();
         double sigma = Math.max(Math.sqrt(varianceMetres2), 1e-6 * width);
-        double first = (meanMetres - REACH * sigma - cells.lowestMetres()) / width;
-        double last = (meanMetres + REACH * sigma - cells.lowestMetres()) / width;
+        double first = (meanMetres - NormalTail.REACH * sigma - cells.lowestMetres()) / width;
+        double last = (meanMetres + NormalTail.REACH * sigma - cells.lowestMetres()) / width;
         underAll = last < 0;
         overAll = first >= cells.count();
         below = underAll ? 1 : 0;

@@ -8,8 +8,7 @@ package stillstand.uplift;
  * @param draws joint draws
  * @param effectiveDraws to how many equally weighted draws the weighted ones amount
  */
-public record SampledFlightAnswer(
-        FlightAnswer answer, NumericalError error, JointDraws draws, double effectiveDraws) {
+public record SampledFlightAnswer(FlightAnswer answer, NumericalError error, JointDraws draws, double effectiveDraws) {
     /**
      * Standard errors of the calculation, not of the rate.
      *

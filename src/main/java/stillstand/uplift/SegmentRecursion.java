@@ -91,7 +91,10 @@ final class SegmentRecursion {
             place(j, history, shared);
         }
         forward();
-        return Math.log(total) + model.logLimiting(history, shared) + logStrayDensities - shared.expectedStrays()
+        return Math.log(total)
+                + model.logLimiting(history, shared)
+                + logStrayDensities
+                - shared.expectedStrays()
                 + levels * Math.log(shared.expectedStrays());
     }
 
@@ -130,8 +133,11 @@ final class SegmentRecursion {
             }
             double d = height[i] - mean;
             double wide = variance + sigma[i] * sigma[i];
-            one[0] = recording * existence[j] / (shared.expectedStrays() * strayDensity[i])
-                    * Math.exp(-d * d / (2 * wide)) / Math.sqrt(2 * Math.PI * wide);
+            one[0] = recording
+                    * existence[j]
+                    / (shared.expectedStrays() * strayDensity[i])
+                    * Math.exp(-d * d / (2 * wide))
+                    / Math.sqrt(2 * Math.PI * wide);
             if (dates[i].length > 0 && one[0] > 0) {
                 double slope = covariance / wide;
                 dates[i][j].multiply(one, 0, 0, ageKa + slope * d, 0, ageVariance - slope * covariance, scratch);

@@ -146,9 +146,7 @@ final class WeightedRates {
             for (int k = 0; k <= PARTS; k++) {
                 double t = (double) k / PARTS;
                 nodes[i * PARTS + k] = k == PARTS ? x[i + 1] : x[i] + t * h;
-                double value = 6 * t * (1 - t) * d
-                        + (1 - t) * (1 - 3 * t) * slope[i]
-                        + t * (3 * t - 2) * slope[i + 1];
+                double value = 6 * t * (1 - t) * d + (1 - t) * (1 - 3 * t) * slope[i] + t * (3 * t - 2) * slope[i + 1];
                 density[i * PARTS + k] = Math.max(0, value);
             }
         }

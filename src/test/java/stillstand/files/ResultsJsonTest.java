@@ -94,8 +94,10 @@ class ResultsJsonTest {
                 new SeaLevelUsed(List.of(), List.of(bad)),
                 good.levels(),
                 good.waiting(),
+                good.flights(),
                 good.intervals(),
                 good.impliedSeaLevel(),
+                good.residuals(),
                 good.warnings(),
                 good.failures(),
                 good.ledger());

@@ -202,7 +202,7 @@ class StudyFolderTest {
         write("study.json", OWN_TABLE);
         assertEquals(
                 List.of(
-                        "study.json:1:74: sea_level.highstands.table: found \"mine\", expected the id of a highstand table"),
+                        "study.json:1:71: sea_level.highstands.table: found \"mine\", expected the id of a highstand table"),
                 problems());
     }
 
@@ -268,7 +268,7 @@ class StudyFolderTest {
     @Test
     void aHundredThousandBadRowsAreAllNamed() throws IOException {
         write("levels.csv", "site,level,elevation_m,elevation_1sigma_m\n" + "North,T1,x,1\n".repeat(100_000));
-        Loaded<Study> loaded = assertTimeoutPreemptively(Duration.ofSeconds(30), this::read);
+        Loaded<Study> loaded = assertTimeoutPreemptively(Duration.ofSeconds(60), this::read);
         // each elevation, and each name after the first
         assertEquals(199_999, loaded.problems().size());
     }

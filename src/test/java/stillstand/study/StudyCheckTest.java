@@ -515,6 +515,16 @@ class StudyCheckTest {
     }
 
     @Test
+    void levelsThatAreNoHighstandMayLieOutsideTheSurvey() {
+        Loaded<Study> loaded = check(input(
+                settings(),
+                Grid.table("sites.csv", "site,surveyed_from_m,surveyed_to_m", "North,2,61"),
+                Grid.table("levels.csv", LEVELS + ",forms_at", "North,T2,-17,1,any", "North,T3,1,0.1,event"),
+                Optional.empty()));
+        assertEquals(List.of(), messages(loaded));
+    }
+
+    @Test
     void anAgeOffTheCurveIsAProblemWhereTheCurveIsReadAtIt() {
         List<String> rows = List.of("North,S1,T1,900,5", "North,S2,T2,900,5");
         Loaded<Study> loaded = check(input(

@@ -38,7 +38,9 @@ class ShorelineFilterStatisticalTest {
                 List.of(
                         FlightLevel.undated("skewed", new LogNormal(2, 4, 0.6)).doubtful(5),
                         FlightLevel.dated("one-sided", new Uniform(30, 40), List.of(new Uniform(110, 130)))),
-                List.of(FlightLevel.undated("pinned", new Normal(35, 3)).onlyRows(Set.of(2)).neverStray()));
+                List.of(FlightLevel.undated("pinned", new Normal(35, 3))
+                        .onlyRows(Set.of(2))
+                        .neverStray()));
     }
 
     @ParameterizedTest
@@ -81,7 +83,9 @@ class ShorelineFilterStatisticalTest {
             double first = normal(random);
             double second = correlation * first + Math.sqrt(1 - correlation * correlation) * normal(random);
             double ageKa = row.ageKa() + (row.takesCurveAge() ? 1.5 : 0) + row.ageSigmaKa() * first;
-            double levelMetres = row.levelMetres() + (row.takesOffset() ? 2 : 0) - (row.takesInterstadial() ? 4 : 0)
+            double levelMetres = row.levelMetres()
+                    + (row.takesOffset() ? 2 : 0)
+                    - (row.takesInterstadial() ? 4 : 0)
                     + row.levelSigmaMetres() * second;
             double stands = levelMetres + RATE * ageKa;
             if (stands <= highest) {
@@ -122,7 +126,10 @@ class ShorelineFilterStatisticalTest {
 
     private static double stray(FlightLevel level) {
         return level.mayBeStray()
-                ? 0.8 / 95 * level.strayFactor() * Math.pow(1e-3, level.datesKa().size())
+                ? 0.8
+                        / 95
+                        * level.strayFactor()
+                        * Math.pow(1e-3, level.datesKa().size())
                 : 0;
     }
 

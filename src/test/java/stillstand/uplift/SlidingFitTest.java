@@ -9,7 +9,9 @@ import stillstand.uncertainty.Normal;
 
 class SlidingFitTest {
     private static final List<FlightRow> ROWS = List.of(
-            FlightRow.plain("5a", 80, 1, -20, 2), FlightRow.plain("5c", 100, 1, -40, 2), FlightRow.plain("5e", 120, 1, 5, 2));
+            FlightRow.plain("5a", 80, 1, -20, 2),
+            FlightRow.plain("5c", 100, 1, -40, 2),
+            FlightRow.plain("5e", 120, 1, 5, 2));
 
     private static List<FlightLevel> levels(double... heights) {
         return ToyFlights.levels(heights);
@@ -33,8 +35,8 @@ class SlidingFitTest {
 
     @Test
     void orderedFitUsesNoRowThatIsOverrun() {
-        List<FlightLevel> levels = List.of(
-                FlightLevel.undated("low", new Normal(11, 2)), FlightLevel.undated("high", new Normal(66, 2)));
+        List<FlightLevel> levels =
+                List.of(FlightLevel.undated("low", new Normal(11, 2)), FlightLevel.undated("high", new Normal(66, 2)));
         assertEquals(List.of(1, 2), SlidingFit.nearest(levels, ROWS, 0.5).rows());
         SlidingFit ordered = SlidingFit.ordered(levels, ROWS, 0.5).orElseThrow();
         assertEquals(List.of(0, 2), ordered.rows());
@@ -46,8 +48,14 @@ class SlidingFitTest {
     void rSquaredSaysNothing() {
         // an undated flight of 0.35 m/kyr: two rates far apart both reach 0.99
         List<FlightLevel> levels = ToyFlights.undatedFlight();
-        assertTrue(SlidingFit.nearest(levels, ToyFlights.plainRows(), 0.35).rSquared().orElseThrow() > 0.99);
-        assertTrue(SlidingFit.nearest(levels, ToyFlights.plainRows(), 0.17).rSquared().orElseThrow() > 0.99);
+        assertTrue(SlidingFit.nearest(levels, ToyFlights.plainRows(), 0.35)
+                        .rSquared()
+                        .orElseThrow()
+                > 0.99);
+        assertTrue(SlidingFit.nearest(levels, ToyFlights.plainRows(), 0.17)
+                        .rSquared()
+                        .orElseThrow()
+                > 0.99);
         assertTrue(SlidingFit.largestRSquared(levels, ToyFlights.plainRows(), 0.05, 2, 400)
                         .flatMap(SlidingFit::rSquared)
                         .orElseThrow()
