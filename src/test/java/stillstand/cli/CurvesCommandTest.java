@@ -140,10 +140,10 @@ class CurvesCommandTest {
     @Test
     void anUnknownCurveIsWrongUsage() {
         assertEquals(2, execute("curves", "show", "waelbroek-2002"));
-        assertEquals(
-                "there is no curve \"waelbroek-2002\"; did you mean \"waelbroeck-2002\"? (a study's own need --in STUDY)\n"
-                        + "See stillstand curves show --help\n",
-                err());
+        assertEquals("""
+                there is no curve "waelbroek-2002"; did you mean "waelbroeck-2002"? (a study's own need --in STUDY)
+                See stillstand curves show --help
+                """, err());
     }
 
     @Test
