@@ -32,7 +32,6 @@ public final class StudyJson {
     /** The name of the file. */
     public static final String NAME = "study.json";
 
-    private static final String OURS = "Stillstand's default";
     private static final StudySchema SCHEMA = StudySchema.load();
 
     private final JsonPlaces json;
@@ -61,7 +60,7 @@ public final class StudyJson {
             StudySettings settings = reader.settings();
             problems.addAll(reader.problems);
             if (problems.isEmpty()) {
-                return Loaded.of(new StatedSettings(file.name(), settings, reader.defaults, json.places()));
+                return Loaded.of(new StatedSettings(file.name(), settings, reader.defaults, json.places(), Set.of()));
             }
         }
         return Loaded.failed(problems.stream().sorted().toList());
@@ -233,7 +232,7 @@ public final class StudyJson {
     }
 
     private <T> T assumed(String keyPath, T value) {
-        defaults.add(new Assumption(keyPath + " is not stated", String.valueOf(value), OURS, "all"));
+        defaults.add(StatedSettings.unstated(keyPath, value));
         return value;
     }
 

@@ -151,7 +151,7 @@ public final class StudyRunner {
                 residuals,
                 study.warnings(),
                 failures,
-                List.copyOf(ledger));
+                JoinedLedger.of(ledger));
     }
 
     private void runSite(SitePlan plan, int allLevels) {

@@ -169,10 +169,14 @@ public final class DrawHistogram {
         if (!(weight > 0)) {
             throw new IllegalStateException("a distribution needs at least one draw of some weight");
         }
-        double offset = sum / weight;
-        double sd = Math.sqrt(Math.max(0, squaredSum / weight - offset * offset));
         double effective = weight * weight / squaredWeight;
-        return new DrawDistribution(curve(), middle + offset, sd, count, effective);
+        return new DrawDistribution(curve(), middle + sum / weight, sd(), count, effective);
+    }
+
+    /** Standard deviation of the draws so far; not a number before the first. */
+    public double sd() {
+        double offset = sum / weight;
+        return Math.sqrt(Math.max(0, squaredSum / weight - offset * offset));
     }
 
     private CumulativeCurve curve() {

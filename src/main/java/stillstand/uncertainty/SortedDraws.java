@@ -1,8 +1,6 @@
 package stillstand.uncertainty;
 
 import java.util.Arrays;
-import java.util.Comparator;
-import java.util.stream.IntStream;
 
 /** A sample small enough to be sorted, weighted or not, and what is read from it without any binning. Immutable. */
 public final class SortedDraws {
@@ -154,14 +152,37 @@ public final class SortedDraws {
             Arrays.sort(values);
             return new double[][] {values, weights};
         }
-        int[] order = IntStream.range(0, values.length)
-                .boxed()
-                .sorted(Comparator.comparingDouble(i -> values[i]))
-                .mapToInt(Integer::intValue)
-                .toArray();
-        return new double[][] {
-            Arrays.stream(order).mapToDouble(i -> values[i]).toArray(),
-            Arrays.stream(order).mapToDouble(i -> weights[i]).toArray()
-        };
+        int[] order = orderOf(values);
+        double[] sortedValues = new double[values.length];
+        double[] sortedWeights = new double[values.length];
+        for (int i = 0; i < order.length; i++) {
+            sortedValues[i] = values[order[i]];
+            sortedWeights[i] = weights[order[i]];
+        }
+        return new double[][] {sortedValues, sortedWeights};
+    }
+
+    /** Places of the values by rising value; a merge sort from the bottom up, since the library sorts no places of doubles. */
+    private static int[] orderOf(double[] values) {
+        int[] order = new int[values.length];
+        Arrays.setAll(order, i -> i);
+        int[] merged = new int[values.length];
+        for (int run = 1; run < values.length; run *= 2) {
+            for (int low = 0; low < values.length; low += 2 * run) {
+                int middle = Math.min(low + run, values.length);
+                int high = Math.min(low + 2 * run, values.length);
+                int left = low;
+                int right = middle;
+                for (int i = low; i < high; i++) {
+                    boolean fromLeft =
+                            left < middle && (right >= high || values[order[left]] <= values[order[right]]);
+                    merged[i] = fromLeft ? order[left++] : order[right++];
+                }
+            }
+            int[] swap = order;
+            order = merged;
+            merged = swap;
+        }
+        return order;
     }
 }

@@ -11,6 +11,8 @@ final class TabulatedPieces {
     private final double[] slope;
     /** Probability up to the start of each piece, and 1 after the last. */
     private final double[] below;
+    /** The piece in which each of equal steps of probability begins: where to look first. */
+    private final int[] guide = new int[1024];
 
     TabulatedPieces(Tabulated number) {
         List<double[]> pieces = inOrder(number);
@@ -30,6 +32,13 @@ final class TabulatedPieces {
         }
         for (int i = 1; i <= n; i++) {
             below[i] /= below[n];
+        }
+        int piece = 0;
+        for (int k = 0; k < guide.length; k++) {
+            while (below[piece + 1] < (double) k / guide.length && piece < n - 1) {
+                piece++;
+            }
+            guide[k] = piece;
         }
     }
 
@@ -72,15 +81,9 @@ final class TabulatedPieces {
 
     /** @param probability strictly between 0 and 1 */
     double quantile(double probability) {
-        int from = 0;
-        int to = start.length - 1;
-        while (from < to) {
-            int middle = (from + to) >>> 1;
-            if (below[middle + 1] >= probability) {
-                to = middle;
-            } else {
-                from = middle + 1;
-            }
+        int from = guide[(int) (probability * guide.length)];
+        while (below[from + 1] < probability) {
+            from++;
         }
         double within = probability - below[from];
         double density = densityAtStart[from];

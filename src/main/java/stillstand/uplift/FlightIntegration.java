@@ -16,7 +16,7 @@ import stillstand.ledger.RunMonitor;
  */
 public final class FlightIntegration {
     private static final int MOST_PILOT_RATES = 1200;
-    private static final int LAST_ROUNDS = 3;
+    private static final int LAST_ROUNDS = 14;
     private static final double NEGLIGIBLE_WEIGHT = 1e-7;
 
     private final FlightModel model;

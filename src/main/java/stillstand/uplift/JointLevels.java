@@ -194,7 +194,7 @@ final class JointLevels {
             Arrays.fill(column, number.mean());
         } else {
             for (int i = 0; i < N; i++) {
-                double probability = StandardNormal.cumulativeProbability(column[i]);
+                double probability = StandardNormal.quickCumulativeProbability(column[i]);
                 column[i] = Math.min(Math.max(probability, Double.MIN_NORMAL), 1 - 0x1p-53);
             }
             number.toQuantiles(column);

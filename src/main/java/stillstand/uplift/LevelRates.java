@@ -38,6 +38,8 @@ public final class LevelRates {
     private static final double NEAR_ZERO = 0.02;
 
     private static final double RARE = 1e-6;
+    /** Enough draws to choose the range of a histogram. */
+    private static final int PILOT_DRAWS = 1 << 11;
 
     private final DrawStreams streams;
     private final DrawPlan plan;
@@ -121,14 +123,13 @@ public final class LevelRates {
             for (Block block : question.draw(blocks.size(), upTo, blocks.get(0))) {
                 blocks.add(block);
                 rate.merge(block.rate());
-                if (plan.fixedDraws().isEmpty()) {
-                    AdaptiveStop.Decision decision =
-                            stop.after(blocks.stream().map(Block::estimates).toList(), spread(rate, question.hasMean));
-                    converged = decision == AdaptiveStop.Decision.CONVERGED;
-                    goOn = decision == AdaptiveStop.Decision.GO_ON;
-                } else {
-                    goOn = blocks.size() < plan.mostBlocks();
+                if (blocks.size() < plan.leastBlocks()) {
+                    continue;
                 }
+                AdaptiveStop.Decision decision = stop.after(
+                        blocks.stream().map(Block::estimates).toList(), spread(rate, question.hasMean));
+                converged = decision == AdaptiveStop.Decision.CONVERGED;
+                goOn = decision == AdaptiveStop.Decision.GO_ON;
                 if (!goOn) {
                     break;
                 }
@@ -138,8 +139,9 @@ public final class LevelRates {
     }
 
     private static double spread(DrawHistogram rate, boolean hasMean) {
-        DrawDistribution draws = rate.distribution();
-        return hasMean ? draws.sd() : draws.equalTailed(Interval.PROBABILITY_68).width() / 2;
+        return hasMean
+                ? rate.sd()
+                : rate.distribution().equalTailed(Interval.PROBABILITY_68).width() / 2;
     }
 
     /** Whether the mean of a quotient by this age exists to any purpose. */
@@ -172,11 +174,11 @@ public final class LevelRates {
 
         /** The first block, which also sets the ranges of all histograms. */
         Block pilot() {
-            int each = DrawStreams.BLOCK_DRAWS;
+            int each = PILOT_DRAWS;
             double[][] all = new double[3][explanations.size() * each];
             double[] weights = new double[explanations.size() * each];
             double[] posteriorWeights = new double[weights.length];
-            RateColumns.Columns drawn = borrow();
+            RateColumns.Columns drawn = new RateColumns.Columns(each);
             double[] ofOne = new double[each];
             for (int e = 0; e < explanations.size(); e++) {
                 evaluate(e, 0, drawn);
@@ -188,7 +190,6 @@ public final class LevelRates {
                 underPrior(drawn, ofOne);
                 System.arraycopy(ofOne, 0, posteriorWeights, e * each, each);
             }
-            columns.add(drawn);
             boolean possible = Arrays.stream(posteriorWeights).anyMatch(w -> w > 0);
             Block shape = new Block(
                     like(all[0], weights),
@@ -284,7 +285,7 @@ public final class LevelRates {
 
         private void evaluate(int explanation, int number, RateColumns.Columns out) {
             RateColumns function = functions.get(explanation);
-            double[][] probabilities = new double[function.dimensions()][DrawStreams.BLOCK_DRAWS];
+            double[][] probabilities = new double[function.dimensions()][out.ageKa.length];
             if (function.dimensions() > 0) {
                 SobolPoints points = SobolPoints.scrambled(
                         streams, key + " / explanation " + explanation, function.dimensions(), number);

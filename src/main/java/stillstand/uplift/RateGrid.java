@@ -12,7 +12,7 @@ import java.util.function.DoubleUnaryOperator;
 final class RateGrid {
     private static final double BEND = 0.02;
     private static final int SWEEP = 240;
-    private static final int ROUNDS = 10;
+    private static final int ROUNDS = 14;
     private static final double PRIOR_SHARE = 0.15;
     private static final double OF_INTEREST = 14;
 

@@ -1,0 +1,203 @@
+package stillstand.uplift;
+
+import static org.junit.jupiter.api.Assertions.assertAll;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.util.Arrays;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Optional;
+import java.util.SplittableRandom;
+import java.util.concurrent.ExecutorService;
+import java.util.concurrent.Executors;
+import java.util.function.Function;
+import java.util.stream.Collectors;
+import java.util.stream.Stream;
+import org.apache.commons.statistics.distribution.BinomialDistribution;
+import org.apache.commons.statistics.distribution.ChiSquaredDistribution;
+import org.junit.jupiter.api.Tag;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.EnumSource;
+import stillstand.ledger.RunMonitor;
+import stillstand.uncertainty.DensityBins;
+import stillstand.uncertainty.DrawStreams;
+import stillstand.uncertainty.Interval;
+import stillstand.uplift.SimulatedLevel.Rates;
+import stillstand.uplift.SimulatedLevel.World;
+
+/**
+ * Do intervals of the answer of a single level hold the truth as often as they say (simulation-based calibration, Talts et
+ * al. 2018, arXiv:1804.06788)? Written from the statistical model alone, by a hand that had not seen the engine.
+ *
+ * <p>Each comparison is false by chance with probability 1e-4: two-sided binomial for how many of the intervals hold the
+ * truth, chi-square for how evenly the truths lie in ten equally probable parts of their answers. Errors of the engine's own
+ * draws (one block of them a level) move coverage by far less than its binomial error.
+ */
+class LevelCoverageStatisticalTest {
+    private static final double FALSE_ALARM = 1e-4;
+    private static final int PARTS = 10;
+    private static final CauchyPrior CAUCHY = CauchyPrior.DEFAULT;
+    private static final NormalPrior NORMAL = new NormalPrior(0.4, 0.3);
+
+    @Test
+    void ratesOfCoralsOnACurveHoldTheTruthAsOftenAsTheySay() {
+        List<Answered> answered = simulate(World.CORAL_ON_CURVE, Rates.CAUCHY, CAUCHY, 2000, 1);
+        Tally.of(answered, Answered::underPrior).assertCalibrated();
+    }
+
+    /**
+     * An answer must hold whatever was measured. Among levels that look fast, a rate drawn from the prior is most often slower
+     * than it looks: the answer under the prior knows, the propagated one does not and may not pass.
+     */
+    @Test
+    void theComparisonTellsAnAnswerUnderAPriorFromOneWithout() {
+        List<Answered> fast = simulate(World.YOUNG_CORAL, Rates.NORMAL, NORMAL, 500, 2).stream()
+                .filter(each -> each.looksFasterThan(NORMAL.quantile(0.8)))
+                .toList();
+        Tally.of(fast, Answered::underPrior).assertCalibrated();
+        Tally propagated = Tally.of(fast, Answered::propagated);
+        assertTrue(propagated.chiSquare() > Tally.chiSquareLimit(), propagated::toString);
+    }
+
+    @ParameterizedTest
+    @EnumSource(World.class)
+    @Tag("slow")
+    void ratesUnderTheDefaultPriorHoldTheTruthAsOftenAsTheySay(World world) {
+        List<Answered> answered = simulate(world, Rates.CAUCHY, CAUCHY, 4000, 3);
+        Tally.of(answered, Answered::underPrior).assertCalibrated();
+    }
+
+    @ParameterizedTest
+    @EnumSource(World.class)
+    @Tag("slow")
+    void ratesUnderANormalPriorHoldTheTruthAsOftenAsTheySayWhateverTheyLookLike(World world) {
+        List<Answered> answered = simulate(world, Rates.NORMAL, NORMAL, 3000, 4);
+        Map<Boolean, List<Answered>> fastAndSlow = answered.stream()
+                .collect(Collectors.partitioningBy(each -> each.looksFasterThan(NORMAL.quantile(0.8))));
+        fastAndSlow
+                .values()
+                .forEach(part -> Tally.of(part, Answered::underPrior).assertCalibrated());
+    }
+
+    @ParameterizedTest
+    @EnumSource(World.class)
+    @Tag("slow")
+    void propagatedRatesHoldTheTruthAsOftenAsTheySayWhereAllChangesOfHeightAreEquallyLikely(World world) {
+        List<Answered> answered = simulate(world, Rates.FLAT_IN_HEIGHT, CAUCHY, 3000, 5);
+        Tally.of(answered, Answered::propagated).assertCalibrated();
+    }
+
+    /** What a level's answers say of its true rate. */
+    private record Answered(double propagatedMedian, Place propagated, Place underPrior) {
+        boolean looksFasterThan(double rateMetresPerKyr) {
+            return propagatedMedian > rateMetresPerKyr;
+        }
+    }
+
+    /** How many of the answers hold the truth, and in which part of them it lies. */
+    private record Tally(int levels, int in68, int in95, List<Integer> parts) {
+        static Tally of(List<Answered> answered, Function<Answered, Place> which) {
+            List<Place> places = answered.stream().map(which).toList();
+            int[] parts = new int[PARTS];
+            for (Place place : places) {
+                parts[Math.min(PARTS - 1, (int) (PARTS * place.probabilityBelow))]++;
+            }
+            return new Tally(
+                    places.size(),
+                    (int) places.stream().filter(Place::in68).count(),
+                    (int) places.stream().filter(Place::in95).count(),
+                    Arrays.stream(parts).boxed().toList());
+        }
+
+        double chiSquare() {
+            double expected = (double) levels / PARTS;
+            return parts.stream()
+                    .mapToDouble(count -> (count - expected) * (count - expected) / expected)
+                    .sum();
+        }
+
+        static double chiSquareLimit() {
+            return ChiSquaredDistribution.of(PARTS - 1).inverseSurvivalProbability(FALSE_ALARM);
+        }
+
+        void assertCalibrated() {
+            assertAll(
+                    toString(),
+                    () -> assertBinomial(in68, Interval.PROBABILITY_68),
+                    () -> assertBinomial(in95, Interval.PROBABILITY_95),
+                    () -> assertTrue(chiSquare() < chiSquareLimit(), "uneven"));
+        }
+
+        private void assertBinomial(int count, double probability) {
+            BinomialDistribution expected = BinomialDistribution.of(levels, probability);
+            int least = expected.inverseCumulativeProbability(FALSE_ALARM / 2);
+            int most = expected.inverseSurvivalProbability(FALSE_ALARM / 2);
+            assertTrue(
+                    count >= least && count <= most,
+                    () -> count + " intervals hold the truth, not " + least + " to " + most);
+        }
+
+        @Override
+        public String toString() {
+            return String.format(
+                    Locale.ROOT,
+                    "of %d levels the 68.27 %% intervals hold %.2f %%, the 95 %% ones %.2f %%; chi-square %.1f of %s",
+                    levels,
+                    100.0 * in68 / levels,
+                    100.0 * in95 / levels,
+                    chiSquare(),
+                    parts);
+        }
+    }
+
+    /** Where the truth lies in an answer. */
+    private record Place(boolean in68, boolean in95, double probabilityBelow) {
+        static Place of(double truth, Rate rate) {
+            return new Place(
+                    rate.interval68().contains(truth),
+                    rate.interval95().contains(truth),
+                    probabilityBelow(truth, rate.density().orElseThrow()));
+        }
+
+        /** Linear in each bin; what lies outside the bins is the same on either side. */
+        private static double probabilityBelow(double truth, DensityBins density) {
+            List<Double> bins = density.values();
+            double place = (truth - density.from()) / (density.to() - density.from()) * bins.size();
+            double all = bins.stream().mapToDouble(Double::doubleValue).sum();
+            double below = (1 - all) / 2;
+            for (int bin = 0; bin < bins.size(); bin++) {
+                below += bins.get(bin) * Math.min(1, Math.max(0, place - bin));
+            }
+            return below;
+        }
+    }
+
+    private static List<Answered> simulate(World world, Rates rates, RatePrior prior, int levels, long seed) {
+        SplittableRandom seeds = new SplittableRandom(seed);
+        List<SplittableRandom> dice =
+                Stream.generate(seeds::split).limit(levels).toList();
+        ExecutorService threads = Executors.newFixedThreadPool(2);
+        try {
+            DrawPlan oneBlock = new DrawPlan(1, 2, Optional.of(DrawStreams.BLOCK_DRAWS));
+            return dice.parallelStream()
+                    .map(each -> {
+                        SimulatedLevel level = world.simulate(each, rates);
+                        DrawStreams streams = new DrawStreams(each.nextLong());
+                        return answered(level, prior, new LevelRates(streams, oneBlock, threads, RunMonitor.SILENT));
+                    })
+                    .toList();
+        } finally {
+            threads.shutdown();
+        }
+    }
+
+    private static Answered answered(SimulatedLevel level, RatePrior prior, LevelRates engine) {
+        LevelRates.Outcome outcome = engine.of("level", level.height(), level.lowering(), level.explanations(), prior);
+        return new Answered(
+                outcome.rate().median(),
+                Place.of(level.rateMetresPerKyr(), outcome.rate()),
+                Place.of(level.rateMetresPerKyr(), outcome.rateWithPrior().orElseThrow()));
+    }
+}
