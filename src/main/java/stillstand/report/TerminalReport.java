@@ -120,6 +120,9 @@ public final class TerminalReport {
             sample.whyNoRate()
                     .ifPresent(reason -> say("  " + level.level() + ", " + sample.sample() + ": " + reason + "."));
         }
+        level.coralsTogether()
+                .ifPresent(rate -> say("  The corals of " + level.level() + " together, each at its own age: "
+                        + Wording.rate(rate) + " m/kyr, 95 % " + Wording.interval95(rate) + "."));
         level.agreement()
                 .filter(agreement -> agreement.p() < DATES_DISAGREE_BELOW)
                 .ifPresent(agreement -> say("  The dates of " + level.level() + " disagree: so large a scatter comes by"

@@ -159,14 +159,10 @@ public final class LevelRates {
                 if (question.estimates.size() < plan.leastBlocks()) {
                     continue;
                 }
-                if (plan.fixedDraws().isEmpty()) {
-                    AdaptiveStop.Decision decision =
-                            stop.after(question.estimates, spread(question.all.rate(), question.hasMean));
-                    converged = decision == AdaptiveStop.Decision.CONVERGED;
-                    goOn = decision == AdaptiveStop.Decision.GO_ON;
-                } else {
-                    goOn = false;
-                }
+                AdaptiveStop.Decision decision =
+                        stop.after(question.estimates, spread(question.all.rate(), question.hasMean));
+                converged = decision == AdaptiveStop.Decision.CONVERGED;
+                goOn = decision == AdaptiveStop.Decision.GO_ON;
                 if (!goOn) {
                     break;
                 }
