@@ -35,6 +35,7 @@ import stillstand.uplift.SiteRelations;
  */
 public final class StudyRunner {
     private final Study study;
+    private final ExecutorService executor;
     private final RunMonitor monitor;
     private final DrawStreams streams;
     private final DrawPlan plan;
@@ -53,6 +54,7 @@ public final class StudyRunner {
 
     private StudyRunner(Study study, ExecutorService executor, RunMonitor monitor) {
         this.study = study;
+        this.executor = executor;
         this.monitor = monitor;
         StudySettings settings = study.settings();
         streams = new DrawStreams(settings.seed());
@@ -172,7 +174,7 @@ public final class StudyRunner {
             throw new RunCancelledException();
         }
         SiteRelations relations =
-                SiteRelations.of(plan.site(), basis, study.settings().indicativeRange(), dates, streams, this.plan);
+                SiteRelations.of(plan.site(), basis, study.settings().indicativeRange(), dates, streams, this.plan, executor);
         intervals.addAll(relations.intervals());
         implied.addAll(relations.impliedSeaLevel());
         ledger.addAll(relations.assumptions());
