@@ -262,7 +262,7 @@ public final class SampleStudy {
                 new StudySettings.RateChoice(CauchyPrior.DEFAULT, StudySettings.Changes.NONE),
                 new StudySettings.Matching(
                         new StudySettings.Recording.Beta(4, 2.5),
-                        new StudySettings.Decay.Marginalised(),
+                        Optional.empty(),
                         Optional.empty(),
                         1000,
                         new StudySettings.Setting(0.05, false),

@@ -200,11 +200,10 @@ public final class StudyJson {
                 .orElse(new Recording.Beta(4, 2.5));
     }
 
-    private static Decay decay(Keys keys) {
-        if (keys.text("recording_decay_ka").filter("none"::equals).isPresent()) {
-            return new Decay.None();
-        }
-        return keys.number("recording_decay_ka").<Decay>map(Decay.Fixed::new).orElse(new Decay.Marginalised());
+    private static Optional<Decay> decay(Keys keys) {
+        Optional<Decay> word = keys.text("recording_decay_ka")
+                .map(text -> text.equals("none") ? new Decay.None() : new Decay.Marginalised());
+        return word.isPresent() ? word : keys.number("recording_decay_ka").map(Decay.Fixed::new);
     }
 
     private static Optional<Strays> strays(Keys keys) {
