@@ -13,8 +13,9 @@ import stillstand.uncertainty.Interval;
 /** What the engine found of a flight, in the form of results: labels for numbers, intervals for densities. */
 final class FlightSummary {
     private static final double LEAST_PROBABILITY = 1e-4;
-    /** A generic older row that almost surely stands outside the surveyed range is not worth a line. */
-    private static final double SURELY_OUTSIDE = 0.999;
+    /** A generic older row with less than this of standing in the surveyed range is not worth a line. */
+    private static final double LEAST_INSIDE = 0.005;
+    private static final int BISECTIONS = 24;
 
     private static final String OLDER = Highstand.OLDER;
     /** Steps of a rate slid by hand, m/kyr. */
@@ -23,11 +24,56 @@ final class FlightSummary {
     private final String site;
     private final FlightModel model;
     private final FlightAnswer answer;
+    private final JointDraws draws;
+    private final List<RowPosition> positions;
 
-    FlightSummary(String site, FlightModel model, FlightAnswer answer) {
+    FlightSummary(String site, FlightModel model, FlightAnswer answer, JointDraws draws) {
         this.site = site;
         this.model = model;
         this.answer = answer;
+        this.draws = draws;
+        positions = model.rows().stream().map(this::position).toList();
+    }
+
+    /**
+     * Median and half the 68 % interval of where a row's shoreline stands: rates far out in the tails of the posterior would rule
+     * a mean and standard deviation.
+     */
+    private RowPosition position(FlightRow row) {
+        RowCells moments = new RowCells(1);
+        double[] means = new double[draws.draws().size()];
+        double[] sigmas = new double[means.length];
+        double low = Double.POSITIVE_INFINITY;
+        double high = Double.NEGATIVE_INFINITY;
+        for (int k = 0; k < means.length; k++) {
+            FlightDraw draw = draws.draws().get(k);
+            moments.moments(row, new UpliftHistory.ConstantRate(draw.rateMetresPerKyr()), draw.shared());
+            means[k] = moments.meanMetres;
+            sigmas[k] = Math.max(Math.sqrt(moments.varianceMetres2), 1e-9);
+            low = Math.min(low, means[k] - 9 * sigmas[k]);
+            high = Math.max(high, means[k] + 9 * sigmas[k]);
+        }
+        double tail = (1 - Interval.PROBABILITY_68) / 2;
+        double width = quantile(1 - tail, means, sigmas, low, high) - quantile(tail, means, sigmas, low, high);
+        return new RowPosition(quantile(0.5, means, sigmas, low, high), width / 2);
+    }
+
+    private static double quantile(double probability, double[] means, double[] sigmas, double from, double to) {
+        double low = from;
+        double high = to;
+        for (int i = 0; i < BISECTIONS; i++) {
+            double middle = (low + high) / 2;
+            double below = 0;
+            for (int k = 0; k < means.length; k++) {
+                below += NormalTail.atMost((middle - means[k]) / sigmas[k]);
+            }
+            if (below < probability * means.length) {
+                low = middle;
+            } else {
+                high = middle;
+            }
+        }
+        return (low + high) / 2;
     }
 
     private String level(int i) {
@@ -50,15 +96,22 @@ final class FlightSummary {
             byStage.entrySet().stream()
                     .filter(entry -> entry.getValue() >= LEAST_PROBABILITY)
                     .sorted(Comparator.comparing((Map.Entry<String, Double> entry) -> -entry.getValue()))
-                    .forEach(entry -> pairings.add(new FlightResult.Pairing(name, entry.getKey(), entry.getValue())));
+                    .forEach(entry -> pairings.add(new FlightResult.Pairing(
+                            name, entry.getKey(), rounded(entry.getValue()))));
         }
         return pairings;
+    }
+
+    /** Free of the last bits of a sum, which would make a sure pairing look doubtful. */
+    private static double rounded(double probability) {
+        return Math.rint(probability * 1e12) / 1e12;
     }
 
     List<FlightResult.Unmatched> unmatched() {
         List<FlightResult.Unmatched> unmatched = new ArrayList<>();
         for (int i = 0; i < model.levels().size(); i++) {
-            unmatched.add(new FlightResult.Unmatched(level(i), answer.pairings().stray(i)));
+            unmatched.add(new FlightResult.Unmatched(
+                    level(i), rounded(answer.pairings().stray(i))));
         }
         return unmatched;
     }
@@ -91,8 +144,8 @@ final class FlightSummary {
         List<FlightResult.Fate> fates = new ArrayList<>();
         for (int j = 0; j < model.rows().size(); j++) {
             FlightRow row = model.rows().get(j);
-            if (!row.stage().equals(OLDER) || table.outside(j) < SURELY_OUTSIDE) {
-                RowPosition position = answer.positions().get(j);
+            if (!row.stage().equals(OLDER) || table.recorded(j) + table.unseen(j) > LEAST_INSIDE) {
+                RowPosition position = positions.get(j);
                 fates.add(new FlightResult.Fate(
                         row.stage(),
                         row.ageKa(),
@@ -117,7 +170,7 @@ final class FlightSummary {
                 best = answer.pairings().probability(i, j) > answer.pairings().probability(i, best) ? j : best;
             }
             if (answer.pairings().stray(i) < 0.5) {
-                RowPosition position = answer.positions().get(best);
+                RowPosition position = positions.get(best);
                 FlightLevel level = model.levels().get(i);
                 residuals.add(new LevelResidual(
                         site,
@@ -130,7 +183,7 @@ final class FlightSummary {
         return residuals;
     }
 
-    FlightResult.Correlation mostProbable(JointDraws draws) {
+    FlightResult.Correlation mostProbable() {
         JointDraws.Correlation first = draws.correlations().get(0);
         List<FlightResult.Match> matches = new ArrayList<>();
         for (int i = 0; i < first.rows().size(); i++) {

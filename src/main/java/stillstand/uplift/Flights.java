@@ -24,6 +24,7 @@ import stillstand.uplift.FlightWhatIf.ErrorGroup;
  */
 public final class Flights {
     private static final FlightIntegration.Effort WHAT_IF_GRID = new FlightIntegration.Effort(300, 125);
+    private static final double LEAST_REGION = 0.01;
     private static final int GRID_DRAWS = 1000;
     private static final int GRID_DRAW_CELLS = 250;
 
@@ -114,11 +115,11 @@ public final class Flights {
             List<Future<Optional<RatePosterior>>> halved = submit(
                     groups.stream().map(group -> FlightWhatIf.halved(model, group)).toList(), roughly);
             Optional<RatePosterior> all = joined(same);
-            FlightSummary summary = new FlightSummary(site, model, found.answer());
+            FlightSummary summary = new FlightSummary(site, model, found.answer(), found.draws());
             RatePosterior posterior = found.answer().rate();
             Rate rate = Rate.of(posterior);
-            List<RateRegion> regions68 = posterior.highestDensityRegions(Interval.PROBABILITY_68);
-            List<RateRegion> regions95 = posterior.highestDensityRegions(Interval.PROBABILITY_95);
+            List<RateRegion> regions68 = regions(posterior, Interval.PROBABILITY_68);
+            List<RateRegion> regions95 = regions(posterior, Interval.PROBABILITY_95);
             FlightResult result = new FlightResult(
                     site,
                     FlightResult.CONSTANT,
@@ -133,7 +134,7 @@ public final class Flights {
                     summary.pairings(),
                     summary.unmatched(),
                     found.answer().probabilityAllStray(),
-                    summary.mostProbable(found.draws()),
+                    summary.mostProbable(),
                     summary.predictedAges(),
                     posterior.logEvidence(),
                     found.error(),
@@ -143,6 +144,33 @@ public final class Flights {
                     summary.slidingFits(prior),
                     List.of(new FlightResult.ModelEvidence(FlightResult.CONSTANT, posterior.logEvidence(), 0)));
             return new Answered(result, summary.residuals(), assumptions());
+        }
+
+        /**
+         * The regions of highest density. Where the density comes of draws, its noise at the edge of a region is no correlation of
+         * its own: regions nearer to one another than half the half-width of the 68 % interval are one, and what then holds less
+         * than 0.01 is left out.
+         */
+        private List<RateRegion> regions(RatePosterior posterior, double probability) {
+            List<RateRegion> regions = posterior.highestDensityRegions(probability);
+            if (onGrid) {
+                return regions;
+            }
+            double near = posterior.equalTails(Interval.PROBABILITY_68).widthMetresPerKyr() / 4;
+            List<RateRegion> joined = new ArrayList<>();
+            for (RateRegion region : regions) {
+                int last = joined.size() - 1;
+                double from = region.fromMetresPerKyr();
+                if (last >= 0 && from - joined.get(last).toMetresPerKyr() < near) {
+                    from = joined.remove(last).fromMetresPerKyr();
+                }
+                double to = region.toMetresPerKyr();
+                double held = posterior.cumulativeProbability(to) - posterior.cumulativeProbability(from);
+                joined.add(new RateRegion(from, to, held));
+            }
+            return joined.stream()
+                    .filter(region -> region.probability() >= LEAST_REGION)
+                    .toList();
         }
 
         private List<Assumption> assumptions() {
