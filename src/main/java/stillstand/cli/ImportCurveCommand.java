@@ -50,7 +50,11 @@ final class ImportCurveCommand implements Callable<Integer> {
     @Option(names = "--into", paramLabel = "STUDY", required = true, description = "folder of the study")
     private Path study = Path.of("");
 
-    @Option(names = "--id", paramLabel = "ID", required = true, description = "of the curve: lower-case words joined by -")
+    @Option(
+            names = "--id",
+            paramLabel = "ID",
+            required = true,
+            description = "of the curve: lower-case words joined by -")
     private String id = "";
 
     @Option(names = "--age-column", paramLabel = "NAME", description = "header of the ages, or number from 1")
@@ -97,8 +101,8 @@ final class ImportCurveCommand implements Callable<Integer> {
                 word("--level-positive", levelPositive, DIRECTIONS),
                 word("--spread", spread, SPREADS),
                 word("--repeated-ages", repeatedAges, REPEATED).orElse(false));
-        Loaded<CurveImport.Imported> loaded =
-                CurveImport.into(file, study, id, choices, citation.filter(text -> !text.isBlank()), ShippedLibrary.load());
+        Loaded<CurveImport.Imported> loaded = CurveImport.into(
+                file, study, id, choices, citation.filter(text -> !text.isBlank()), ShippedLibrary.load());
         if (loaded.value().isEmpty()) {
             Workshop.list(loaded.problems(), workshop.err());
             return ExitCode.PROBLEMS;
@@ -110,12 +114,15 @@ final class ImportCurveCommand implements Callable<Integer> {
     private void tell(CurveImport.Imported imported, List<InputWarning> warnings) {
         imported.remarks().forEach(workshop.out()::println);
         warnings.forEach(warning -> workshop.out().println("Odd: " + warning.placed()));
-        workshop.out().println("Written to " + study + ": " + imported.file() + " ("
-                + imported.curve().knots().size() + " rows, " + Digits.text(imported.curve().fromKa()) + " to "
-                + Digits.text(imported.curve().toKa()) + " ka) and its entry in curves/datapackage.json.");
+        workshop.out()
+                .println("Written to " + study + ": " + imported.file() + " ("
+                        + imported.curve().knots().size() + " rows, "
+                        + Digits.text(imported.curve().fromKa()) + " to "
+                        + Digits.text(imported.curve().toKa()) + " ka) and its entry in curves/datapackage.json.");
         if (citation.isEmpty()) {
-            workshop.out().println("Its source is not stated: add \"citation\" to that entry. There, too, belong zero,"
-                    + " age_scale, usable_from_ka and caveats.");
+            workshop.out()
+                    .println("Its source is not stated: add \"citation\" to that entry. There, too, belong zero,"
+                            + " age_scale, usable_from_ka and caveats.");
         } else {
             workshop.out().println("To that entry belong, too: zero, age_scale, usable_from_ka and caveats.");
         }

@@ -24,6 +24,7 @@ record ArchivedTable(Table table, String description) {
     /** What a cell of numbers looks like, well or badly written: so that a bad number is named and not taken for text. */
     private static final Pattern LIKE_A_NUMBER =
             Pattern.compile("[-+\u2212]?[0-9.][0-9.,'\u2019]*([eE][-+\u2212]?[0-9]+)?%?|(?i:nan|na|n/a|null|--?)|");
+
     private static final Pattern LINE_END = Pattern.compile("\r\n|\n|\r");
     private static final Pattern BLANKS = Pattern.compile("\\s+");
 
@@ -145,10 +146,11 @@ record ArchivedTable(Table table, String description) {
         }
 
         private String description(Table table, Optional<Line> header, int top) {
-            String headed = header.map(line -> "column names in line " + line.number()
-                            + (line.isComment() ? ", a comment" : ""))
+            String headed = header.map(
+                            line -> "column names in line " + line.number() + (line.isComment() ? ", a comment" : ""))
                     .orElse("no line of column names");
-            String passed = top == 0 ? "" : "; " + (top == 1 ? "1 line" : top + " lines") + " of text before it left out";
+            String passed =
+                    top == 0 ? "" : "; " + (top == 1 ? "1 line" : top + " lines") + " of text before it left out";
             return table.rows().size() + " rows, " + between.words + " between cells, " + headed + passed + ".";
         }
 
@@ -159,12 +161,17 @@ record ArchivedTable(Table table, String description) {
         /** Whether most cells hold names: a row with one bad number is no header. */
         private boolean isHeader(Line line) {
             List<String> cells = cells(line);
-            long numbers = cells.stream().filter(cell -> NumberForm.parse(cell).isPresent()).count();
+            long numbers = cells.stream()
+                    .filter(cell -> NumberForm.parse(cell).isPresent())
+                    .count();
             return 2 * numbers < cells.size();
         }
 
         private List<String> namesIn(Line header) {
-            return between.cells(header.isComment() ? header.text().strip().replaceFirst("^[#%]+", "").strip() : header.text());
+            return between.cells(
+                    header.isComment()
+                            ? header.text().strip().replaceFirst("^[#%]+", "").strip()
+                            : header.text());
         }
 
         /** The nearest of the comments right above the first row that has a word for each column. */

@@ -73,10 +73,17 @@ record CurveDescriptor(String text, List<JsonNode> resources, int end) {
         resource.put("encoding", "utf-8");
         resource.put("dialect", ordered("delimiter", ",", "header", true, "commentChar", "#"));
         citation.ifPresent(source -> resource.put("sources", List.of(ordered("title", source))));
-        List<Object> fields =
-                new ArrayList<>(curve.header().stream().map(CurveDescriptor::field).toList());
+        List<Object> fields = new ArrayList<>(
+                curve.header().stream().map(CurveDescriptor::field).toList());
         resource.put(
-                "schema", ordered("fields", fields, "missingValues", List.of(""), "primaryKey", curve.header().get(0)));
+                "schema",
+                ordered(
+                        "fields",
+                        fields,
+                        "missingValues",
+                        List.of(""),
+                        "primaryKey",
+                        curve.header().get(0)));
         Map<String, Object> ours = ordered("kind", "curve");
         citation.ifPresent(source -> ours.put("citation", source));
         if (!curve.spreadMeaning().isEmpty()) {

@@ -77,8 +77,8 @@ public final class CurveImport {
     private Loaded<Imported> run(ImportChoices choices, Optional<String> citation) throws IOException {
         checkPlace();
         Optional<CurveDescriptor> descriptor = problems.isEmpty() ? descriptor() : Optional.empty();
-        Optional<ArchivedTable> table = keep(TextFile.read(archive, shown(archive)))
-                .flatMap(text -> keep(ArchivedTable.parse(text)));
+        Optional<ArchivedTable> table =
+                keep(TextFile.read(archive, shown(archive))).flatMap(text -> keep(ArchivedTable.parse(text)));
         Optional<ArchivedCurve> curve = table.flatMap(each -> keep(ArchivedCurve.read(each.table(), choices)));
         if (!problems.isEmpty() || curve.isEmpty() || descriptor.isEmpty()) {
             return Loaded.failed(problems.stream().sorted().toList());
@@ -95,8 +95,7 @@ public final class CurveImport {
         }
         String extended = descriptor.get().with(CurveDescriptor.resource(id, name, curve.get(), citation));
         write(name, text, extended);
-        return new Loaded<>(
-                Optional.of(new Imported(read.get(), remarks, FOLDER + "/" + name)), List.of(), warnings);
+        return new Loaded<>(Optional.of(new Imported(read.get(), remarks, FOLDER + "/" + name)), List.of(), warnings);
     }
 
     private void checkPlace() {
@@ -127,7 +126,9 @@ public final class CurveImport {
         for (JsonNode resource : descriptor.get().resources()) {
             if (resource.path("name").asString("").equals(id)) {
                 problems.add(InputProblem.ofFile(
-                        name, "a curve or table " + quote(id) + " already", "another --id, or that one taken out first"));
+                        name,
+                        "a curve or table " + quote(id) + " already",
+                        "another --id, or that one taken out first"));
                 return Optional.empty();
             }
         }
@@ -145,8 +146,7 @@ public final class CurveImport {
                 + CsvCells.table(curve.header(), curve.rows());
     }
 
-    private Optional<SeaLevelCurve> check(
-            String name, String text, ArchivedCurve curve, Optional<String> citation) {
+    private Optional<SeaLevelCurve> check(String name, String text, ArchivedCurve curve, Optional<String> citation) {
         CurveFacts facts = new CurveFacts(
                 citation.orElse("source not stated"),
                 CurveFacts.DEFAULT_ZERO,
@@ -158,8 +158,7 @@ public final class CurveImport {
                 0,
                 List.of());
         return keep(TableFile.parse(new TextFile(FOLDER + "/" + name, text, "")))
-                .flatMap(table ->
-                        keep(CurveTable.read(id, table.table(), facts, Optional.empty(), library.stages())));
+                .flatMap(table -> keep(CurveTable.read(id, table.table(), facts, Optional.empty(), library.stages())));
     }
 
     /** The table first: a descriptor never names a table that is not there. */

@@ -32,12 +32,17 @@ public final class CurveReport {
     public static String list(Library library) {
         CurveReport report = new CurveReport();
         for (SeaLevelCurve curve : library.curves()) {
-            report.say(curve.id() + ": " + span(curve) + ", usable from " + ka(curve.facts().usableFromKa()));
+            report.say(curve.id() + ": " + span(curve) + ", usable from "
+                    + ka(curve.facts().usableFromKa()));
             report.facts(curve);
         }
         if (!library.highstands().isEmpty()) {
             report.say("Highstand tables: "
-                    + String.join(", ", library.highstands().stream().map(CurveReport::counted).toList()) + ".");
+                    + String.join(
+                            ", ",
+                            library.highstands().stream()
+                                    .map(CurveReport::counted)
+                                    .toList()) + ".");
         }
         report.say("More of one: stillstand curves show ID. An archived table of your own: stillstand curves import.");
         return report.text();
@@ -49,8 +54,8 @@ public final class CurveReport {
         CurveFacts facts = curve.facts();
         report.say(curve.id());
         report.say(INDENT + "Source: " + facts.citation());
-        report.say(INDENT + "Span: " + span(curve) + ", " + Wording.counted(curve.knots().size(), "row")
-                + ", usable from " + ka(facts.usableFromKa()));
+        report.say(INDENT + "Span: " + span(curve) + ", "
+                + Wording.counted(curve.knots().size(), "row") + ", usable from " + ka(facts.usableFromKa()));
         report.facts(curve);
         report.say(INDENT + "Errors: its ages ± " + ka(facts.curveAgeSigmaKa())
                 + " (1 sigma); an error of its level is forgotten in " + ka(facts.correlationTimeKa()));
@@ -71,8 +76,8 @@ public final class CurveReport {
             say("It shows no highstand in any stage window: name a highstand table beside it.");
             return;
         }
-        HighstandTable own = HighstandTable.fromCurve(
-                curve, library.stages(), HighstandOverrides.NONE, HighstandOptions.DEFAULT);
+        HighstandTable own =
+                HighstandTable.fromCurve(curve, library.stages(), HighstandOverrides.NONE, HighstandOptions.DEFAULT);
         Optional<HighstandRows> overrides = library.highstands(USUAL_OVERRIDES);
         HighstandTable used = overrides
                 .map(rows -> HighstandTable.fromCurve(
@@ -135,10 +140,10 @@ public final class CurveReport {
 
     private void say(String text) {
         String indent = text.startsWith(INDENT) ? INDENT : "";
-        lines.addAll(Wording.wrapped(text, TerminalReport.WIDTH - indent.length(), indent.isEmpty() ? "" : HANGING)
-                .stream()
-                .map(line -> line.startsWith(HANGING) ? line : indent + line)
-                .toList());
+        lines.addAll(
+                Wording.wrapped(text, TerminalReport.WIDTH - indent.length(), indent.isEmpty() ? "" : HANGING).stream()
+                        .map(line -> line.startsWith(HANGING) ? line : indent + line)
+                        .toList());
     }
 
     private String text() {

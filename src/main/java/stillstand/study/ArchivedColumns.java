@@ -50,12 +50,11 @@ final class ArchivedColumns {
 
     /** The choice; absent where something must be asked, which is then among the findings. */
     Optional<Chosen> choose() {
-        Optional<Integer> age = column("--age-column", choices.ageColumn(), ArchivedHeader::isAge, "the age");
-        Optional<Integer> level = column(
-                "--level-column",
-                choices.levelColumn(),
-                header -> header.isLevel() && age.filter(at -> headers.get(at) == header).isEmpty(),
-                "the sea level");
+        Optional<Integer> age = column("--age-column", choices.ageColumn(), where(ArchivedHeader::isAge), "the age");
+        List<Integer> levels = where(ArchivedHeader::isLevel).stream()
+                .filter(at -> !age.equals(Optional.of(at)))
+                .toList();
+        Optional<Integer> level = column("--level-column", choices.levelColumn(), levels, "the sea level");
         if (age.isPresent() && age.equals(level)) {
             ask(age.get(), "one column for both age and level", "two: --age-column and --level-column");
             return Optional.empty();
@@ -93,16 +92,17 @@ final class ArchivedColumns {
     }
 
     private String firstCell(int column) {
-        List<String> cells = table.rows().get(0).cells();
-        return column < cells.size() ? cells.get(column) : "";
+        return table.rows().stream()
+                .findFirst()
+                .filter(row -> column < row.cells().size())
+                .map(row -> row.cells().get(column))
+                .orElse("");
     }
 
-    private Optional<Integer> column(
-            String option, Optional<String> told, Predicate<ArchivedHeader> fits, String what) {
+    private Optional<Integer> column(String option, Optional<String> told, List<Integer> fitting, String what) {
         if (told.isPresent()) {
             return told(option, told.get());
         }
-        List<Integer> fitting = where(fits);
         if (fitting.size() == 1) {
             return Optional.of(fitting.get(0));
         }
@@ -126,7 +126,8 @@ final class ArchivedColumns {
         if (name.matches("[1-9][0-9]{0,5}") && Integer.parseInt(name) <= headers.size()) {
             return Optional.of(Integer.parseInt(name) - 1);
         }
-        List<String> known = table.header().stream().filter(text -> !text.isEmpty()).toList();
+        List<String> known =
+                table.header().stream().filter(text -> !text.isEmpty()).toList();
         ask(
                 -1,
                 "no column " + quote(name) + " (" + option + ")",
@@ -135,8 +136,7 @@ final class ArchivedColumns {
     }
 
     private Optional<AgeUnit> unit(int age) {
-        Optional<AgeUnit> unit =
-                choices.ageUnit().or(() -> headers.get(age).ageUnit());
+        Optional<AgeUnit> unit = choices.ageUnit().or(() -> headers.get(age).ageUnit());
         if (unit.isEmpty()) {
             ask(
                     age,
@@ -180,15 +180,17 @@ final class ArchivedColumns {
     /** The spread beside a level, if the headers leave no doubt of it. */
     private Optional<Spread> spreadSeen(int level, int age) {
         ArchivedHeader main = headers.get(level);
-        List<Integer> all = where(header -> header.isSpread()
-                && header != main
-                && (age < 0 || header != headers.get(age)));
+        List<Integer> all = where(ArchivedHeader::isSpread).stream()
+                .filter(at -> at != level && at != age)
+                .toList();
         List<Integer> own =
                 all.stream().filter(at -> headers.get(at).extendsHeader(main)).toList();
         List<Integer> near = own.isEmpty()
                 ? all.stream()
-                        .filter(at -> headers.stream().noneMatch(other -> headers.get(at).extendsHeader(other)
-                                || (other.isAge() && headers.get(at).words().containsAll(other.words()))))
+                        .filter(at -> headers.stream()
+                                .noneMatch(other -> headers.get(at).extendsHeader(other)
+                                        || (other.isAge()
+                                                && headers.get(at).words().containsAll(other.words()))))
                         .toList()
                 : own;
         boolean wantsBounds = choices.spread().filter(SpreadKind.BOUNDS::equals).isPresent();
@@ -211,7 +213,8 @@ final class ArchivedColumns {
         List<Integer> doubtful = new ArrayList<>(sigmas);
         doubtful.addAll(lows);
         doubtful.addAll(highs);
-        return asked("several columns that may be its spread (" + named(doubtful.stream().sorted().toList()) + ")");
+        return asked("several columns that may be its spread ("
+                + named(doubtful.stream().sorted().toList()) + ")");
     }
 
     private Optional<Spread> asked(String found) {
@@ -257,10 +260,7 @@ final class ArchivedColumns {
     }
 
     private Optional<Spread> tooMany(List<Integer> columns) {
-        ask(
-                -1,
-                columns.size() + " columns of spread",
-                "one of a standard deviation or two of bounds");
+        ask(-1, columns.size() + " columns of spread", "one of a standard deviation or two of bounds");
         return Optional.empty();
     }
 

@@ -26,8 +26,7 @@ import stillstand.study.ImportChoices.SpreadKind;
  * @param spreadMeaning what its spread is, in words; "" where it has none
  * @param remarks what was understood and done, a sentence each
  */
-public record ArchivedCurve(
-        List<String> header, List<List<String>> rows, String spreadMeaning, List<String> remarks) {
+public record ArchivedCurve(List<String> header, List<List<String>> rows, String spreadMeaning, List<String> remarks) {
     private static final Set<String> MISSING = Set.of("", "nan", "na", "n/a", "null", "-", "--");
     /** No Quaternary sea level was farther from today's, so what is farther is in another unit or marks a missing value. */
     private static final BigDecimal FARTHEST_METRES = BigDecimal.valueOf(300);
@@ -113,13 +112,11 @@ public record ArchivedCurve(
                 return Optional.empty();
             }
             if (left > 0) {
-                remarks.add(left + (left == 1 ? " row without a level is" : " rows without a level are") + " left out.");
+                remarks.add(
+                        left + (left == 1 ? " row without a level is" : " rows without a level are") + " left out.");
             }
             return Optional.of(new ArchivedCurve(
-                    header(chosen.spread()),
-                    ordered.stream().map(Reader::cells).toList(),
-                    meaning(chosen),
-                    remarks));
+                    header(chosen.spread()), ordered.stream().map(Reader::cells).toList(), meaning(chosen), remarks));
         }
 
         private boolean isTooLong(Table.Row row) {
@@ -130,24 +127,32 @@ public record ArchivedCurve(
 
         private Optional<Row> row(Table.Row row, Chosen chosen) {
             Optional<BigDecimal> age = number(row, chosen.age(), "an age");
-            Optional<BigDecimal> level = number(row, chosen.level(), "a level").filter(each -> isPossible(row, chosen, each));
+            Optional<BigDecimal> level =
+                    number(row, chosen.level(), "a level").filter(each -> isPossible(row, chosen, each));
             List<BigDecimal> spread = new ArrayList<>();
             for (int column : chosen.spreads()) {
                 number(row, column, "the spread of the level").ifPresent(spread::add);
             }
-            if (age.isEmpty() || level.isEmpty() || spread.size() < chosen.spreads().size()) {
+            if (age.isEmpty()
+                    || level.isEmpty()
+                    || spread.size() < chosen.spreads().size()) {
                 return Optional.empty();
             }
             if (spread.size() == 1 && spread.get(0).signum() < 0) {
-                problem(row.line(), chosen.spreads().get(0), shown(row, chosen.spreads().get(0)), "0 or more");
+                problem(
+                        row.line(),
+                        chosen.spreads().get(0),
+                        shown(row, chosen.spreads().get(0)),
+                        "0 or more");
                 return Optional.empty();
             }
             if (spread.size() == 2 && !surround(level.get(), spread)) {
                 problem(
                         row.line(),
                         chosen.spreads().get(0),
-                        shown(row, chosen.spreads().get(0)) + " and " + shown(row, chosen.spreads().get(1))
-                                + " about a level of " + shown(row, chosen.level()),
+                        shown(row, chosen.spreads().get(0)) + " and "
+                                + shown(row, chosen.spreads().get(1)) + " about a level of "
+                                + shown(row, chosen.level()),
                         "one bound on each side of it, a height as it is and not a distance from it");
                 return Optional.empty();
             }
@@ -241,7 +246,8 @@ public record ArchivedCurve(
             int start = 0;
             while (start < sorted.size()) {
                 int end = start + 1;
-                while (end < sorted.size() && sorted.get(end).age().compareTo(sorted.get(start).age()) == 0) {
+                while (end < sorted.size()
+                        && sorted.get(end).age().compareTo(sorted.get(start).age()) == 0) {
                     end++;
                 }
                 List<Row> same = sorted.subList(start, end);
@@ -257,8 +263,8 @@ public record ArchivedCurve(
                                         + " another is left out.");
             }
             if (once.size() < 2 && findings.problemCount() == 0) {
-                findings.add(InputProblem.ofFile(table.name(), "1 age", "at least 2, so that there is a line between"
-                        + " them"));
+                findings.add(InputProblem.ofFile(
+                        table.name(), "1 age", "at least 2, so that there is a line between" + " them"));
             }
             return once;
         }
@@ -288,7 +294,11 @@ public record ArchivedCurve(
                 int at = i;
                 spread.add(meanOf(same.stream().map(row -> row.spread().get(at)).toList()));
             }
-            return new Row(first.line(), first.age(), meanOf(same.stream().map(Row::level).toList()), List.copyOf(spread));
+            return new Row(
+                    first.line(),
+                    first.age(),
+                    meanOf(same.stream().map(Row::level).toList()),
+                    List.copyOf(spread));
         }
 
         private static BigDecimal meanOf(List<BigDecimal> values) {
@@ -305,13 +315,16 @@ public record ArchivedCurve(
                     .findFirst();
             Row highest = rows.stream().max(Comparator.comparing(Row::level)).orElseThrow();
             boolean noneBelow = rows.stream().allMatch(row -> row.level().signum() >= 0);
-            Optional<Row> odd = glacial.or(() ->
-                    Optional.of(highest).filter(row -> noneBelow && row.level().doubleValue() > SUSPICIOUSLY_HIGH_METRES));
+            Optional<Row> odd = glacial.or(() -> Optional.of(highest)
+                    .filter(row -> noneBelow && row.level().doubleValue() > SUSPICIOUSLY_HIGH_METRES));
             if (odd.isEmpty()) {
                 return;
             }
             String found = String.format(
-                    Locale.ROOT, "%+.1f m at %s ka", odd.get().level(), plain(odd.get().age()));
+                    Locale.ROOT,
+                    "%+.1f m at %s ka",
+                    odd.get().level(),
+                    plain(odd.get().age()));
             if (choices.levelIsUp().isPresent()) {
                 findings.add(new InputWarning(
                         table.name(),
@@ -337,7 +350,9 @@ public record ArchivedCurve(
                             ? "Spread: none that is used; Stillstand's default is supposed."
                             : "Spread: " + meaning(chosen) + ".");
             List<Integer> unused = IntStream.range(0, table.header().size())
-                    .filter(at -> at != chosen.age() && at != chosen.level() && !chosen.spreads().contains(at))
+                    .filter(at -> at != chosen.age()
+                            && at != chosen.level()
+                            && !chosen.spreads().contains(at))
                     .boxed()
                     .toList();
             if (!unused.isEmpty()) {

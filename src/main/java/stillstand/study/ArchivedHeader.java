@@ -16,17 +16,20 @@ import stillstand.study.ImportChoices.AgeUnit;
  * @param words of it, in lower case
  */
 record ArchivedHeader(String text, List<String> words) {
-    private static final Pattern BETWEEN_WORDS = Pattern.compile("[^a-z0-9.%+\\u03c3\\u00b1-]+|(?<![0-9])\\.|\\.(?![0-9])|-(?=.)");
+    private static final Pattern BETWEEN_WORDS =
+            Pattern.compile("[^a-z0-9.%+\\u03c3\\u00b1-]+|(?<![0-9])\\.|\\.(?![0-9])|-(?=.)");
     private static final Pattern AGE = Pattern.compile("ages?[0-9]*|time|date");
     private static final Pattern THOUSAND_YEARS =
             Pattern.compile("(cal)?(ka|kyrs?|ky)(bp)?|agekyr|ageka|kiloyears?|thousand");
     private static final Pattern YEARS = Pattern.compile("(cal)?(yrs?|years?|a)(bp)?");
     private static final Pattern OTHER_TIMES = Pattern.compile("ma|myrs?|million|centuries|decades|ce|ad|bc|bce");
-    private static final Pattern LEVEL = Pattern.compile("[reg]?sls?|[reg]sl|gms?l|gmgsl|msl|sealev(els?)?|levels?|depth|lowering");
+    private static final Pattern LEVEL =
+            Pattern.compile("[reg]?sls?|[reg]sl|gms?l|gmgsl|msl|sealev(els?)?|levels?|depth|lowering");
     private static final Set<String> DOWNWARD = Set.of("depth", "lowering", "below");
     private static final Set<String> NOT_METRES = Set.of("mm", "cm", "dm", "km", "ft", "feet", "foot", "inch");
     private static final Pattern LOW = Pattern.compile("(lo|low|lower|min|minimum|minus)(95)?|2\\.50*%?|q?0?025");
-    private static final Pattern HIGH = Pattern.compile("(up|upper|hi|high|higher|max|maximum|plus)(95)?|97\\.50*%?|q?975");
+    private static final Pattern HIGH =
+            Pattern.compile("(up|upper|hi|high|higher|max|maximum|plus)(95)?|97\\.50*%?|q?975");
     private static final Pattern OF_95 = Pattern.compile("[a-z]*95%?|2\\.50*%?|97\\.50*%?|q?0?025|q?975");
     private static final Pattern SIGMA = Pattern.compile(
             "[12]?(sigma|sig|sd|\\u03c3)|[12]s|stdevs?|std(dev)?|err(or)?s?|se|unc(ert(ainty)?)?|spread|\\u00b1|\\+-");

@@ -32,7 +32,9 @@ final class FlightCheck {
             List<LevelsTable.LevelRow> flight = inOrder(own.stream()
                     .filter(level -> FlightSetup.takesPart(level.formsAt()))
                     .toList());
-            if (flight.stream().anyMatch(level -> FlightSetup.isToBeMatched(level.formsAt(), level.highstand()))) {
+            boolean read = site.toSite().isPresent()
+                    && own.stream().allMatch(level -> level.toLevel().isPresent());
+            if (read && flight.stream().anyMatch(level -> FlightSetup.isToBeMatched(level.formsAt(), level.highstand()))) {
                 checkRange(site, flight);
                 checkHeights(site, flight);
                 seaLevel.apply(site.name()).ifPresent(sea -> {

@@ -24,13 +24,7 @@ public record ImportChoices(
         boolean meansOfRepeatedAges) {
     /** Nothing said: all to be seen in the table. */
     public static final ImportChoices NONE = new ImportChoices(
-            Optional.empty(),
-            Optional.empty(),
-            List.of(),
-            Optional.empty(),
-            Optional.empty(),
-            Optional.empty(),
-            false);
+            Optional.empty(), Optional.empty(), List.of(), Optional.empty(), Optional.empty(), Optional.empty(), false);
 
     public ImportChoices {
         spreadColumns = List.copyOf(spreadColumns);

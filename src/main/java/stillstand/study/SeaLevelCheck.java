@@ -83,6 +83,9 @@ final class SeaLevelCheck {
         if (curve.isEmpty()) {
             return Optional.empty();
         }
+        if (stated.isReplaced(CURVES)) {
+            row.warn("local_curve", "the site keeps this curve, whatever the command line says");
+        }
         if (choice.highstandTable().isPresent()) {
             return cases.stream()
                     .findFirst()

@@ -72,8 +72,7 @@ public record StatedSettings(
             if (!Objects.equals(shown.apply(settings), shown.apply(changed))) {
                 now.add(keyPath);
                 lines.remove(unstated(keyPath, shown.apply(settings)));
-                lines.add(new Assumption(
-                        keyPath + " is replaced", shown.apply(changed), "the " + COMMAND_LINE, "all"));
+                lines.add(new Assumption(keyPath + " is replaced", shown.apply(changed), "the " + COMMAND_LINE, "all"));
                 left.keySet().removeIf(path -> path.startsWith(keyPath));
             }
         });

@@ -89,6 +89,13 @@ class CurvesCommandTest {
         return result.levels().get(0).rate().orElseThrow();
     }
 
+    private static String firstOrder(StudyResult result) {
+        return result.levels().get(0).firstOrder().stream()
+                .map(each -> String.format(Locale.ROOT, "%.3f ± %.3f", each.rate(), each.sigma()))
+                .findFirst()
+                .orElse("");
+    }
+
     @Test
     void curvesAreListed() {
         assertEquals(0, execute("curves"), err());
@@ -113,9 +120,11 @@ class CurvesCommandTest {
         assertTrue(out().contains("Every band of a pick above is a guess"), out());
         List<String> rows = out().lines().map(String::strip).toList();
         // peak and overriding level as published: 123.9 ka, +6.3 m; 5c by Creveling et al. (2017): -9.4 ± 5.3 m
-        String last = rows.stream().filter(row -> row.startsWith("5e ")).findFirst().orElseThrow();
+        String last =
+                rows.stream().filter(row -> row.startsWith("5e ")).findFirst().orElseThrow();
         assertTrue(last.matches("5e +interglacial +123\\.9 +6\\.3 .* 122\\.5 ± 3\\.3 +7\\.5 ± 3\\.9 +\\*"), last);
-        String holocene = rows.stream().filter(row -> row.startsWith("1 ")).findFirst().orElseThrow();
+        String holocene =
+                rows.stream().filter(row -> row.startsWith("1 ")).findFirst().orElseThrow();
         assertTrue(holocene.matches("1 +interglacial +5\\.3 ± 1\\.3 +0\\.7 ± 0\\.7 +†"), holocene);
         assertTrue(out().lines().allMatch(line -> line.codePointCount(0, line.length()) <= 100), out());
     }
@@ -124,16 +133,17 @@ class CurvesCommandTest {
     void aCurveWithoutHighstandsSaysSo() {
         assertEquals(0, execute("curves", "show", "lambeck-2014"), err());
         assertTrue(
-                out().endsWith("It shows no highstand in any stage window: name a highstand table beside it.\n"), out());
+                out().endsWith("It shows no highstand in any stage window: name a highstand table beside it.\n"),
+                out());
     }
 
     @Test
     void anUnknownCurveIsWrongUsage() {
         assertEquals(2, execute("curves", "show", "waelbroek-2002"));
-        assertEquals(
-                "there is no curve \"waelbroek-2002\"; did you mean \"waelbroeck-2002\"? (a study's own need --in STUDY)\n"
-                        + "See stillstand curves show --help\n",
-                err());
+        assertEquals("""
+                there is no curve "waelbroek-2002"; did you mean "waelbroeck-2002"? (a study's own need --in STUDY)
+                See stillstand curves show --help
+                """, err());
     }
 
     @Test
@@ -150,8 +160,15 @@ class CurvesCommandTest {
         assertEquals(
                 0,
                 execute(
-                        "curves", "import", archive.toString(), "--into", study.toString(), "--id", "other-2020",
-                        "--citation", "Somebody (2020) \"A curve\""),
+                        "curves",
+                        "import",
+                        archive.toString(),
+                        "--into",
+                        study.toString(),
+                        "--id",
+                        "other-2020",
+                        "--citation",
+                        "Somebody (2020) \"A curve\""),
                 err());
         assertEquals("""
                 5 rows, blanks between cells, column names in line 2.
@@ -192,8 +209,15 @@ class CurvesCommandTest {
         assertEquals(
                 2,
                 execute(
-                        "curves", "import", archive.toString(), "--into", study.toString(), "--id", "other-2020",
-                        "--age-unit", "centuries"));
+                        "curves",
+                        "import",
+                        archive.toString(),
+                        "--into",
+                        study.toString(),
+                        "--id",
+                        "other-2020",
+                        "--age-unit",
+                        "centuries"));
         assertEquals(
                 "--age-unit must be ka or years or negative-ka but is \"centuries\"\nSee stillstand curves import --help\n",
                 err());
@@ -201,17 +225,22 @@ class CurvesCommandTest {
 
     @Test
     void aStableCoastComesOutAsStable() throws IOException {
-        Rate usual = rate(result());
+        StudyResult withOverrides = result();
+        Rate usual = rate(withOverrides);
         assertTrue(
                 usual.shortest68().low() < 0 && usual.shortest68().high() > 0,
                 () -> "0 lies outside " + usual.shortest68());
         assertTrue(usual.interval68().low() < 0 && usual.interval68().high() > 0);
         write("study.json", String.format(Locale.ROOT, FROM_CURVE, ", \"overrides\": \"none\""));
-        Rate without = rate(result());
+        StudyResult withoutOverrides = result();
+        Rate without = rate(withoutOverrides);
         // the curve's own spread at its peaks is several times that of the corals: README of sea-level-curves
         assertTrue(
                 without.shortest68().width() > 2 * usual.shortest68().width(),
                 () -> without.shortest68() + " against " + usual.shortest68());
+        // the two rows of that README
+        assertEquals("-0.012 ± 0.033", firstOrder(withOverrides));
+        assertEquals("0.037 ± 0.074", firstOrder(withoutOverrides));
     }
 
     @Test
@@ -229,6 +258,19 @@ class CurvesCommandTest {
     }
 
     @Test
+    void aLocalCurveStaysAndSaysSo() throws IOException {
+        write("sites.csv", "site,latitude,longitude,local_curve\nPoint,5,5,spratt-lisiecki-2016\n");
+        double before = rate(result()).median();
+        StudyResult after = result("--curve", "waelbroeck-2002");
+        assertEquals(before, rate(after).median());
+        assertTrue(
+                after.warnings()
+                        .contains(new InputWarning(
+                                "sites.csv", 2, 4, "the site keeps this curve, whatever the command line says")),
+                () -> after.warnings().toString());
+    }
+
+    @Test
     void aWrongCurveOfTheCommandLineIsNotBlamedOnTheFile() throws IOException {
         write("study.json", "{\"title\": \"x\", \"sea_level\": {\"curves\": [{\"id\": \"spratt-lisiecki-2016\"}]}}");
         assertEquals(1, execute("run", study.toString(), "--curve", "waelbroek-2002"));
@@ -238,8 +280,9 @@ class CurvesCommandTest {
                 err());
         assertEquals(1, execute("run", study.toString(), "--curve", "waelbroeck-2002", "--curve", "lambeck-2014"));
         assertTrue(
-                err().contains("command line: sea_level.curves: found 2 curves, expected one: several curves in one study"
-                        + " are not possible yet\n"),
+                err().contains(
+                                "command line: sea_level.curves: found 2 curves, expected one: several curves in one study"
+                                        + " are not possible yet\n"),
                 err());
         assertFalse(Files.exists(study.resolve("results")));
     }

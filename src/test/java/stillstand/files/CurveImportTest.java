@@ -125,7 +125,8 @@ class CurveImportTest {
     /** The rows written, one a line, without the comment above them. */
     private String written(String text, Told told) throws IOException {
         Loaded<CurveImport.Imported> loaded = load(text, told);
-        assertEquals(List.of(), loaded.problems().stream().map(InputProblem::message).toList());
+        assertEquals(
+                List.of(), loaded.problems().stream().map(InputProblem::message).toList());
         assertEquals("curves/mine.csv", loaded.value().orElseThrow().file());
         String all = Files.readString(study.resolve("curves/mine.csv"));
         assertTrue(
@@ -170,8 +171,9 @@ class CurveImportTest {
     @Test
     void twoLevelsAndTwoKindsOfSpreadAreAskedFor() {
         assertEquals(
-                List.of("archive.txt:3: found 2 columns that may be the sea level (\"SeaLev_shortPC1\","
-                        + " \"SeaLev_longPC1\"), expected to be told which it is: --level-column NAME (or its number, from 1)"),
+                List.of(
+                        "archive.txt:3: found 2 columns that may be the sea level (\"SeaLev_shortPC1\","
+                                + " \"SeaLev_longPC1\"), expected to be told which it is: --level-column NAME (or its number, from 1)"),
                 problems(TWO_STACKS, new Told()));
         assertEquals(
                 List.of("archive.txt:3: found several columns that may be its spread (\"SeaLev_longPC1_err_sig\","
@@ -195,8 +197,9 @@ class CurveImportTest {
                         + " --level-column NAME (or its number, from 1)"),
                 problems(text, new Told()));
         assertEquals(
-                List.of("archive.txt:1:3: Sigma: found a spread that may be 1 or 2 sigma, expected to be told which it is:"
-                        + " --spread 1sigma or --spread 2sigma, or --spread none to take Stillstand's default"),
+                List.of(
+                        "archive.txt:1:3: Sigma: found a spread that may be 1 or 2 sigma, expected to be told which it is:"
+                                + " --spread 1sigma or --spread 2sigma, or --spread none to take Stillstand's default"),
                 problems(text, new Told().level("PC1").spreads("Sigma")));
         assertEquals("""
                 age_ka,level_m,level_low95_m,level_high95_m
@@ -247,9 +250,10 @@ class CurveImportTest {
         String header = "time (kyr BP),global sea level relative to present (m)\n";
         String rows = "0,1.46\n21.0,122.82\n124,-0.28\n";
         assertEquals(
-                List.of("archive.txt:3:2: global sea level relative to present (m): found levels that read +122.8 m at 21 ka"
-                        + " where up is positive, expected to be told which way they count: --level-positive down or"
-                        + " --level-positive up"),
+                List.of(
+                        "archive.txt:3:2: global sea level relative to present (m): found levels that read +122.8 m at 21 ka"
+                                + " where up is positive, expected to be told which way they count: --level-positive down or"
+                                + " --level-positive up"),
                 problems(header + rows, new Told()));
         String turned = "age_ka,level_m\n0,-1.46\n21,-122.82\n124,0.28\n";
         assertEquals(turned, written(header + rows, new Told().up(false)));
@@ -268,7 +272,8 @@ class CurveImportTest {
 
     @Test
     void boundsMayStandTheOtherWayRound() throws IOException {
-        // the first is numerically larger; Waelbroeck et al. (2002, QSR 21, 295-305): 150.5 ka -119.99, -94.96 to -133.17 m
+        // the first is numerically larger; Waelbroeck et al. (2002, QSR 21, 295-305): 150.5 ka -119.99, -94.96 to
+        // -133.17 m
         String text = """
                 age\tocean d18O\tmin\tmax\tRSL\tRSL-\tRSL+\tAlt.Age1
                 0.5\t3.2\t3.1\t3.3\t0\t0\t0\t0.5
@@ -335,12 +340,11 @@ class CurveImportTest {
     void twoLevelsAtOneAgeAreAskedForOrAveraged() throws IOException {
         String text = "age_ka,rsl_m,rsl_1sigma_m\n0,0,1\n20,-120,8\n20,-121,6\n125,6,4\n";
         assertEquals(
-                List.of("archive.txt:4:1: age_ka: found 20 ka a second time, with other values than in line 3, expected one"
-                        + " level at one age, or --repeated-ages mean to take their mean"),
+                List.of(
+                        "archive.txt:4:1: age_ka: found 20 ka a second time, with other values than in line 3, expected one"
+                                + " level at one age, or --repeated-ages mean to take their mean"),
                 problems(text, new Told()));
-        assertEquals(
-                "age_ka,level_m,level_1sigma_m\n0,0,1\n20,-120.5,7\n125,6,4\n",
-                written(text, new Told().means()));
+        assertEquals("age_ka,level_m,level_1sigma_m\n0,0,1\n20,-120.5,7\n125,6,4\n", written(text, new Told().means()));
     }
 
     @ParameterizedTest
@@ -393,8 +397,9 @@ class CurveImportTest {
                 List.of("archive.txt:1:3: a: found one column of bounds, expected two: --spread-column given twice"),
                 problems(text, new Told().spreads("a").spread(SpreadKind.BOUNDS)));
         assertEquals(
-                List.of("archive.txt:1:4: b: found two columns of one standard deviation, expected one: --spread-column given"
-                        + " once"),
+                List.of(
+                        "archive.txt:1:4: b: found two columns of one standard deviation, expected one: --spread-column given"
+                                + " once"),
                 problems(text, new Told().spreads("a", "b").spread(SpreadKind.ONE_SIGMA)));
         assertEquals(
                 List.of("archive.txt:1: found a column chosen twice, expected each column for one thing"),
@@ -408,8 +413,7 @@ class CurveImportTest {
     void aBadFirstRowIsNotTakenForAHeader() {
         Told told = new Told().age("1").level("2").unit(AgeUnit.KA);
         assertEquals(
-                List.of("archive.txt:1:1: found \"0o\", expected a number"),
-                problems("0o,0\n20,-120\n30,-90\n", told));
+                List.of("archive.txt:1:1: found \"0o\", expected a number"), problems("0o,0\n20,-120\n30,-90\n", told));
     }
 
     @Test
@@ -437,12 +441,15 @@ class CurveImportTest {
     @Test
     void theUsersPackageKeepsEveryByteOfItsOwn() throws IOException {
         Path curves = Files.createDirectory(study.resolve("curves"));
-        String start = "{ \"name\":\"p\" , \"x\": {\"resources\": []},\n\t\"resources\" : [ {\"name\":\"other\",\"path\":\"o.csv\",\n"
-                + "   \"stillstand\":{\"kind\":\"curve\"}, \"z\": 1.50} ";
+        String start =
+                "{ \"name\":\"p\" , \"x\": {\"resources\": []},\n\t\"resources\" : [ {\"name\":\"other\",\"path\":\"o.csv\",\n"
+                        + "   \"stillstand\":{\"kind\":\"curve\"}, \"z\": 1.50} ";
         String end = "],  \"contributors\":[]}";
         Files.writeString(curves.resolve("datapackage.json"), start + end);
         Files.writeString(curves.resolve("o.csv"), "age_ka,level_m,level_1sigma_m\n0,0,1\n9,0,1\n");
-        assertEquals(List.of(), load("age_ka,level_m,sd\n0,0,2\n20,-120,10\n", new Told()).problems());
+        assertEquals(
+                List.of(),
+                load("age_ka,level_m,sd\n0,0,2\n20,-120,10\n", new Told()).problems());
         String now = Files.readString(curves.resolve("datapackage.json"));
         assertTrue(now.startsWith(start.stripTrailing() + ",\n    {\n"), now);
         assertTrue(now.endsWith(end), now);
@@ -458,7 +465,9 @@ class CurveImportTest {
         try (Stream<Path> files = Files.list(curves)) {
             assertEquals(
                     List.of("datapackage.json", "mine.csv", "o.csv"),
-                    files.map(file -> String.valueOf(file.getFileName())).sorted().toList());
+                    files.map(file -> String.valueOf(file.getFileName()))
+                            .sorted()
+                            .toList());
         }
     }
 
@@ -475,19 +484,22 @@ class CurveImportTest {
         String table = Files.readString(study.resolve("curves/mine.csv"));
         String entry = Files.readString(study.resolve("curves/datapackage.json"));
         assertEquals(
-                List.of("curves/datapackage.json: found a curve or table \"mine\" already, expected another --id, or that one"
-                        + " taken out first"),
+                List.of(
+                        "curves/datapackage.json: found a curve or table \"mine\" already, expected another --id, or that one"
+                                + " taken out first"),
                 refused("mine"));
         Files.writeString(study.resolve("curves/loose.csv"), "mine");
         assertEquals(
                 List.of("curves/loose.csv: found a file already, expected another --id, or that file moved away first"),
                 refused("loose"));
         assertEquals(
-                List.of("--id: found \"waelbroeck-2002\", which comes with Stillstand, expected an id that no curve or table"
-                        + " has"),
+                List.of(
+                        "--id: found \"waelbroeck-2002\", which comes with Stillstand, expected an id that no curve or table"
+                                + " has"),
                 refused("waelbroeck-2002"));
         assertEquals(
-                List.of("--id: found \"../Mine\", expected lower-case words joined by hyphens, such as \"author-2020\""),
+                List.of(
+                        "--id: found \"../Mine\", expected lower-case words joined by hyphens, such as \"author-2020\""),
                 refused("../Mine"));
         assertEquals("mine", Files.readString(study.resolve("curves/loose.csv")));
         assertEquals(table, Files.readString(study.resolve("curves/mine.csv")));
@@ -499,10 +511,12 @@ class CurveImportTest {
         Path curves = Files.createDirectory(study.resolve("curves"));
         Files.writeString(curves.resolve("datapackage.json"), "{\"resources\": [}", StandardCharsets.UTF_8);
         assertEquals(
-                List.of("curves/datapackage.json:1:16: found text that is not json here, expected json"), refused("mine"));
+                List.of("curves/datapackage.json:1:16: found text that is not json here, expected json"),
+                refused("mine"));
         Files.writeString(curves.resolve("datapackage.json"), "{\"resources\": 3}", StandardCharsets.UTF_8);
         assertEquals(
-                List.of("curves/datapackage.json:1:15: resources: found 3, expected a list of resources"), refused("mine"));
+                List.of("curves/datapackage.json:1:15: resources: found 3, expected a list of resources"),
+                refused("mine"));
         assertFalse(Files.exists(curves.resolve("mine.csv")));
     }
 
@@ -517,8 +531,9 @@ class CurveImportTest {
     void aCurveWithoutSpreadIsToldOf() {
         Loaded<CurveImport.Imported> loaded = load("age_ka,level_m\n0,0\n20,-120\n", new Told());
         assertEquals(
-                List.of("curves/mine.csv: curve \"mine\" has no spread that can be used; 6.0 m in interglacials and 12.0 m"
-                        + " elsewhere are supposed (1 sigma)"),
+                List.of(
+                        "curves/mine.csv: curve \"mine\" has no spread that can be used; 6.0 m in interglacials and 12.0 m"
+                                + " elsewhere are supposed (1 sigma)"),
                 loaded.warnings().stream().map(InputWarning::placed).toList());
     }
 }
