@@ -129,6 +129,7 @@ public final class SampleStudy {
                                 Optional.empty(),
                                 Optional.empty(),
                                 Optional.of("the curve is too steep at this age to give a rate"))),
+                Optional.empty(),
                 Optional.of(new Agreement(1.25, 3, 0.28)));
     }
 
@@ -147,6 +148,7 @@ public final class SampleStudy {
                 Optional.empty(),
                 Optional.empty(),
                 List.of(),
+                Optional.empty(),
                 Optional.empty());
     }
 
@@ -165,6 +167,7 @@ public final class SampleStudy {
                 Optional.empty(),
                 Optional.of(new MonteCarlo(4096, false, Optional.empty(), Optional.empty())),
                 List.of(),
+                Optional.empty(),
                 Optional.empty());
     }
 
@@ -259,7 +262,7 @@ public final class SampleStudy {
                 new StudySettings.RateChoice(CauchyPrior.DEFAULT, StudySettings.Changes.NONE),
                 new StudySettings.Matching(
                         new StudySettings.Recording.Beta(4, 2.5),
-                        new StudySettings.Decay.Marginalised(),
+                        Optional.empty(),
                         Optional.empty(),
                         1000,
                         new StudySettings.Setting(0.05, false),

@@ -61,12 +61,20 @@ public final class Commands implements Callable<Integer> {
         line.addSubcommand(new CheckCommand(workshop));
         line.addSubcommand(new RunCommand(workshop));
         line.addSubcommand(new DrawCommand(workshop));
+        line.addSubcommand(curves(workshop));
         return line.setOut(new PrintWriter(workshop.out(), true, StandardCharsets.UTF_8))
                 .setErr(new PrintWriter(workshop.err(), true, StandardCharsets.UTF_8))
                 .setColorScheme(CommandLine.Help.defaultColorScheme(Ansi.OFF))
                 .setUsageHelpWidth(USAGE_WIDTH)
                 .setParameterExceptionHandler((wrong, ignored) -> usage(workshop, wrong))
                 .setExecutionExceptionHandler((failure, command, ignored) -> failed(workshop, failure));
+    }
+
+    private static CommandLine curves(Workshop workshop) {
+        CommandLine curves = new CommandLine(new CurvesCommand(workshop));
+        curves.addSubcommand(new ShowCurveCommand(workshop));
+        curves.addSubcommand(new ImportCurveCommand(workshop));
+        return curves;
     }
 
     @Override

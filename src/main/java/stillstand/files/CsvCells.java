@@ -26,12 +26,15 @@ final class CsvCells {
         return NumberOutput.toString(value, true);
     }
 
-    /** A cell that begins as a formula does gets an apostrophe in front, unless it is a number. */
+    /**
+     * A cell that begins as a formula does gets an apostrophe in front, unless it is a number; words that begin with a negative
+     * number get the typographic minus instead.
+     */
     static String safe(String cell) {
         if (cell.isEmpty() || "=+-@\t\r".indexOf(cell.charAt(0)) < 0 || isNumber(cell)) {
             return cell;
         }
-        return "'" + cell;
+        return cell.matches("-\\d[\\d.]* [^=+@]*") ? "\u2212" + cell.substring(1) : "'" + cell;
     }
 
     private static boolean isNumber(String cell) {

@@ -54,6 +54,11 @@ final class CurvePackageReader {
         ids = new HashSet<>(taken);
     }
 
+    /** Whether a curve or table may be called so. */
+    static boolean isId(String text) {
+        return ID.matcher(text).matches();
+    }
+
     /** All curves and highstand tables. */
     Loaded<CurvePackage> read(StageTable stages) {
         for (Resource resource : resources()) {
@@ -129,7 +134,7 @@ final class CurvePackageReader {
     private Optional<Resource> resource(JsonPlaces json, String at, JsonNode node) {
         int before = problems.size();
         String id = text(json, at, node, "name", "a name");
-        if (!id.isEmpty() && !ID.matcher(id).matches()) {
+        if (!id.isEmpty() && !isId(id)) {
             problems.add(json.problem(at + ".name", quote(id), "lower-case words joined by hyphens"));
         } else if (!id.isEmpty() && !ids.add(id)) {
             problems.add(json.problem(

@@ -12,6 +12,8 @@ import stillstand.study.StudyResult.HighstandUsed;
 import stillstand.uncertainty.Digits;
 import stillstand.uncertainty.Interval;
 import stillstand.uncertainty.Uncertain;
+import stillstand.uplift.FlightResult;
+import stillstand.uplift.FlightSetup;
 import stillstand.uplift.LevelAnswer;
 import stillstand.uplift.LevelAnswer.StageProbability;
 import stillstand.uplift.Quantity;
@@ -19,7 +21,8 @@ import stillstand.uplift.Rate;
 
 /**
  * {@code table1.csv}, for a paper: rates to one significant digit of their standard deviation, other computed numbers to
- * two, what the user gave as it was given.
+ * two, what the user gave as it was given. Highstand and age of a level that is tied to no single highstand are those that the
+ * flight of its site gives it, where there is one.
  */
 final class PaperTable {
     private static final int RATE_DIGITS = 1;
@@ -39,7 +42,7 @@ final class PaperTable {
                 .text(
                         "elevation_1sigma_m",
                         row -> row.ofLevel(level -> given(level.elevationMetres(), Uncertain::standardDeviation)));
-        quantity(table, "relative_sea_level", "m", LevelAnswer::relativeSeaLevelMetres);
+        quantity(table, "relative_sea_level", "m", row -> row.answer.relativeSeaLevelMetres());
         table.text("stage", row -> row.stage.map(StageProbability::highstand).orElse(""))
                 .text(
                         "stage_probability",
@@ -48,7 +51,7 @@ final class PaperTable {
                                 .orElse(""))
                 .text("sea_level_m", row -> row.ofHighstand(HighstandUsed::levelMetres))
                 .text("sea_level_1sigma_m", row -> row.ofHighstand(HighstandUsed::levelSigmaMetres));
-        quantity(table, "age", "ka", LevelAnswer::age);
+        quantity(table, "age", "ka", Row::age);
         table.text(
                         "samples_accepted",
                         row -> row.ofLevel(level -> Long.toString(level.samples().stream()
@@ -73,27 +76,39 @@ final class PaperTable {
     }
 
     private static void quantity(
-            CsvTable<Row> table, String name, String unit, Function<LevelAnswer, Optional<Quantity>> quantity) {
+            CsvTable<Row> table, String name, String unit, Function<Row, Optional<Quantity>> quantity) {
         table.text(
                         name + "_" + unit,
-                        row -> quantity.apply(row.answer)
+                        row -> quantity.apply(row)
                                 .map(found -> Digits.text(found.median(), sigma(found), OTHER_DIGITS))
                                 .orElse(""))
                 .text(
                         name + "_1sigma_" + unit,
-                        row -> quantity.apply(row.answer)
+                        row -> quantity.apply(row)
                                 .map(found -> Digits.text(sigma(found), sigma(found), OTHER_DIGITS))
                                 .orElse(""));
     }
 
     private static Row row(LevelAnswer answer, Evidence evidence, StudyResult result) {
-        Optional<StageProbability> stage =
-                answer.stages().stream().max(Comparator.comparingDouble(StageProbability::probability));
+        Optional<Level> level = evidence.level(answer.site(), answer.level());
+        Optional<FlightResult> flight = result.flight(answer.site())
+                .filter(found -> level.filter(known -> FlightSetup.isToBeMatched(known.formsAt(), known.highstand()))
+                        .isPresent());
+        Optional<StageProbability> stage = flight.isPresent()
+                ? flight.get().pairingsOf(answer.level()).stream()
+                        .map(pair -> new StageProbability(pair.highstand(), pair.probability()))
+                        .findFirst()
+                : answer.stages().stream().max(Comparator.comparingDouble(StageProbability::probability));
+        Optional<Quantity> age = answer.age().or(() -> flight.stream()
+                .flatMap(found -> found.predictedAges().stream())
+                .filter(predicted -> predicted.level().equals(answer.level()))
+                .map(FlightResult.PredictedAge::age)
+                .findFirst());
         Optional<HighstandUsed> highstand = stage.flatMap(likeliest -> result.seaLevel().highstands().stream()
                 .filter(used -> used.stage().equals(likeliest.highstand()))
                 .findFirst());
         String waiting = result.whyWaiting(answer.site(), answer.level()).orElse("");
-        return new Row(answer, evidence.level(answer.site(), answer.level()), stage, highstand, waiting);
+        return new Row(answer, level, stage, highstand, age, waiting);
     }
 
     private static String given(Uncertain number, Function<Uncertain, Double> what) {
@@ -118,6 +133,7 @@ final class PaperTable {
             Optional<Level> level,
             Optional<StageProbability> stage,
             Optional<HighstandUsed> highstand,
+            Optional<Quantity> age,
             String whyNoRate) {
         String ofLevel(Function<Level, String> what) {
             return level.map(what).orElse("");

@@ -60,8 +60,8 @@ final class ResourceFacts {
         guessedSpread = node.has("default_level_1sigma_m") ? guess() : Optional.empty();
         curve = new CurveFacts(
                 citation,
-                text("zero").orElse("present mean sea level, supposed"),
-                text("age_scale").orElse("not stated"),
+                text("zero").orElse(CurveFacts.DEFAULT_ZERO),
+                text("age_scale").orElse(CurveFacts.DEFAULT_AGE_SCALE),
                 text("spread").orElse("as the header of its table says"),
                 false,
                 number("correlation_time_ka", Double.MIN_VALUE, CurveFacts.DEFAULT_CORRELATION_TIME_KA),

@@ -4,12 +4,14 @@ import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.stream.Stream;
 import stillstand.ledger.Assumption;
 import stillstand.study.Study;
 import stillstand.study.StudyResult;
+import stillstand.uplift.FlightResult;
 import stillstand.uplift.LevelAnswer;
 import stillstand.uplift.LevelAnswer.Budget;
 import stillstand.uplift.LevelAnswer.Share;
@@ -29,6 +31,7 @@ public final class ResultFiles {
         write(folder, ResultsJson.FILE, ResultsJson.text(result));
         write(folder, "table1.csv", PaperTable.text(evidence, result));
         write(folder, "rates.csv", RatesTable.text(evidence, result));
+        write(folder, "pairings.csv", pairings(result));
         write(folder, "budget.csv", budget(result));
         write(folder, "ledger.csv", ledger(result));
     }
@@ -67,6 +70,27 @@ public final class ResultFiles {
     }
 
     private record BudgetRow(LevelAnswer level, String input, Share share) {}
+
+    /** A row for each level of a flight and each highstand it may record, and one for none. */
+    static String pairings(StudyResult result) {
+        List<PairingRow> rows = new ArrayList<>();
+        for (FlightResult flight : result.flights()) {
+            for (FlightResult.Unmatched level : flight.unmatched()) {
+                flight.pairingsOf(level.level())
+                        .forEach(pair -> rows.add(new PairingRow(
+                                flight.site(), level.level(), pair.highstand(), pair.probability())));
+                rows.add(new PairingRow(flight.site(), level.level(), "none", level.probability()));
+            }
+        }
+        return new CsvTable<>(rows)
+                .text("site", PairingRow::site)
+                .text("level", PairingRow::level)
+                .text("highstand", PairingRow::highstand)
+                .number("probability", row -> Optional.of(row.probability))
+                .write();
+    }
+
+    private record PairingRow(String site, String level, String highstand, double probability) {}
 
     static String ledger(StudyResult result) {
         return new CsvTable<>(result.ledger())

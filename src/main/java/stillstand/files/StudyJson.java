@@ -32,7 +32,6 @@ public final class StudyJson {
     /** The name of the file. */
     public static final String NAME = "study.json";
 
-    private static final String OURS = "Stillstand's default";
     private static final StudySchema SCHEMA = StudySchema.load();
 
     private final JsonPlaces json;
@@ -61,7 +60,7 @@ public final class StudyJson {
             StudySettings settings = reader.settings();
             problems.addAll(reader.problems);
             if (problems.isEmpty()) {
-                return Loaded.of(new StatedSettings(file.name(), settings, reader.defaults, json.places()));
+                return Loaded.of(new StatedSettings(file.name(), settings, reader.defaults, json.places(), Set.of()));
             }
         }
         return Loaded.failed(problems.stream().sorted().toList());
@@ -201,11 +200,10 @@ public final class StudyJson {
                 .orElse(new Recording.Beta(4, 2.5));
     }
 
-    private static Decay decay(Keys keys) {
-        if (keys.text("recording_decay_ka").filter("none"::equals).isPresent()) {
-            return new Decay.None();
-        }
-        return keys.number("recording_decay_ka").<Decay>map(Decay.Fixed::new).orElse(new Decay.Marginalised());
+    private static Optional<Decay> decay(Keys keys) {
+        Optional<Decay> word = keys.text("recording_decay_ka")
+                .map(text -> text.equals("none") ? new Decay.None() : new Decay.Marginalised());
+        return word.isPresent() ? word : keys.number("recording_decay_ka").map(Decay.Fixed::new);
     }
 
     private static Optional<Strays> strays(Keys keys) {
@@ -234,7 +232,7 @@ public final class StudyJson {
     }
 
     private <T> T assumed(String keyPath, T value) {
-        defaults.add(new Assumption(keyPath + " is not stated", String.valueOf(value), OURS, "all"));
+        defaults.add(StatedSettings.unstated(keyPath, value));
         return value;
     }
 

@@ -122,11 +122,13 @@ public final class StudyJsonWriter {
         } else if (matching.recordingProbability() instanceof Recording.Beta beta) {
             keys.put("recording_probability", Map.of("beta", List.of(beta.alpha(), beta.beta())));
         }
-        if (matching.recordingDecay() instanceof Decay.Fixed fixed) {
-            keys.put("recording_decay_ka", fixed.timeKa());
-        } else {
-            keys.put("recording_decay_ka", matching.recordingDecay() instanceof Decay.None ? "none" : "marginalised");
-        }
+        matching.recordingDecay().ifPresent(decay -> {
+            if (decay instanceof Decay.Fixed fixed) {
+                keys.put("recording_decay_ka", fixed.timeKa());
+            } else {
+                keys.put("recording_decay_ka", decay instanceof Decay.None ? "none" : "marginalised");
+            }
+        });
         matching.expectedStrays().ifPresent(strays -> {
             if (strays instanceof Strays.Fixed fixed) {
                 keys.put("expected_strays", fixed.number());

@@ -8,6 +8,7 @@ import stillstand.ledger.Assumption;
 import stillstand.ledger.InputWarning;
 import stillstand.study.StudyResult;
 import stillstand.uplift.BetweenLevels;
+import stillstand.uplift.FlightResult;
 import stillstand.uplift.LevelAnswer;
 import stillstand.uplift.LevelAnswer.MonteCarlo;
 import stillstand.uplift.LevelAnswer.SampleAnswer;
@@ -66,6 +67,8 @@ public final class TerminalReport {
         long rates = levels.stream().filter(level -> level.rate().isPresent()).count();
         lines.add("");
         say(name + ": " + Wording.counted(levels.size(), "level") + ", " + rates + " with a rate");
+        result.flight(name)
+                .ifPresent(flight -> new FlightReport(flight).opening().forEach(line -> say("  " + line)));
         for (LevelAnswer level : levels) {
             level.bound()
                     .ifPresent(bound -> level.rate()
@@ -73,6 +76,7 @@ public final class TerminalReport {
                                     rate -> say("  " + level.level() + " moves " + Wording.bound(bound, rate) + ".")));
         }
         table(levels).lines().forEach(line -> lines.add("  " + Wording.cut(line, WIDTH - 2)));
+        result.flight(name).ifPresent(this::flight);
         levels.forEach(this::remarks);
         for (BetweenLevels between : result.intervals()) {
             if (between.site().equals(name)) {
@@ -80,6 +84,12 @@ public final class TerminalReport {
                         + Wording.rate(between.rate()) + " m/kyr, 95 % " + Wording.interval95(between.rate()) + ".");
             }
         }
+    }
+
+    private void flight(FlightResult flight) {
+        FlightReport report = new FlightReport(flight);
+        report.pairings().lines().forEach(line -> lines.add("  " + Wording.cut(line, WIDTH - 2)));
+        report.closing().forEach(line -> say("  " + line));
     }
 
     private static PlainTable table(List<LevelAnswer> levels) {
@@ -120,6 +130,9 @@ public final class TerminalReport {
             sample.whyNoRate()
                     .ifPresent(reason -> say("  " + level.level() + ", " + sample.sample() + ": " + reason + "."));
         }
+        level.coralsTogether()
+                .ifPresent(rate -> say("  The corals of " + level.level() + " together, each at its own age: "
+                        + Wording.rate(rate) + " m/kyr, 95 % " + Wording.interval95(rate) + "."));
         level.agreement()
                 .filter(agreement -> agreement.p() < DATES_DISAGREE_BELOW)
                 .ifPresent(agreement -> say("  The dates of " + level.level() + " disagree: so large a scatter comes by"

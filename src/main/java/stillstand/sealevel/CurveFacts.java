@@ -30,6 +30,11 @@ public record CurveFacts(
     /** Age error where a curve states none, as of the scales tuned to the LR04 stack. */
     public static final double DEFAULT_CURVE_AGE_SIGMA_KA = 3;
 
+    /** Zero where a curve states none. */
+    public static final String DEFAULT_ZERO = "present mean sea level, supposed";
+    /** Age scale where a curve states none. */
+    public static final String DEFAULT_AGE_SCALE = "not stated";
+
     public CurveFacts {
         if (!(correlationTimeKa > 0 && correlationTimeKa < Double.POSITIVE_INFINITY)) {
             throw new IllegalArgumentException("correlationTimeKa must be above 0 but is " + correlationTimeKa);

@@ -43,8 +43,8 @@ final class LevelsTable {
                     LOWERING,
                     Column.plain("highstand"),
                     Column.plain("terrace").notUsedYet(),
-                    Column.plain("certainty").notUsedYet(),
-                    Column.plain("order").notUsedYet(),
+                    Column.plain("certainty"),
+                    Column.plain("order"),
                     Column.plain("coseismic_step_m"),
                     Column.plain("note")),
             List.of("site", "level", "elevation_m"));
@@ -70,6 +70,8 @@ final class LevelsTable {
      * @param elevationMetres as surveyed; absent where it cannot be read
      * @param formsAt when it formed
      * @param highstand what is said of its highstand
+     * @param doubtful whether it may well be no shoreline
+     * @param order its place in the flight, if given
      * @param toLevel makes the level of its samples; absent where the row has problems
      */
     record LevelRow(
@@ -78,6 +80,8 @@ final class LevelsTable {
             Optional<Uncertain> elevationMetres,
             FormsAt formsAt,
             StageChoice highstand,
+            boolean doubtful,
+            Optional<Integer> order,
             Optional<Function<List<DatedSample>, Level>> toLevel) {}
 
     /**
@@ -145,7 +149,7 @@ final class LevelsTable {
                 row.own());
         boolean whole = row.isGood() && elevation.isPresent() && !key.level().isEmpty();
         return new LevelRow(
-                key, row, elevation, formsAt, highstand, Optional.of(toLevel).filter(make -> whole));
+                key, row, elevation, formsAt, highstand, doubtful, order, Optional.of(toLevel).filter(make -> whole));
     }
 
     private IndicativeMeaning meaning(RowReader row, String where, FormsAt formsAt) {

@@ -6,6 +6,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import stillstand.ledger.Assumption;
+import stillstand.ledger.InputWarning;
 import stillstand.sealevel.CurveFacts;
 import stillstand.sealevel.HighstandEntry;
 import stillstand.sealevel.HighstandOptions;
@@ -18,7 +19,7 @@ import stillstand.study.StudySettings.WeightedCurve;
 
 /** What the settings and the library make of past sea level: the curves and highstands in use. */
 final class SeaLevelCheck {
-    private static final String CURVES = "sea_level.curves";
+    private static final String CURVES = StatedSettings.CURVES;
     private static final String OVERRIDES = "sea_level.highstands.overrides";
     private static final String TABLE = "sea_level.highstands.table";
 
@@ -55,7 +56,25 @@ final class SeaLevelCheck {
             }
         }
         choice.highstandTable().flatMap(id -> fromTable(id, curves)).ifPresent(cases::add);
+        choice.highstandTable().ifPresent(this::tellWhatACurveLeaves);
         return cases;
+    }
+
+    /** A curve asked for on the command line does less than one would think where highstands come from a table. */
+    private void tellWhatACurveLeaves(String table) {
+        if (stated.isReplaced(CURVES)) {
+            String left = "levels tied to highstands keep those of table " + quote(table);
+            findings.add(new InputWarning(
+                    StatedSettings.COMMAND_LINE,
+                    0,
+                    0,
+                    CURVES + ": a curve is read only where levels and corals use their own ages; " + left));
+            findings.add(new Assumption(
+                    "a curve from the command line does not change pinned levels",
+                    left,
+                    "the study takes its highstands from a table",
+                    "all"));
+        }
     }
 
     /** The account of sea level that replaces the study's at one site; absent where it has problems. */
@@ -63,6 +82,9 @@ final class SeaLevelCheck {
         Optional<SeaLevelCurve> curve = library.curve(row.text("local_curve")).map(this::underSettings);
         if (curve.isEmpty()) {
             return Optional.empty();
+        }
+        if (stated.isReplaced(CURVES)) {
+            row.warn("local_curve", "the site keeps this curve, whatever the command line says");
         }
         if (choice.highstandTable().isPresent()) {
             return cases.stream()

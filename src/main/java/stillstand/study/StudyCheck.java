@@ -76,6 +76,7 @@ public final class StudyCheck {
                 .map(table -> new SamplesTable(library, input.ages(), findings).read(table, names, byName(levels)))
                 .orElse(List.of());
         Plausibility.check(sites, levels, samples, at);
+        FlightCheck.check(sites, levels, at);
 
         List<InputWarning> warnings = sorted(findings.warnings());
         if (findings.problemCount() > 0 || input.settings().isEmpty()) {
@@ -93,7 +94,7 @@ public final class StudyCheck {
 
     private void checkSettings(StatedSettings stated) {
         stated.defaults().forEach(findings::add);
-        warnUnused(stated, "matching", stated.states("matching"));
+        warnUnused(stated, "matching.trace_probability", stated.states("matching.trace_probability"));
         warnUnused(stated, "screening", stated.states("screening"));
         warnUnused(stated, "rate.changes", stated.settings().rate().changes() != Changes.NONE);
     }

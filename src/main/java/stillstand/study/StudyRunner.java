@@ -11,17 +11,22 @@ import stillstand.ledger.Assumption;
 import stillstand.ledger.RunCancelledException;
 import stillstand.ledger.RunMonitor;
 import stillstand.shoreline.Level;
+import stillstand.shoreline.Site;
 import stillstand.uncertainty.DrawStreams;
 import stillstand.uplift.BetweenLevels;
 import stillstand.uplift.DateRules;
 import stillstand.uplift.DrawPlan;
 import stillstand.uplift.FlightResult;
+import stillstand.uplift.FlightSetup;
+import stillstand.uplift.Flights;
 import stillstand.uplift.ImpliedSeaLevel;
 import stillstand.uplift.LevelAnswer;
 import stillstand.uplift.LevelAnswers;
 import stillstand.uplift.LevelRates;
 import stillstand.uplift.LevelResidual;
+import stillstand.uplift.MatchingRules;
 import stillstand.uplift.SeaLevelBasis;
+import stillstand.uplift.SharedPriors;
 import stillstand.uplift.SiteRelations;
 
 /**
@@ -30,11 +35,13 @@ import stillstand.uplift.SiteRelations;
  */
 public final class StudyRunner {
     private final Study study;
+    private final ExecutorService executor;
     private final RunMonitor monitor;
     private final DrawStreams streams;
     private final DrawPlan plan;
     private final DateRules dates;
     private final LevelAnswers answers;
+    private final Flights matching;
 
     private final List<LevelAnswer> levels = new ArrayList<>();
     private final List<StudyResult.Waiting> waiting = new ArrayList<>();
@@ -47,6 +54,7 @@ public final class StudyRunner {
 
     private StudyRunner(Study study, ExecutorService executor, RunMonitor monitor) {
         this.study = study;
+        this.executor = executor;
         this.monitor = monitor;
         StudySettings settings = study.settings();
         streams = new DrawStreams(settings.seed());
@@ -64,6 +72,38 @@ public final class StudyRunner {
                 executor,
                 settings.indicativeRange(),
                 dates);
+        matching = new Flights(
+                streams, executor, monitor, rules(settings.matching()), settings.indicativeRange());
+    }
+
+    /** Settings of matching as the engine takes them: what is not stated stays its own default. */
+    private static MatchingRules rules(StudySettings.Matching settings) {
+        return new MatchingRules(
+                settings.recordingProbability() instanceof StudySettings.Recording.Beta beta
+                        ? new SharedPriors.Recording.BetaPrior(beta.alpha(), beta.beta())
+                        : new SharedPriors.Recording.Known(
+                                ((StudySettings.Recording.Fixed) settings.recordingProbability()).probability()),
+                settings.recordingDecay().map(StudyRunner::decaysKa),
+                settings.expectedStrays().map(StudyRunner::strays),
+                settings.strayAgeMaximumKa(),
+                settings.wrongDateProbability().stated()
+                        ? Optional.of(settings.wrongDateProbability().value())
+                        : Optional.empty());
+    }
+
+    private static List<Double> decaysKa(StudySettings.Decay decay) {
+        if (decay instanceof StudySettings.Decay.Fixed fixed) {
+            return List.of(fixed.timeKa());
+        }
+        return decay instanceof StudySettings.Decay.None
+                ? List.of(Double.POSITIVE_INFINITY)
+                : SharedPriors.DEFAULT_DECAYS_KA;
+    }
+
+    private static SharedPriors.Strays strays(StudySettings.Strays strays) {
+        return strays instanceof StudySettings.Strays.GammaMean gamma
+                ? new SharedPriors.Strays.GammaPrior(gamma.mean())
+                : new SharedPriors.Strays.Known(((StudySettings.Strays.Fixed) strays).number());
     }
 
     /**
@@ -113,7 +153,7 @@ public final class StudyRunner {
                 residuals,
                 study.warnings(),
                 failures,
-                List.copyOf(ledger));
+                JoinedLedger.of(ledger));
     }
 
     private void runSite(SitePlan plan, int allLevels) {
@@ -134,10 +174,41 @@ public final class StudyRunner {
             throw new RunCancelledException();
         }
         SiteRelations relations =
-                SiteRelations.of(plan.site(), basis, study.settings().indicativeRange(), dates, streams, this.plan);
+                SiteRelations.of(plan.site(), basis, study.settings().indicativeRange(), dates, streams, this.plan, executor);
         intervals.addAll(relations.intervals());
         implied.addAll(relations.impliedSeaLevel());
         ledger.addAll(relations.assumptions());
+        runFlight(plan, basis, (double) levels.size() / Math.max(1, allLevels));
+    }
+
+    private void runFlight(SitePlan plan, SeaLevelBasis basis, double fraction) {
+        Site site = plan.site();
+        if (!FlightSetup.isNeeded(site)) {
+            return;
+        }
+        Optional<String> whyNot = FlightSetup.whyNot(site, basis);
+        if (whyNot.isPresent()) {
+            sayWaiting(site, "no flight is matched: " + whyNot.get());
+            return;
+        }
+        monitor.step(site.name() + " / flight", fraction);
+        Flights.Answered answered = matching.of(site, basis, plan.prior());
+        flights.add(answered.flight());
+        residuals.addAll(answered.residuals());
+        ledger.addAll(answered.assumptions());
+        sayWaiting(site, "no date of its own and no single highstand: the flight of the site says its highstand and age");
+    }
+
+    /** Levels that wait for the flight learn what came of it. */
+    private void sayWaiting(Site site, String reason) {
+        for (Level level : site.levels()) {
+            boolean matched = FlightSetup.isToBeMatched(level.formsAt(), level.highstand());
+            waiting.replaceAll(waits -> matched
+                            && waits.site().equals(site.name())
+                            && waits.level().equals(level.name())
+                    ? new StudyResult.Waiting(site.name(), level.name(), reason)
+                    : waits);
+        }
     }
 
     /** What every study rests on, whatever its levels. */

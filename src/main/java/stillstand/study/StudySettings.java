@@ -103,7 +103,7 @@ public record StudySettings(
      * How levels are matched to highstands (see {@code study.json} in the README for each).
      *
      * @param recordingProbability fixed, or a Beta prior
-     * @param recordingDecay of the recording probability with age
+     * @param recordingDecay of the recording probability with age; absent = summed over, or none under a complete table
      * @param expectedStrays fixed, or a Gamma prior's mean; absent = a Gamma prior of mean a tenth of the levels
      * @param strayAgeMaximumKa oldest age a stray may have
      * @param wrongDateProbability that a date says nothing of its level
@@ -111,7 +111,7 @@ public record StudySettings(
      */
     public record Matching(
             Recording recordingProbability,
-            Decay recordingDecay,
+            Optional<Decay> recordingDecay,
             Optional<Strays> expectedStrays,
             double strayAgeMaximumKa,
             Setting wrongDateProbability,

@@ -14,9 +14,12 @@ import java.util.Arrays;
  * <p>Not safe for use by several threads at once.
  */
 public final class DrawHistogram {
-    static final int CELLS = 1 << 12;
+    static final int CELLS = 6 << 10;
 
-    /** The range leaves out this part of the pilot draws on either side: heavy tails must not widen the cells. */
+    /** Cells between the quantiles of the pilot that set the range; the others stand beyond them, half on either side. */
+    private static final int PILOT_CELLS = 4 << 10;
+
+    /** These quantiles leave out so much of the pilot draws on either side: heavy tails must not widen the cells. */
     private static final double PILOT_TAIL = 0.005;
 
     private static final double HALF = CELLS / 2.0;
@@ -57,12 +60,23 @@ public final class DrawHistogram {
     public static DrawHistogram forDrawsLike(SortedDraws sorted) {
         double low = sorted.quantile(PILOT_TAIL);
         double high = sorted.quantile(1 - PILOT_TAIL);
-        return new DrawHistogram(low + (high - low) / 2, (high - low) / CELLS);
+        return new DrawHistogram(low + (high - low) / 2, (high - low) / PILOT_CELLS);
     }
 
     /** An empty histogram with the range of this one. */
     public DrawHistogram emptyCopy() {
         return new DrawHistogram(middle, cellWidth);
+    }
+
+    /** Forgets all draws; the range stays. */
+    public void clear() {
+        Arrays.fill(cells, 0);
+        beyond.clear();
+        count = 0;
+        weight = 0;
+        squaredWeight = 0;
+        sum = 0;
+        squaredSum = 0;
     }
 
     /**
@@ -105,6 +119,12 @@ public final class DrawHistogram {
             throw new IllegalArgumentException(
                     "draws and weights must be as many but are " + draws.length + " and " + weights.length);
         }
+        double[] masses = cells;
+        // sums in local variables: fields would be written to memory at every draw
+        double weightOfBlock = 0;
+        double squaredWeightOfBlock = 0;
+        double sumOfBlock = 0;
+        double squaresOfBlock = 0;
         for (int i = 0; i < draws.length; i++) {
             double draw = draws[i];
             double w = weights[i];
@@ -118,15 +138,20 @@ public final class DrawHistogram {
             double distance = draw - middle;
             double cell = distance * cellsPerUnit + HALF;
             if (cell >= 0 && cell < CELLS) {
-                cells[(int) cell] += w;
+                masses[(int) cell] += w;
             } else {
                 beyond.add(draw, w);
             }
-            weight += w;
-            squaredWeight += w * w;
-            sum += w * distance;
-            squaredSum += w * distance * distance;
+            double moment = w * distance;
+            weightOfBlock += w;
+            squaredWeightOfBlock += w * w;
+            sumOfBlock += moment;
+            squaresOfBlock += moment * distance;
         }
+        weight += weightOfBlock;
+        squaredWeight += squaredWeightOfBlock;
+        sum += sumOfBlock;
+        squaredSum += squaresOfBlock;
         count += draws.length;
     }
 
@@ -177,6 +202,34 @@ public final class DrawHistogram {
     public double sd() {
         double offset = sum / weight;
         return Math.sqrt(Math.max(0, squaredSum / weight - offset * offset));
+    }
+
+    /**
+     * Quantiles as those of the {@link #distribution}, without making it where they all lie inside the range: for the many
+     * blocks of a run.
+     *
+     * @param probabilities rising, strictly between 0 and 1
+     * @throws IllegalStateException if no draw of any weight was added
+     */
+    double[] quantiles(double... probabilities) {
+        double[] quantiles = new double[probabilities.length];
+        double below = beyond.weightBelow(middle);
+        int cell = -1;
+        double upTo = below;
+        for (int q = 0; q < quantiles.length; q++) {
+            double target = probabilities[q] * weight;
+            while (upTo < target && cell + 1 < CELLS) {
+                cell++;
+                below = upTo;
+                upTo += cells[cell];
+            }
+            if (cell < 0 || !(upTo >= target)) {
+                DrawDistribution all = distribution();
+                return Arrays.stream(probabilities).map(all::quantile).toArray();
+            }
+            quantiles[q] = edge(cell) + (target - below) / (upTo - below) * cellWidth;
+        }
+        return quantiles;
     }
 
     private CumulativeCurve curve() {
@@ -239,6 +292,18 @@ public final class DrawHistogram {
             for (int i = 0; i < other.size; i++) {
                 add(other.values[i], other.weights[i]);
             }
+        }
+
+        void clear() {
+            size = 0;
+        }
+
+        double weightBelow(double value) {
+            double sum = 0;
+            for (int i = 0; i < size; i++) {
+                sum += values[i] < value ? weights[i] : 0;
+            }
+            return sum;
         }
 
         /** Values by rising order, and their weights. */

@@ -101,10 +101,16 @@ public final class StandardNormal {
         private static final int PIECES_PER_OCTAVE_LOG2 = 7;
         private static final int OCTAVES = 14;
         private static final int SHIFT = 52 - PIECES_PER_OCTAVE_LOG2;
-        private static final int LAST = (int) (Double.doubleToRawLongBits(0.5) >>> SHIFT);
+        private static final long HALF = Double.doubleToRawLongBits(0.5);
+        private static final int LAST = (int) (HALF >>> SHIFT);
         private static final int FIRST = LAST - (OCTAVES << PIECES_PER_OCTAVE_LOG2);
         private static final int LENGTH = LAST - FIRST + 1;
-        /** Four coefficients a piece, by rising powers of the distance from its start. The last piece is 1/2 alone. */
+        private static final long BITS_OF_DISTANCE = (1L << SHIFT) - 1;
+        private static final long ONE = Double.doubleToRawLongBits(1);
+        /**
+         * Four coefficients a piece, by rising powers of the distance from its start as a part of the start of its octave. The
+         * last piece is 1/2 alone.
+         */
         private static final double[] COEFFICIENTS = new double[4 * LENGTH];
 
         static {
@@ -135,26 +141,31 @@ public final class StandardNormal {
                 }
                 power[0] = difference[i] - offset[i] * power[0];
             }
-            System.arraycopy(power, 0, COEFFICIENTS, at, 4);
+            double scale = 1;
+            for (int k = 0; k < 4; k++) {
+                COEFFICIENTS[at + k] = power[k] * scale;
+                scale *= width * (1 << PIECES_PER_OCTAVE_LOG2);
+            }
         }
 
         static void toQuantiles(double[] column) {
             for (int i = 0; i < column.length; i++) {
                 double probability = column[i];
-                double tail = Math.min(probability, 1 - probability);
-                long bits = Double.doubleToRawLongBits(tail);
+                // no branch on the half: it would be mispredicted every other time
+                double fromHalf = probability - 0.5;
+                long bits = Double.doubleToRawLongBits(0.5 - Math.abs(fromHalf));
                 int piece = (int) (bits >>> SHIFT) - FIRST;
                 if (piece < 0 || piece >= LENGTH) {
                     column[i] = beyondTable(probability);
                     continue;
                 }
-                double distance = tail - Double.longBitsToDouble(bits >>> SHIFT << SHIFT);
+                double distance = Double.longBitsToDouble(ONE | (bits & BITS_OF_DISTANCE)) - 1;
                 int c = 4 * piece;
                 double value = COEFFICIENTS[c]
                         + distance
                                 * (COEFFICIENTS[c + 1]
                                         + distance * (COEFFICIENTS[c + 2] + distance * COEFFICIENTS[c + 3]));
-                column[i] = probability < 0.5 ? value : -value;
+                column[i] = Math.copySign(value, fromHalf);
             }
         }
 

@@ -31,11 +31,17 @@ public record CauchyPrior(double location, double scale, double fromMetresPerKyr
     @Override
     public void weigh(double[] ratesMetresPerKyr, double[] weights) {
         double peak = 1 / (scale * (angle(toMetresPerKyr) - angle(fromMetresPerKyr)));
+        double perScale = 1 / scale;
         for (int i = 0; i < weights.length; i++) {
             double rate = ratesMetresPerKyr[i];
-            double distance = (rate - location) / scale;
-            boolean possible = rate >= fromMetresPerKyr && rate <= toMetresPerKyr;
-            weights[i] *= possible ? peak / (1 + distance * distance) : 0;
+            double distance = (rate - location) * perScale;
+            weights[i] *= peak / (1 + distance * distance);
+        }
+        for (int i = 0; i < weights.length; i++) {
+            double rate = ratesMetresPerKyr[i];
+            if (!(rate >= fromMetresPerKyr && rate <= toMetresPerKyr)) {
+                weights[i] = 0;
+            }
         }
     }
 

@@ -12,7 +12,8 @@ import org.apache.commons.math3.linear.RealVector;
  *
  * <p>With residuals {@code r_k = z_k - e(t_k) - U t_k} of heights {@code z} of the former sea (depth of growth in them) the
  * likelihood of the rate is normal with covariance
- * {@code diag(sigma_z^2 + (U + e'_k)^2 sigma_t^2) + sigma_shared^2 + sigma_k sigma_l exp(-|t_k - t_l| / correlation time)}.
+ * {@code diag(sigma_z^2 + (U + e'_k)^2 sigma_t^2) + sigma_shared^2 + e'_k e'_l sigma_C^2
+ * + sigma_k sigma_l exp(-|t_k - t_l| / correlation time)}, where {@code sigma_C} is the error of the curve's ages.
  * Its determinant depends on the rate and is kept. Depths enter by their moments: a skewed depth is answered by each coral's
  * own rate.
  */
@@ -55,28 +56,34 @@ public final class CoralsTogether {
      * Posterior of the common rate.
      *
      * @param corals two or more
-     * @param sharedSigmaMetres of the offset of sea level that all readings share, 0 or more
+     * @param sharedSigmaMetres of what all readings share (offset of sea level, datum of the site), 0 or more
+     * @param curveAgeSigmaKa of the error of the curve's ages, shared too, 0 or more
      * @param correlationTimeKa of the curve's own error, above 0
      * @param prior of the rate
      * @throws IllegalArgumentException if there are fewer than two corals
      */
     public static RatePosterior rate(
-            List<Coral> corals, double sharedSigmaMetres, double correlationTimeKa, RatePrior prior) {
+            List<Coral> corals,
+            double sharedSigmaMetres,
+            double curveAgeSigmaKa,
+            double correlationTimeKa,
+            RatePrior prior) {
         if (corals.size() < 2) {
             throw new IllegalArgumentException("corals must be two or more but are " + corals.size());
         }
-        double[] reach = reach(corals, sharedSigmaMetres, prior);
+        double[] reach = reach(corals, sharedSigmaMetres, curveAgeSigmaKa, prior);
         double[] rates = new double[NODES];
         double[] logLikelihoods = new double[NODES];
         for (int i = 0; i < NODES; i++) {
             rates[i] = reach[0] + i * (reach[1] - reach[0]) / (NODES - 1);
-            logLikelihoods[i] = logLikelihood(corals, sharedSigmaMetres, correlationTimeKa, rates[i]);
+            logLikelihoods[i] = logLikelihood(corals, sharedSigmaMetres, curveAgeSigmaKa, correlationTimeKa, rates[i]);
         }
         return RatePosterior.of(rates, logLikelihoods, prior);
     }
 
     /** Rates worth looking at: around those of the single corals, within the prior. */
-    private static double[] reach(List<Coral> corals, double sharedSigmaMetres, RatePrior prior) {
+    private static double[] reach(
+            List<Coral> corals, double sharedSigmaMetres, double curveAgeSigmaKa, RatePrior prior) {
         double low = Double.POSITIVE_INFINITY;
         double high = Double.NEGATIVE_INFINITY;
         for (Coral coral : corals) {
@@ -84,7 +91,8 @@ public final class CoralsTogether {
             double ofAge = (rate + coral.slopeMetresPerKa()) * coral.ageSigmaKa();
             double sigma = Math.hypot(
                             Math.hypot(coral.heightSigmaMetres(), coral.seaSigmaMetres()),
-                            Math.hypot(sharedSigmaMetres, ofAge))
+                            Math.hypot(
+                                    Math.hypot(sharedSigmaMetres, coral.slopeMetresPerKa() * curveAgeSigmaKa), ofAge))
                     / coral.ageKa();
             low = Math.min(low, rate - REACH_IN_SIGMAS * sigma);
             high = Math.max(high, rate + REACH_IN_SIGMAS * sigma);
@@ -95,7 +103,11 @@ public final class CoralsTogether {
     }
 
     private static double logLikelihood(
-            List<Coral> corals, double sharedSigmaMetres, double correlationTimeKa, double rateMetresPerKyr) {
+            List<Coral> corals,
+            double sharedSigmaMetres,
+            double curveAgeSigmaKa,
+            double correlationTimeKa,
+            double rateMetresPerKyr) {
         int n = corals.size();
         RealMatrix covariance = new Array2DRowRealMatrix(n, n);
         RealVector residuals = new ArrayRealVector(n);
@@ -109,6 +121,7 @@ public final class CoralsTogether {
                         k,
                         l,
                         sharedSigmaMetres * sharedSigmaMetres
+                                + one.slopeMetresPerKa() * other.slopeMetresPerKa() * curveAgeSigmaKa * curveAgeSigmaKa
                                 + one.seaSigmaMetres()
                                         * other.seaSigmaMetres()
                                         * Math.exp(-apartKa / correlationTimeKa));

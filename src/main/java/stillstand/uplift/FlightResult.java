@@ -135,8 +135,8 @@ public record FlightResult(
      *
      * @param highstand its label
      * @param ageKa its age
-     * @param heightMetres where its shoreline stands, or would stand, today
-     * @param heightSigmaMetres standard deviation of that
+     * @param heightMetres where its shoreline stands, or would stand, today: the median
+     * @param heightSigmaMetres half the 68 % interval of that
      * @param recorded some level records it
      * @param unseen it stands in the surveyed range and no level records it
      * @param reoccupied a younger sea stood as high or higher, and took it

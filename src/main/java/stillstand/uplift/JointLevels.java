@@ -153,18 +153,17 @@ final class JointLevels {
     private void drawHighstand(SeaAtLevel.AtHighstand stand, Shared shared, int[] chosen, int index, Drawn drawn) {
         Highstand row = stand.highstand();
         String key = "highstand / " + row.source() + " / " + row.stage() + " / " + row.ageKa();
-        double[] rowLevel = shared.probabilities(key + " / level").clone();
-        row.level().toQuantiles(rowLevel);
-        double[] local = shared.deviates("local / " + coast + " / " + row.stage());
-        double[] offset = shared.deviates("sea level / offset");
-        double[] factor = shared.deviates("sea level / interstadials");
-        double[] curveAge = shared.deviates("sea level / curve age");
-        double[] ownAge = shared.deviates(key + " / age");
+        double[] rowLevel = shared.values(key + " / level", row.level());
         double offsetMetres = row.takesOffset() ? stand.shared().offsetSigmaMetres() : 0;
         double factorMetres = row.takesInterstadialFactor() ? stand.shared().interstadialSigmaMetres() : 0;
         double sharedAgeKa = row.takesCurveAgeError() ? stand.shared().sharedAgeSigmaKa() : 0;
         double ownAgeKa = row.ownAgeSigmaKa(stand.shared());
         double allAgeKa = Math.hypot(sharedAgeKa, ownAgeKa);
+        double[] local = shared.deviates("local / " + coast + " / " + row.stage(), row.localOffsetSigmaMetres());
+        double[] offset = shared.deviates("sea level / offset", offsetMetres);
+        double[] factor = shared.deviates("sea level / interstadials", factorMetres);
+        double[] curveAge = shared.deviates("sea level / curve age", sharedAgeKa);
+        double[] ownAge = shared.deviates(key + " / age", ownAgeKa);
         double[] ageDeviates = new double[N];
         for (int i = 0; i < N; i++) {
             if (chosen[i] == index) {
@@ -265,15 +264,25 @@ final class JointLevels {
     /** Columns of one block that more than one level may ask for: each is drawn once. */
     private final class Shared {
         private final int block;
-        private final Map<String, double[]> probabilities = new HashMap<>();
+        private final double[] zeros = new double[N];
+        private final Map<String, double[]> values = new HashMap<>();
         private final Map<String, double[]> deviates = new HashMap<>();
 
         Shared(int block) {
             this.block = block;
         }
 
-        double[] probabilities(String key) {
-            return probabilities.computeIfAbsent(key, k -> column(k, block));
+        double[] values(String key, Uncertain number) {
+            return values.computeIfAbsent(key, k -> {
+                double[] drawn = column(k, block);
+                number.toQuantiles(drawn);
+                return drawn;
+            });
+        }
+
+        /** Standard normal numbers, or zeros where they would be multiplied by 0 anyway. */
+        double[] deviates(String key, double sigma) {
+            return sigma == 0 ? zeros : deviates(key);
         }
 
         double[] deviates(String key) {

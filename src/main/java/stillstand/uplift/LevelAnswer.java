@@ -19,6 +19,7 @@ import java.util.Optional;
  * @param budget share of each group of inputs
  * @param monteCarlo how well the draws have settled
  * @param samples its samples
+ * @param coralsTogether one rate for its corals at their own ages, what their readings share kept shared; absent below two
  * @param agreement of its dates with one another
  */
 public record LevelAnswer(
@@ -35,6 +36,7 @@ public record LevelAnswer(
         Optional<Budget> budget,
         Optional<MonteCarlo> monteCarlo,
         List<SampleAnswer> samples,
+        Optional<Rate> coralsTogether,
         Optional<Agreement> agreement) {
     public LevelAnswer {
         stages = List.copyOf(stages);

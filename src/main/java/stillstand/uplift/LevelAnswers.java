@@ -10,6 +10,7 @@ import java.util.concurrent.Future;
 import stillstand.dating.Replicates;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.RunCancelledException;
+import stillstand.sealevel.SeaLevelCurve;
 import stillstand.shoreline.DatedSample;
 import stillstand.shoreline.FormerSeaLevel;
 import stillstand.shoreline.HeightTerm;
@@ -26,6 +27,8 @@ import stillstand.uncertainty.Uncertain;
 public final class LevelAnswers {
     private static final int SCRAMBLES_OF_A_BUDGET = 8;
     private static final double SUPPOSED_CUT = 1e-3;
+    /** A height known exactly still needs some spread in a covariance. */
+    private static final double LEAST_SIGMA_METRES = 1e-3;
 
     private final LevelRates rates;
     private final DrawStreams streams;
@@ -84,6 +87,7 @@ public final class LevelAnswers {
         for (DatedSample sample : level.samples()) {
             samples.add(ofSample(site, sample, basis, prior, where));
         }
+        Optional<Rate> together = coralsTogether(site, level, basis, prior);
         Optional<LevelAnswer.Agreement> agreement = agreement(level);
         if (found.explanations().isEmpty()) {
             LevelAnswer waiting = new LevelAnswer(
@@ -100,6 +104,7 @@ public final class LevelAnswers {
                     Optional.empty(),
                     Optional.empty(),
                     samples,
+                    together,
                     agreement);
             return new Answered(waiting, Optional.of(found.whyNone()), assumptions);
         }
@@ -127,6 +132,7 @@ public final class LevelAnswers {
                 joined(budget).filter(shares -> outcome.rate().sd().isPresent()),
                 Optional.of(outcome.monteCarlo()),
                 samples,
+                together,
                 agreement);
         return new Answered(answer, Optional.empty(), assumptions);
     }
@@ -226,6 +232,41 @@ public final class LevelAnswers {
         LevelRates.Outcome outcome =
                 rates.of(where + " / sample " + sample.name(), height, new Exact(0), List.of(sea), prior);
         return new LevelAnswer.SampleAnswer(sample.name(), age, Optional.of(outcome.rate()), Optional.empty());
+    }
+
+    /** One rate for the corals that a curve can be read for; the datum of the site is one of the things they share. */
+    private static Optional<Rate> coralsTogether(Site site, Level level, SeaLevelBasis basis, RatePrior prior) {
+        List<CoralsTogether.Coral> corals = new ArrayList<>();
+        for (DatedSample sample : level.samples()) {
+            if (whyNoRate(sample, basis).isEmpty()) {
+                Uncertain ageKa = sample.ageKa().orElseThrow();
+                Uncertain elevation = sample.elevationMetres().orElseThrow();
+                Uncertain depth = sample.depthMetres().orElseThrow();
+                SeaLevelCurve curve = basis.curve().orElseThrow();
+                Uncertain sea = curve.readAt(ageKa.mean());
+                corals.add(new CoralsTogether.Coral(
+                        elevation.mean() - site.datumOffsetMetres().mean() + depth.mean(),
+                        Math.max(
+                                LEAST_SIGMA_METRES,
+                                Math.hypot(elevation.standardDeviation(), depth.standardDeviation())),
+                        ageKa.mean(),
+                        ageKa.standardDeviation(),
+                        sea.mean(),
+                        curve.slopeMetresPerKaAt(ageKa.mean()),
+                        sea.standardDeviation()));
+            }
+        }
+        if (corals.size() < 2) {
+            return Optional.empty();
+        }
+        SeaLevelCurve curve = basis.curve().orElseThrow();
+        double offsetSigmaMetres = LevelExplanations.offsetSigmaMetres(basis);
+        return Optional.of(Rate.of(CoralsTogether.rate(
+                corals,
+                Math.hypot(offsetSigmaMetres, site.datumOffsetMetres().standardDeviation()),
+                curve.facts().curveAgeSigmaKa(),
+                curve.facts().correlationTimeKa(),
+                prior)));
     }
 
     private static Optional<String> whyNoRate(DatedSample sample, SeaLevelBasis basis) {

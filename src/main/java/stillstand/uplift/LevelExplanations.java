@@ -154,11 +154,15 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
 
     /** A curve read at an age, with its own age error and the offset that all its readings share. */
     static SeaAtLevel.OnCurve onCurve(SeaLevelCurve curve, Uncertain ageKa, SeaLevelBasis basis) {
-        double offsetSigmaMetres = basis.highstands().complete()
+        return new SeaAtLevel.OnCurve(
+                curve, DatedStage.positive(ageKa), curve.facts().curveAgeSigmaKa(), offsetSigmaMetres(basis));
+    }
+
+    /** The offset that all readings of a curve share; a complete table has none, but the curve beside it has. */
+    static double offsetSigmaMetres(SeaLevelBasis basis) {
+        return basis.highstands().complete()
                 ? SharedErrors.DEFAULT_OFFSET_SIGMA_METRES
                 : basis.highstands().sharedErrors().offsetSigmaMetres();
-        return new SeaAtLevel.OnCurve(
-                curve, DatedStage.positive(ageKa), curve.facts().curveAgeSigmaKa(), offsetSigmaMetres);
     }
 
     private static double wrongProbability(Level level, DateRules rules, String where, List<Assumption> assumptions) {

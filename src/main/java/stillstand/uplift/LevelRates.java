@@ -4,11 +4,8 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
-import java.util.concurrent.Callable;
 import java.util.concurrent.ConcurrentLinkedQueue;
-import java.util.concurrent.ExecutionException;
 import java.util.concurrent.ExecutorService;
-import java.util.concurrent.Future;
 import stillstand.ledger.RunCancelledException;
 import stillstand.ledger.RunMonitor;
 import stillstand.shoreline.HeightTerm;
@@ -34,6 +31,8 @@ import stillstand.uncertainty.Uncertain;
 public final class LevelRates {
     /** Blocks handed out at once beyond those that are needed in any case. */
     private static final int BATCH = 8;
+    /** Most blocks handed out at once: their histograms wait until those before them are added up. */
+    private static final int LARGEST_BATCH = 64;
     /** A rate has no mean where its age may come this near to zero, as a part of the median age. */
     private static final double NEAR_ZERO = 0.02;
 
@@ -41,11 +40,13 @@ public final class LevelRates {
     /** Enough draws to choose the range of a histogram. */
     private static final int PILOT_DRAWS = 1 << 11;
 
+    private static final DrawHistogram NONE = DrawHistogram.forDrawsLike(new double[1]);
+
     private final DrawStreams streams;
     private final DrawPlan plan;
     private final ExecutorService executor;
     private final RunMonitor monitor;
-    private final ConcurrentLinkedQueue<RateColumns.Columns> columns = new ConcurrentLinkedQueue<>();
+    private final ConcurrentLinkedQueue<Workspace> workspaces = new ConcurrentLinkedQueue<>();
 
     /**
      * @param streams all randomness
@@ -80,14 +81,49 @@ public final class LevelRates {
             LevelAnswer.MonteCarlo monteCarlo,
             double beyondCurve) {}
 
+    /** What draws add up to. */
+    private record Gathered(
+            DrawHistogram rate, DrawHistogram rateWithPrior, DrawHistogram height, DrawHistogram age) {
+        Gathered emptyCopy() {
+            return new Gathered(rate.emptyCopy(), rateWithPrior.emptyCopy(), height.emptyCopy(), age.emptyCopy());
+        }
+
+        void merge(Gathered other) {
+            rate.merge(other.rate);
+            rateWithPrior.merge(other.rateWithPrior);
+            height.merge(other.height);
+            age.merge(other.age);
+        }
+
+        void clear() {
+            rate.clear();
+            rateWithPrior.clear();
+            height.clear();
+            age.clear();
+        }
+    }
+
     /** What one block of draws adds. */
-    private record Block(
-            DrawHistogram rate,
-            DrawHistogram rateWithPrior,
-            DrawHistogram height,
-            DrawHistogram age,
-            long beyondCurve,
-            BlockEstimates estimates) {}
+    private record Block(Gathered gathered, long beyondCurve, BlockEstimates estimates) {}
+
+    /** Columns of one thread, used again from block to block and from level to level. */
+    private static final class Workspace {
+        final RateColumns.Columns drawn;
+        final double[] weights;
+        private double[][] probabilities = new double[0][];
+
+        Workspace(int draws) {
+            drawn = new RateColumns.Columns(draws);
+            weights = new double[draws];
+        }
+
+        double[][] probabilities(int dimensions) {
+            if (probabilities.length < dimensions) {
+                probabilities = new double[dimensions][weights.length];
+            }
+            return probabilities;
+        }
+    }
 
     /**
      * The rate of one level.
@@ -110,36 +146,29 @@ public final class LevelRates {
             throw new IllegalArgumentException("a rate needs an explanation of its level");
         }
         Question question = new Question(key, height, loweringMetresPerKyr, explanations, prior);
-        List<Block> blocks = new ArrayList<>();
-        blocks.add(question.pilot());
+        question.pilot();
         AdaptiveStop stop = plan.stop();
-        DrawHistogram rate = blocks.get(0).rate().emptyCopy();
-        rate.merge(blocks.get(0).rate());
         boolean converged = false;
         boolean goOn = plan.mostBlocks() > 1;
         while (goOn) {
-            int wanted = Math.max(plan.leastBlocks() - blocks.size(), BATCH);
-            int upTo = Math.min(blocks.size() + wanted, plan.mostBlocks());
-            for (Block block : question.draw(blocks.size(), upTo, blocks.get(0))) {
-                blocks.add(block);
-                rate.merge(block.rate());
-                if (blocks.size() < plan.leastBlocks()) {
+            int done = question.estimates.size();
+            int wanted = Math.min(Math.max(plan.leastBlocks() - done, BATCH), LARGEST_BATCH);
+            int upTo = Math.min(done + wanted, plan.mostBlocks());
+            for (Block block : BlockTasks.inOrder(executor, done, upTo, question::block)) {
+                question.gather(block);
+                if (question.estimates.size() < plan.leastBlocks()) {
                     continue;
                 }
-                if (plan.fixedDraws().isEmpty()) {
-                    AdaptiveStop.Decision decision =
-                            stop.after(blocks.stream().map(Block::estimates).toList(), spread(rate, question.hasMean));
-                    converged = decision == AdaptiveStop.Decision.CONVERGED;
-                    goOn = decision == AdaptiveStop.Decision.GO_ON;
-                } else {
-                    goOn = blocks.size() < plan.mostBlocks();
-                }
+                AdaptiveStop.Decision decision =
+                        stop.after(question.estimates, spread(question.all.rate(), question.hasMean));
+                converged = decision == AdaptiveStop.Decision.CONVERGED;
+                goOn = decision == AdaptiveStop.Decision.GO_ON;
                 if (!goOn) {
                     break;
                 }
             }
         }
-        return question.outcome(blocks, rate, converged);
+        return question.outcome(converged);
     }
 
     private static double spread(DrawHistogram rate, boolean hasMean) {
@@ -160,6 +189,12 @@ public final class LevelRates {
         private final List<RateColumns> functions = new ArrayList<>();
         private final RatePrior prior;
         private final boolean hasMean;
+        /** Everything so far; its ranges are set by the pilot. */
+        private Gathered all = new Gathered(NONE, NONE, NONE, NONE);
+
+        private long beyondCurve;
+        private final List<BlockEstimates> estimates = new ArrayList<>();
+        private final ConcurrentLinkedQueue<Gathered> free = new ConcurrentLinkedQueue<>();
 
         Question(
                 String key,
@@ -176,33 +211,38 @@ public final class LevelRates {
             hasMean = explanations.stream().allMatch(sea -> keepsAwayFromZero(sea.ageKa()));
         }
 
-        /** The first block, which also sets the ranges of all histograms. */
-        Block pilot() {
+        /** Sets the ranges of all histograms, and draws the first block. */
+        void pilot() {
             int each = PILOT_DRAWS;
-            double[][] all = new double[3][explanations.size() * each];
+            double[][] draws = new double[3][explanations.size() * each];
             double[] weights = new double[explanations.size() * each];
             double[] posteriorWeights = new double[weights.length];
-            RateColumns.Columns drawn = new RateColumns.Columns(each);
-            double[] ofOne = new double[each];
+            Workspace w = new Workspace(each);
             for (int e = 0; e < explanations.size(); e++) {
-                evaluate(e, 0, drawn);
-                weigh(explanations.get(e).probability(), drawn, ofOne);
-                System.arraycopy(drawn.rateMetresPerKyr, 0, all[0], e * each, each);
-                System.arraycopy(drawn.heightMetres, 0, all[1], e * each, each);
-                System.arraycopy(drawn.ageKa, 0, all[2], e * each, each);
-                System.arraycopy(ofOne, 0, weights, e * each, each);
-                underPrior(drawn, ofOne);
-                System.arraycopy(ofOne, 0, posteriorWeights, e * each, each);
+                evaluate(e, 0, w);
+                weigh(explanations.get(e).probability(), w);
+                System.arraycopy(w.drawn.rateMetresPerKyr, 0, draws[0], e * each, each);
+                System.arraycopy(w.drawn.heightMetres, 0, draws[1], e * each, each);
+                System.arraycopy(w.drawn.ageKa, 0, draws[2], e * each, each);
+                System.arraycopy(w.weights, 0, weights, e * each, each);
+                underPrior(w);
+                System.arraycopy(w.weights, 0, posteriorWeights, e * each, each);
             }
-            boolean possible = Arrays.stream(posteriorWeights).anyMatch(w -> w > 0);
-            Block shape = new Block(
-                    like(all[0], weights),
-                    like(all[0], possible ? posteriorWeights : weights),
-                    like(all[1], weights),
-                    like(all[2], weights),
-                    0,
-                    new BlockEstimates(0, 0, new Interval(0, 0)));
-            return block(0, shape);
+            boolean possible = Arrays.stream(posteriorWeights).anyMatch(weight -> weight > 0);
+            all = new Gathered(
+                    like(draws[0], weights),
+                    like(draws[0], possible ? posteriorWeights : weights),
+                    like(draws[1], weights),
+                    like(draws[2], weights));
+            gather(block(0));
+        }
+
+        /** Adds a block; called in the order of their numbers. */
+        void gather(Block block) {
+            all.merge(block.gathered());
+            beyondCurve += block.beyondCurve();
+            estimates.add(block.estimates());
+            free.add(block.gathered());
         }
 
         private DrawHistogram like(double[] draws, double[] weights) {
@@ -210,126 +250,102 @@ public final class LevelRates {
         }
 
         /** Turns weights of propagation into weights of the posterior, in place. */
-        private void underPrior(RateColumns.Columns drawn, double[] weights) {
+        private void underPrior(Workspace w) {
+            double[] weights = w.weights;
+            double[] ageKa = w.drawn.ageKa;
             for (int i = 0; i < weights.length; i++) {
-                weights[i] /= drawn.ageKa[i];
+                weights[i] /= ageKa[i];
             }
-            prior.weigh(drawn.rateMetresPerKyr, weights);
+            prior.weigh(w.drawn.rateMetresPerKyr, weights);
         }
 
-        /** Blocks {@code from} to below {@code upTo}, in order. */
-        List<Block> draw(int from, int upTo, Block shape) {
-            List<Callable<Block>> tasks = new ArrayList<>();
-            for (int b = from; b < upTo; b++) {
-                int number = b;
-                tasks.add(() -> block(number, shape));
-            }
-            List<Block> drawn = new ArrayList<>();
-            try {
-                for (Future<Block> future : executor.invokeAll(tasks)) {
-                    drawn.add(future.get());
-                }
-            } catch (InterruptedException e) {
-                Thread.currentThread().interrupt();
-                throw new RunCancelledException();
-            } catch (ExecutionException e) {
-                if (e.getCause() instanceof RuntimeException cause) {
-                    throw cause;
-                }
-                throw new IllegalStateException(e.getCause());
-            }
-            return drawn;
-        }
-
-        private Block block(int number, Block shape) {
+        private Block block(int number) {
             if (monitor.isCancelled()) {
                 throw new RunCancelledException();
             }
-            DrawHistogram rate = shape.rate().emptyCopy();
-            DrawHistogram withPrior = shape.rateWithPrior().emptyCopy();
-            DrawHistogram height = shape.height().emptyCopy();
-            DrawHistogram age = shape.age().emptyCopy();
-            long beyondCurve = 0;
-            RateColumns.Columns drawn = borrow();
-            double[] weights = new double[DrawStreams.BLOCK_DRAWS];
+            Gathered into = borrow();
+            long beyond = 0;
+            Workspace w = borrowWorkspace();
+            RateColumns.Columns drawn = w.drawn;
             for (int e = 0; e < explanations.size(); e++) {
-                evaluate(e, number, drawn);
-                beyondCurve += weigh(explanations.get(e).probability(), drawn, weights);
+                evaluate(e, number, w);
+                beyond += weigh(explanations.get(e).probability(), w);
                 if (explanations.size() == 1 && drawn.allValid) {
-                    rate.add(drawn.rateMetresPerKyr);
-                    height.add(drawn.heightMetres);
+                    into.rate().add(drawn.rateMetresPerKyr);
+                    into.height().add(drawn.heightMetres);
                 } else {
-                    rate.add(drawn.rateMetresPerKyr, weights);
-                    height.add(drawn.heightMetres, weights);
-                    age.add(drawn.ageKa, weights);
+                    into.rate().add(drawn.rateMetresPerKyr, w.weights);
+                    into.height().add(drawn.heightMetres, w.weights);
+                    into.age().add(drawn.ageKa, w.weights);
                 }
-                underPrior(drawn, weights);
-                withPrior.add(drawn.rateMetresPerKyr, weights);
+                underPrior(w);
+                into.rateWithPrior().add(drawn.rateMetresPerKyr, w.weights);
             }
-            columns.add(drawn);
-            DrawDistribution draws = rate.distribution();
+            workspaces.add(w);
             return new Block(
-                    rate,
-                    withPrior,
-                    height,
-                    age,
-                    beyondCurve,
-                    hasMean ? BlockEstimates.of(draws) : BlockEstimates.withoutMoments(draws));
+                    into,
+                    beyond,
+                    hasMean ? BlockEstimates.of(into.rate()) : BlockEstimates.withoutMoments(into.rate()));
         }
 
-        private long weigh(double probability, RateColumns.Columns drawn, double[] weights) {
-            long beyondCurve = 0;
-            for (int i = 0; i < weights.length; i++) {
-                boolean counts = drawn.allValid || drawn.valid[i] > 0;
-                weights[i] = counts ? probability : 0;
-                beyondCurve += counts ? 0 : 1;
+        private Gathered borrow() {
+            Gathered used = free.poll();
+            if (used == null) {
+                return all.emptyCopy();
             }
-            return beyondCurve;
+            used.clear();
+            return used;
         }
 
-        private void evaluate(int explanation, int number, RateColumns.Columns out) {
+        /** Weights of propagation, and how many draws lay beyond the curve. */
+        private long weigh(double probability, Workspace w) {
+            if (w.drawn.allValid) {
+                Arrays.fill(w.weights, probability);
+                return 0;
+            }
+            long beyond = 0;
+            for (int i = 0; i < w.weights.length; i++) {
+                boolean counts = w.drawn.valid[i] > 0;
+                w.weights[i] = counts ? probability : 0;
+                beyond += counts ? 0 : 1;
+            }
+            return beyond;
+        }
+
+        private void evaluate(int explanation, int number, Workspace w) {
             RateColumns function = functions.get(explanation);
-            double[][] probabilities = new double[function.dimensions()][out.ageKa.length];
+            double[][] probabilities = w.probabilities(function.dimensions());
             if (function.dimensions() > 0) {
                 SobolPoints points = SobolPoints.scrambled(
                         streams, key + " / explanation " + explanation, function.dimensions(), number);
-                for (int d = 0; d < probabilities.length; d++) {
+                for (int d = 0; d < function.dimensions(); d++) {
                     points.column(d, probabilities[d]);
                 }
             }
-            function.evaluate(probabilities, out);
+            function.evaluate(probabilities, w.drawn);
         }
 
-        Outcome outcome(List<Block> blocks, DrawHistogram rate, boolean converged) {
-            DrawHistogram withPrior = blocks.get(0).rateWithPrior().emptyCopy();
-            DrawHistogram height = blocks.get(0).height().emptyCopy();
-            DrawHistogram age = blocks.get(0).age().emptyCopy();
-            long beyondCurve = 0;
-            for (Block block : blocks) {
-                withPrior.merge(block.rateWithPrior());
-                height.merge(block.height());
-                age.merge(block.age());
-                beyondCurve += block.beyondCurve();
-            }
-            long draws = (long) blocks.size() * DrawStreams.BLOCK_DRAWS;
-            Optional<DrawDistribution> posterior =
-                    withPrior.totalWeight() > 0 ? Optional.of(withPrior.distribution()) : Optional.empty();
+        Outcome outcome(boolean converged) {
+            long draws = (long) estimates.size() * DrawStreams.BLOCK_DRAWS;
+            DrawDistribution rate = all.rate().distribution();
+            Optional<DrawDistribution> posterior = all.rateWithPrior().totalWeight() > 0
+                    ? Optional.of(all.rateWithPrior().distribution())
+                    : Optional.empty();
             Summary ages = explanations.size() == 1 && beyondCurve == 0
                     ? Summary.of(explanations.get(0).ageKa())
-                    : age.distribution().summary();
+                    : all.age().distribution().summary();
             return new Outcome(
-                    Rate.of(rate.distribution(), hasMean),
+                    Rate.of(rate, hasMean),
                     posterior.map(p -> Rate.of(p, true)),
                     prior.isTwoSided() ? posterior.map(p -> 1 - p.cumulativeProbability(0)) : Optional.empty(),
                     Quantity.of(ages, "ka"),
-                    Quantity.of(height.distribution().summary(), "m"),
-                    settled(blocks, (int) draws, converged),
+                    Quantity.of(all.height().distribution().summary(), "m"),
+                    settled((int) draws, converged),
                     (double) beyondCurve / (draws * explanations.size()));
         }
 
-        private LevelAnswer.MonteCarlo settled(List<Block> blocks, int draws, boolean converged) {
-            Optional<MonteCarloError> error = MonteCarloError.between(
-                    blocks.stream().map(Block::estimates).toList());
+        private LevelAnswer.MonteCarlo settled(int draws, boolean converged) {
+            Optional<MonteCarloError> error = MonteCarloError.between(estimates);
             return new LevelAnswer.MonteCarlo(
                     draws,
                     converged,
@@ -338,8 +354,8 @@ public final class LevelRates {
         }
     }
 
-    private RateColumns.Columns borrow() {
-        RateColumns.Columns free = columns.poll();
-        return free == null ? new RateColumns.Columns(DrawStreams.BLOCK_DRAWS) : free;
+    private Workspace borrowWorkspace() {
+        Workspace free = workspaces.poll();
+        return free == null ? new Workspace(DrawStreams.BLOCK_DRAWS) : free;
     }
 }

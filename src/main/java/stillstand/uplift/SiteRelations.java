@@ -5,9 +5,11 @@ import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.concurrent.ExecutorService;
 import stillstand.dating.CombinedAge;
 import stillstand.dating.DateLikelihood;
 import stillstand.ledger.Assumption;
+import stillstand.ledger.RunCancelledException;
 import stillstand.shoreline.DatedSample;
 import stillstand.shoreline.FormerSeaLevel;
 import stillstand.shoreline.IndicativeRule;
@@ -46,9 +48,17 @@ public record SiteRelations(
      * @param rule what an indicative range means
      * @param dates how far dates are believed
      * @param plan joint draws are no more than a level gets
+     * @param executor draws the blocks; not owned
+     * @throws RunCancelledException if the thread is interrupted
      */
     public static SiteRelations of(
-            Site site, SeaLevelBasis basis, IndicativeRule rule, DateRules dates, DrawStreams streams, DrawPlan plan) {
+            Site site,
+            SeaLevelBasis basis,
+            IndicativeRule rule,
+            DateRules dates,
+            DrawStreams streams,
+            DrawPlan plan,
+            ExecutorService executor) {
         List<Level> levels = new ArrayList<>();
         List<JointLevels.Entry> entries = new ArrayList<>();
         for (Level level : site.levels()) {
@@ -68,10 +78,7 @@ public record SiteRelations(
             return new SiteRelations(List.of(), List.of(), List.of());
         }
         JointLevels joint = new JointLevels(site.name(), site.coast().orElse(site.name()), entries, streams);
-        List<List<JointLevels.Drawn>> blocks = new ArrayList<>();
-        for (int block = 0; block < Math.min(BLOCKS, plan.mostBlocks()); block++) {
-            blocks.add(joint.draw(block));
-        }
+        List<List<JointLevels.Drawn>> blocks = BlockTasks.inOrder(executor, 0, Math.min(BLOCKS, plan.mostBlocks()), joint::draw);
         return new Relating(site, levels, entries, blocks, streams, dates).relations();
     }
 

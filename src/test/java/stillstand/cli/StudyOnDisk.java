@@ -72,6 +72,11 @@ final class StudyOnDisk {
         if (code != 0) {
             throw new AssertionError("exit code " + code + ": " + out() + err());
         }
+        return results();
+    }
+
+    /** What stands in the results folder. */
+    StudyResult results() throws IOException {
         return ResultsJson.read(Files.readString(folder.resolve("results/results.json")))
                 .value()
                 .orElseThrow();

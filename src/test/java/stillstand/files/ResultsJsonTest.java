@@ -32,7 +32,25 @@ class ResultsJsonTest {
     void keysAreThoseOfTheFormat() {
         JsonNode tree = new JsonMapper().readTree(TEXT);
         assertEquals(
-                "provenance sea_level levels waiting intervals implied_sea_level warnings failures ledger", keys(tree));
+                "provenance sea_level levels waiting flights intervals implied_sea_level residuals warnings failures ledger",
+                keys(tree));
+        assertEquals(
+                "site model rate probability_uplift regions68 regions95 weights68 weights95 segments pairings unmatched"
+                        + " probability_all_stray most_probable predicted_ages log_evidence numerical_error missing"
+                        + " leave_one_out halving sliding_fits model_choice",
+                keys(tree.at("/flights/0")));
+        assertEquals("[[0.3,0.32],[0.4,0.47]]", tree.at("/flights/0/regions95").toString());
+        assertEquals("from_ka rate", keys(tree.at("/flights/0/segments/0")));
+        assertEquals("level highstand probability", keys(tree.at("/flights/0/pairings/0")));
+        assertEquals("mean log_evidence pairing", keys(tree.at("/flights/0/numerical_error")));
+        assertEquals(
+                "highstand age_ka height_m height_1sigma_m recorded unseen reoccupied outside absent",
+                keys(tree.at("/flights/0/missing/0")));
+        assertEquals("level log_predictive rate", keys(tree.at("/flights/0/leave_one_out/0")));
+        assertEquals("error width95_change_percent", keys(tree.at("/flights/0/halving/0")));
+        assertEquals("criterion rate rms_m r_squared probability_as_far", keys(tree.at("/flights/0/sliding_fits/0")));
+        assertEquals("model log_evidence log10_bayes_factor", keys(tree.at("/flights/0/model_choice/0")));
+        assertEquals("site level predicted_m measured_m sigma_m", keys(tree.at("/residuals/0")));
         assertEquals("version seed generator inputs started seconds", keys(tree.at("/provenance")));
         assertEquals("file sha256", keys(tree.at("/provenance/inputs/0")));
         assertEquals("id weight points", keys(tree.at("/sea_level/curves/0")));

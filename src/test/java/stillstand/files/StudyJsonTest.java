@@ -49,7 +49,7 @@ class StudyJsonTest {
             new RateChoice(new CauchyPrior(0, 0.5, -10, 15), Changes.NONE),
             new Matching(
                     new Recording.Beta(4, 2.5),
-                    new Decay.Marginalised(),
+                    Optional.empty(),
                     Optional.empty(),
                     1000,
                     new Setting(0.05, false),
@@ -210,7 +210,7 @@ class StudyJsonTest {
                 new RateChoice(new HalfCauchyPrior(1, 0.005, 5), Changes.UP_TO_TWO),
                 new Matching(
                         new Recording.Fixed(0.7),
-                        new Decay.Fixed(400),
+                        Optional.of(new Decay.Fixed(400)),
                         Optional.of(new Strays.GammaMean(0.8)),
                         500,
                         new Setting(0.1, true),

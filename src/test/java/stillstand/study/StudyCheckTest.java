@@ -3,7 +3,6 @@ package stillstand.study;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
-import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -32,7 +31,7 @@ import stillstand.uplift.LogUniformPrior;
 /** One small input a kind of failure; each asserts the whole message. */
 class StudyCheckTest {
     private static final Library LIBRARY = ShippedLibrary.load();
-    private static final String SITES = "site,latitude,longitude";
+    private static final String SITES = "site,latitude,longitude,surveyed_from_m,surveyed_to_m";
     private static final String LEVELS = "site,level,elevation_m,elevation_1sigma_m";
     private static final String SAMPLES = "site,sample,level,age_ka,age_1sigma_ka";
 
@@ -111,10 +110,10 @@ class StudyCheckTest {
 
     static List<Case> sitesRows() {
         return List.of(
-                sites(SITES, "North,95,20", "sites.csv:2:2: latitude: found \"95\", expected degrees from -90 to 90"),
+                sites(SITES, "North,95,20,0,100", "sites.csv:2:2: latitude: found \"95\", expected degrees from -90 to 90"),
                 sites(
                         SITES,
-                        "North,5,",
+                        "North,5,,0,100",
                         "sites.csv:2:3: longitude: found nothing, expected a value, since latitude has one"),
                 sites(
                         "site,surveyed_from_m,surveyed_to_m",
@@ -129,12 +128,12 @@ class StudyCheckTest {
                         "North,spratt-lisiecki-2106",
                         "sites.csv:2:2: local_curve: found \"spratt-lisiecki-2106\", expected the id of a curve (nearest: \"spratt-lisiecki-2016\")"),
                 sites(
-                        "site,local_curve",
-                        "North,lambeck-2014",
+                        "site,local_curve,surveyed_from_m,surveyed_to_m",
+                        "North,lambeck-2014,0,100",
                         "sites.csv:2:2: local_curve: found \"lambeck-2014\", which shows no highstand, expected a curve that shows one in some stage window"),
                 new Case(
                         "sites.csv",
-                        List.of(SITES, "North,5,5", "North,6,6"),
+                        List.of(SITES, "North,5,5,0,100", "North,6,6,0,100"),
                         List.of(
                                 "sites.csv:3:1: site: found \"North\" a second time (first in line 2), expected each site once")));
     }
@@ -315,7 +314,7 @@ class StudyCheckTest {
         boolean levels = changed.table().equals("levels.csv");
         return input(
                 settings(),
-                sites ? table : Grid.table("sites.csv", SITES, "North,5,5"),
+                sites ? table : Grid.table("sites.csv", SITES, "North,5,5,0,100"),
                 levels ? table : Grid.table("levels.csv", LEVELS, "North,T1,10,1"),
                 changed.table().equals("samples.csv") ? Optional.of(table) : Optional.empty());
     }
@@ -354,7 +353,7 @@ class StudyCheckTest {
     void allProblemsComeAtOnceInReadingOrder() {
         Loaded<Study> loaded = check(input(
                 settings(),
-                Grid.table("sites.csv", SITES, "North,95,5"),
+                Grid.table("sites.csv", SITES, "North,95,5,0,100"),
                 Grid.table("levels.csv", LEVELS, "North,T2,x,1", "Sud,T1,10,-1"),
                 Optional.of(Grid.table("samples.csv", SAMPLES, "North,S1,T9,0,1"))));
         assertEquals(
@@ -375,8 +374,8 @@ class StudyCheckTest {
                 Grid.table(
                         "sites.csv",
                         SITES
-                                + ",datum_offset_m,datum_offset_1sigma_m,surveyed_from_m,surveyed_to_m,rate_prior,x_who,note",
-                        "North,5.5,\u221220,0.5,0.1,0,90,log-uniform 0.01 15,me,a cape"),
+                                + ",datum_offset_m,datum_offset_1sigma_m,rate_prior,x_who,note",
+                        "North,5.5,\u221220,0,90,0.5,0.1,log-uniform 0.01 15,me,a cape"),
                 Grid.table(
                         "levels.csv",
                         "site,level,elevation_m,elevation_2sigma_m,highstand,cover_m,cover_1sigma_m,lowering_m_per_kyr,forms_at,"
@@ -431,7 +430,7 @@ class StudyCheckTest {
     void exactValuesAndDefaultsStandInTheLedger() {
         Study study = check(input(
                         settings(),
-                        Grid.table("sites.csv", SITES, "North,5,5"),
+                        Grid.table("sites.csv", SITES, "North,5,5,0,100"),
                         Grid.table("levels.csv", LEVELS + ",cover_m", "North,T1,10,0,2"),
                         Optional.of(
                                 Grid.table("samples.csv", SAMPLES + ",use,reason", "North,S1,T1,120,1,no,reworked"))))
@@ -465,7 +464,7 @@ class StudyCheckTest {
                         "sites.csv",
                         "site,surveyed_from_m,surveyed_to_m,coast",
                         "North,2,61,east",
-                        "South,,,west",
+                        "South,0,3000,west",
                         "East,0,102,west"),
                 Grid.table(
                         "levels.csv", LEVELS, "North,T1,10,1", "North,T2,60,1", "South,T1,2350,5", "East,T1,100,0.1"),
@@ -492,7 +491,7 @@ class StudyCheckTest {
     void millimetresAreNotTakenForFeet() {
         Loaded<Study> loaded = check(input(
                 settings(),
-                Grid.table("sites.csv", SITES, "North,5,5"),
+                Grid.table("sites.csv", SITES, "North,5,5,0,100000"),
                 Grid.table("levels.csv", LEVELS, "North,T1,61400,500"),
                 Optional.empty()));
         assertEquals(
@@ -529,7 +528,7 @@ class StudyCheckTest {
         List<String> rows = List.of("North,S1,T1,900,5", "North,S2,T2,900,5");
         Loaded<Study> loaded = check(input(
                 settings(),
-                Grid.table("sites.csv", SITES, "North,5,5"),
+                Grid.table("sites.csv", SITES, "North,5,5,0,100"),
                 Grid.table("levels.csv", LEVELS + ",forms_at", "North,T1,10,1,any", "North,T2,20,1,"),
                 Optional.of(Grid.table("samples.csv", SAMPLES, rows.get(0), rows.get(1)))));
         assertEquals(
@@ -540,12 +539,10 @@ class StudyCheckTest {
 
     @Test
     void columnsOfLaterWorkAreNamed() {
-        List<String> expected = new ArrayList<>();
-        expected.add("levels.csv:1:5: terrace is not used yet");
-        expected.add("levels.csv:1:6: certainty is not used yet");
+        List<String> expected = List.of("levels.csv:1:5: terrace is not used yet");
         Loaded<Study> loaded = check(input(
                 settings(),
-                Grid.table("sites.csv", SITES, "North,5,5"),
+                Grid.table("sites.csv", SITES, "North,5,5,0,100"),
                 Grid.table("levels.csv", LEVELS + ",terrace,certainty", "North,T1,10,1,Main,doubtful"),
                 Optional.empty()));
         assertEquals(expected, warnings(loaded));

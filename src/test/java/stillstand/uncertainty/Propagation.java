@@ -57,7 +57,7 @@ record Propagation(DrawDistribution distribution, List<BlockEstimates> blocks) {
         DrawHistogram all = histograms.get(0).emptyCopy();
         histograms.forEach(all::merge);
         List<BlockEstimates> blocks = histograms.stream()
-                .map(histogram -> BlockEstimates.of(histogram.distribution()))
+                .map(histogram -> BlockEstimates.of(histogram))
                 .toList();
         return new Propagation(all.distribution(), blocks);
     }

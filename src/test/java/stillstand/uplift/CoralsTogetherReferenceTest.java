@@ -33,7 +33,7 @@ class CoralsTogetherReferenceTest {
 
     @Test
     void sharedErrorsStayShared() {
-        RatePosterior rate = CoralsTogether.rate(corals(1.5), 2, 3, FLAT);
+        RatePosterior rate = CoralsTogether.rate(corals(1.5), 2, 0, 3, FLAT);
         assertEquals(0.065766043, rate.mean(), 3e-6);
         assertEquals(0.021571724, rate.standardDeviation(), 3e-6);
         assertEquals(0.023443711, rate.quantile(0.025), 1e-4);
@@ -43,7 +43,7 @@ class CoralsTogetherReferenceTest {
 
     @Test
     void takenForIndependentTheyNarrowTheAnswer() {
-        RatePosterior rate = CoralsTogether.rate(corals(2.5), 0, 1e-6, FLAT);
+        RatePosterior rate = CoralsTogether.rate(corals(2.5), 0, 0, 1e-6, FLAT);
         assertEquals(0.067619499, rate.mean(), 3e-6);
         assertEquals(0.016499251, rate.standardDeviation(), 3e-6);
     }
