@@ -6,11 +6,8 @@ import java.util.Comparator;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
-import org.jfree.chart.axis.AxisLocation;
 import org.jfree.chart.axis.NumberAxis;
-import org.jfree.chart.axis.SymbolAxis;
 import org.jfree.chart.plot.XYPlot;
-import org.jfree.chart.ui.RectangleInsets;
 import stillstand.figure.SiteView.Claim;
 import stillstand.figure.SiteView.LevelView;
 import stillstand.study.StudyResult.HighstandUsed;
@@ -29,17 +26,20 @@ final class PairingsFigure {
                 .filter(level -> flight.probabilityUnmatched(level.name()).isPresent())
                 .toList();
         List<String> columns = columns(site, levels);
-        XYPlot plot = Rows.plot(
-                stages(columns), levels.stream().map(LevelView::name).toList(), List.of(), widthPoints);
-        plot.setDomainAxisLocation(AxisLocation.TOP_OR_LEFT);
+        List<String> names = new ArrayList<>(List.of(""));
+        levels.forEach(level -> names.add(level.name()));
+        NumberAxis across = Style.axis(null, -0.5, columns.size() - 0.5);
+        across.setVisible(false);
+        XYPlot plot = Rows.plot(across, names, List.of(), widthPoints);
         Layer.add(plot, pen -> {
+            headings(pen, columns);
             for (int row = 0; row < levels.size(); row++) {
                 LevelView level = levels.get(row);
                 Map<String, Double> cells = new LinkedHashMap<>();
                 level.claims().forEach(claim -> cells.merge(claim.highstand(), claim.probability(), Double::sum));
                 cells.put(NONE, flight.probabilityUnmatched(level.name()).orElse(0.0));
                 for (int column = 0; column < columns.size(); column++) {
-                    cell(pen, column, row, cells.getOrDefault(columns.get(column), 0.0), columns.get(column));
+                    cell(pen, column, row + 1, cells.getOrDefault(columns.get(column), 0.0), columns.get(column));
                 }
             }
         });
@@ -51,7 +51,7 @@ final class PairingsFigure {
                 "Probability in percent; highest level on top, highstands from young to old. “none”: the level is no shoreline of a"
                         + " highstand.",
                 widthPoints,
-                levels.size() * ROW + 18);
+                names.size() * ROW + 2);
     }
 
     /** Highstands that some level may record, young to old, and none. */
@@ -72,17 +72,22 @@ final class PairingsFigure {
         return stand == null ? Double.MAX_VALUE : stand.ageKa();
     }
 
-    private static NumberAxis stages(List<String> columns) {
-        SymbolAxis axis = new SymbolAxis(null, columns.toArray(String[]::new));
-        Style.dress(axis);
-        axis.setTickLabelFont(Face.REGULAR.at(Style.SMALL, columns));
-        axis.setGridBandsVisible(false);
-        axis.setTickMarksVisible(false);
-        axis.setAxisLineVisible(false);
-        axis.setAutoRange(false);
-        axis.setRange(-0.5, columns.size() - 0.5);
-        axis.setTickLabelInsets(new RectangleInsets(1, 0, 3, 0));
-        return axis;
+    /** Labels above their columns; every other one a little higher where they are wider than a column. */
+    private static void headings(Pen pen, List<String> columns) {
+        double cell = pen.x(1) - pen.x(0);
+        boolean wide = columns.stream()
+                .anyMatch(stage -> Face.width(stage, Face.REGULAR.at(Style.SMALL, List.of(stage))) > cell - 1.5);
+        for (int column = 0; column < columns.size(); column++) {
+            double above = wide ? (column % 2 == 0 ? -3 : 3.2) : 0;
+            pen.text(
+                    columns.get(column),
+                    Math.min(pen.x(column), pen.right() - 6.5),
+                    pen.y(0) + above,
+                    Pen.Anchor.MIDDLE,
+                    Face.REGULAR,
+                    Style.SMALL,
+                    Style.INK);
+        }
     }
 
     private static void cell(Pen pen, int column, int row, double probability, String stage) {

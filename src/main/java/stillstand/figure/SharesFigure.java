@@ -18,6 +18,7 @@ final class SharesFigure {
     private static final double HALF_BAR = 4.2;
     private static final double LEAST_WITH_TEXT = 11;
     private static final double SURELY = 0.99;
+    private static final double IDLE = 0.1;
     private static final double LEAST_IN_KEY = 0.0005;
 
     private SharesFigure() {}
@@ -70,7 +71,7 @@ final class SharesFigure {
     static Page fates(String name, SiteView site, FlightResult flight, double widthPoints) {
         List<Row> rows = new ArrayList<>();
         for (Fate fate : flight.missing()) {
-            if (fate.outside() > SURELY) {
+            if (fate.outside() > SURELY || isIdleOlder(fate)) {
                 continue;
             }
             rows.add(new Row(
@@ -91,9 +92,14 @@ final class SharesFigure {
                         "no such highstand"),
                 rows,
                 "Probability (%)",
-                "To the right: height of the shoreline today as the flight predicts it, m, with one standard deviation. Those surely outside the survey are left"
-                        + " out.",
+                "To the right: height of the shoreline today as the flight predicts it, m, with one standard deviation. Left out: those surely"
+                        + " outside the survey, and nameless ones beyond the curve that left nothing in view.",
                 widthPoints);
+    }
+
+    /** A generic highstand beyond the curve that no level records and that most likely left nothing in view. */
+    private static boolean isIdleOlder(Fate fate) {
+        return fate.highstand().equals(SiteView.OLDER) && fate.recorded() < IDLE && fate.unseen() < IDLE;
     }
 
     private static Page page(

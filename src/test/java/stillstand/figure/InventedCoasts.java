@@ -173,6 +173,7 @@ final class InventedCoasts {
                         old.budget(),
                         old.monteCarlo(),
                         old.samples(),
+                        old.coralsTogether(),
                         old.agreement()))
                 .toList();
         return study(levels, List.of(), List.of());
@@ -243,6 +244,7 @@ final class InventedCoasts {
                         Optional.empty())),
                 Optional.empty(),
                 List.of(),
+                Optional.empty(),
                 Optional.empty());
     }
 
