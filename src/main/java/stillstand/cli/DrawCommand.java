@@ -135,7 +135,7 @@ final class DrawCommand implements Callable<Integer> {
         return formats.isEmpty() ? List.of(FigureFormat.values()) : List.copyOf(chosen);
     }
 
-    private static List<String> ids(Object... values) {
+    private static List<String> ids(Object[] values) {
         return Arrays.stream(values).map(Object::toString).toList();
     }
 

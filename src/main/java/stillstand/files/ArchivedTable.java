@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Collections;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.Predicate;
 import java.util.regex.Pattern;
 import java.util.stream.IntStream;
 import stillstand.ledger.InputProblem;
@@ -90,13 +91,11 @@ record ArchivedTable(Table table, String description) {
             return Loaded.failed(List.of(
                     InputProblem.ofFile(file.name(), content.size() + " lines of table", "at most " + MOST_LINES)));
         }
-        for (int together : List.of(2, 1)) {
-            for (Between between : Between.values()) {
-                int start = firstRow(content, between, together);
-                if (start >= 0) {
-                    return new Parts(file.name(), between, lines, content, start).table();
-                }
-            }
+        Optional<Parts> parts = find(file.name(), lines, content, 2, ArchivedTable::isAllNumbers)
+                .or(() -> find(file.name(), lines, content, 2, ArchivedTable::holdsNumbers))
+                .or(() -> find(file.name(), lines, content, 1, ArchivedTable::isAllNumbers));
+        if (parts.isPresent()) {
+            return Loaded.of(parts.get().table());
         }
         String found = lines.isEmpty() ? "an empty file" : "no line of numbers that could be a row of a table";
         return Loaded.failed(List.of(InputProblem.ofFile(
@@ -105,30 +104,38 @@ record ArchivedTable(Table table, String description) {
                 "a table of numbers with at least 2 rows, cells between commas, semicolons, tabs or blanks")));
     }
 
-    /** Index of the first of so many lines in succession that hold equally many numbers, at least two; -1 without such. */
-    private static int firstRow(List<Line> content, Between between, int together) {
-        int lastCount = 0;
-        int run = 0;
-        for (int i = 0; i < content.size(); i++) {
-            List<String> cells = between.cells(content.get(i).text());
-            int count = isRow(cells) ? cells.size() : 0;
-            run = count > 1 && count == lastCount ? run + 1 : 1;
-            if (count > 1 && run == together) {
-                return i - together + 1;
+    /** The table whose first row is the first of so many rows in succession with equally many cells, at least two. */
+    private static Optional<Parts> find(
+            String name, List<Line> lines, List<Line> content, int together, Predicate<List<String>> isRow) {
+        for (Between between : Between.values()) {
+            int lastCount = 0;
+            int run = 0;
+            for (int i = 0; i < content.size(); i++) {
+                List<String> cells = between.cells(content.get(i).text());
+                int count = cells.size() > 1 && isRow.test(cells) ? cells.size() : 0;
+                run = count == lastCount ? run + 1 : 1;
+                if (count > 1 && run == together) {
+                    return Optional.of(new Parts(name, between, lines, content, i - together + 1));
+                }
+                lastCount = count;
             }
-            lastCount = count;
         }
-        return -1;
+        return Optional.empty();
     }
 
-    private static boolean isRow(List<String> cells) {
+    private static boolean isAllNumbers(List<String> cells) {
         return cells.stream().allMatch(cell -> LIKE_A_NUMBER.matcher(cell).matches())
                 && cells.stream().anyMatch(cell -> !cell.isEmpty());
     }
 
+    /** Whether there are numbers beside columns of text. */
+    private static boolean holdsNumbers(List<String> cells) {
+        return cells.stream().filter(cell -> NumberForm.parse(cell).isPresent()).count() > 1;
+    }
+
     /** The parts of a file whose first row is found. */
     private record Parts(String name, Between between, List<Line> lines, List<Line> content, int start) {
-        Loaded<ArchivedTable> table() {
+        ArchivedTable table() {
             int width = cells(content.get(start)).size();
             int top = start;
             while (top > 0 && cells(content.get(top - 1)).size() == width) {
@@ -142,7 +149,7 @@ record ArchivedTable(Table table, String description) {
                 rows.add(new Table.Row(line.number(), cells(line)));
             }
             Table table = new Table(name, header.map(Line::number).orElse(0L), names, rows);
-            return Loaded.of(new ArchivedTable(table, description(table, header, top)));
+            return new ArchivedTable(table, description(table, header, top));
         }
 
         private String description(Table table, Optional<Line> header, int top) {
@@ -180,7 +187,7 @@ record ArchivedTable(Table table, String description) {
             return IntStream.iterate(at - 1, i -> i >= 0, i -> i - 1)
                     .mapToObj(lines::get)
                     .takeWhile(Line::isComment)
-                    .filter(line -> namesIn(line).size() == width && !isRow(namesIn(line)))
+                    .filter(line -> namesIn(line).size() == width && !isAllNumbers(namesIn(line)))
                     .findFirst();
         }
     }

@@ -2,6 +2,7 @@ package stillstand.study;
 
 import java.util.List;
 import java.util.Locale;
+import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import java.util.regex.Pattern;
@@ -36,6 +37,8 @@ record ArchivedHeader(String text, List<String> words) {
     private static final Pattern ONE_SIGMA = Pattern.compile("1(sigma|sig|sd|s|\\u03c3)|sd|std(dev)?|stdevs?");
     private static final Pattern TWO_SIGMA = Pattern.compile("2(sigma|sig|sd|s|\\u03c3)");
     private static final Set<String> SIGMA_WORDS = Set.of("sigma", "sig", "sd", "s", "\u03c3");
+
+    private static final Map<String, Integer> NUMBER_WORDS = Map.of("1", 1, "one", 1, "2", 2, "two", 2);
 
     static ArchivedHeader of(String text) {
         String lower = text.toLowerCase(Locale.ROOT);
@@ -82,8 +85,9 @@ record ArchivedHeader(String text, List<String> words) {
     /** How many standard deviations it says a spread is; absent where it does not say. */
     Optional<Integer> sigmas() {
         for (int i = 1; i < words.size(); i++) {
-            if (SIGMA_WORDS.contains(words.get(i)) && Set.of("1", "2").contains(words.get(i - 1))) {
-                return Optional.of(Integer.valueOf(words.get(i - 1)));
+            Optional<Integer> number = Optional.ofNullable(NUMBER_WORDS.get(words.get(i - 1)));
+            if (SIGMA_WORDS.contains(words.get(i)) && number.isPresent()) {
+                return number;
             }
         }
         if (has(TWO_SIGMA)) {

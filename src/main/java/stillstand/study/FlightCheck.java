@@ -34,7 +34,9 @@ final class FlightCheck {
                     .toList());
             boolean read = site.toSite().isPresent()
                     && own.stream().allMatch(level -> level.toLevel().isPresent());
-            if (read && flight.stream().anyMatch(level -> FlightSetup.isToBeMatched(level.formsAt(), level.highstand()))) {
+            if (read
+                    && flight.stream()
+                            .anyMatch(level -> FlightSetup.isToBeMatched(level.formsAt(), level.highstand()))) {
                 checkRange(site, flight);
                 checkHeights(site, flight);
                 seaLevel.apply(site.name()).ifPresent(sea -> {
@@ -106,8 +108,7 @@ final class FlightCheck {
         }
     }
 
-    private static void checkCount(
-            SitesTable.SiteRow site, List<LevelsTable.LevelRow> flight, HighstandTable table) {
+    private static void checkCount(SitesTable.SiteRow site, List<LevelsTable.LevelRow> flight, HighstandTable table) {
         int rows = table.rows().size();
         if (flight.size() > rows) {
             site.reader()

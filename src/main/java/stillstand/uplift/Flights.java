@@ -109,11 +109,15 @@ public final class Flights {
             WhatIfPoints points = new WhatIfPoints(found.answer().rate(), prior, setup.shared(), streams, key());
             Function<FlightModel, Optional<RatePosterior>> roughly =
                     onGrid ? this::onGrid : variant -> points.rateOf(variant, quietly());
-            Future<Optional<RatePosterior>> same = submit(List.of(model), roughly).get(0);
+            Future<Optional<RatePosterior>> same =
+                    submit(List.of(model), roughly).get(0);
             List<Future<Optional<RatePosterior>>> without = submit(withoutEach(), roughly);
             List<ErrorGroup> groups = groups();
             List<Future<Optional<RatePosterior>>> halved = submit(
-                    groups.stream().map(group -> FlightWhatIf.halved(model, group)).toList(), roughly);
+                    groups.stream()
+                            .map(group -> FlightWhatIf.halved(model, group))
+                            .toList(),
+                    roughly);
             Optional<RatePosterior> all = joined(same);
             FlightSummary summary = new FlightSummary(site, model, found.answer(), found.draws());
             RatePosterior posterior = found.answer().rate();
@@ -175,7 +179,8 @@ public final class Flights {
 
         private List<Assumption> assumptions() {
             List<Assumption> said = new ArrayList<>(setup.assumptions());
-            said.add(new Assumption("prior of the rate of a flight, m/kyr", prior.describe(), "the site or study", site));
+            said.add(new Assumption(
+                    "prior of the rate of a flight, m/kyr", prior.describe(), "the site or study", site));
             said.add(new Assumption(
                     "a flight is worked out",
                     onGrid

@@ -410,6 +410,38 @@ class CurveImportTest {
     }
 
     @Test
+    void columnsOfTextAndNumbersInWords() throws IOException {
+        String text = "core,\"age, ka\",rsl,two_sigma_m,note\nA-1,0,0,1,\nA-2,20,-120,8,\"deep, old\"\n";
+        assertEquals("age_ka,level_m,level_2sigma_m\n0,0,1\n20,-120,8\n", written(text, new Told()));
+    }
+
+    @ParameterizedTest
+    @CsvSource(delimiter = '|', textBlock = """
+            level_1sigma_m | 1
+            rsl 2 sigma (m) | 2
+            RSL_2sd | 2
+            stdev | 1
+            err_sig | 0
+            sigma esl | 0
+            RSL uncertainty | 0
+            """)
+    void headersThatSayHowManySigmas(String header, int sigmas) {
+        String text = "age_ka;rsl;" + header + "\n0;0;1\n20;-120;8\n";
+        if (sigmas == 0) {
+            assertEquals(
+                    List.of(
+                            "archive.txt:1:3: " + header
+                                    + ": found a spread that may be 1 or 2 sigma, expected to be told"
+                                    + " which it is: --spread 1sigma or --spread 2sigma, or --spread none to take Stillstand's default"),
+                    problems(text, new Told()));
+        } else {
+            String meaning =
+                    load(text, new Told()).value().orElseThrow().curve().facts().spreadMeaning();
+            assertTrue(meaning.startsWith(sigmas == 1 ? "one standard" : "two standard"), meaning);
+        }
+    }
+
+    @Test
     void aBadFirstRowIsNotTakenForAHeader() {
         Told told = new Told().age("1").level("2").unit(AgeUnit.KA);
         assertEquals(

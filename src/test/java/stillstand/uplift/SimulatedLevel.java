@@ -43,7 +43,7 @@ record SimulatedLevel(
     /** Far beyond all changes of height that can bring a level into {@link #LOWEST_METRES} to {@link #HIGHEST_METRES}. */
     private static final double LEAST_CHANGE_METRES = -500;
 
-    private static final double MOST_CHANGE_METRES = 800;
+    private static final double MOST_CHANGE_METRES = 3000;
 
     private static final double LOWEST_METRES = -50;
     private static final double HIGHEST_METRES = 200;
@@ -63,8 +63,8 @@ record SimulatedLevel(
         CORAL_ON_CURVE {
             @Override
             SimulatedLevel simulate(SplittableRandom dice, Rates rates) {
-                double ageSigmaKa = between(dice, 0.5, 4);
-                return coral(dice, rates, new Setting(SwingingSea.STRONG, 40, 240, 0, ageSigmaKa, 1.5, 3));
+                double ageSigmaKa = between(dice, 0.5, 2.5);
+                return coral(dice, rates, new Setting(SwingingSea.STRONG, 40, 240, 0, ageSigmaKa, 2.5, 3));
             }
         },
         /** A coral a few ka old whose age is hardly known: where a prior flat in the rate or in the height differ most. */
@@ -165,8 +165,8 @@ record SimulatedLevel(
         double ageSigmaKa = setting.ageSigmaKa;
         double surveySigmaMetres = sea.scale * between(dice, 0.1, 4);
         double datumSigmaMetres = sea.scale * between(dice, 0.1, 1);
-        double depthMedianMetres = sea.scale * between(dice, 1, 8);
-        double depthSigmaLog = between(dice, 0.3, 0.9);
+        double depthMedianMetres = sea.scale * between(dice, 2, 12);
+        double depthSigmaLog = between(dice, 0.5, 1.2);
         while (true) {
             double trueKa = between(
                     dice, Math.max(setting.youngestKa, setting.fromKa - 9 * ageSigmaKa), setting.toKa + 9 * ageSigmaKa);
@@ -378,11 +378,11 @@ record SimulatedLevel(
         }
 
         double sigmaLowMetres(double ageKa) {
-            return scale * (4 + 2 * Math.sin(ageKa / 9));
+            return scale * (2 + Math.sin(ageKa / 9));
         }
 
         double sigmaHighMetres(double ageKa) {
-            return scale * (6 + 3 * Math.cos(ageKa / 11));
+            return scale * (3 + 1.5 * Math.cos(ageKa / 11));
         }
     }
 
