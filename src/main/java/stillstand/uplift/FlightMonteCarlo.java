@@ -159,8 +159,7 @@ public final class FlightMonteCarlo {
         double probabilityAllStray = model.countsAllStray() ? Math.min(1, stray) : stray / (1 + stray);
         FlightAnswer answer =
                 new FlightAnswer(posterior, table, ages(table, fineSums), positions(chosen), probabilityAllStray);
-        return new SampledFlightAnswer(
-                answer, error(weighted, coarseSums, parts), joint[0], weighted.effectiveDraws());
+        return new SampledFlightAnswer(answer, error(weighted, coarseSums, parts), joint[0], weighted.effectiveDraws());
     }
 
     /** The density that rates are drawn from. */
