@@ -35,8 +35,7 @@ final class FlightCheck {
                     .toList());
             boolean read = site.toSite().isPresent()
                     && own.stream().allMatch(level -> level.toLevel().isPresent());
-            if (read
-                    && flight.stream().anyMatch(FlightCheck::isToBeMatched)) {
+            if (read && flight.stream().anyMatch(FlightCheck::isToBeMatched)) {
                 checkRange(site, flight);
                 checkHeights(site, flight);
                 seaLevel.apply(site.name()).ifPresent(sea -> {
@@ -49,8 +48,8 @@ final class FlightCheck {
 
     /** Where the sea level itself has problems a pin cannot be read: then nothing is known of what it leaves open. */
     private static boolean isToBeMatched(LevelsTable.LevelRow level) {
-        boolean unread = !level.reader().text(HIGHSTAND).isEmpty()
-                && level.highstand().equals(StageChoice.ANY);
+        boolean unread =
+                !level.reader().text(HIGHSTAND).isEmpty() && level.highstand().equals(StageChoice.ANY);
         return !unread && FlightSetup.isToBeMatched(level.formsAt(), level.highstand());
     }
 
