@@ -9,6 +9,7 @@ public final class Main {
 
     /** Executes a command line and ends the process with its exit code. */
     public static void main(String[] arguments) {
+        System.setProperty("java.awt.headless", "true"); // figures are drawn without a display
         System.exit(Commands.execute(Workshop.ofProcess(), arguments));
     }
 }

@@ -33,8 +33,9 @@ class ArchitectureTest {
             Map.entry("uplift", Set.of("ledger", "uncertainty", "sealevel", "dating", "shoreline")),
             Map.entry("study", ENGINE),
             Map.entry("files", with(ENGINE, "study")),
-            Map.entry("report", with(ENGINE, "study")),
-            Map.entry("cli", with(ENGINE, "study", "files", "report")));
+            Map.entry("figure", with(ENGINE, "study")),
+            Map.entry("report", with(ENGINE, "study", "figure")),
+            Map.entry("cli", with(ENGINE, "study", "files", "figure", "report")));
 
     private static Set<String> with(Set<String> base, String... more) {
         Set<String> all = new TreeSet<>(base);
@@ -144,6 +145,24 @@ class ArchitectureTest {
                 .dependOnClassesThat()
                 .resideInAnyPackage(
                         "org.apache.commons.csv..", "tools.jackson..", "com.fasterxml.jackson..", "com.networknt..")
+                .check(CODE);
+    }
+
+    @Test
+    void drawingStaysInFigureAndFilesOutOfIt() {
+        noClasses()
+                .that()
+                .resideOutsideOfPackage("stillstand.figure..")
+                .should()
+                .dependOnClassesThat()
+                .resideInAnyPackage("java.awt..", "javax.imageio..", "org.apache.batik..", "org.apache.pdfbox..")
+                .check(CODE);
+        noClasses()
+                .that()
+                .resideInAPackage("stillstand.figure..")
+                .should()
+                .dependOnClassesThat()
+                .resideInAnyPackage("java.nio.file..", "java.time..", "javafx..")
                 .check(CODE);
     }
 

@@ -42,8 +42,7 @@ public final class SampleFlight {
                         new Pairing("T4", "5c", 0.005)),
                 List.of(new Unmatched("T1", 0.05), new Unmatched("T4", 0.02)),
                 0.001,
-                new Correlation(
-                        0.625, List.of(new Match("T1", Optional.of("5a")), new Match("T4", Optional.of("5e")))),
+                new Correlation(0.625, List.of(new Match("T1", Optional.of("5a")), new Match("T4", Optional.of("5e")))),
                 List.of(new PredictedAge("T1", age(82, 4)), new PredictedAge("T4", age(122, 3))),
                 -12.5,
                 new NumericalError(0.0001, 0.01, 0.002),

@@ -17,9 +17,12 @@ import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
+import stillstand.cli.FigureFiles.Fault;
+import stillstand.figure.Figures;
 import stillstand.files.ResultFiles;
 import stillstand.files.ResultsFolder;
 import stillstand.files.ResultsJson;
+import stillstand.ledger.InputProblem;
 import stillstand.ledger.Loaded;
 import stillstand.ledger.NearestName;
 import stillstand.ledger.RunCancelledException;
@@ -35,6 +38,9 @@ import stillstand.study.StudyResult;
         sortOptions = false,
         description = "Reads a study, finds the rates of its levels, and writes them to its results.")
 final class RunCommand implements Callable<Integer> {
+    private static final String ALL_FIGURES = "all";
+    private static final String NO_FIGURES = "none";
+
     private final Workshop workshop;
 
     @Spec
@@ -67,6 +73,9 @@ final class RunCommand implements Callable<Integer> {
     @Option(names = "--threads", paramLabel = "N", description = "at work at once (default: all cores)")
     private Optional<Integer> threads = Optional.empty();
 
+    @Option(names = "--figures", paramLabel = "WHICH", description = "all (default) or none")
+    private String figures = ALL_FIGURES;
+
     @Option(names = "--json", description = "print results.json in place of the summary")
     private boolean json;
 
@@ -81,6 +90,10 @@ final class RunCommand implements Callable<Integer> {
     public Integer call() throws IOException {
         atLeastOne("--draws", draws);
         atLeastOne("--threads", threads);
+        if (!List.of(ALL_FIGURES, NO_FIGURES).contains(figures)) {
+            throw new ParameterException(
+                    spec.commandLine(), "--figures must be all or none but is " + InputProblem.quote(figures));
+        }
         Instant started = workshop.clock().instant();
         Loaded<Study> loaded = workshop.reader().read(folder, new SettingsChanges(seed, draws, curves));
         if (!loaded.problems().isEmpty() || loaded.value().isEmpty()) {
@@ -97,9 +110,14 @@ final class RunCommand implements Callable<Integer> {
             }
             try (ResultsFolder results = opened.value().get()) {
                 StudyResult result = run(study, started, interruption);
-                results.replace(fresh -> ResultFiles.write(fresh, study, result));
+                List<Fault> faults = new ArrayList<>();
+                results.replace(fresh -> {
+                    ResultFiles.write(fresh, study, result);
+                    faults.addAll(draw(result, fresh));
+                });
                 tell(study, result, place);
-                return result.failures().isEmpty() ? ExitCode.DONE : ExitCode.FAILED;
+                faults.forEach(fault -> workshop.err().println(DrawCommand.sentence(fault)));
+                return result.failures().isEmpty() && faults.isEmpty() ? ExitCode.DONE : ExitCode.FAILED;
             } catch (RunCancelledException e) {
                 workshop.err().println("Interrupted. Earlier results are as they were.");
                 return ExitCode.INTERRUPTED;
@@ -108,8 +126,7 @@ final class RunCommand implements Callable<Integer> {
     }
 
     private StudyResult run(Study study, Instant started, Interruption interruption) {
-        int workers = threads.orElse(Runtime.getRuntime().availableProcessors());
-        ExecutorService executor = Executors.newFixedThreadPool(workers);
+        ExecutorService executor = Executors.newFixedThreadPool(workers());
         Progress progress = new Progress(workshop, quiet, interruption::isAsked);
         try {
             StudyResult result = workshop.engine().run(study, executor, progress);
@@ -120,6 +137,18 @@ final class RunCommand implements Callable<Integer> {
         } finally {
             executor.shutdownNow();
         }
+    }
+
+    /** Chart classes are loaded here and not before: a run without figures starts without them. */
+    private List<Fault> draw(StudyResult result, Path folder) throws IOException {
+        if (figures.equals(NO_FIGURES)) {
+            return List.of();
+        }
+        return FigureFiles.OF_RUN.write(Figures.of(result).figures(), folder.resolve("figures"), workers());
+    }
+
+    private int workers() {
+        return threads.orElse(Runtime.getRuntime().availableProcessors());
     }
 
     private Provenance timed(Provenance engine, Instant started) {

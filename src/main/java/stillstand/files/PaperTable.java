@@ -99,11 +99,12 @@ final class PaperTable {
                         .map(pair -> new StageProbability(pair.highstand(), pair.probability()))
                         .findFirst()
                 : answer.stages().stream().max(Comparator.comparingDouble(StageProbability::probability));
-        Optional<Quantity> age = answer.age().or(() -> flight.stream()
-                .flatMap(found -> found.predictedAges().stream())
-                .filter(predicted -> predicted.level().equals(answer.level()))
-                .map(FlightResult.PredictedAge::age)
-                .findFirst());
+        Optional<Quantity> age = answer.age()
+                .or(() -> flight.stream()
+                        .flatMap(found -> found.predictedAges().stream())
+                        .filter(predicted -> predicted.level().equals(answer.level()))
+                        .map(FlightResult.PredictedAge::age)
+                        .findFirst());
         Optional<HighstandUsed> highstand = stage.flatMap(likeliest -> result.seaLevel().highstands().stream()
                 .filter(used -> used.stage().equals(likeliest.highstand()))
                 .findFirst());

@@ -77,8 +77,8 @@ public final class ResultFiles {
         for (FlightResult flight : result.flights()) {
             for (FlightResult.Unmatched level : flight.unmatched()) {
                 flight.pairingsOf(level.level())
-                        .forEach(pair -> rows.add(new PairingRow(
-                                flight.site(), level.level(), pair.highstand(), pair.probability())));
+                        .forEach(pair -> rows.add(
+                                new PairingRow(flight.site(), level.level(), pair.highstand(), pair.probability())));
                 rows.add(new PairingRow(flight.site(), level.level(), "none", level.probability()));
             }
         }

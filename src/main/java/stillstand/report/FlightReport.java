@@ -37,7 +37,8 @@ final class FlightReport {
     List<String> opening() {
         List<String> lines = new ArrayList<>();
         flight.bound()
-                .ifPresent(bound -> lines.add("The flight as a whole moves " + Wording.bound(bound, flight.rate()) + "."));
+                .ifPresent(
+                        bound -> lines.add("The flight as a whole moves " + Wording.bound(bound, flight.rate()) + "."));
         lines.add("Flight of " + Wording.counted(flight.unmatched().size(), "level") + ": "
                 + Wording.rate(flight.rate()) + " m/kyr, 95 % " + Wording.interval95(flight.rate()) + ".");
         if (flight.regions95().size() > 1) {
@@ -112,8 +113,8 @@ final class FlightReport {
 
     private void missing(List<String> lines) {
         List<Fate> missed = flight.missing().stream()
-                .filter(fate -> fate.recorded() < RATHER_NONE
-                        && fate.recorded() + fate.unseen() + fate.reoccupied() > MISSED)
+                .filter(fate ->
+                        fate.recorded() < RATHER_NONE && fate.recorded() + fate.unseen() + fate.reoccupied() > MISSED)
                 .toList();
         if (missed.isEmpty()) {
             return;
@@ -126,12 +127,7 @@ final class FlightReport {
                                 + Wording.number(String.format(
                                         Locale.ROOT, "%.0f ± %.0f m", fate.heightMetres(), fate.heightSigmaMetres())))
                         + ": "
-                        + List.of(
-                                        fate.recorded(),
-                                        fate.unseen(),
-                                        fate.reoccupied(),
-                                        fate.outside(),
-                                        fate.absent())
+                        + List.of(fate.recorded(), fate.unseen(), fate.reoccupied(), fate.outside(), fate.absent())
                                 .stream()
                                 .map(FlightReport::probability)
                                 .collect(Collectors.joining(" / "))));
@@ -144,8 +140,8 @@ final class FlightReport {
     private void hinges(List<String> lines) {
         double median = flight.rate().median();
         String moved = flight.leaveOneOut().stream()
-                .sorted(Comparator.comparingDouble((LeftOut out) ->
-                        -Math.abs(out.rate().median() - median)))
+                .sorted(Comparator.comparingDouble(
+                        (LeftOut out) -> -Math.abs(out.rate().median() - median)))
                 .limit(LEVELS_SHOWN)
                 .map(out -> "without " + out.level() + " it would be " + Wording.rate(out.rate()))
                 .collect(Collectors.joining("; "));

@@ -10,6 +10,7 @@ import java.util.function.Function;
 import java.util.stream.Collectors;
 import stillstand.sealevel.HighstandTable;
 import stillstand.shoreline.FormsAt;
+import stillstand.shoreline.StageChoice;
 import stillstand.uplift.FlightSetup;
 
 /** Checks of the flights: what matching needs, and what of the input cannot be matched. */
@@ -34,7 +35,8 @@ final class FlightCheck {
                     .toList());
             boolean read = site.toSite().isPresent()
                     && own.stream().allMatch(level -> level.toLevel().isPresent());
-            if (read && flight.stream().anyMatch(level -> FlightSetup.isToBeMatched(level.formsAt(), level.highstand()))) {
+            if (read
+                    && flight.stream().anyMatch(FlightCheck::isToBeMatched)) {
                 checkRange(site, flight);
                 checkHeights(site, flight);
                 seaLevel.apply(site.name()).ifPresent(sea -> {
@@ -43,6 +45,13 @@ final class FlightCheck {
                 });
             }
         }
+    }
+
+    /** Where the sea level itself has problems a pin cannot be read: then nothing is known of what it leaves open. */
+    private static boolean isToBeMatched(LevelsTable.LevelRow level) {
+        boolean unread = !level.reader().text(HIGHSTAND).isEmpty()
+                && level.highstand().equals(StageChoice.ANY);
+        return !unread && FlightSetup.isToBeMatched(level.formsAt(), level.highstand());
     }
 
     private static void checkPin(LevelsTable.LevelRow level) {
@@ -72,7 +81,7 @@ final class FlightCheck {
             return;
         }
         String level = flight.stream()
-                .filter(each -> FlightSetup.isToBeMatched(each.formsAt(), each.highstand()))
+                .filter(FlightCheck::isToBeMatched)
                 .map(each -> each.key().level())
                 .findFirst()
                 .orElseThrow();
@@ -106,8 +115,7 @@ final class FlightCheck {
         }
     }
 
-    private static void checkCount(
-            SitesTable.SiteRow site, List<LevelsTable.LevelRow> flight, HighstandTable table) {
+    private static void checkCount(SitesTable.SiteRow site, List<LevelsTable.LevelRow> flight, HighstandTable table) {
         int rows = table.rows().size();
         if (flight.size() > rows) {
             site.reader()

@@ -149,7 +149,14 @@ final class LevelsTable {
                 row.own());
         boolean whole = row.isGood() && elevation.isPresent() && !key.level().isEmpty();
         return new LevelRow(
-                key, row, elevation, formsAt, highstand, doubtful, order, Optional.of(toLevel).filter(make -> whole));
+                key,
+                row,
+                elevation,
+                formsAt,
+                highstand,
+                doubtful,
+                order,
+                Optional.of(toLevel).filter(make -> whole));
     }
 
     private IndicativeMeaning meaning(RowReader row, String where, FormsAt formsAt) {

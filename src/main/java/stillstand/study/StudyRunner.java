@@ -72,8 +72,7 @@ public final class StudyRunner {
                 executor,
                 settings.indicativeRange(),
                 dates);
-        matching = new Flights(
-                streams, executor, monitor, rules(settings.matching()), settings.indicativeRange());
+        matching = new Flights(streams, executor, monitor, rules(settings.matching()), settings.indicativeRange());
     }
 
     /** Settings of matching as the engine takes them: what is not stated stays its own default. */
@@ -173,8 +172,8 @@ public final class StudyRunner {
         if (monitor.isCancelled()) {
             throw new RunCancelledException();
         }
-        SiteRelations relations =
-                SiteRelations.of(plan.site(), basis, study.settings().indicativeRange(), dates, streams, this.plan, executor);
+        SiteRelations relations = SiteRelations.of(
+                plan.site(), basis, study.settings().indicativeRange(), dates, streams, this.plan, executor);
         intervals.addAll(relations.intervals());
         implied.addAll(relations.impliedSeaLevel());
         ledger.addAll(relations.assumptions());
@@ -196,18 +195,18 @@ public final class StudyRunner {
         flights.add(answered.flight());
         residuals.addAll(answered.residuals());
         ledger.addAll(answered.assumptions());
-        sayWaiting(site, "no date of its own and no single highstand: the flight of the site says its highstand and age");
+        sayWaiting(
+                site, "no date of its own and no single highstand: the flight of the site says its highstand and age");
     }
 
     /** Levels that wait for the flight learn what came of it. */
     private void sayWaiting(Site site, String reason) {
         for (Level level : site.levels()) {
             boolean matched = FlightSetup.isToBeMatched(level.formsAt(), level.highstand());
-            waiting.replaceAll(waits -> matched
-                            && waits.site().equals(site.name())
-                            && waits.level().equals(level.name())
-                    ? new StudyResult.Waiting(site.name(), level.name(), reason)
-                    : waits);
+            waiting.replaceAll(waits ->
+                    matched && waits.site().equals(site.name()) && waits.level().equals(level.name())
+                            ? new StudyResult.Waiting(site.name(), level.name(), reason)
+                            : waits);
         }
     }
 

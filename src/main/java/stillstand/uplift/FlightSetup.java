@@ -135,13 +135,21 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
             Interval surveyed = site.surveyedMetres().orElseThrow();
             List<FlightLevel> levels = new ArrayList<>();
             List<LimitingPoint> limiting = new ArrayList<>();
-            for (Level level : inOrder(site.levels(), Level::order, level -> level.elevationMetres().mean())) {
+            for (Level level : inOrder(
+                    site.levels(),
+                    Level::order,
+                    level -> level.elevationMetres().mean())) {
                 switch (level.formsAt()) {
                     case HIGHSTAND -> levels.add(level(level));
-                    case MARINE_LIMITING -> limiting(level, LimitingPoint.Side.BELOW_SEA).ifPresent(limiting::add);
+                    case MARINE_LIMITING ->
+                        limiting(level, LimitingPoint.Side.BELOW_SEA).ifPresent(limiting::add);
                     case TERRESTRIAL_LIMITING ->
                         limiting(level, LimitingPoint.Side.ABOVE_SEA).ifPresent(limiting::add);
-                    default -> say("takes no part in the flight", "forms at: " + level.formsAt().id(), level);
+                    default ->
+                        say(
+                                "takes no part in the flight",
+                                "forms at: " + level.formsAt().id(),
+                                level);
                 }
             }
             FlightModel model = new FlightModel(
@@ -184,7 +192,8 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
                     stand.takesOffset(),
                     stand.takesInterstadialFactor(),
                     stand.takesCurveAgeError());
-            // an error of the datum moves all levels of the site alike: it rides on the common offset, which stage 1 lacks
+            // an error of the datum moves all levels of the site alike: it rides on the common offset, which stage 1
+            // lacks
             return stand.takesOffset() ? row : row.withAddedLevelSigma(datumSigmaMetres);
         }
 
@@ -213,7 +222,10 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
             for (HeightTerm term : FormerSeaLevel.ofLandform(site, level, rule)) {
                 terms.add(
                         term.source() == Source.DATUM
-                                ? new HeightTerm(Source.DATUM, term.sign(), new Exact(term.metres().mean()))
+                                ? new HeightTerm(
+                                        Source.DATUM,
+                                        term.sign(),
+                                        new Exact(term.metres().mean()))
                                 : term);
             }
             double lowering = level.loweringMetresPerKyr().mean();
@@ -221,10 +233,10 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
             if (lowering > 0 && ageKa.isPresent()) {
                 double metres = lowering * ageKa.get().mean();
                 double sigma = Math.hypot(
-                        level.loweringMetresPerKyr().standardDeviation() * ageKa.get().mean(),
+                        level.loweringMetresPerKyr().standardDeviation()
+                                * ageKa.get().mean(),
                         lowering * ageKa.get().standardDeviation());
-                terms.add(new HeightTerm(
-                        Source.SURVEY, 1, sigma > 0 ? new Normal(metres, sigma) : new Exact(metres)));
+                terms.add(new HeightTerm(Source.SURVEY, 1, sigma > 0 ? new Normal(metres, sigma) : new Exact(metres)));
                 say("surface lowering in the flight", metres(metres) + " at the level's own dates", level);
             } else if (lowering > 0) {
                 say("surface lowering is left out of the flight", "the level has no date to reckon it by", level);
@@ -294,7 +306,9 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
         }
 
         private void sayRules(Interval surveyed, SharedPriors shared, FlightModel model) {
-            say("a flight is matched to highstands", complete ? "of a table taken as it stands" : "by the default model");
+            say(
+                    "a flight is matched to highstands",
+                    complete ? "of a table taken as it stands" : "by the default model");
             say(
                     "heights in which a terrace would have been seen",
                     text(surveyed.low()) + " to " + text(surveyed.high()) + " m above mean sea level");
@@ -318,7 +332,9 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
                             model.wrongDateProbability(),
                             model.strayAgeMaximumKa()));
             if (!complete) {
-                say("the answer supposes that at least one level is a shoreline", "and that shorelines stand above today's sea");
+                say(
+                        "the answer supposes that at least one level is a shoreline",
+                        "and that shorelines stand above today's sea");
             }
             if (datumSigmaMetres > 0) {
                 say("error of the datum", metres(datumSigmaMetres) + " (1 sigma), shared by all levels of the flight");

@@ -15,6 +15,7 @@ final class FlightSummary {
     private static final double LEAST_PROBABILITY = 1e-4;
     /** A generic older row with less than this of standing in the surveyed range is not worth a line. */
     private static final double LEAST_INSIDE = 0.005;
+
     private static final int BISECTIONS = 24;
 
     private static final String OLDER = Highstand.OLDER;
@@ -96,8 +97,8 @@ final class FlightSummary {
             byStage.entrySet().stream()
                     .filter(entry -> entry.getValue() >= LEAST_PROBABILITY)
                     .sorted(Comparator.comparing((Map.Entry<String, Double> entry) -> -entry.getValue()))
-                    .forEach(entry -> pairings.add(new FlightResult.Pairing(
-                            name, entry.getKey(), rounded(entry.getValue()))));
+                    .forEach(entry ->
+                            pairings.add(new FlightResult.Pairing(name, entry.getKey(), rounded(entry.getValue()))));
         }
         return pairings;
     }
@@ -177,7 +178,8 @@ final class FlightSummary {
                         level.name(),
                         position.meanMetres(),
                         level.shorelineMetres().mean(),
-                        Math.hypot(position.sigmaMetres(), level.shorelineMetres().standardDeviation())));
+                        Math.hypot(
+                                position.sigmaMetres(), level.shorelineMetres().standardDeviation())));
             }
         }
         return residuals;
@@ -215,15 +217,10 @@ final class FlightSummary {
         RatePosterior rate = answer.rate();
         double median = rate.quantile(0.5);
         double distance = Math.abs(fit.rateMetresPerKyr() - median);
-        double asFar = rate.cumulativeProbability(median - distance)
-                + 1
-                - rate.cumulativeProbability(median + distance);
+        double asFar =
+                rate.cumulativeProbability(median - distance) + 1 - rate.cumulativeProbability(median + distance);
         return new FlightResult.HandFit(
-                criterion,
-                fit.rateMetresPerKyr(),
-                fit.rmsMetres(),
-                fit.rSquared(),
-                Math.min(1, Math.max(0, asFar)));
+                criterion, fit.rateMetresPerKyr(), fit.rmsMetres(), fit.rSquared(), Math.min(1, Math.max(0, asFar)));
     }
 
     /** Where the 95 % interval holds 0, all one may say is how slow the coast must be. */

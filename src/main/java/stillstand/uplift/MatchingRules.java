@@ -27,11 +27,7 @@ public record MatchingRules(
 
     /** The default: Beta(4, 2.5), four decays, one level in ten a stray, one date in twenty wrong. */
     public static final MatchingRules DEFAULT = new MatchingRules(
-            new SharedPriors.Recording.BetaPrior(4, 2.5),
-            Optional.empty(),
-            Optional.empty(),
-            1000,
-            Optional.empty());
+            new SharedPriors.Recording.BetaPrior(4, 2.5), Optional.empty(), Optional.empty(), 1000, Optional.empty());
 
     public MatchingRules {
         decaysKa = decaysKa.map(List::copyOf);

@@ -31,8 +31,7 @@ final class WhatIfPoints {
         RatePosterior proposal = proposal(whole, prior);
         double[][] column = new double[SharedPriors.DIMENSIONS + 1][POINTS];
         for (int block = 0; block < SCRAMBLES; block++) {
-            SobolPoints points =
-                    SobolPoints.scrambled(streams, key + " what if", SharedPriors.DIMENSIONS + 1, block);
+            SobolPoints points = SobolPoints.scrambled(streams, key + " what if", SharedPriors.DIMENSIONS + 1, block);
             for (int d = 0; d < column.length; d++) {
                 points.column(d, column[d]);
             }
@@ -41,8 +40,8 @@ final class WhatIfPoints {
                 blocks[k] = block;
                 rates[k] = proposal.quantile(column[0][i]);
                 logWeight[k] = Math.log(prior.density(rates[k])) - Math.log(proposal.density(rates[k]));
-                numbers[k] = shared.at(
-                        column[1][i], column[2][i], column[3][i], column[4][i], column[5][i], column[6][i]);
+                numbers[k] =
+                        shared.at(column[1][i], column[2][i], column[3][i], column[4][i], column[5][i], column[6][i]);
             }
         }
     }
@@ -93,8 +92,8 @@ final class WhatIfPoints {
             if (monitor.isCancelled()) {
                 throw new RunCancelledException();
             }
-            logs[k] = logWeight[k]
-                    + filter.logEvidence(new UpliftHistory.ConstantRate(rates[k]), numbers[k], workspace);
+            logs[k] =
+                    logWeight[k] + filter.logEvidence(new UpliftHistory.ConstantRate(rates[k]), numbers[k], workspace);
             highest = Math.max(highest, logs[k]);
         }
         if (!(highest > Double.NEGATIVE_INFINITY)) {

@@ -65,7 +65,16 @@ class CommandsTest {
                         NOON,
                         reader,
                         engine),
-                arguments);
+                withoutFigures(arguments));
+    }
+
+    /** Most tests look at no figure, and figures take a second. */
+    private static String[] withoutFigures(String... arguments) {
+        List<String> all = new ArrayList<>(List.of(arguments));
+        if (all.contains("run") && !all.contains("--help") && !String.join(" ", all).contains("--figures")) {
+            all.addAll(List.of("--figures", "none"));
+        }
+        return all.toArray(String[]::new);
     }
 
     private String out() {
@@ -100,11 +109,99 @@ class CommandsTest {
         assertTrue(out().contains("0.44 ± 0.02"), out());
         assertEquals("", err());
         assertEquals(
-                List.of("budget.csv", "ledger.csv", "rates.csv", "results.json", "table1.csv"),
+                List.of("budget.csv", "ledger.csv", "pairings.csv", "rates.csv", "results.json", "table1.csv"),
                 names(folder.resolve("results")));
         assertEquals(List.of("results"), names(folder));
         assertEquals(Optional.of("2026-12-01T12:00:00Z"), written().provenance().started());
         assertEquals(Optional.of(0.0), written().provenance().seconds());
+    }
+
+    @Test
+    void runDrawsTheFiguresOfEachSiteAndOfTheStudy() throws IOException {
+        assertEquals(0, execute("run", folder.toString(), "--figures", "all"), err());
+        List<String> figures = names(folder.resolve("results/figures"));
+        assertTrue(
+                figures.containsAll(List.of(
+                        "curves.svg",
+                        "forest.pdf",
+                        "stair-north-cliff.png",
+                        "stair-north-cliff.svg",
+                        "rates-old-shore.pdf")),
+                figures.toString());
+        assertEquals(0, execute("run", folder.toString()), "figures are ours to replace: " + err());
+        assertFalse(Files.exists(folder.resolve("results/figures")));
+        assertEquals(2, execute("run", folder.toString(), "--figures", "some"));
+        assertEquals("--figures must be all or none but is \"some\"\nSee stillstand run --help\n", err());
+    }
+
+    @Test
+    void drawDrawsAgainFromTheResultsAlone() throws IOException {
+        assertEquals(0, execute("run", folder.toString()), err());
+        Path into = folder.resolve("paper/figures");
+        String results = folder.resolve("results").toString();
+        assertEquals(
+                0,
+                execute("draw", results, "--into", into.toString(), "--figure", "stair", "--format", "svg", "--width=one"),
+                err());
+        assertEquals(List.of("stair-north-cliff.svg", "stair-old-shore.svg"), names(into));
+        assertEquals("2 figures written to " + into + " as svg.\n", out());
+        assertTrue(Files.readString(into.resolve("stair-old-shore.svg")).contains("width=\"90.00mm\""));
+        assertEquals(
+                0,
+                execute(
+                        "draw",
+                        results + "/results.json",
+                        "--into",
+                        into.toString(),
+                        "--figure=pairings",
+                        "--format=png",
+                        "--dpi=72",
+                        "--no-title"),
+                err());
+        assertEquals(
+                "1 figure written to " + into + " as png.\nNo pairings of Old shore: no flight was matched there.\n",
+                out());
+    }
+
+    @Test
+    void drawRefusesWhatItCannotRead() throws IOException {
+        Path into = folder.resolve("figures");
+        String nowhere = folder.resolve("nowhere").toString();
+        assertEquals(1, execute("draw", nowhere, "--into", into.toString()));
+        assertEquals(
+                "1 problem:\n" + nowhere + ": found nothing there, expected a folder of results, or its results.json\n",
+                err());
+        Path other = Files.createDirectory(folder.resolve("other"));
+        Files.writeString(
+                other.resolve("results.json"),
+                ResultsJson.text(SampleStudy.result()).replaceFirst("\"version\": \"[^\"]*\"", "\"version\": \"9.9\""));
+        assertEquals(1, execute("draw", other.toString(), "--into", into.toString()));
+        assertTrue(err().contains("\"9.9\"") && err().contains("run the study again"), err());
+        assertFalse(Files.exists(into), "nothing is made for nothing");
+    }
+
+    @Test
+    void drawKnowsItsWordsAndSaysTheNearest() throws IOException {
+        assertEquals(0, execute("run", folder.toString()), err());
+        List<String> begin = List.of(
+                "draw", folder.resolve("results").toString(), "--into", folder.resolve("d").toString());
+        String[] wrong = {"--figure=stiar", "--width=tow", "--format=svgg", "--dpi=20"};
+        String[] said = {
+            "--figure: there is no \"stiar\"; did you mean \"stair\"?",
+            "--width: there is no \"tow\"; did you mean \"two\"?",
+            "--format: there is no \"svgg\"; did you mean \"svg\"?",
+            "--dpi must be 36 to 1200 but is 20"
+        };
+        for (int i = 0; i < wrong.length; i++) {
+            List<String> arguments = new ArrayList<>(begin);
+            arguments.add(wrong[i]);
+            assertEquals(2, execute(arguments.toArray(String[]::new)));
+            assertEquals(said[i] + "\nSee stillstand draw --help\n", err());
+        }
+        Path file = Files.writeString(folder.resolve("taken"), "a file");
+        assertEquals(3, execute("draw", begin.get(1), "--into", file.toString(), "--figure=forest"));
+        assertTrue(err().startsWith("Cannot write " + file), err());
+        assertEquals("a file", Files.readString(file));
     }
 
     @Test

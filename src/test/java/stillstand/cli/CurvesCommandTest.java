@@ -74,11 +74,12 @@ class CurvesCommandTest {
     }
 
     private StudyResult result(String... more) throws IOException {
-        String[] arguments = new String[more.length + 3];
+        String[] arguments = new String[more.length + 4];
         arguments[0] = "run";
         arguments[1] = study.toString();
         arguments[2] = "--quiet";
-        System.arraycopy(more, 0, arguments, 3, more.length);
+        arguments[3] = "--figures=none";
+        System.arraycopy(more, 0, arguments, 4, more.length);
         assertEquals(0, execute(arguments), err());
         return ResultsJson.read(Files.readString(study.resolve("results/results.json")))
                 .value()

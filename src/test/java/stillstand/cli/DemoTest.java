@@ -62,7 +62,7 @@ class DemoTest {
 
         // 7a: -0.5 +- 3 m, 200 +- 3 ka; offset 3 m, local 2 m; a reef terrace stands 3 m below its sea within 4.13 m
         assertByHand(
-                level(result, "G6"), 247.5 - 0.4 + 3 + 0.5, 200, 3, 4, 0.01, Math.pow(4.13 / 2, 2), 9, 9, 4);
+                level(result, "G5"), 247.5 - 0.4 + 3 + 0.5, 200, 3, 4, 0.01, Math.pow(4.13 / 2, 2), 9, 9, 4);
         // 5e: 7.5 +- 1.5 m, 122.5 +- 3.3 ka
         assertByHand(
                 level(result, "Q3"), -25.7 - 0.2 + 3 - 7.5, 122.5, 3.3, 0.64, 0.04, Math.pow(4.13 / 2, 2), 2.25, 9, 4);
@@ -81,7 +81,7 @@ class DemoTest {
 
     private static void assertWaiting(StudyResult result, String terminal) {
         assertEquals(
-                List.of("G5", "L3", "S3"),
+                List.of("G6", "L3", "S3"),
                 result.waiting().stream().map(StudyResult.Waiting::level).toList());
         assertTrue(whyNoRate(result, "L2", "VL-03").startsWith("the curve is too steep at this age to give a rate"));
         assertEquals("not where it grew", whyNoRate(result, "G4", "VG-23"));

@@ -77,7 +77,15 @@ class FlightReferenceTest {
 
     @Test
     void datedFlight() throws IOException {
-        StudyResult result = study("200", "T1,5.9,2", "T2,36.2,2", "T3,38,2", "T4,105.1,2", "T5,121.8,2", "T6,137.6,2", "T7,150.5,2")
+        StudyResult result = study(
+                        "200",
+                        "T1,5.9,2",
+                        "T2,36.2,2",
+                        "T3,38,2",
+                        "T4,105.1,2",
+                        "T5,121.8,2",
+                        "T6,137.6,2",
+                        "T7,150.5,2")
                 .with(
                         "samples.csv",
                         "site,sample,level,age_ka,age_1sigma_ka",
@@ -119,13 +127,23 @@ class FlightReferenceTest {
         assertEquals(-2.9, flight.halving().get(0).width95ChangePercent(), 0.5);
         assertEquals(-0.6, flight.halving().get(1).width95ChangePercent(), 0.5);
         assertEquals(-1.7, flight.halving().get(3).width95ChangePercent(), 0.5);
-        assertTrue(flight.numericalError().mean() < 3e-4, "error of the mean " + flight.numericalError().mean());
+        assertTrue(
+                flight.numericalError().mean() < 3e-4,
+                "error of the mean " + flight.numericalError().mean());
     }
 
     @Test
     void undatedFlightWithTwoCorrelations() throws IOException {
         StudyResult result = study(
-                        "160", "T1,5.8,2", "T2,10.7,2", "T3,47.4,2", "T4,60.6,2", "T5,96.9,2", "T6,117.7,2", "T7,149.4,2", "T8,152.9,2")
+                        "160",
+                        "T1,5.8,2",
+                        "T2,10.7,2",
+                        "T3,47.4,2",
+                        "T4,60.6,2",
+                        "T5,96.9,2",
+                        "T6,117.7,2",
+                        "T7,149.4,2",
+                        "T8,152.9,2")
                 .run();
         FlightResult flight = flight(result);
         assertEquals(0.33820297, flight.rate().mean().orElseThrow(), 5e-4);

@@ -38,7 +38,11 @@ class FlightStudyTest {
                 .with("sites.csv", "site,latitude,longitude", "Stair,1,2")
                 .run("--draws", "16384");
         assertEquals(List.of(), result.flights());
-        assertEquals(2, result.levels().stream().filter(level -> level.rate().isPresent()).count());
+        assertEquals(
+                2,
+                result.levels().stream()
+                        .filter(level -> level.rate().isPresent())
+                        .count());
     }
 
     @Test
@@ -56,8 +60,9 @@ class FlightStudyTest {
     /** A table of one row, and more levels than rows: odd, said, and done. */
     @Test
     void moreLevelsThanHighstandsAreWarnedAboutAndMatched() throws IOException {
-        StudyResult result =
-                study("Stair,T1,52,3,,", "Stair,T2,80,3,,").withCompleteTable("5e,122,2,5,2").run("--draws", "16384");
+        StudyResult result = study("Stair,T1,52,3,,", "Stair,T2,80,3,,")
+                .withCompleteTable("5e,122,2,5,2")
+                .run("--draws", "16384");
         assertEquals(
                 List.of(
                         "2 levels of \"Stair\" are matched to the one highstand of \"own\": at least 1 will count as strays"),
@@ -97,7 +102,9 @@ class FlightStudyTest {
                         "no rate of the prior (half-cauchy 1 from 0.001 to 0.1) can have left this flight; without level 'T2' one"
                                 + " could")),
                 result.failures());
-        assertEquals(List.of("Other"), result.flights().stream().map(FlightResult::site).toList());
+        assertEquals(
+                List.of("Other"),
+                result.flights().stream().map(FlightResult::site).toList());
     }
 
     @Test

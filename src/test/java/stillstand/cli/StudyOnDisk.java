@@ -56,6 +56,9 @@ final class StudyOnDisk {
         out.reset();
         err.reset();
         List<String> arguments = new ArrayList<>(List.of(command, folder.toString()));
+        if (command.equals("run")) {
+            arguments.addAll(List.of("--figures", "none")); // none looks at them, and they take a second
+        }
         arguments.addAll(Arrays.asList(options));
         Workshop workshop = new Workshop(
                 new PrintStream(out, true, StandardCharsets.UTF_8),

@@ -52,7 +52,10 @@ class FlightCheckTest {
         assertEquals(
                 List.of(),
                 problems(check(
-                        "North,5,5,,", "North,T1,10,1,5e,,,", "North,T2,20,1,,event,,", "North,T3,5,1,,marine-limiting,,")));
+                        "North,5,5,,",
+                        "North,T1,10,1,5e,,,",
+                        "North,T2,20,1,,event,,",
+                        "North,T3,5,1,,marine-limiting,,")));
     }
 
     @Test
@@ -68,7 +71,8 @@ class FlightCheckTest {
                 List.of(
                         "levels.csv:3:5: highstand: found \"5a|5c\", expected a highstand older than \"5e\", to which level \"T1\""
                                 + " below it is tied: higher shorelines are older, and each highstand left one"),
-                problems(check("North,5,5,0,100", "North,T1,10,1,5e,,,", "North,T2,20,1,5a|5c,,,", "North,T3,30,1,,,,")));
+                problems(check(
+                        "North,5,5,0,100", "North,T1,10,1,5e,,,", "North,T2,20,1,5a|5c,,,", "North,T3,30,1,,,,")));
     }
 
     @Test
@@ -85,7 +89,10 @@ class FlightCheckTest {
         assertEquals(
                 List.of(),
                 problems(check(
-                        "North,5,5,0,100", "North,T1,21,1,5c,,,1", "North,T2,20,1,5e,,,2", "North,T3,30,1,5a,,doubtful,")));
+                        "North,5,5,0,100",
+                        "North,T1,21,1,5c,,,1",
+                        "North,T2,20,1,5e,,,2",
+                        "North,T3,30,1,5a,,doubtful,")));
     }
 
     @Test
@@ -116,9 +123,8 @@ class FlightCheckTest {
         Loaded<Study> loaded = check("North,5,5,0,100", levels);
         assertEquals(List.of(), problems(loaded));
         assertEquals(
-                List.of(
-                        "levels.csv:2:3: 20 levels of \"North\" stand at one height (30 m): a highstand leaves one"
-                                + " shoreline, so most of them will count as strays"),
+                List.of("levels.csv:2:3: 20 levels of \"North\" stand at one height (30 m): a highstand leaves one"
+                        + " shoreline, so most of them will count as strays"),
                 warnings(loaded));
     }
 }

@@ -110,7 +110,10 @@ class StudyCheckTest {
 
     static List<Case> sitesRows() {
         return List.of(
-                sites(SITES, "North,95,20,0,100", "sites.csv:2:2: latitude: found \"95\", expected degrees from -90 to 90"),
+                sites(
+                        SITES,
+                        "North,95,20,0,100",
+                        "sites.csv:2:2: latitude: found \"95\", expected degrees from -90 to 90"),
                 sites(
                         SITES,
                         "North,5,,0,100",
@@ -373,8 +376,7 @@ class StudyCheckTest {
                 settings(),
                 Grid.table(
                         "sites.csv",
-                        SITES
-                                + ",datum_offset_m,datum_offset_1sigma_m,rate_prior,x_who,note",
+                        SITES + ",datum_offset_m,datum_offset_1sigma_m,rate_prior,x_who,note",
                         "North,5.5,\u221220,0,90,0.5,0.1,log-uniform 0.01 15,me,a cape"),
                 Grid.table(
                         "levels.csv",

@@ -81,9 +81,9 @@ class FlightCalibrationStatisticalTest {
         List<List<Double>> below = flights(simulator(3, 0), truths, 500)
                 .map(each -> belowOfChange(each.flight, prior, each.dice.nextLong()))
                 .toList();
-        assertAll(IntStream.range(0, 3).mapToObj(k -> () -> RanksOfTruth.of(
-                        below.stream().mapToDouble(each -> each.get(k)))
-                .assertCalibrated()));
+        assertAll(IntStream.range(0, 3)
+                .mapToObj(k -> () -> RanksOfTruth.of(below.stream().mapToDouble(each -> each.get(k)))
+                        .assertCalibrated()));
     }
 
     private static FlightSimulator simulator(int dates, double datumSigmaMetres) {
@@ -101,15 +101,14 @@ class FlightCalibrationStatisticalTest {
 
     private static Stream<Drawn> flights(FlightSimulator simulator, TruthDrawn truths, int count) {
         SplittableRandom seeds = new SplittableRandom(SEED);
-        List<SplittableRandom> dice =
-                Stream.generate(seeds::split).limit(count).toList();
+        List<SplittableRandom> dice = Stream.generate(seeds::split).limit(count).toList();
         return dice.parallelStream().map(each -> new Drawn(simulator.flight(truths, each), each));
     }
 
     private static RanksOfTruth ranks(
             FlightSimulator simulator, int count, ToDoubleBiFunction<Flight, SplittableRandom> below) {
-        return RanksOfTruth.of(flights(simulator, RATES, count)
-                .mapToDouble(each -> below.applyAsDouble(each.flight, each.dice)));
+        return RanksOfTruth.of(
+                flights(simulator, RATES, count).mapToDouble(each -> below.applyAsDouble(each.flight, each.dice)));
     }
 
     private static FlightModel model(Flight flight) {

@@ -65,9 +65,7 @@ record FlightSimulator(List<FlightRow> rows, SharedPriors shared, Survey survey,
         }
 
         double upliftMetresSince(double ageKa) {
-            return ageKa <= changeKa
-                    ? recentRate * ageKa
-                    : recentRate * changeKa + olderRate * (ageKa - changeKa);
+            return ageKa <= changeKa ? recentRate * ageKa : recentRate * changeKa + olderRate * (ageKa - changeKa);
         }
     }
 
@@ -170,8 +168,7 @@ record FlightSimulator(List<FlightRow> rows, SharedPriors shared, Survey survey,
                     + (row.takesInterstadial() ? numbers.interstadialMetres() : 0)
                     + row.levelSigmaMetres() * dice.nextGaussian();
             double heightMetres = seaMetres + truth.upliftMetresSince(ageKa);
-            double probability =
-                    numbers.recordingProbability() * Math.exp(-row.ageKa() / numbers.recordingDecayKa());
+            double probability = numbers.recordingProbability() * Math.exp(-row.ageKa() / numbers.recordingDecayKa());
             if (heightMetres > highestMetres) {
                 double secondMetres = heightMetres - uniform(dice, 3, 10);
                 if (dice.nextDouble() < untrue.twoShorelines && secondMetres > highestMetres) {

@@ -9,7 +9,12 @@ final class RoundHighstands {
     private static final double CURVE_AGE_SIGMA_KA = 3;
 
     private record Stand(
-            String stage, double ageKa, double ageSigmaKa, double levelMetres, double sigmaMetres, boolean interstadial) {}
+            String stage,
+            double ageKa,
+            double ageSigmaKa,
+            double levelMetres,
+            double sigmaMetres,
+            boolean interstadial) {}
 
     private static final List<Stand> STANDS = List.of(
             new Stand("1", 6, 0.5, 1, 1, false),

@@ -1,0 +1,44 @@
+package stillstand.figure;
+
+/** What a figure shows. Its id begins the names of its files. */
+public enum FigureKind {
+    /** Sea level through time, the levels of a site, and the lines between them whose slope is the rate. */
+    STAIR("stair"),
+    /** Densities of the rates of a site. */
+    RATES("rates"),
+    /** Probability of each level and highstand of a flight. */
+    PAIRINGS("pairings"),
+    /** What became of the shoreline of each highstand. */
+    FATES("fates"),
+    /** Measured against predicted heights of a flight. */
+    RESIDUALS("residuals"),
+    /** The rate through time, where it changes. */
+    HISTORY("history"),
+    /** Which input the spread of each rate comes from. */
+    BUDGET("budget"),
+    /** Sea-level curves and the highstands in use. */
+    CURVES("curves"),
+    /** All rates of all sites on one axis. */
+    FOREST("forest");
+
+    private final String id;
+
+    FigureKind(String id) {
+        this.id = id;
+    }
+
+    /** Its name on the command line. */
+    public String id() {
+        return id;
+    }
+
+    /** Whether the whole study has one, and not each site. */
+    public boolean isOfStudy() {
+        return this == CURVES || this == FOREST;
+    }
+
+    @Override
+    public String toString() {
+        return id;
+    }
+}

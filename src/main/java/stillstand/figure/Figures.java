@@ -1,0 +1,160 @@
+package stillstand.figure;
+
+import java.util.ArrayList;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import java.util.Set;
+import stillstand.study.StudyResult;
+import stillstand.uplift.FlightResult;
+
+/**
+ * All figures of a result.
+ *
+ * @param figures what there is to draw: those of the study, then site by site
+ * @param absences what there is not, and why
+ */
+public record Figures(List<Figure> figures, List<Absence> absences) {
+    private static final int LONGEST_NAME = 50;
+
+    public Figures {
+        figures = List.copyOf(figures);
+        absences = List.copyOf(absences);
+    }
+
+    /**
+     * A figure that a site does not have.
+     *
+     * @param kind what it would show
+     * @param site whose; absent where it would be the study's
+     * @param reason a sentence without its full stop
+     */
+    public record Absence(FigureKind kind, Optional<String> site, String reason) {}
+
+    /** Every figure that a result has something for; none of them is drawn yet. */
+    public static Figures of(StudyResult result) {
+        Gathering gathering = new Gathering();
+        gathering.study(result);
+        SiteView.all(result).forEach(site -> gathering.site(result, site));
+        return new Figures(gathering.figures, gathering.absences);
+    }
+
+    /** Figures of those kinds, of all kinds where none is given. */
+    public List<Figure> ofKinds(Set<FigureKind> kinds) {
+        return figures.stream()
+                .filter(figure -> kinds.isEmpty() || kinds.contains(figure.kind()))
+                .toList();
+    }
+
+    private static final class Gathering {
+        private static final String NO_FLIGHT = "no flight was matched there";
+
+        private final List<Figure> figures = new ArrayList<>();
+        private final List<Absence> absences = new ArrayList<>();
+        private final Set<String> taken = new HashSet<>();
+
+        private void study(StudyResult result) {
+            if (CurvesFigure.has(result.seaLevel())) {
+                add(FigureKind.CURVES, (name, width) -> CurvesFigure.page(name, result.seaLevel(), width));
+            } else {
+                absences.add(new Absence(FigureKind.CURVES, Optional.empty(), "the study has no sea level"));
+            }
+            if (ForestFigure.has(result)) {
+                add(FigureKind.FOREST, (name, width) -> ForestFigure.page(name, result, width));
+            } else {
+                absences.add(new Absence(FigureKind.FOREST, Optional.empty(), "no level has a rate"));
+            }
+        }
+
+        private void site(StudyResult result, SiteView site) {
+            site(
+                    FigureKind.STAIR,
+                    site,
+                    StairFigure.has(site),
+                    "no level has a height in the results",
+                    (name, width) -> StairFigure.page(name, site, result.seaLevel().curves(), width));
+            site(
+                    FigureKind.RATES,
+                    site,
+                    RatesFigure.has(site),
+                    "no level has a rate",
+                    (name, width) -> RatesFigure.page(name, site, width));
+            site(
+                    FigureKind.BUDGET,
+                    site,
+                    SharesFigure.hasBudget(site),
+                    "no rate has a budget of its spread",
+                    (name, width) -> SharesFigure.budget(name, site, width));
+            flight(site);
+        }
+
+        private void flight(SiteView site) {
+            Optional<FlightResult> flight = site.flight();
+            flightFigure(FigureKind.PAIRINGS, site, flight.filter(found -> !found.unmatched().isEmpty()), NO_FLIGHT,
+                    (name, found, width) -> PairingsFigure.page(name, site, found, width));
+            flightFigure(FigureKind.FATES, site, flight.filter(found -> !found.missing().isEmpty()), NO_FLIGHT,
+                    (name, found, width) -> SharesFigure.fates(name, site, found, width));
+            flightFigure(FigureKind.RESIDUALS, site, flight.filter(found -> !site.residuals().isEmpty()), NO_FLIGHT,
+                    (name, found, width) -> ResidualsFigure.page(name, site, width));
+            flightFigure(FigureKind.HISTORY, site, flight.filter(found -> found.segments().size() > 1),
+                    flight.isPresent() ? "the rate does not change in its model" : NO_FLIGHT,
+                    (name, found, width) -> HistoryFigure.page(name, site, found, width));
+        }
+
+        private void flightFigure(
+                FigureKind kind, SiteView site, Optional<FlightResult> flight, String whyNot, OfFlight drawing) {
+            flight.ifPresentOrElse(
+                    found -> site(kind, site, true, whyNot, (name, width) -> drawing.page(name, found, width)),
+                    () -> site(kind, site, false, whyNot, (name, width) -> {
+                        throw new IllegalStateException(name);
+                    }));
+        }
+
+        private void site(FigureKind kind, SiteView site, boolean there, String whyNot, Drawing drawing) {
+            if (there) {
+                String name = unique(kind.id() + "-" + stem(site.site()));
+                figures.add(new Figure(
+                        kind, Optional.of(site.site()), name, width -> drawing.page(name, width)));
+            } else {
+                absences.add(new Absence(kind, Optional.of(site.site()), whyNot));
+            }
+        }
+
+        private void add(FigureKind kind, Drawing drawing) {
+            String name = unique(kind.id());
+            figures.add(new Figure(kind, Optional.empty(), name, width -> drawing.page(name, width)));
+        }
+
+        /** Two sites whose names differ in signs alone must not share a file. */
+        private String unique(String wanted) {
+            String name = wanted;
+            for (int i = 2; !taken.add(name); i++) {
+                name = wanted + "-" + i;
+            }
+            return name;
+        }
+    }
+
+    /** Draws a figure under its name. */
+    @FunctionalInterface
+    private interface Drawing {
+        Page page(String name, double widthPoints);
+    }
+
+    /** Draws a figure of a flight under its name. */
+    @FunctionalInterface
+    private interface OfFlight {
+        Page page(String name, FlightResult flight, double widthPoints);
+    }
+
+    /** Letters and figures of any script in lower case, all else hyphens: a name every file system takes. */
+    static String stem(String site) {
+        String stem = site.toLowerCase(Locale.ROOT)
+                .replaceAll("[^\\p{L}\\p{M}\\p{N}]+", "-")
+                .replaceAll("^-|-$", "");
+        int length = stem.codePointCount(0, stem.length());
+        String cut = length <= LONGEST_NAME ? stem : stem.substring(0, stem.offsetByCodePoints(0, LONGEST_NAME));
+        return cut.isEmpty() ? "site" : cut;
+    }
+}
