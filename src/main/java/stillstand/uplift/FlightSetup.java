@@ -99,17 +99,16 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
                 .filter(level -> order.apply(level).isPresent())
                 .sorted(Comparator.comparingInt(level -> order.apply(level).orElseThrow()))
                 .toList());
-        int at = 0;
+        int at = 0; // heights ascend, so the place of the next is not below that of the last
         for (T level : levels.stream()
                 .filter(each -> order.apply(each).isEmpty())
                 .sorted(Comparator.comparingDouble(heightMetres))
                 .toList()) {
-            // what is below the level before is below this one
             while (at < sorted.size()
                     && heightMetres.applyAsDouble(sorted.get(at)) <= heightMetres.applyAsDouble(level)) {
                 at++;
             }
-            sorted.add(at++, level);
+            sorted.add(at, level);
         }
         return sorted;
     }
