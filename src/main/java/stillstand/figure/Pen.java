@@ -82,9 +82,7 @@ final class Pen {
     }
 
     void box(double x1, double y1, double x2, double y2, Color colour) {
-        fill(
-                new Rectangle2D.Double(Math.min(x1, x2), Math.min(y1, y2), Math.abs(x2 - x1), Math.abs(y2 - y1)),
-                colour);
+        fill(new Rectangle2D.Double(Math.min(x1, x2), Math.min(y1, y2), Math.abs(x2 - x1), Math.abs(y2 - y1)), colour);
     }
 
     /** A filled dot with a white rim. */
@@ -133,7 +131,6 @@ final class Pen {
         Font font = face.at(points, List.of(text));
         graphics.setFont(font);
         graphics.setPaint(colour);
-        graphics.drawString(
-                text, (float) (x - anchor.part * Face.width(text, font)), (float) (y + 0.36 * points));
+        graphics.drawString(text, (float) (x - anchor.part * Face.width(text, font)), (float) (y + 0.36 * points));
     }
 }

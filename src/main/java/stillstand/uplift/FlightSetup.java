@@ -99,16 +99,17 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
                 .filter(level -> order.apply(level).isPresent())
                 .sorted(Comparator.comparingInt(level -> order.apply(level).orElseThrow()))
                 .toList());
+        int at = 0;
         for (T level : levels.stream()
                 .filter(each -> order.apply(each).isEmpty())
                 .sorted(Comparator.comparingDouble(heightMetres))
                 .toList()) {
-            int at = 0;
+            // what is below the level before is below this one
             while (at < sorted.size()
                     && heightMetres.applyAsDouble(sorted.get(at)) <= heightMetres.applyAsDouble(level)) {
                 at++;
             }
-            sorted.add(at, level);
+            sorted.add(at++, level);
         }
         return sorted;
     }

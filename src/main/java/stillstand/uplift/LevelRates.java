@@ -82,8 +82,7 @@ public final class LevelRates {
             double beyondCurve) {}
 
     /** What draws add up to. */
-    private record Gathered(
-            DrawHistogram rate, DrawHistogram rateWithPrior, DrawHistogram height, DrawHistogram age) {
+    private record Gathered(DrawHistogram rate, DrawHistogram rateWithPrior, DrawHistogram height, DrawHistogram age) {
         Gathered emptyCopy() {
             return new Gathered(rate.emptyCopy(), rateWithPrior.emptyCopy(), height.emptyCopy(), age.emptyCopy());
         }
