@@ -54,6 +54,7 @@ class LevelCoverageStatisticalTest {
      * than it looks: the answer under the prior knows, the propagated one does not and may not pass.
      */
     @Test
+    @Tag("slow")
     void theComparisonTellsAnAnswerUnderAPriorFromOneWithout() {
         List<Answered> fast = simulate(World.YOUNG_CORAL, Rates.NORMAL, NORMAL, 500, 2).stream()
                 .filter(each -> each.looksFasterThan(NORMAL.quantile(0.8)))
