@@ -22,8 +22,7 @@ class LevelRatesTest {
                 1,
                 List.of(survey(new Normal(-46.2, 0.144)), depth(new LogNormal(0, 0.418, 0.823))),
                 TestRates.NO_LOWERING,
-                List.of(highstand(
-                        new TruncatedNormal(0.6, 0.2, 0.01, Double.POSITIVE_INFINITY), new Normal(0, 1))),
+                List.of(highstand(new TruncatedNormal(0.6, 0.2, 0.01, Double.POSITIVE_INFINITY), new Normal(0, 1))),
                 CauchyPrior.DEFAULT);
         assertEquals(Optional.empty(), drawn.rateWithPrior());
         assertEquals(Optional.empty(), drawn.probabilityUplift());
@@ -53,6 +52,8 @@ class LevelRatesTest {
         assertEquals(bare.rate().median() + 0.05, lowered.rate().median(), 1e-6);
         // 0.05 m/kyr over 125 kyr
         assertEquals(
-                bare.relativeSeaLevelMetres().median() + 6.25, lowered.relativeSeaLevelMetres().median(), 0.01);
+                bare.relativeSeaLevelMetres().median() + 6.25,
+                lowered.relativeSeaLevelMetres().median(),
+                0.01);
     }
 }
