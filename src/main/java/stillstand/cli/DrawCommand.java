@@ -59,7 +59,10 @@ final class DrawCommand implements Callable<Integer> {
                     + " fates, residuals, history, curves, forest) or one file's name without its ending")
     private List<String> names = new ArrayList<>();
 
-    @Option(names = "--width", paramLabel = "WIDTH", description = "one (90 mm), one-and-a-half (140 mm) or two (190 mm)")
+    @Option(
+            names = "--width",
+            paramLabel = "WIDTH",
+            description = "one (90 mm), one-and-a-half (140 mm) or two (190 mm)")
     private String width = PageWidth.TWO.id();
 
     @Option(
@@ -175,12 +178,14 @@ final class DrawCommand implements Callable<Integer> {
 
     private void tell(List<Figure> drawn, List<Absence> absent) {
         String endings = formats().stream().map(FigureFormat::id).collect(Collectors.joining(", "));
-        workshop.out().println((drawn.size() == 1 ? "1 figure" : drawn.size() + " figures") + " written to " + into
-                + " as " + endings + ".");
+        workshop.out()
+                .println((drawn.size() == 1 ? "1 figure" : drawn.size() + " figures") + " written to " + into + " as "
+                        + endings + ".");
         for (Absence absence : absent) {
             Optional<String> site = absence.site();
-            workshop.out().println("No " + absence.kind().id() + site.map(name -> " of " + name).orElse("") + ": "
-                    + absence.reason() + ".");
+            workshop.out()
+                    .println("No " + absence.kind().id()
+                            + site.map(name -> " of " + name).orElse("") + ": " + absence.reason() + ".");
         }
     }
 }

@@ -27,8 +27,7 @@ record FigureFiles(List<FigureFormat> formats, PageWidth width, boolean titled, 
     static final int DEFAULT_DPI = 300;
 
     /** As a run writes them. */
-    static final FigureFiles OF_RUN =
-            new FigureFiles(List.of(FigureFormat.values()), PageWidth.TWO, true, DEFAULT_DPI);
+    static final FigureFiles OF_RUN = new FigureFiles(List.of(FigureFormat.values()), PageWidth.TWO, true, DEFAULT_DPI);
 
     FigureFiles {
         formats = List.copyOf(formats);

@@ -42,27 +42,23 @@ final class CurvesFigure {
         List<Page.KeyEntry> key = new ArrayList<>(SeaLine.key(curves));
         key.add(new Page.KeyEntry("picked from a curve, 1 sigma", (pen, x, y) -> sample(pen, x, y, true)));
         key.add(new Page.KeyEntry("of another source, 1 sigma", (pen, x, y) -> sample(pen, x, y, false)));
-        return new Page(
-                name,
-                "Sea level in use",
-                key,
-                Style.chart(plot),
-                note(stands, ids),
-                widthPoints,
-                HEIGHT);
+        return new Page(name, "Sea level in use", key, Style.chart(plot), note(stands, ids), widthPoints, HEIGHT);
     }
 
     private static List<HighstandUsed> stands(SeaLevelUsed sea) {
         Map<String, HighstandUsed> stands = new LinkedHashMap<>();
         sea.highstands().stream()
                 .filter(stand -> !stand.stage().equals(SiteView.OLDER))
-                .forEach(stand -> stands.putIfAbsent(stand.stage() + " " + stand.ageKa() + " " + stand.levelMetres(), stand));
+                .forEach(stand ->
+                        stands.putIfAbsent(stand.stage() + " " + stand.ageKa() + " " + stand.levelMetres(), stand));
         return List.copyOf(stands.values());
     }
 
     private static double oldest(List<CurveUsed> curves, List<HighstandUsed> stands) {
         return Stream.concat(
-                        curves.stream().flatMap(curve -> curve.points().stream()).map(CurvePoint::ageKa),
+                        curves.stream()
+                                .flatMap(curve -> curve.points().stream())
+                                .map(CurvePoint::ageKa),
                         stands.stream().map(stand -> stand.ageKa() + stand.ageSigmaKa()))
                 .mapToDouble(Double::doubleValue)
                 .max()
@@ -89,10 +85,10 @@ final class CurvesFigure {
 
     private static List<StageComb.Tooth> teeth(Pen pen, List<HighstandUsed> stands) {
         return stands.stream()
-                .sorted(Comparator.comparing((HighstandUsed stand) -> !stand.highstandClass().equals("interglacial"))
+                .sorted(Comparator.comparing(
+                                (HighstandUsed stand) -> !stand.highstandClass().equals("interglacial"))
                         .thenComparing(HighstandUsed::ageKa))
-                .map(stand ->
-                        new StageComb.Tooth(stand.stage(), pen.x(stand.ageKa()), pen.y(stand.levelMetres())))
+                .map(stand -> new StageComb.Tooth(stand.stage(), pen.x(stand.ageKa()), pen.y(stand.levelMetres())))
                 .toList();
     }
 

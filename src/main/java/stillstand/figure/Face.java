@@ -26,6 +26,8 @@ enum Face {
     static final FontRenderContext MEASURE = new FontRenderContext(null, true, true);
 
     private final String file;
+
+    @SuppressWarnings("ImmutableEnumChecker") // nobody can change a font
     private final Font font;
 
     Face(String file) {

@@ -40,15 +40,9 @@ public record Figures(List<Figure> figures, List<Absence> absences) {
         return new Figures(gathering.figures, gathering.absences);
     }
 
-    /** Figures of those kinds, of all kinds where none is given. */
-    public List<Figure> ofKinds(Set<FigureKind> kinds) {
-        return figures.stream()
-                .filter(figure -> kinds.isEmpty() || kinds.contains(figure.kind()))
-                .toList();
-    }
-
     private static final class Gathering {
-        private static final String NO_FLIGHT = "no flight was matched there";
+        private static final List<FigureKind> OF_A_FLIGHT =
+                List.of(FigureKind.PAIRINGS, FigureKind.FATES, FigureKind.RESIDUALS, FigureKind.HISTORY);
 
         private final List<Figure> figures = new ArrayList<>();
         private final List<Absence> absences = new ArrayList<>();
@@ -73,7 +67,8 @@ public record Figures(List<Figure> figures, List<Absence> absences) {
                     site,
                     StairFigure.has(site),
                     "no level has a height in the results",
-                    (name, width) -> StairFigure.page(name, site, result.seaLevel().curves(), width));
+                    (name, width) ->
+                            StairFigure.page(name, site, result.seaLevel().curves(), width));
             site(
                     FigureKind.RATES,
                     site,
@@ -90,32 +85,43 @@ public record Figures(List<Figure> figures, List<Absence> absences) {
         }
 
         private void flight(SiteView site) {
-            Optional<FlightResult> flight = site.flight();
-            flightFigure(FigureKind.PAIRINGS, site, flight.filter(found -> !found.unmatched().isEmpty()), NO_FLIGHT,
-                    (name, found, width) -> PairingsFigure.page(name, site, found, width));
-            flightFigure(FigureKind.FATES, site, flight.filter(found -> !found.missing().isEmpty()), NO_FLIGHT,
-                    (name, found, width) -> SharesFigure.fates(name, site, found, width));
-            flightFigure(FigureKind.RESIDUALS, site, flight.filter(found -> !site.residuals().isEmpty()), NO_FLIGHT,
-                    (name, found, width) -> ResidualsFigure.page(name, site, width));
-            flightFigure(FigureKind.HISTORY, site, flight.filter(found -> found.segments().size() > 1),
-                    flight.isPresent() ? "the rate does not change in its model" : NO_FLIGHT,
-                    (name, found, width) -> HistoryFigure.page(name, site, found, width));
-        }
-
-        private void flightFigure(
-                FigureKind kind, SiteView site, Optional<FlightResult> flight, String whyNot, OfFlight drawing) {
-            flight.ifPresentOrElse(
-                    found -> site(kind, site, true, whyNot, (name, width) -> drawing.page(name, found, width)),
-                    () -> site(kind, site, false, whyNot, (name, width) -> {
-                        throw new IllegalStateException(name);
-                    }));
+            if (site.flight().isEmpty()) {
+                for (FigureKind kind : OF_A_FLIGHT) {
+                    absences.add(new Absence(kind, Optional.of(site.site()), "no flight was matched there"));
+                }
+                return;
+            }
+            FlightResult flight = site.flight().get();
+            site(
+                    FigureKind.PAIRINGS,
+                    site,
+                    !flight.unmatched().isEmpty(),
+                    "no level takes part in the flight",
+                    (name, width) -> PairingsFigure.page(name, site, flight, width));
+            site(
+                    FigureKind.FATES,
+                    site,
+                    !flight.missing().isEmpty(),
+                    "the flight says nothing of any highstand",
+                    (name, width) -> SharesFigure.fates(name, site, flight, width));
+            site(
+                    FigureKind.RESIDUALS,
+                    site,
+                    !site.residuals().isEmpty(),
+                    "no level is matched to a highstand",
+                    (name, width) -> ResidualsFigure.page(name, site, width));
+            site(
+                    FigureKind.HISTORY,
+                    site,
+                    flight.segments().size() > 1,
+                    "the rate does not change in its model",
+                    (name, width) -> HistoryFigure.page(name, site, flight, width));
         }
 
         private void site(FigureKind kind, SiteView site, boolean there, String whyNot, Drawing drawing) {
             if (there) {
                 String name = unique(kind.id() + "-" + stem(site.site()));
-                figures.add(new Figure(
-                        kind, Optional.of(site.site()), name, width -> drawing.page(name, width)));
+                figures.add(new Figure(kind, Optional.of(site.site()), name, width -> drawing.page(name, width)));
             } else {
                 absences.add(new Absence(kind, Optional.of(site.site()), whyNot));
             }
@@ -140,12 +146,6 @@ public record Figures(List<Figure> figures, List<Absence> absences) {
     @FunctionalInterface
     private interface Drawing {
         Page page(String name, double widthPoints);
-    }
-
-    /** Draws a figure of a flight under its name. */
-    @FunctionalInterface
-    private interface OfFlight {
-        Page page(String name, FlightResult flight, double widthPoints);
     }
 
     /** Letters and figures of any script in lower case, all else hyphens: a name every file system takes. */

@@ -15,7 +15,8 @@ final class ForestFigure {
     private ForestFigure() {}
 
     /** A row: a heading, a flight, or a level. */
-    private record Row(String name, Optional<Rate> rate, List<Interval> inner, List<Interval> outer, boolean ofFlight) {}
+    private record Row(
+            String name, Optional<Rate> rate, List<Interval> inner, List<Interval> outer, boolean ofFlight) {}
 
     static boolean has(StudyResult result) {
         return rows(SiteView.all(result)).stream().anyMatch(row -> row.rate().isPresent());
@@ -27,11 +28,7 @@ final class ForestFigure {
             List<Row> below = new ArrayList<>();
             site.flight()
                     .ifPresent(flight -> below.add(new Row(
-                            "whole flight",
-                            Optional.of(flight.rate()),
-                            flight.regions68(),
-                            flight.regions95(),
-                            true)));
+                            "whole flight", Optional.of(flight.rate()), flight.regions68(), flight.regions95(), true)));
             site.levels()
                     .forEach(level -> level.answer()
                             .rate()

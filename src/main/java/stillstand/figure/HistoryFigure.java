@@ -34,8 +34,9 @@ final class HistoryFigure {
                 name,
                 site.site() + ": the rate through time",
                 List.of(
-                        new Page.KeyEntry("median", (pen, x, y) -> pen.line(
-                                x, y, x + Page.KeyEntry.SWATCH, y, Style.SEA, Style.line(1.4))),
+                        new Page.KeyEntry(
+                                "median",
+                                (pen, x, y) -> pen.line(x, y, x + Page.KeyEntry.SWATCH, y, Style.SEA, Style.line(1.4))),
                         new Page.KeyEntry("68 %", (pen, x, y) -> pen.box(x, y - 3, x + 13, y + 3, Style.SEA_68)),
                         new Page.KeyEntry("95 %", (pen, x, y) -> pen.box(x, y - 3, x + 13, y + 3, Style.SEA_95))),
                 Style.chart(plot),
@@ -50,7 +51,8 @@ final class HistoryFigure {
                 .mapToDouble(Fate::ageKa)
                 .max()
                 .orElse(0);
-        double change = flight.segments().stream().mapToDouble(Segment::fromKa).max().orElse(0);
+        double change =
+                flight.segments().stream().mapToDouble(Segment::fromKa).max().orElse(0);
         return 1.05 * Math.max(Math.max(recorded, 1.3 * change), 10);
     }
 
@@ -58,8 +60,18 @@ final class HistoryFigure {
         double from = pen.x(segment.fromKa());
         double to = pen.x(segment.toKa().orElse(oldest));
         Rate rate = segment.rate();
-        pen.box(from, pen.y(rate.shortest95().low()), to, pen.y(rate.shortest95().high()), Style.SEA_95);
-        pen.box(from, pen.y(rate.shortest68().low()), to, pen.y(rate.shortest68().high()), Style.SEA_68);
+        pen.box(
+                from,
+                pen.y(rate.shortest95().low()),
+                to,
+                pen.y(rate.shortest95().high()),
+                Style.SEA_95);
+        pen.box(
+                from,
+                pen.y(rate.shortest68().low()),
+                to,
+                pen.y(rate.shortest68().high()),
+                Style.SEA_68);
         double y = pen.y(rate.median());
         pen.line(from, y, to, y, Style.SEA, Style.line(1.4));
         String text = Face.fitted(Numbers.rate(rate), Style.small(), Math.abs(to - from) - 4);

@@ -109,8 +109,7 @@ record Page(
         lines(graphics, noteLines(), Face.REGULAR, Style.SMALL, Style.MUTED, y + chartHeightPoints + 3);
     }
 
-    private double lines(
-            Graphics2D graphics, List<String> lines, Face face, double points, Color colour, double from) {
+    private double lines(Graphics2D graphics, List<String> lines, Face face, double points, Color colour, double from) {
         Pen pen = pen(graphics);
         double y = from;
         for (String line : lines) {
@@ -140,8 +139,7 @@ record Page(
     /** A pen for what lies outside the chart, where no axis applies. */
     private Pen pen(Graphics2D graphics) {
         Rectangle2D all = new Rectangle2D.Double(0, 0, widthPoints, heightPoints());
-        return new Pen(
-                graphics, all, chart.getXYPlot(), Style.axis(null, 0, 1), Style.axis(null, 0, 1));
+        return new Pen(graphics, all, chart.getXYPlot(), Style.axis("", 0, 1), Style.axis("", 0, 1));
     }
 
     private static void hints(Graphics2D graphics) {

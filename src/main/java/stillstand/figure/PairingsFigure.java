@@ -28,7 +28,7 @@ final class PairingsFigure {
         List<String> columns = columns(site, levels);
         List<String> names = new ArrayList<>(List.of(""));
         levels.forEach(level -> names.add(level.name()));
-        NumberAxis across = Style.axis(null, -0.5, columns.size() - 0.5);
+        NumberAxis across = Style.axis("", -0.5, columns.size() - 0.5);
         across.setVisible(false);
         XYPlot plot = Rows.plot(across, names, List.of(), widthPoints);
         Layer.add(plot, pen -> {
@@ -96,7 +96,9 @@ final class PairingsFigure {
         double top = pen.y(row - 0.5) + 0.5;
         double bottom = pen.y(row + 0.5) - 0.5;
         Color full = stage.equals(NONE) ? Style.MUTED : Style.LINK;
-        Color shade = probability < LEAST ? Style.between(Style.PAPER, Style.HAIR, 0.45) : Style.between(Style.PAPER, full, 0.12 + 0.88 * probability);
+        Color shade = probability < LEAST
+                ? Style.between(Style.PAPER, Style.HAIR, 0.45)
+                : Style.between(Style.PAPER, full, 0.12 + 0.88 * probability);
         pen.box(left, top, right, bottom, shade);
         if (probability >= LEAST) {
             pen.text(

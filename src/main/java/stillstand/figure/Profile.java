@@ -80,7 +80,10 @@ final class Profile {
             path.lineTo(from + (i + 0.16) * step, pen.y(outer));
             path.lineTo(from + (i + 0.84) * step, pen.y(height(i)));
         }
-        path.lineTo(to, Math.max(pen.top(), pen.y(Math.max(height(stair.size() - 1) + 3 * metresPerPoint, 2 * metresPerPoint))));
+        path.lineTo(
+                to,
+                Math.max(
+                        pen.top(), pen.y(Math.max(height(stair.size() - 1) + 3 * metresPerPoint, 2 * metresPerPoint))));
         return path;
     }
 
@@ -101,13 +104,14 @@ final class Profile {
             pen.line(left, wanted[i], x, wanted[i], Style.MUTED, Style.line(0.25));
             pen.line(x, wanted[i], to, wanted[i], Style.ROCK_EDGE, Style.line(0.25));
             pen.line(to, wanted[i], to + LEADER - 2, places[i], Style.ROCK_EDGE, Style.line(0.25));
-            level.height().ifPresent(height -> pen.line(
-                    x,
-                    pen.y(height.interval95().low()),
-                    x,
-                    pen.y(height.interval95().high()),
-                    Style.INK,
-                    Style.line(0.7)));
+            level.height()
+                    .ifPresent(height -> pen.line(
+                            x,
+                            pen.y(height.interval95().low()),
+                            x,
+                            pen.y(height.interval95().high()),
+                            Style.INK,
+                            Style.line(0.7)));
             pen.dot(x, wanted[i], 2.1, level.claims().isEmpty() ? Style.MUTED : Style.LINK);
             name(level, to + LEADER, places[i]);
         }

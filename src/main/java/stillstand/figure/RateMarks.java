@@ -26,8 +26,11 @@ final class RateMarks {
         double low = least(rates.stream().map(rate -> rate.shortest68().low()));
         double high = greatest(rates.stream().map(rate -> rate.shortest68().high()));
         double room = ROOM * (high - low);
-        double from = Math.max(low - room, least(rates.stream().map(rate -> rate.shortest95().low())));
-        double to = Math.min(high + room, greatest(rates.stream().map(rate -> rate.shortest95().high())));
+        double from = Math.max(
+                low - room, least(rates.stream().map(rate -> rate.shortest95().low())));
+        double to = Math.min(
+                high + room,
+                greatest(rates.stream().map(rate -> rate.shortest95().high())));
         return Rows.around(Style::axis, AXIS, Stream.of(from, to));
     }
 
@@ -92,8 +95,7 @@ final class RateMarks {
         double swatch = Page.KeyEntry.SWATCH;
         return List.of(
                 new Page.KeyEntry("median", (pen, x, y) -> pen.dot(x + swatch / 2, y, 2, Style.INK)),
-                new Page.KeyEntry(
-                        "68 %", (pen, x, y) -> pen.line(x, y, x + swatch, y, Style.INK, Style.line(3))),
+                new Page.KeyEntry("68 %", (pen, x, y) -> pen.line(x, y, x + swatch, y, Style.INK, Style.line(3))),
                 new Page.KeyEntry(
                         "95 %, shortest", (pen, x, y) -> pen.line(x, y, x + swatch, y, Style.INK, Style.line(1))));
     }

@@ -32,7 +32,8 @@ final class RatesFigure {
     private static List<Row> rows(SiteView site) {
         List<Row> rows = new ArrayList<>();
         site.flight().ifPresent(flight -> rows.add(Row.of(flight)));
-        site.downwards().forEach(level -> level.answer().rate().ifPresent(rate -> rows.add(Row.of(level.name(), rate))));
+        site.downwards()
+                .forEach(level -> level.answer().rate().ifPresent(rate -> rows.add(Row.of(level.name(), rate))));
         return rows;
     }
 

@@ -22,7 +22,8 @@ final class ResidualsFigure {
                 Rows.around(
                         Style::axis,
                         "Measured less predicted height (m)",
-                        Stream.concat(Stream.of(0.0), rows.stream().flatMap(row -> Stream.of(low(row, 2), high(row, 2))))),
+                        Stream.concat(
+                                Stream.of(0.0), rows.stream().flatMap(row -> Stream.of(low(row, 2), high(row, 2))))),
                 rows.stream().map(LevelResidual::level).toList(),
                 rows.stream()
                         .map(row -> Numbers.plusMinus(difference(row), row.sigmaMetres()))
@@ -45,10 +46,12 @@ final class ResidualsFigure {
                 name,
                 site.site() + ": measured against predicted heights",
                 List.of(
-                        new Page.KeyEntry("1 sigma", (pen, x, y) -> pen.line(
-                                x, y, x + Page.KeyEntry.SWATCH, y, Style.SEA, Style.line(3))),
-                        new Page.KeyEntry("2 sigma", (pen, x, y) -> pen.line(
-                                x, y, x + Page.KeyEntry.SWATCH, y, Style.SEA, Style.line(1)))),
+                        new Page.KeyEntry(
+                                "1 sigma",
+                                (pen, x, y) -> pen.line(x, y, x + Page.KeyEntry.SWATCH, y, Style.SEA, Style.line(3))),
+                        new Page.KeyEntry(
+                                "2 sigma",
+                                (pen, x, y) -> pen.line(x, y, x + Page.KeyEntry.SWATCH, y, Style.SEA, Style.line(1)))),
                 Style.chart(plot),
                 "Each level against the highstand that it most probably records. To the right: difference, m, with 1 sigma.",
                 widthPoints,

@@ -43,9 +43,8 @@ final class Rows {
 
     private static SymbolAxis names(List<String> texts, double widest) {
         Font font = Face.REGULAR.at(Style.TEXT, texts);
-        String[] fitted = texts.stream()
-                .map(text -> Face.fitted(text, font, widest))
-                .toArray(String[]::new);
+        String[] fitted =
+                texts.stream().map(text -> Face.fitted(text, font, widest)).toArray(String[]::new);
         SymbolAxis axis = new SymbolAxis(null, fitted);
         Style.dress(axis);
         axis.setTickLabelFont(font);

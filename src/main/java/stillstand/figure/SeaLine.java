@@ -56,10 +56,12 @@ final class SeaLine {
                     (pen, x, y) -> pen.line(x, y, x + Page.KeyEntry.SWATCH, y, colour, Style.line(1.1))));
         }
         if (!curves.isEmpty()) {
-            key.add(new Page.KeyEntry("its 68 and 95 % bands", (pen, x, y) -> {
-                pen.box(x, y - 3, x + 13, y + 3, Style.SEA_95);
-                pen.box(x, y - 1.5, x + 13, y + 1.5, Style.SEA_68);
-            }));
+            key.add(new Page.KeyEntry(
+                    "its 68 and 95 % bands",
+                    (pen, x, y) -> {
+                        pen.box(x, y - 3, x + 13, y + 3, Style.SEA_95);
+                        pen.box(x, y - 1.5, x + 13, y + 1.5, Style.SEA_68);
+                    }));
         }
         return key;
     }

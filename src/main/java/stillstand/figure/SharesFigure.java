@@ -34,15 +34,18 @@ final class SharesFigure {
     static Page budget(String name, SiteView site, double widthPoints) {
         List<Row> rows = new ArrayList<>();
         site.downwards()
-                .forEach(level -> level.answer().budget().ifPresent(budget -> rows.add(new Row(
-                        level.name(),
-                        level.answer()
-                                .rate()
-                                .map(rate -> "± "
-                                        + Numbers.rounded(
-                                                rate.interval68().width() / 2, rate.interval68().width() / 2))
-                                .orElse(""),
-                        parts(budget)))));
+                .forEach(level -> level.answer()
+                        .budget()
+                        .ifPresent(budget -> rows.add(new Row(
+                                level.name(),
+                                level.answer()
+                                        .rate()
+                                        .map(rate -> "± "
+                                                + Numbers.rounded(
+                                                        rate.interval68().width() / 2,
+                                                        rate.interval68().width() / 2))
+                                        .orElse(""),
+                                parts(budget)))));
         return page(
                 name,
                 site.site() + ": where the spread of each rate comes from",
@@ -130,8 +133,7 @@ final class SharesFigure {
             Color colour = Style.SHARES.get(i);
             entries.add(new Page.KeyEntry(key.get(i), (pen, x, y) -> segment(pen, x + 2, x + 12, y, 3, colour)));
         }
-        return new Page(
-                name, title, entries, Style.chart(plot), note, widthPoints, Rows.height(rows.size(), ROW));
+        return new Page(name, title, entries, Style.chart(plot), note, widthPoints, Rows.height(rows.size(), ROW));
     }
 
     private static void paint(Pen pen, List<Double> parts, double y) {

@@ -52,8 +52,9 @@ record SiteView(
     /** Every site with a level, in the order of the study. */
     static List<SiteView> all(StudyResult result) {
         Map<String, List<LevelAnswer>> sites = new LinkedHashMap<>();
-        result.levels().forEach(level -> sites.computeIfAbsent(level.site(), name -> new ArrayList<>())
-                .add(level));
+        result.levels()
+                .forEach(level -> sites.computeIfAbsent(level.site(), name -> new ArrayList<>())
+                        .add(level));
         Map<String, HighstandUsed> stands = new LinkedHashMap<>();
         result.seaLevel().highstands().stream()
                 .filter(stand -> !stand.stage().equals(OLDER))

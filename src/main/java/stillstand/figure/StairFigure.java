@@ -52,8 +52,7 @@ final class StairFigure {
         this.widthPoints = widthPoints;
         this.stair = site.stair();
         this.oldestKa = 1.04
-                * Stream.concat(
-                                stair.stream().flatMap(level -> starts(level).map(Start::ageKa)), Stream.of(20.0))
+                * Stream.concat(stair.stream().flatMap(level -> starts(level).map(Start::ageKa)), Stream.of(20.0))
                         .mapToDouble(Double::doubleValue)
                         .max()
                         .orElse(20);
@@ -86,10 +85,10 @@ final class StairFigure {
         }
         return level.claims().stream()
                 .filter(claim -> claim.probability() >= LEAST_LINE)
-                .flatMap(claim -> start(level, claim).stream());
+                .flatMap(claim -> start(claim).stream());
     }
 
-    private Optional<Start> start(LevelView level, Claim claim) {
+    private Optional<Start> start(Claim claim) {
         HighstandUsed stand = site.stands().get(claim.highstand());
         return stand == null
                 ? Optional.empty()
@@ -100,8 +99,7 @@ final class StairFigure {
         Optional<Quantity> age = level.answer().age();
         return age.flatMap(found -> level.answer()
                 .rate()
-                .map(rate -> new Start(
-                        found.median(), SiteView.metres(level) - rate.median() * found.median(), 1)));
+                .map(rate -> new Start(found.median(), SiteView.metres(level) - rate.median() * found.median(), 1)));
     }
 
     private Page page(String name) {
@@ -125,9 +123,11 @@ final class StairFigure {
     /** From below what matters to above it; the curve's depths are cut off where the levels lie close together. */
     private Interval span() {
         double[] matters = Stream.of(
-                        stair.stream().flatMap(level -> level.height().stream()
-                                .flatMap(found -> Stream.of(
-                                        found.interval95().low(), found.interval95().high()))),
+                        stair.stream()
+                                .flatMap(level -> level.height().stream()
+                                        .flatMap(found -> Stream.of(
+                                                found.interval95().low(),
+                                                found.interval95().high()))),
                         stair.stream().flatMap(this::starts).map(Start::seaMetres),
                         lost.stream().map(Fate::heightMetres),
                         Stream.of(0.0))
@@ -144,8 +144,7 @@ final class StairFigure {
 
     private NumberAxis elevation(Interval span, double height) {
         double comb = StageComb.share(height - BELOW_PLOT) * span.width();
-        return Style.upright(
-                "Elevation, and sea level then (m)", span.low() - comb, span.high() + 0.07 * span.width());
+        return Style.upright("Elevation, and sea level then (m)", span.low() - comb, span.high() + 0.07 * span.width());
     }
 
     private Stream<CurvePoint> seaInView() {
@@ -194,8 +193,7 @@ final class StairFigure {
                 .filter(stand -> stand.ageKa() <= oldestKa)
                 .sorted(Comparator.comparing((HighstandUsed stand) -> !claimed.contains(stand.stage()))
                         .thenComparing(HighstandUsed::ageKa))
-                .map(stand ->
-                        new StageComb.Tooth(stand.stage(), pen.x(stand.ageKa()), pen.y(stand.levelMetres())))
+                .map(stand -> new StageComb.Tooth(stand.stage(), pen.x(stand.ageKa()), pen.y(stand.levelMetres())))
                 .toList();
     }
 
@@ -203,8 +201,7 @@ final class StairFigure {
         double probability = link.start().probability();
         double x = pen.x(link.start().ageKa());
         double sea = pen.y(link.start().seaMetres());
-        pen.line(
-                x, sea, pen.x(0), pen.y(link.metres()), Style.link(probability), Style.line(0.4 + 1.1 * probability));
+        pen.line(x, sea, pen.x(0), pen.y(link.metres()), Style.link(probability), Style.line(0.4 + 1.1 * probability));
         pen.dot(x, sea, 1.9, Style.link(probability));
     }
 
@@ -235,15 +232,17 @@ final class StairFigure {
     private void lostShorelines(Pen pen) {
         List<Fate> downwards = new ArrayList<>(lost);
         downwards.sort(Comparator.comparingDouble(Fate::heightMetres).reversed());
-        double[] wanted =
-                downwards.stream().mapToDouble(fate -> pen.y(fate.heightMetres())).toArray();
+        double[] wanted = downwards.stream()
+                .mapToDouble(fate -> pen.y(fate.heightMetres()))
+                .toArray();
         double[] places = LabelColumn.places(wanted, 7.5, pen.top() + 4, pen.bottom() - 4);
         double present = pen.x(0);
         for (int i = 0; i < places.length; i++) {
             Fate fate = downwards.get(i);
             pen.line(present, wanted[i], present + 8, places[i], Style.MUTED, Style.line(0.3));
             lostMark(pen, present, wanted[i], fate);
-            pen.text(fate.highstand(), present + 9, places[i], Pen.Anchor.START, Face.REGULAR, Style.SMALL, Style.MUTED);
+            pen.text(
+                    fate.highstand(), present + 9, places[i], Pen.Anchor.START, Face.REGULAR, Style.SMALL, Style.MUTED);
         }
     }
 
@@ -257,13 +256,13 @@ final class StairFigure {
         if (lost.stream().anyMatch(fate -> fate.unseen() >= LIKELY)) {
             key.add(new Page.KeyEntry("in view, not found", (pen, x, y) -> {
                 pen.line(x, y, x + swatch, y, Style.MUTED, Style.dashed(0.5));
-                pen.ring(x + swatch, y, 1.9, Style.MUTED);
+                pen.ring(x + swatch - 2, y, 1.9, Style.MUTED);
             }));
         }
         if (lost.stream().anyMatch(fate -> fate.unseen() < LIKELY)) {
             key.add(new Page.KeyEntry("overrun by a younger sea", (pen, x, y) -> {
                 pen.line(x, y, x + swatch, y, Style.MUTED, Style.dashed(0.5));
-                pen.cross(x + swatch, y, 1.9, Style.MUTED);
+                pen.cross(x + swatch - 2, y, 1.9, Style.MUTED);
             }));
         }
         return key;
@@ -275,8 +274,8 @@ final class StairFigure {
                 .map(flight -> "Rate of the flight: " + Numbers.rate(flight.rate())
                         + " m/kyr (median and shortest 95 % interval).")
                 .orElse("No flight was matched here: each level stands for itself."));
-        sentences.add("The steps are not to scale across"
-                + (cutOff ? "; the greatest depths of the sea are cut off." : "."));
+        sentences.add(
+                "The steps are not to scale across" + (cutOff ? "; the greatest depths of the sea are cut off." : "."));
         List<String> without = site.levels().stream()
                 .filter(level -> level.height().isEmpty())
                 .map(LevelView::name)

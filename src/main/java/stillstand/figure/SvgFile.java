@@ -32,8 +32,7 @@ final class SvgFile {
         root.setAttribute("width", millimetres(page.widthPoints()));
         root.setAttribute("height", millimetres(page.heightPoints()));
         root.setAttribute(
-                "viewBox",
-                String.format(Locale.ROOT, "0 0 %.3f %.3f", page.widthPoints(), page.heightPoints()));
+                "viewBox", String.format(Locale.ROOT, "0 0 %.3f %.3f", page.widthPoints(), page.heightPoints()));
         nameFaces(root);
         ByteArrayOutputStream bytes = new ByteArrayOutputStream();
         try (Writer writer = new OutputStreamWriter(bytes, StandardCharsets.UTF_8)) {

@@ -71,7 +71,9 @@ class CommandsTest {
     /** Most tests look at no figure, and figures take a second. */
     private static String[] withoutFigures(String... arguments) {
         List<String> all = new ArrayList<>(List.of(arguments));
-        if (all.contains("run") && !all.contains("--help") && !String.join(" ", all).contains("--figures")) {
+        if (all.contains("run")
+                && !all.contains("--help")
+                && !String.join(" ", all).contains("--figures")) {
             all.addAll(List.of("--figures", "none"));
         }
         return all.toArray(String[]::new);
@@ -109,7 +111,7 @@ class CommandsTest {
         assertTrue(out().contains("0.44 ± 0.02"), out());
         assertEquals("", err());
         assertEquals(
-                List.of("budget.csv", "ledger.csv", "rates.csv", "results.json", "table1.csv"),
+                List.of("budget.csv", "ledger.csv", "pairings.csv", "rates.csv", "results.json", "table1.csv"),
                 names(folder.resolve("results")));
         assertEquals(List.of("results"), names(folder));
         assertEquals(Optional.of("2026-12-01T12:00:00Z"), written().provenance().started());
@@ -141,7 +143,16 @@ class CommandsTest {
         String results = folder.resolve("results").toString();
         assertEquals(
                 0,
-                execute("draw", results, "--into", into.toString(), "--figure", "stair", "--format", "svg", "--width=one"),
+                execute(
+                        "draw",
+                        results,
+                        "--into",
+                        into.toString(),
+                        "--figure",
+                        "stair",
+                        "--format",
+                        "svg",
+                        "--width=one"),
                 err());
         assertEquals(List.of("stair-north-cliff.svg", "stair-old-shore.svg"), names(into));
         assertEquals("2 figures written to " + into + " as svg.\n", out());
@@ -184,7 +195,10 @@ class CommandsTest {
     void drawKnowsItsWordsAndSaysTheNearest() throws IOException {
         assertEquals(0, execute("run", folder.toString()), err());
         List<String> begin = List.of(
-                "draw", folder.resolve("results").toString(), "--into", folder.resolve("d").toString());
+                "draw",
+                folder.resolve("results").toString(),
+                "--into",
+                folder.resolve("d").toString());
         String[] wrong = {"--figure=stiar", "--width=tow", "--format=svgg", "--dpi=20"};
         String[] said = {
             "--figure: there is no \"stiar\"; did you mean \"stair\"?",

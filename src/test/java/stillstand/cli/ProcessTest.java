@@ -90,7 +90,9 @@ class ProcessTest {
             runs.add(results());
             assertTrue(read("out").contains("0.35 ± 0.03"), "standard output is UTF-8 whatever the locale");
         }
-        assertTrue(runs.get(0).containsKey("curves.svg"), () -> "figures: " + runs.get(0).keySet());
+        assertTrue(
+                runs.get(0).containsKey("curves.svg"),
+                () -> "figures: " + runs.get(0).keySet());
         assertTrue(runs.get(0).getOrDefault("results.json", "").contains("\"generator\""));
         assertEquals(runs.get(0), runs.get(1));
         assertEquals(runs.get(0), runs.get(2));
@@ -99,8 +101,10 @@ class ProcessTest {
     @Test
     void signalsEndARunAndLeaveEarlierResults() throws Exception {
         assertEquals(
-                0, start(List.of(), "run", study.toString(), "--draws", "4096", "--figures", "none")
-                        .waitFor(), read("err"));
+                0,
+                start(List.of(), "run", study.toString(), "--draws", "4096", "--figures", "none")
+                        .waitFor(),
+                read("err"));
         Map<String, String> before = results();
         Process killed = startLong();
         killed.destroy();

@@ -11,6 +11,7 @@ import java.io.ByteArrayInputStream;
 import java.io.IOException;
 import java.nio.ByteBuffer;
 import java.nio.charset.StandardCharsets;
+import java.util.Set;
 import java.util.TreeSet;
 import javax.imageio.ImageIO;
 import org.apache.pdfbox.Loader;
@@ -49,7 +50,7 @@ class FigureFilesTest {
         try (PDDocument document = Loader.loadPDF(stair().bytes(FigureFormat.PDF, PageWidth.ONE, true, 300))) {
             PDPage page = document.getPage(0);
             assertEquals(90, page.getMediaBox().getWidth() * MILLIMETRES_PER_POINT, 0.01);
-            TreeSet<String> fonts = new TreeSet<>();
+            Set<String> fonts = new TreeSet<>();
             gather(page.getResources(), fonts);
             assertEquals(2, fonts.size(), fonts.toString());
             for (String font : fonts) {
@@ -61,7 +62,7 @@ class FigureFilesTest {
         }
     }
 
-    private static void gather(PDResources resources, TreeSet<String> fonts) throws IOException {
+    private static void gather(PDResources resources, Set<String> fonts) throws IOException {
         for (COSName name : resources.getFontNames()) {
             PDFont font = resources.getFont(name);
             fonts.add((font.isEmbedded() ? "embedded " : "missing ") + font.getName());
@@ -102,7 +103,6 @@ class FigureFilesTest {
     @ParameterizedTest
     @CsvSource({"35", "1201", "-1"})
     void resolutionsOutOfReasonAreRefused(int dpi) {
-        assertThrows(
-                IllegalArgumentException.class, () -> stair().bytes(FigureFormat.PNG, PageWidth.ONE, true, dpi));
+        assertThrows(IllegalArgumentException.class, () -> stair().bytes(FigureFormat.PNG, PageWidth.ONE, true, dpi));
     }
 }

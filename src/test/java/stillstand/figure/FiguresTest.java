@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
@@ -64,8 +65,7 @@ class FiguresTest {
         assertEquals(
                 List.of("curves", "forest", "stair-still-bay", "rates-still-bay", "budget-still-bay"), names(slow));
         Absence first = Figures.of(slow).absences().get(0);
-        assertEquals(
-                new Absence(FigureKind.PAIRINGS, Optional.of("Still Bay"), "no flight was matched there"), first);
+        assertEquals(new Absence(FigureKind.PAIRINGS, Optional.of("Still Bay"), "no flight was matched there"), first);
         assertTrue(String.join(" ", words(slow, FigureKind.STAIR)).contains("No flight was matched here"));
     }
 
@@ -74,15 +74,18 @@ class FiguresTest {
         StudyResult result = InventedCoasts.drowned();
         List<String> rates = words(result, FigureKind.RATES);
         List<String> forest = words(result, FigureKind.FOREST);
-        List<Rate> expected = new java.util.ArrayList<>(
-                result.levels().stream().map(LevelAnswer::rate).flatMap(Optional::stream).toList());
+        List<Rate> expected = new ArrayList<>(result.levels().stream()
+                .map(LevelAnswer::rate)
+                .flatMap(Optional::stream)
+                .toList());
         expected.add(result.flights().get(0).rate());
         for (Rate rate : expected) {
             assertTrue(rates.contains(printed(rate)), printed(rate) + " in " + rates);
             assertTrue(forest.contains(printed(rate)), printed(rate) + " in " + forest);
         }
         assertTrue(String.join(" ", words(result, FigureKind.STAIR))
-                .contains("Rate of the flight: " + printed(result.flights().get(0).rate()) + " m/kyr"));
+                .contains(
+                        "Rate of the flight: " + printed(result.flights().get(0).rate()) + " m/kyr"));
     }
 
     @Test
@@ -114,7 +117,8 @@ class FiguresTest {
         assertTrue(words(one, FigureKind.STAIR).contains("C1"));
         assertTrue(words(one, FigureKind.RATES).contains("0.10 (0.08 to 0.12)"));
         List<String> sample = words(SampleStudy.result(), FigureKind.STAIR);
-        assertTrue(String.join(" ", sample).contains("Not drawn, for want of a height in the results: T2."), "" + sample);
+        assertTrue(
+                String.join(" ", sample).contains("Not drawn, for want of a height in the results: T2."), "" + sample);
     }
 
     @Test

@@ -101,8 +101,8 @@ final class InventedCoasts {
             if (recorded) {
                 String name = "H" + (levels.size() + 1);
                 double probability = 0.98 - 0.03 * levels.size();
-                levels.add(level(
-                        site, name, stand.stage(), stand.ageKa(), metres + (i % 3 - 1), rate, 0.02, probability));
+                levels.add(
+                        level(site, name, stand.stage(), stand.ageKa(), metres + (i % 3 - 1), rate, 0.02, probability));
                 pairings.add(new Pairing(name, stand.stage(), probability));
                 if (i > 0) {
                     pairings.add(new Pairing(name, STANDS.get(i - 1).stage(), (1 - probability) / 2));
@@ -236,12 +236,7 @@ final class InventedCoasts {
                 Optional.of(quantity(metres, 1.5, "m")),
                 Optional.of(0.9),
                 Optional.empty(),
-                Optional.of(new Budget(
-                        share(0.21),
-                        Optional.empty(),
-                        share(0.125),
-                        share(0.6),
-                        Optional.empty())),
+                Optional.of(new Budget(share(0.21), Optional.empty(), share(0.125), share(0.6), Optional.empty())),
                 Optional.empty(),
                 List.of(),
                 Optional.empty(),
