@@ -61,6 +61,7 @@ public final class Commands implements Callable<Integer> {
         line.addSubcommand(new CheckCommand(workshop));
         line.addSubcommand(new RunCommand(workshop));
         line.addSubcommand(new DrawCommand(workshop));
+        line.addSubcommand(new PredictCommand(workshop));
         line.addSubcommand(curves(workshop));
         return line.setOut(new PrintWriter(workshop.out(), true, StandardCharsets.UTF_8))
                 .setErr(new PrintWriter(workshop.err(), true, StandardCharsets.UTF_8))

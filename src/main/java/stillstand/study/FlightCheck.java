@@ -10,6 +10,7 @@ import java.util.function.Function;
 import java.util.stream.Collectors;
 import stillstand.sealevel.HighstandTable;
 import stillstand.shoreline.FormsAt;
+import stillstand.shoreline.StageChoice;
 import stillstand.uplift.FlightSetup;
 
 /** Checks of the flights: what matching needs, and what of the input cannot be matched. */
@@ -34,9 +35,7 @@ final class FlightCheck {
                     .toList());
             boolean read = site.toSite().isPresent()
                     && own.stream().allMatch(level -> level.toLevel().isPresent());
-            if (read
-                    && flight.stream()
-                            .anyMatch(level -> FlightSetup.isToBeMatched(level.formsAt(), level.highstand()))) {
+            if (read && flight.stream().anyMatch(FlightCheck::isToBeMatched)) {
                 checkRange(site, flight);
                 checkHeights(site, flight);
                 seaLevel.apply(site.name()).ifPresent(sea -> {
@@ -45,6 +44,13 @@ final class FlightCheck {
                 });
             }
         }
+    }
+
+    /** Where the sea level itself has problems a pin cannot be read: then nothing is known of what it leaves open. */
+    private static boolean isToBeMatched(LevelsTable.LevelRow level) {
+        boolean unread =
+                !level.reader().text(HIGHSTAND).isEmpty() && level.highstand().equals(StageChoice.ANY);
+        return !unread && FlightSetup.isToBeMatched(level.formsAt(), level.highstand());
     }
 
     private static void checkPin(LevelsTable.LevelRow level) {
@@ -74,7 +80,7 @@ final class FlightCheck {
             return;
         }
         String level = flight.stream()
-                .filter(each -> FlightSetup.isToBeMatched(each.formsAt(), each.highstand()))
+                .filter(FlightCheck::isToBeMatched)
                 .map(each -> each.key().level())
                 .findFirst()
                 .orElseThrow();

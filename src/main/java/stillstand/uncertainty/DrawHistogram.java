@@ -14,12 +14,9 @@ import java.util.Arrays;
  * <p>Not safe for use by several threads at once.
  */
 public final class DrawHistogram {
-    static final int CELLS = 6 << 10;
+    static final int CELLS = 1 << 12;
 
-    /** Cells between the quantiles of the pilot that set the range; the others stand beyond them, half on either side. */
-    private static final int PILOT_CELLS = 4 << 10;
-
-    /** These quantiles leave out so much of the pilot draws on either side: heavy tails must not widen the cells. */
+    /** The range leaves out this part of the pilot draws on either side: heavy tails must not widen the cells. */
     private static final double PILOT_TAIL = 0.005;
 
     private static final double HALF = CELLS / 2.0;
@@ -60,7 +57,7 @@ public final class DrawHistogram {
     public static DrawHistogram forDrawsLike(SortedDraws sorted) {
         double low = sorted.quantile(PILOT_TAIL);
         double high = sorted.quantile(1 - PILOT_TAIL);
-        return new DrawHistogram(low + (high - low) / 2, (high - low) / PILOT_CELLS);
+        return new DrawHistogram(low + (high - low) / 2, (high - low) / CELLS);
     }
 
     /** An empty histogram with the range of this one. */

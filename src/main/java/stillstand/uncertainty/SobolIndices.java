@@ -18,7 +18,8 @@ import java.util.Optional;
 public final class SobolIndices {
     private static final int POINTS = DrawStreams.BLOCK_DRAWS;
 
-    private final ColumnFunction function;
+    private final PreparedFunction function;
+    private final double[][][] medians;
     private final int dimensions;
     private final List<Group> groups;
 
@@ -69,9 +70,10 @@ public final class SobolIndices {
         }
     }
 
-    private SobolIndices(ColumnFunction function, int dimensions, List<Group> groups) {
+    private SobolIndices(PreparedFunction function, int dimensions, List<Group> groups) {
         this.function = function;
         this.dimensions = dimensions;
+        medians = medians();
         this.groups = groups;
     }
 
@@ -90,6 +92,17 @@ public final class SobolIndices {
      */
     public static Optional<Budget> of(
             ColumnFunction function,
+            int dimensions,
+            List<Group> groups,
+            DrawStreams streams,
+            String key,
+            int scrambles) {
+        return of(PreparedFunction.of(function), dimensions, groups, streams, key, scrambles);
+    }
+
+    /** The same for a function in two steps, which is quicker. */
+    public static Optional<Budget> of(
+            PreparedFunction function,
             int dimensions,
             List<Group> groups,
             DrawStreams streams,
@@ -123,8 +136,8 @@ public final class SobolIndices {
     private record Scramble(double variance, List<Effect> effects) {}
 
     private Scramble scramble(SobolPoints points) {
-        double[][] a = columns(points, 0);
-        double[][] b = columns(points, dimensions);
+        double[][][] a = columns(points, 0);
+        double[][][] b = columns(points, dimensions);
         double[] ofA = evaluate(a);
         double[] ofB = evaluate(b);
         double[] both = Arrays.copyOf(ofA, 2 * POINTS);
@@ -141,7 +154,7 @@ public final class SobolIndices {
                 product += (ofB[i] - mean) * change;
                 square += change * change;
             }
-            double varianceIfExact = variance(evaluate(replaced(a, group, medians())));
+            double varianceIfExact = variance(evaluate(replaced(a, group, medians)));
             effects.add(new Effect(product / POINTS, square / (2.0 * POINTS), varianceIfExact));
         }
         return new Scramble(variance(both), effects);
@@ -185,37 +198,37 @@ public final class SobolIndices {
         return MonteCarloError.ofAverage(residuals);
     }
 
-    private double[][] columns(SobolPoints points, int first) {
-        double[][] columns = new double[dimensions][POINTS];
+    private double[][][] columns(SobolPoints points, int first) {
+        double[][][] columns = new double[dimensions][][];
         for (int d = 0; d < dimensions; d++) {
-            points.column(first + d, columns[d]);
+            double[] probabilities = new double[POINTS];
+            points.column(first + d, probabilities);
+            columns[d] = function.prepare(d, probabilities);
         }
         return columns;
     }
 
-    private double[][] medians() {
+    private double[][][] medians() {
         double[] column = new double[POINTS];
         Arrays.fill(column, 0.5);
-        double[][] columns = new double[dimensions][];
-        Arrays.fill(columns, column);
+        double[][][] columns = new double[dimensions][][];
+        for (int d = 0; d < dimensions; d++) {
+            columns[d] = function.prepare(d, column);
+        }
         return columns;
     }
 
-    private static double[][] replaced(double[][] columns, Group group, double[][] by) {
-        double[][] mixed = columns.clone();
+    private static double[][][] replaced(double[][][] columns, Group group, double[][][] by) {
+        double[][][] mixed = columns.clone();
         for (int dimension : group.dimensions()) {
             mixed[dimension] = by[dimension];
         }
         return mixed;
     }
 
-    private double[] evaluate(double[][] columns) {
-        double[][] copies = new double[dimensions][];
-        for (int d = 0; d < dimensions; d++) {
-            copies[d] = columns[d].clone();
-        }
+    private double[] evaluate(double[][][] prepared) {
         double[] out = new double[POINTS];
-        function.evaluate(copies, out);
+        function.evaluate(prepared, out);
         return out;
     }
 

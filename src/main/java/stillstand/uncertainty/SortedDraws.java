@@ -174,8 +174,7 @@ public final class SortedDraws {
                 int left = low;
                 int right = middle;
                 for (int i = low; i < high; i++) {
-                    boolean fromLeft =
-                            left < middle && (right >= high || values[order[left]] <= values[order[right]]);
+                    boolean fromLeft = left < middle && (right >= high || values[order[left]] <= values[order[right]]);
                     merged[i] = fromLeft ? order[left++] : order[right++];
                 }
             }

@@ -1,6 +1,7 @@
 package stillstand.uplift;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -19,6 +20,7 @@ import stillstand.uncertainty.SobolPoints;
 public final class FlightMonteCarlo {
     private static final double BEND = 0.02;
     private static final int PILOT_POINTS = 64;
+    private static final int PILOT_PIECES = 4;
     private static final int PILOT_CELLS = 48;
     private static final int PILOT_RATES = 300;
     private static final double FLAT = 0.2;
@@ -34,6 +36,7 @@ public final class FlightMonteCarlo {
     private final DrawStreams streams;
     private final String key;
     private final RunMonitor monitor;
+    private final Workers workers;
     private final ShorelineFilter coarse;
     private final ShorelineFilter fine;
 
@@ -72,7 +75,8 @@ public final class FlightMonteCarlo {
             Effort effort,
             DrawStreams streams,
             String key,
-            RunMonitor monitor) {
+            RunMonitor monitor,
+            Workers workers) {
         this.model = model;
         this.prior = prior;
         this.shared = shared;
@@ -80,6 +84,7 @@ public final class FlightMonteCarlo {
         this.streams = streams;
         this.key = key;
         this.monitor = monitor;
+        this.workers = workers;
         coarse = new ShorelineFilter(model, effort.cells());
         fine = new ShorelineFilter(model, 2 * effort.cells());
         int count = effort.scrambles() * effort.points();
@@ -106,7 +111,20 @@ public final class FlightMonteCarlo {
             DrawStreams streams,
             String key,
             RunMonitor monitor) {
-        return new FlightMonteCarlo(model, prior, shared, effort, streams, key, monitor).answer();
+        return new FlightMonteCarlo(model, prior, shared, effort, streams, key, monitor, Workers.NONE).answer();
+    }
+
+    /** The same answer to the last bit, worked out by many threads; to be called from none of them. */
+    static SampledFlightAnswer answer(
+            FlightModel model,
+            RatePrior prior,
+            SharedPriors shared,
+            Effort effort,
+            DrawStreams streams,
+            String key,
+            RunMonitor monitor,
+            Workers workers) {
+        return new FlightMonteCarlo(model, prior, shared, effort, streams, key, monitor, workers).answer();
     }
 
     private SampledFlightAnswer answer() {
@@ -127,21 +145,28 @@ public final class FlightMonteCarlo {
         RatePosterior posterior = weighted.posterior(logEvidence);
         int[] chosen = weighted.chosen(effort.draws());
         PairingSums[] parts = new PairingSums[effort.scrambles()];
-        PairingSums coarseSums = sums(coarse, chosen, weights, logCoarse, highest, parts);
-        PairingSums fineSums = sums(fine, chosen, weights, logFine, highest, new PairingSums[effort.scrambles()]);
+        PairingSums[] sums = new PairingSums[2];
+        JointDraws[] joint = new JointDraws[1];
+        double top = highest;
+        workers.run(List.of(
+                () -> sums[0] = sums(coarse, chosen, weights, logCoarse, top, parts),
+                () -> sums[1] = sums(fine, chosen, weights, logFine, top, new PairingSums[effort.scrambles()]),
+                () -> joint[0] = draws(chosen)));
+        PairingSums coarseSums = sums[0];
+        PairingSums fineSums = sums[1];
         PairingTable table = coarseSums.extrapolatedWith(fineSums);
         double stray = Math.exp(logAllStray(highest) - Math.log(weighted.total(-1)));
         double probabilityAllStray = model.countsAllStray() ? Math.min(1, stray) : stray / (1 + stray);
         FlightAnswer answer =
                 new FlightAnswer(posterior, table, ages(table, fineSums), positions(chosen), probabilityAllStray);
-        return new SampledFlightAnswer(
-                answer, error(weighted, coarseSums, parts), draws(chosen), weighted.effectiveDraws());
+        return new SampledFlightAnswer(answer, error(weighted, coarseSums, parts), joint[0], weighted.effectiveDraws());
     }
 
     /** The density that rates are drawn from. */
     private RatePosterior proposal() {
         ShorelineFilter pilot = new ShorelineFilter(model, PILOT_CELLS);
-        FilterWorkspace workspace = pilot.workspace(false);
+        FilterWorkspace[] workspaces = new FilterWorkspace[PILOT_PIECES];
+        Arrays.setAll(workspaces, piece -> pilot.workspace(false));
         SharedNumbers[] some = new SharedNumbers[PILOT_POINTS];
         drawShared(SobolPoints.scrambled(streams, key + " pilot", SharedPriors.DIMENSIONS + 1, 0), some, 0);
         double[] logs = new double[PILOT_POINTS];
@@ -150,11 +175,17 @@ public final class FlightMonteCarlo {
                 rate -> {
                     stopIfCancelled();
                     UpliftHistory history = new UpliftHistory.ConstantRate(rate);
-                    double top = Double.NEGATIVE_INFINITY;
-                    for (int k = 0; k < PILOT_POINTS; k++) {
-                        logs[k] = pilot.logEvidence(history, some[k], workspace);
-                        top = Math.max(top, logs[k]);
+                    List<Runnable> pieces = new ArrayList<>();
+                    for (int piece = 0; piece < PILOT_PIECES; piece++) {
+                        int number = piece;
+                        pieces.add(() -> {
+                            for (int k = number; k < PILOT_POINTS; k += PILOT_PIECES) {
+                                logs[k] = pilot.logEvidence(history, some[k], workspaces[number]);
+                            }
+                        });
                     }
+                    workers.run(pieces);
+                    double top = Arrays.stream(logs).max().orElseThrow();
                     double sum = 0;
                     for (int k = 0; k < PILOT_POINTS && top > Double.NEGATIVE_INFINITY; k++) {
                         sum += Math.exp(logs[k] - top);
@@ -202,33 +233,39 @@ public final class FlightMonteCarlo {
         }
     }
 
+    /** The first scramble says what is hopeless; the others may be worked out in any order. */
     private void evaluate(RatePosterior proposal) {
+        evaluate(proposal, 0, Double.NEGATIVE_INFINITY);
+        double highest = Arrays.stream(logCoarse, 0, effort.points()).max().orElseThrow();
+        List<Runnable> others = new ArrayList<>();
+        for (int block = 1; block < effort.scrambles(); block++) {
+            int number = block;
+            others.add(() -> evaluate(proposal, number, highest));
+        }
+        workers.run(others);
+    }
+
+    private void evaluate(RatePosterior proposal, int block, double highest) {
         FilterWorkspace coarseWorkspace = coarse.workspace(false);
         FilterWorkspace fineWorkspace = fine.workspace(false);
-        double highest = Double.NEGATIVE_INFINITY;
-        for (int block = 0; block < effort.scrambles(); block++) {
-            int from = block * effort.points();
-            SobolPoints points = SobolPoints.scrambled(streams, key + " flight", SharedPriors.DIMENSIONS + 1, block);
-            double[] first = new double[effort.points()];
-            points.column(0, first);
-            drawShared(points, numbers, from);
-            double blockHighest = Double.NEGATIVE_INFINITY;
-            for (int k = from; k < from + effort.points(); k++) {
-                stopIfCancelled();
-                rates[k] = proposal.quantile(first[k - from]);
-                blocks[k] = block;
-                UpliftHistory history = new UpliftHistory.ConstantRate(rates[k]);
-                double log = Math.log(prior.density(rates[k])) - Math.log(proposal.density(rates[k]));
-                logCoarse[k] = log + coarse.logEvidence(history, numbers[k], coarseWorkspace);
-                logNothing[k] = log + coarseWorkspace.logNothingRecorded;
-                blockHighest = Math.max(blockHighest, logCoarse[k]);
-                logFine[k] = logCoarse[k] < highest - HOPELESS
-                        ? logCoarse[k]
-                        : log + fine.logEvidence(history, numbers[k], fineWorkspace);
-            }
-            highest = block == 0 ? blockHighest : highest;
-            monitor.step("flight " + key, (block + 1.0) / effort.scrambles());
+        int from = block * effort.points();
+        SobolPoints points = SobolPoints.scrambled(streams, key + " flight", SharedPriors.DIMENSIONS + 1, block);
+        double[] first = new double[effort.points()];
+        points.column(0, first);
+        drawShared(points, numbers, from);
+        for (int k = from; k < from + effort.points(); k++) {
+            stopIfCancelled();
+            rates[k] = proposal.quantile(first[k - from]);
+            blocks[k] = block;
+            UpliftHistory history = new UpliftHistory.ConstantRate(rates[k]);
+            double log = Math.log(prior.density(rates[k])) - Math.log(proposal.density(rates[k]));
+            logCoarse[k] = log + coarse.logEvidence(history, numbers[k], coarseWorkspace);
+            logNothing[k] = log + coarseWorkspace.logNothingRecorded;
+            logFine[k] = logCoarse[k] < highest - HOPELESS
+                    ? logCoarse[k]
+                    : log + fine.logEvidence(history, numbers[k], fineWorkspace);
         }
+        monitor.step("flight " + key, (block + 1.0) / effort.scrambles());
     }
 
     private void stopIfCancelled() {

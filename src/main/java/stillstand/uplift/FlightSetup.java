@@ -99,11 +99,11 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
                 .filter(level -> order.apply(level).isPresent())
                 .sorted(Comparator.comparingInt(level -> order.apply(level).orElseThrow()))
                 .toList());
+        int at = 0; // heights ascend, so the place of the next is not below that of the last
         for (T level : levels.stream()
                 .filter(each -> order.apply(each).isEmpty())
                 .sorted(Comparator.comparingDouble(heightMetres))
                 .toList()) {
-            int at = 0;
             while (at < sorted.size()
                     && heightMetres.applyAsDouble(sorted.get(at)) <= heightMetres.applyAsDouble(level)) {
                 at++;

@@ -5,7 +5,6 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.concurrent.Callable;
-import java.util.concurrent.ExecutionException;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.Future;
 import java.util.function.Function;
@@ -102,7 +101,7 @@ public final class Flights {
         Answered answer() {
             Found found;
             try {
-                found = joined(executor.submit(this::found));
+                found = onGrid ? Workers.joined(executor.submit(this::foundOnGrid)) : sampled();
             } catch (IllegalArgumentException e) {
                 throw new IllegalArgumentException(blame(), e);
             }
@@ -118,7 +117,7 @@ public final class Flights {
                             .map(group -> FlightWhatIf.halved(model, group))
                             .toList(),
                     roughly);
-            Optional<RatePosterior> all = joined(same);
+            Optional<RatePosterior> all = Workers.joined(same);
             FlightSummary summary = new FlightSummary(site, model, found.answer(), found.draws());
             RatePosterior posterior = found.answer().rate();
             Rate rate = Rate.of(posterior);
@@ -197,22 +196,30 @@ public final class Flights {
             return said;
         }
 
-        private Found found() {
-            if (onGrid) {
-                FlightAnswer answer =
-                        FlightIntegration.answer(model, prior, nodes(), FlightIntegration.Effort.FULL, quietly());
-                FlightAnswer rough = FlightIntegration.answer(model, prior, nodes(), WHAT_IF_GRID, quietly());
-                JointDraws draws = JointDraws.of(
-                        model,
-                        answer.rate(),
-                        nodes(),
-                        GRID_DRAW_CELLS,
-                        GRID_DRAWS,
-                        streams.stream(key() + " correlations", 0));
-                return new Found(answer, difference(answer, rough), draws);
-            }
+        private Found foundOnGrid() {
+            FlightAnswer answer =
+                    FlightIntegration.answer(model, prior, nodes(), FlightIntegration.Effort.FULL, quietly());
+            FlightAnswer rough = FlightIntegration.answer(model, prior, nodes(), WHAT_IF_GRID, quietly());
+            JointDraws draws = JointDraws.of(
+                    model,
+                    answer.rate(),
+                    nodes(),
+                    GRID_DRAW_CELLS,
+                    GRID_DRAWS,
+                    streams.stream(key() + " correlations", 0));
+            return new Found(answer, difference(answer, rough), draws);
+        }
+
+        private Found sampled() {
             SampledFlightAnswer sampled = FlightMonteCarlo.answer(
-                    model, prior, setup.shared(), FlightMonteCarlo.Effort.FULL, streams, key(), quietly());
+                    model,
+                    prior,
+                    setup.shared(),
+                    FlightMonteCarlo.Effort.FULL,
+                    streams,
+                    key(),
+                    quietly(),
+                    Workers.of(executor));
             return new Found(
                     sampled.answer(),
                     new FlightResult.NumericalError(
@@ -295,7 +302,7 @@ public final class Flights {
             List<FlightResult.LeftOut> results = new ArrayList<>();
             for (int i = 0; i < without.size(); i++) {
                 String level = model.levels().get(i).name();
-                Optional<RatePosterior> rate = joined(without.get(i));
+                Optional<RatePosterior> rate = Workers.joined(without.get(i));
                 if (rate.isPresent() && all.isPresent()) {
                     results.add(new FlightResult.LeftOut(
                             level, all.get().logEvidence() - rate.get().logEvidence(), Rate.of(rate.get())));
@@ -309,7 +316,7 @@ public final class Flights {
             List<FlightResult.Halving> results = new ArrayList<>();
             for (int i = 0; i < groups.size(); i++) {
                 String name = groups.get(i).name().toLowerCase(Locale.ROOT).replace('_', ' ');
-                Optional<RatePosterior> rate = joined(halved.get(i));
+                Optional<RatePosterior> rate = Workers.joined(halved.get(i));
                 if (rate.isPresent() && all.isPresent()) {
                     double change = width(rate.get()) / width(all.get()) - 1;
                     results.add(new FlightResult.Halving(name, 100 * change));
@@ -375,19 +382,5 @@ public final class Flights {
                 return monitor.isCancelled();
             }
         };
-    }
-
-    private static <T> T joined(Future<T> future) {
-        try {
-            return future.get();
-        } catch (InterruptedException e) {
-            Thread.currentThread().interrupt();
-            throw new RunCancelledException();
-        } catch (ExecutionException e) {
-            if (e.getCause() instanceof RuntimeException cause) {
-                throw cause;
-            }
-            throw new IllegalStateException(e.getCause());
-        }
     }
 }

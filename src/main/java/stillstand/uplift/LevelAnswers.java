@@ -194,7 +194,7 @@ public final class LevelAnswers {
         if (outcome.rateWithPrior().isEmpty()) {
             said.add(new Assumption(
                     "no rate under the prior",
-                    prior.describe() + " excludes every draw",
+                    prior.describe() + " excludes all, or all but a few, of the draws",
                     "the prior of the site or study",
                     where));
         }

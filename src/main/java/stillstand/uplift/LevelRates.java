@@ -37,6 +37,8 @@ public final class LevelRates {
     private static final double NEAR_ZERO = 0.02;
 
     private static final double RARE = 1e-6;
+    /** A prior that leaves fewer draws than this (Kish 1965) leaves no distribution. */
+    private static final double LEAST_EFFECTIVE_DRAWS = 100;
     /** Enough draws to choose the range of a histogram. */
     private static final int PILOT_DRAWS = 1 << 11;
 
@@ -65,7 +67,7 @@ public final class LevelRates {
      * What the draws of one level say.
      *
      * @param rate propagated
-     * @param rateWithPrior under the prior of the rate; absent where the prior excludes every draw
+     * @param rateWithPrior under the prior of the rate; absent where the prior leaves next to no draw
      * @param probabilityUplift under a two-sided prior
      * @param age of the level
      * @param relativeSeaLevelMetres height of the former sea above present mean sea level, m
@@ -82,8 +84,7 @@ public final class LevelRates {
             double beyondCurve) {}
 
     /** What draws add up to. */
-    private record Gathered(
-            DrawHistogram rate, DrawHistogram rateWithPrior, DrawHistogram height, DrawHistogram age) {
+    private record Gathered(DrawHistogram rate, DrawHistogram rateWithPrior, DrawHistogram height, DrawHistogram age) {
         Gathered emptyCopy() {
             return new Gathered(rate.emptyCopy(), rateWithPrior.emptyCopy(), height.emptyCopy(), age.emptyCopy());
         }
@@ -330,6 +331,7 @@ public final class LevelRates {
             DrawDistribution rate = all.rate().distribution();
             Optional<DrawDistribution> posterior = all.rateWithPrior().totalWeight() > 0
                     ? Optional.of(all.rateWithPrior().distribution())
+                            .filter(p -> p.effectiveSampleSize() >= LEAST_EFFECTIVE_DRAWS)
                     : Optional.empty();
             Summary ages = explanations.size() == 1 && beyondCurve == 0
                     ? Summary.of(explanations.get(0).ageKa())

@@ -7,6 +7,7 @@ import java.util.Map;
 import java.util.Optional;
 import stillstand.shoreline.HeightTerm;
 import stillstand.uncertainty.DrawStreams;
+import stillstand.uncertainty.PreparedFunction;
 import stillstand.uncertainty.SobolIndices;
 import stillstand.uncertainty.Uncertain;
 
@@ -14,7 +15,7 @@ import stillstand.uncertainty.Uncertain;
  * Which group of inputs the spread of one level's rate comes from. Where several highstands may explain the level, the choice
  * among them is one more input of the age group.
  */
-final class RateBudget {
+final class RateBudget implements PreparedFunction {
     private final List<RateColumns> functions = new ArrayList<>();
     private final double[] upToProbability;
     /** Place of each explanation's inputs among the columns of the whole. */
@@ -78,7 +79,7 @@ final class RateBudget {
         if (groups.isEmpty()) {
             return Optional.empty();
         }
-        return SobolIndices.of(this::evaluate, dimensions, groups, streams, key + " / budget", scrambles)
+        return SobolIndices.of(this, dimensions, groups, streams, key + " / budget", scrambles)
                 .map(RateBudget::named);
     }
 
@@ -86,16 +87,36 @@ final class RateBudget {
         return columnsOfGroup.getOrDefault(group, List.of());
     }
 
-    private void evaluate(double[][] probabilities, double[] out) {
+    /** Values of an input under each explanation that has it, in the order of the explanations; the choice among them as it is. */
+    @Override
+    public double[][] prepare(int dimension, double[] probabilities) {
+        if (functions.size() > 1 && dimension == dimensions - 1) {
+            return new double[][] {probabilities};
+        }
+        double[][] values = new double[functions.size()][0];
+        for (int e = 0; e < functions.size(); e++) {
+            int[] place = places.get(e);
+            for (int d = 0; d < place.length; d++) {
+                if (place[d] == dimension) {
+                    values[e] = probabilities.clone();
+                    functions.get(e).toValues(d, values[e]);
+                }
+            }
+        }
+        return values;
+    }
+
+    @Override
+    public void evaluate(double[][][] prepared, double[] out) {
         RateColumns.Columns drawn = new RateColumns.Columns(out.length);
-        double[] choice = functions.size() > 1 ? probabilities[dimensions - 1].clone() : new double[0];
+        double[] choice = functions.size() > 1 ? prepared[dimensions - 1][0] : new double[0];
         for (int e = 0; e < functions.size(); e++) {
             int[] place = places.get(e);
             double[][] own = new double[place.length][];
             for (int d = 0; d < place.length; d++) {
-                own[d] = functions.size() > 1 ? probabilities[place[d]].clone() : probabilities[place[d]];
+                own[d] = prepared[place[d]][e];
             }
-            functions.get(e).evaluate(own, drawn);
+            functions.get(e).combine(own, drawn);
             double from = e == 0 ? 0 : upToProbability[e - 1];
             boolean last = e == functions.size() - 1;
             for (int i = 0; i < out.length; i++) {

@@ -138,6 +138,24 @@ final class RateColumns {
      * @param out receives rates, heights and ages; its columns are as long as the probabilities'
      */
     void evaluate(double[][] probabilities, Columns out) {
+        for (int d = 0; d < inputs.size(); d++) {
+            toValues(d, probabilities[d]);
+        }
+        combine(probabilities, out);
+    }
+
+    /** Turns the probabilities of one input into its values, in place. */
+    void toValues(int dimension, double[] probabilities) {
+        inputs.get(dimension).value().toQuantiles(probabilities);
+    }
+
+    /**
+     * Rates for columns of values.
+     *
+     * @param values one column an input; not changed
+     * @param out receives rates, heights and ages; its columns are as long as the values'
+     */
+    void combine(double[][] values, Columns out) {
         Arrays.fill(out.heightMetres, exactHeightMetres);
         Arrays.fill(out.seaLevelMetres, exactSeaLevelMetres);
         Arrays.fill(out.ageKa, exactAgeKa);
@@ -146,8 +164,7 @@ final class RateColumns {
         double[] curveAge = new double[0];
         for (int d = 0; d < inputs.size(); d++) {
             Input input = inputs.get(d);
-            double[] column = probabilities[d];
-            input.value().toQuantiles(column);
+            double[] column = values[d];
             switch (input.role()) {
                 case HEIGHT -> add(input.sign(), column, out.heightMetres);
                 case SEA_LEVEL -> add(1, column, out.seaLevelMetres);
@@ -189,8 +206,8 @@ final class RateColumns {
             out.allValid &= inside;
             readAt[i] = Math.min(Math.max(ageKa, fromKa), toKa);
         }
-        curve.readAt(readAt, band, band);
-        add(1, band, out.seaLevelMetres);
+        curve.readAt(readAt, band, readAt);
+        add(1, readAt, out.seaLevelMetres);
     }
 
     private static void divide(Columns out) {

@@ -78,7 +78,8 @@ public record SiteRelations(
             return new SiteRelations(List.of(), List.of(), List.of());
         }
         JointLevels joint = new JointLevels(site.name(), site.coast().orElse(site.name()), entries, streams);
-        List<List<JointLevels.Drawn>> blocks = BlockTasks.inOrder(executor, 0, Math.min(BLOCKS, plan.mostBlocks()), joint::draw);
+        List<List<JointLevels.Drawn>> blocks =
+                BlockTasks.inOrder(executor, 0, Math.min(BLOCKS, plan.mostBlocks()), joint::draw);
         return new Relating(site, levels, entries, blocks, streams, dates).relations();
     }
 

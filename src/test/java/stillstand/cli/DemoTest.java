@@ -61,20 +61,20 @@ class DemoTest {
         assertEquals(List.of(), result.failures());
 
         // 7a: -0.5 +- 3 m, 200 +- 3 ka; offset 3 m, local 2 m; a reef terrace stands 3 m below its sea within 4.13 m
-        assertByHand(
-                level(result, "G5"), 247.5 - 0.4 + 3 + 0.5, 200, 3, 4, 0.01, Math.pow(4.13 / 2, 2), 9, 9, 4);
+        assertByHand(level(result, "G5"), 247.5 - 0.4 + 3 + 0.5, 200, 3, 4, 0.01, Math.pow(4.13 / 2, 2), 9, 9, 4);
         // 5e: 7.5 +- 1.5 m, 122.5 +- 3.3 ka
         assertByHand(
                 level(result, "Q3"), -25.7 - 0.2 + 3 - 7.5, 122.5, 3.3, 0.64, 0.04, Math.pow(4.13 / 2, 2), 2.25, 9, 4);
         // 11c: 9.5 +- 3 m, 405 +- 5 ka; a shoreline angle stands 0.02 m below its sea within 1.67 m
-        assertByHand(
-                level(result, "S5"), 10.6 - 0.2 + 0.02 - 9.5, 405, 5, 0.64, 0.01, Math.pow(1.67 / 2, 2), 9, 9, 4);
+        assertByHand(level(result, "S5"), 10.6 - 0.2 + 0.02 - 9.5, 405, 5, 0.64, 0.01, Math.pow(1.67 / 2, 2), 9, 9, 4);
 
         assertTrue(level(result, "S2").bound().isPresent(), "a stable coast gets a bound");
         assertTrue(level(result, "Q5").bound().isEmpty());
         assertEquals("5c", level(result, "G3").stages().get(0).highstand());
         assertEquals("5e", level(result, "G4").stages().get(0).highstand());
-        assertTrue(level(result, "G4").stages().get(0).probability() > 0.95, "one reworked coral of three decides nothing");
+        assertTrue(
+                level(result, "G4").stages().get(0).probability() > 0.95,
+                "one reworked coral of three decides nothing");
         assertTrue(level(result, "G4").agreement().orElseThrow().p() < 1e-6, "but the disagreement is shown");
         assertWaiting(result, demo.out());
     }
@@ -102,7 +102,10 @@ class DemoTest {
     void demoSaysThatItIsInvented() throws IOException {
         for (String file : List.of("README.md", "study.json", "sites.csv", "levels.csv", "samples.csv")) {
             assertTrue(
-                    Files.readString(DEMO.resolve(file)).toLowerCase(Locale.ROOT).contains("invented"), file);
+                    Files.readString(DEMO.resolve(file))
+                            .toLowerCase(Locale.ROOT)
+                            .contains("invented"),
+                    file);
         }
     }
 }

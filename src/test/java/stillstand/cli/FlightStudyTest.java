@@ -1,6 +1,7 @@
 package stillstand.cli;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
@@ -8,11 +9,21 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.HashSet;
 import java.util.List;
+import java.util.Optional;
 import java.util.Set;
+import java.util.concurrent.ExecutorService;
+import java.util.concurrent.Executors;
+import java.util.concurrent.atomic.AtomicBoolean;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
+import stillstand.files.ShippedLibrary;
+import stillstand.files.StudyFolder;
 import stillstand.ledger.InputWarning;
+import stillstand.ledger.RunCancelledException;
+import stillstand.ledger.RunMonitor;
+import stillstand.study.Study;
 import stillstand.study.StudyResult;
+import stillstand.study.StudyRunner;
 import stillstand.uplift.FlightResult;
 
 /** Flights through files and command: what is written and said, and what cannot be matched. */
@@ -128,5 +139,52 @@ class FlightStudyTest {
                     1e-4,
                     fate.highstand());
         }
+    }
+
+    @Test
+    void aFlightStopsWhenAsked() throws IOException {
+        study("Stair,T1,16,2,,", "Stair,T2,28,2,,", "Stair,T3,52,3,,");
+        Study study = StudyFolder.read(
+                        folder,
+                        ShippedLibrary.load(),
+                        new SettingsChanges(Optional.empty(), Optional.of(16384), List.of()))
+                .value()
+                .orElseThrow();
+        AtomicBoolean asked = new AtomicBoolean();
+        RunMonitor monitor = new RunMonitor() {
+            @Override
+            public void step(String what, double fraction) {
+                asked.compareAndSet(false, what.equals("Stair / flight"));
+            }
+
+            @Override
+            public boolean isCancelled() {
+                return asked.get();
+            }
+        };
+        ExecutorService executor = Executors.newFixedThreadPool(2);
+        try {
+            assertThrows(RunCancelledException.class, () -> StudyRunner.run(study, executor, monitor));
+        } finally {
+            executor.shutdownNow();
+        }
+        assertTrue(asked.get());
+    }
+
+    @Test
+    void predictPrintsAndWritesAndOverwritesNothing() throws IOException {
+        StudyOnDisk study = study("Stair,T1,52,3,,5e");
+        Path file = folder.resolve("stair.csv");
+        List<String> options = List.of("--rate", "0.4", "--before", "150=1", "--out", file.toString());
+        assertEquals(0, study.execute("predict", options.toArray(String[]::new)));
+        assertTrue(
+                study.out().startsWith("Staircase of 0.4 m/kyr, 1.0 before 150.0 ka under spratt-lisiecki-2016:\n"),
+                study.out());
+        // 7.5 m at 122.5 ka; -0.5 m at 200 ka
+        assertTrue(study.out().contains("  5e         stands "), study.out());
+        assertTrue(Files.readString(file).contains("\n5e,122.5,7.5,56.5,"), Files.readString(file));
+        assertTrue(Files.readString(file).contains("\n7a,200.0,-0.5,109.5,"), Files.readString(file));
+        assertEquals(1, study.execute("predict", options.toArray(String[]::new)));
+        assertEquals("--out: " + file + " is there already; nothing was written\n", study.err());
     }
 }

@@ -96,7 +96,8 @@ class PublishedRatesReferenceTest {
                 "San Vito low", 0.008,
                 "San Vito high", 0.056,
                 "Milazzo south", 0.664);
-        printed.forEach((place, rate) -> assertEquals(rate, firstOrder(result, place).rate(), 1e-12, place));
+        printed.forEach(
+                (place, rate) -> assertEquals(rate, firstOrder(result, place).rate(), 1e-12, place));
         assertEquals(0.87, firstOrder(result, "Taormina").rate(), 0.005);
         assertEquals(1.07, firstOrder(result, "St Alessio").rate(), 0.005);
         // a printed rate that its own printed height does not give

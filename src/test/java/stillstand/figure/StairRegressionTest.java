@@ -27,6 +27,7 @@ class StairRegressionTest {
         SLOW(InventedCoasts::slow),
         DROWNED(InventedCoasts::drowned);
 
+        @SuppressWarnings("ImmutableEnumChecker") // the suppliers hold nothing
         private final Supplier<StudyResult> result;
 
         Coast(Supplier<StudyResult> result) {

@@ -4,7 +4,6 @@ import static org.junit.jupiter.api.Assertions.assertAll;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.List;
-import java.util.Locale;
 import java.util.SplittableRandom;
 import java.util.function.ToDoubleBiFunction;
 import java.util.stream.IntStream;
@@ -15,7 +14,6 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
 import stillstand.ledger.RunMonitor;
 import stillstand.uncertainty.DrawStreams;
-import stillstand.uncertainty.StandardNormal;
 import stillstand.uplift.FlightSimulator.Flight;
 import stillstand.uplift.FlightSimulator.Survey;
 import stillstand.uplift.FlightSimulator.Truth;
@@ -28,6 +26,9 @@ import stillstand.uplift.FlightSimulator.Untrue;
  */
 class FlightCalibrationStatisticalTest {
     private static final long SEED = Long.getLong("test.seed", 20261201L);
+    /** Of each slow comparison; fewer by {@code -Dflights=N} in a hurry. */
+    private static final int MANY = Integer.getInteger("flights", 500);
+
     private static final List<FlightRow> ROWS = RoundHighstands.complete();
     private static final double RECORDED = 0.7;
     private static final double STRAYS = 0.2;
@@ -55,35 +56,44 @@ class FlightCalibrationStatisticalTest {
     @ValueSource(ints = {0, 1, 2})
     @Tag("slow")
     void ratesHoldTheTruthAsOftenAsTheySayWithAnyNumberOfDates(int dates) {
-        ranks(simulator(dates, 0), 500, (flight, dice) -> below(flight, RECORDED, FINE))
+        ranks(simulator(dates, 0), MANY, (flight, dice) -> below(flight, RECORDED, FINE))
                 .assertCalibrated();
     }
 
     @Test
     @Tag("slow")
     void pairingsAreRightAsOftenAsTheySay() {
-        List<PairingsRight> flights = flights(simulator(2, 0), RATES, 500)
-                .map(each -> PairingsRight.of(each.flight, answer(each.flight)))
-                .toList();
-        assertAll(IntStream.range(0, PairingsRight.BINS).mapToObj(bin -> () -> PairingsRight.assertFair(flights, bin)));
+        assertAll(pairings(MANY).stream().map(bin -> bin::assertFair));
     }
 
     /** The change is drawn from the engine's prior; three levels are dated. */
     @Test
     @Tag("slow")
     void oneChangeOfRateIsCovered() {
+        assertAll(change(MANY).stream().map(ranks -> ranks::assertCalibrated));
+    }
+
+    /** How right pairings are in four bins of what they say; two levels are dated. */
+    static List<PairingsRight> pairings(int count) {
+        return PairingsRight.bins(flights(simulator(2, 0), RATES, count)
+                .map(each -> PairingsRight.most(each.flight, answer(each.flight).pairings()))
+                .toList());
+    }
+
+    /** Ranks of the recent rate, the older rate and the age of the change. */
+    static List<RanksOfTruth> change(int count) {
         RatePrior rates = new LogUniformPrior(0.05, 3);
         RateChangePrior prior = new RateChangePrior(rates, rates, 50, 350);
         TruthDrawn truths = dice -> new Truth(
                 FlightSimulator.logUniform(dice, 0.05, 3),
                 50 + 300 * dice.nextDouble(),
                 FlightSimulator.logUniform(dice, 0.05, 3));
-        List<List<Double>> below = flights(simulator(3, 0), truths, 500)
+        List<List<Double>> below = flights(simulator(3, 0), truths, count)
                 .map(each -> belowOfChange(each.flight, prior, each.dice.nextLong()))
                 .toList();
-        assertAll(IntStream.range(0, 3)
-                .mapToObj(k -> () -> RanksOfTruth.of(below.stream().mapToDouble(each -> each.get(k)))
-                        .assertCalibrated()));
+        return IntStream.range(0, 3)
+                .mapToObj(k -> RanksOfTruth.of(below.stream().mapToDouble(each -> each.get(k))))
+                .toList();
     }
 
     private static FlightSimulator simulator(int dates, double datumSigmaMetres) {
@@ -152,63 +162,5 @@ class FlightCalibrationStatisticalTest {
                 answer.recent().cumulativeProbability(flight.truth().recentRate()),
                 answer.older().cumulativeProbability(flight.truth().olderRate()),
                 (double) younger / answer.changesKa().size());
-    }
-
-    /** By bin of the stated probability of each level's most probable row (or of no row): how many, stated and right. */
-    private record PairingsRight(List<Integer> levels, List<Double> stated, List<Integer> right) {
-        private static final double[] UNTIL = {0.5, 0.8, 0.95, 1.0000001};
-        static final int BINS = UNTIL.length;
-
-        static PairingsRight of(Flight flight, FlightAnswer answer) {
-            Integer[] levels = {0, 0, 0, 0};
-            Double[] stated = {0.0, 0.0, 0.0, 0.0};
-            Integer[] right = {0, 0, 0, 0};
-            PairingTable pairings = answer.pairings();
-            for (int i = 0; i < pairings.levels(); i++) {
-                int best = FlightSimulator.STRAY;
-                double probability = pairings.stray(i);
-                for (int j = 0; j < pairings.rows(); j++) {
-                    if (pairings.probability(i, j) > probability) {
-                        best = j;
-                        probability = pairings.probability(i, j);
-                    }
-                }
-                int bin = 0;
-                while (probability >= UNTIL[bin]) {
-                    bin++;
-                }
-                levels[bin]++;
-                stated[bin] += probability;
-                right[bin] += flight.rows().get(i) == best ? 1 : 0;
-            }
-            return new PairingsRight(List.of(levels), List.of(stated), List.of(right));
-        }
-
-        /** Levels of one flight are right or wrong together, so the error is that between flights. */
-        static void assertFair(List<PairingsRight> flights, int bin) {
-            double surplus = 0;
-            double square = 0;
-            double stated = 0;
-            int right = 0;
-            int levels = 0;
-            for (PairingsRight flight : flights) {
-                double each = flight.right.get(bin) - flight.stated.get(bin);
-                surplus += each;
-                square += each * each;
-                stated += flight.stated.get(bin);
-                right += flight.right.get(bin);
-                levels += flight.levels.get(bin);
-            }
-            double limit = StandardNormal.quantile(1 - RanksOfTruth.FALSE_ALARM / 2) * Math.sqrt(square);
-            String said = String.format(
-                    Locale.ROOT,
-                    "bin %d: %d levels, stated %.3f, right %.3f, limit of the difference %.3f",
-                    bin,
-                    levels,
-                    stated / levels,
-                    (double) right / levels,
-                    limit / levels);
-            assertTrue(levels > 100 && Math.abs(surplus) < limit, said);
-        }
     }
 }

@@ -24,13 +24,14 @@ import stillstand.uplift.FlightSimulator.Untrue;
 
 /**
  * The tables of the readme: {@code mvn -Pslow test -Dtest=FlightCalibrationTable} writes them to {@code target/}. How many
- * flights by {@code -Dflights=N} and, a world, {@code -Dworld.flights=N}; other flights by {@code -Dtest.seed=N}. Fails where
+ * flights by {@code -Dflights=N}, {@code -Dchange.flights=N} and, a world, {@code -Dworld.flights=N}; other flights by {@code -Dtest.seed=N}. Fails where
  * the exact answer does not hold the truth as often as it says (false alarm 1e-4 a comparison).
  */
 @Tag("slow")
 class FlightCalibrationTable {
     private static final long SEED = Long.getLong("test.seed", 20261202L);
     private static final int FLIGHTS = Integer.getInteger("flights", 500);
+    private static final int CHANGE_FLIGHTS = Integer.getInteger("change.flights", 500);
     private static final int WORLD_FLIGHTS = Integer.getInteger("world.flights", 150);
     private static final List<FlightRow> ROWS = RoundHighstands.complete();
     private static final double SLOWEST = 0.1;
@@ -110,6 +111,40 @@ class FlightCalibrationTable {
                 SEED,
                 fewestDraws));
         Files.write(Path.of("target", "untrue-worlds.md"), lines);
+    }
+
+    @Test
+    void howOftenPairingsAndChangesAreRight() throws IOException {
+        List<String> lines = new ArrayList<>(
+                List.of("| stated probability of a pairing | levels | stated | right |", "|---|---|---|---|"));
+        List<PairingsRight> pairings = FlightCalibrationStatisticalTest.pairings(FLIGHTS);
+        for (PairingsRight bin : pairings) {
+            lines.add(String.format(
+                    Locale.ROOT,
+                    "| %.2f to %.2f | %d | %.3f | %.3f |",
+                    bin.from(),
+                    bin.to(),
+                    bin.levels(),
+                    bin.stated() / bin.levels(),
+                    (double) bin.right() / bin.levels()));
+        }
+        lines.addAll(List.of("", "| one change of rate | 68 % interval holds the truth | 95 % |", "|---|---|---|"));
+        List<RanksOfTruth> change = FlightCalibrationStatisticalTest.change(CHANGE_FLIGHTS);
+        List<String> names = List.of("recent rate", "older rate", "age of the change");
+        for (int k = 0; k < names.size(); k++) {
+            RanksOfTruth ranks = change.get(k);
+            lines.add("| " + names.get(k) + " | " + share(ranks.in68(), ranks.answers()) + " | "
+                    + share(ranks.in95(), ranks.answers()) + " |");
+        }
+        lines.add("");
+        lines.add(String.format(
+                Locale.ROOT,
+                "%d simulated flights with two dates for the pairings, %d with three dates for the change.",
+                FLIGHTS,
+                CHANGE_FLIGHTS));
+        Files.write(Path.of("target", "pairing-calibration.md"), lines);
+        assertAll(pairings.stream().map(bin -> bin::assertFair));
+        assertAll(change.stream().map(ranks -> ranks::assertCalibrated));
     }
 
     private static Map<String, List<Said>> said(int dates) {

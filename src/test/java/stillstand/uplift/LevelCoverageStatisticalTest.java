@@ -46,7 +46,7 @@ class LevelCoverageStatisticalTest {
     @Test
     void ratesOfCoralsOnACurveHoldTheTruthAsOftenAsTheySay() {
         List<Answered> answered = simulate(World.CORAL_ON_CURVE, Rates.CAUCHY, CAUCHY, 2000, 1);
-        Tally.of(answered, each -> each.underPrior().orElseThrow()).assertCalibrated();
+        Tally.of(answered, Answered::underPrior).assertCalibrated();
     }
 
     /**
@@ -54,11 +54,12 @@ class LevelCoverageStatisticalTest {
      * than it looks: the answer under the prior knows, the propagated one does not and may not pass.
      */
     @Test
+    @Tag("slow")
     void theComparisonTellsAnAnswerUnderAPriorFromOneWithout() {
         List<Answered> fast = simulate(World.YOUNG_CORAL, Rates.NORMAL, NORMAL, 500, 2).stream()
                 .filter(each -> each.looksFasterThan(NORMAL.quantile(0.8)))
                 .toList();
-        Tally.of(fast, each -> each.underPrior().orElseThrow()).assertCalibrated();
+        Tally.of(fast, Answered::underPrior).assertCalibrated();
         Tally propagated = Tally.of(fast, Answered::propagated);
         assertTrue(propagated.chiSquare() > Tally.chiSquareLimit(), propagated::toString);
     }
@@ -68,7 +69,7 @@ class LevelCoverageStatisticalTest {
     @Tag("slow")
     void ratesUnderTheDefaultPriorHoldTheTruthAsOftenAsTheySay(World world) {
         List<Answered> answered = simulate(world, Rates.CAUCHY, CAUCHY, 3000, 3);
-        Tally.of(answered, each -> each.underPrior().orElseThrow()).assertCalibrated();
+        Tally.of(answered, Answered::underPrior).assertCalibrated();
     }
 
     @ParameterizedTest
@@ -80,8 +81,7 @@ class LevelCoverageStatisticalTest {
                 .collect(Collectors.partitioningBy(each -> each.looksFasterThan(NORMAL.quantile(0.8))));
         fastAndSlow
                 .values()
-                .forEach(part ->
-                        Tally.of(part, each -> each.underPrior().orElseThrow()).assertCalibrated());
+                .forEach(part -> Tally.of(part, Answered::underPrior).assertCalibrated());
     }
 
     @ParameterizedTest
@@ -92,10 +92,18 @@ class LevelCoverageStatisticalTest {
         Tally.of(answered, Answered::propagated).assertCalibrated();
     }
 
-    /** What a level's answers say of its true rate. */
-    private record Answered(double propagatedMedian, Place propagated, Optional<Place> underPrior) {
+    /** A level's answers beside its true rate. */
+    private record Answered(double truth, LevelRates.Outcome outcome) {
+        Place propagated() {
+            return Place.of(truth, outcome.rate());
+        }
+
+        Place underPrior() {
+            return Place.of(truth, outcome.rateWithPrior().orElseThrow());
+        }
+
         boolean looksFasterThan(double rateMetresPerKyr) {
-            return propagatedMedian > rateMetresPerKyr;
+            return outcome.rate().median() > rateMetresPerKyr;
         }
     }
 
@@ -206,20 +214,14 @@ class LevelCoverageStatisticalTest {
                     .map(each -> {
                         SimulatedLevel level = world.simulate(each, rates);
                         DrawStreams streams = new DrawStreams(each.nextLong());
-                        return answered(level, prior, new LevelRates(streams, oneBlock, threads, RunMonitor.SILENT));
+                        LevelRates engine = new LevelRates(streams, oneBlock, threads, RunMonitor.SILENT);
+                        return new Answered(
+                                level.rateMetresPerKyr(),
+                                engine.of("level", level.height(), level.lowering(), level.explanations(), prior));
                     })
                     .toList();
         } finally {
             threads.shutdown();
         }
-    }
-
-    private static Answered answered(SimulatedLevel level, RatePrior prior, LevelRates engine) {
-        double truth = level.rateMetresPerKyr();
-        LevelRates.Outcome outcome = engine.of("level", level.height(), level.lowering(), level.explanations(), prior);
-        return new Answered(
-                outcome.rate().median(),
-                Place.of(truth, outcome.rate()),
-                outcome.rateWithPrior().map(rate -> Place.of(truth, rate)));
     }
 }
