@@ -15,6 +15,8 @@ import org.jfree.chart.plot.XYPlot;
 
 /** Draws in points; {@link #x} and {@link #y} say where a number of the axes lies. */
 final class Pen {
+    private static final double AXIS_LINE = 0.4;
+
     private final Graphics2D graphics;
     private final Rectangle2D area;
     private final XYPlot plot;
@@ -50,8 +52,9 @@ final class Pen {
         return range.valueToJava2D(value, area, plot.getRangeAxisEdge());
     }
 
+    /** Right of the axis line, which nothing is to cover. */
     double left() {
-        return area.getMinX();
+        return area.getMinX() + AXIS_LINE;
     }
 
     double right() {
@@ -62,8 +65,9 @@ final class Pen {
         return area.getMinY();
     }
 
+    /** Above the axis line, which nothing is to cover. */
     double bottom() {
-        return area.getMaxY();
+        return area.getMaxY() - AXIS_LINE;
     }
 
     void line(double x1, double y1, double x2, double y2, Color colour, Stroke stroke) {

@@ -256,13 +256,13 @@ final class StairFigure {
         if (lost.stream().anyMatch(fate -> fate.unseen() >= LIKELY)) {
             key.add(new Page.KeyEntry("in view, not found", (pen, x, y) -> {
                 pen.line(x, y, x + swatch, y, Style.MUTED, Style.dashed(0.5));
-                pen.ring(x + swatch, y, 1.9, Style.MUTED);
+                pen.ring(x + swatch - 2, y, 1.9, Style.MUTED);
             }));
         }
         if (lost.stream().anyMatch(fate -> fate.unseen() < LIKELY)) {
             key.add(new Page.KeyEntry("overrun by a younger sea", (pen, x, y) -> {
                 pen.line(x, y, x + swatch, y, Style.MUTED, Style.dashed(0.5));
-                pen.cross(x + swatch, y, 1.9, Style.MUTED);
+                pen.cross(x + swatch - 2, y, 1.9, Style.MUTED);
             }));
         }
         return key;

@@ -50,7 +50,7 @@ class FigureFilesTest {
         try (PDDocument document = Loader.loadPDF(stair().bytes(FigureFormat.PDF, PageWidth.ONE, true, 300))) {
             PDPage page = document.getPage(0);
             assertEquals(90, page.getMediaBox().getWidth() * MILLIMETRES_PER_POINT, 0.01);
-            TreeSet<String> fonts = new TreeSet<>();
+            Set<String> fonts = new TreeSet<>();
             gather(page.getResources(), fonts);
             assertEquals(2, fonts.size(), fonts.toString());
             for (String font : fonts) {

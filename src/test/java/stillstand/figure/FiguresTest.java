@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
@@ -73,7 +74,7 @@ class FiguresTest {
         StudyResult result = InventedCoasts.drowned();
         List<String> rates = words(result, FigureKind.RATES);
         List<String> forest = words(result, FigureKind.FOREST);
-        List<Rate> expected = new java.util.ArrayList<>(result.levels().stream()
+        List<Rate> expected = new ArrayList<>(result.levels().stream()
                 .map(LevelAnswer::rate)
                 .flatMap(Optional::stream)
                 .toList());

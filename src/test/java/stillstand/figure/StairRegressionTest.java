@@ -6,6 +6,7 @@ import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.Locale;
 import java.util.function.Supplier;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
@@ -46,7 +47,7 @@ class StairRegressionTest {
     @ParameterizedTest
     @EnumSource(Coast.class)
     void isDrawnAsItWasWhenLookedAt(Coast coast) throws IOException {
-        Path drawing = DRAWINGS.resolve("stair-" + coast.name().toLowerCase(java.util.Locale.ROOT) + ".svg");
+        Path drawing = DRAWINGS.resolve("stair-" + coast.name().toLowerCase(Locale.ROOT) + ".svg");
         if (Boolean.getBoolean("figures.remake")) {
             Files.createDirectories(DRAWINGS);
             Files.writeString(drawing, drawn(coast));

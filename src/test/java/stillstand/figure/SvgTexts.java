@@ -5,6 +5,7 @@ import java.awt.geom.AffineTransform;
 import java.awt.geom.Rectangle2D;
 import java.io.ByteArrayInputStream;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
@@ -69,7 +70,7 @@ record SvgTexts(Rectangle2D page, List<Placed> texts) {
         AffineTransform all = new AffineTransform();
         Matcher operations = OPERATION.matcher(attribute);
         while (operations.find()) {
-            double[] n = java.util.Arrays.stream(operations.group(2).trim().split("[ ,]+", -1))
+            double[] n = Arrays.stream(operations.group(2).trim().split("[ ,]+", -1))
                     .mapToDouble(Double::parseDouble)
                     .toArray();
             switch (operations.group(1)) {
