@@ -23,7 +23,7 @@ import stillstand.study.Table;
 
 class TableFileTest {
     private final FileSystem disk = Jimfs.newFileSystem(Configuration.unix());
-    private final Path file = disk.getPath("/work/levels.csv");
+    private final Path file = disk.getPath("/field/levels.csv");
 
     @AfterEach
     void closeDisk() throws IOException {
