@@ -36,9 +36,9 @@ import stillstand.uncertainty.Exact;
 import stillstand.uncertainty.Interval;
 import stillstand.uncertainty.Normal;
 import stillstand.uncertainty.Uncertain;
-import stillstand.uplift.FlightResult;
 import stillstand.uplift.BetweenLevels;
 import stillstand.uplift.CauchyPrior;
+import stillstand.uplift.FlightResult;
 import stillstand.uplift.ImpliedSeaLevel;
 import stillstand.uplift.LevelAnswer;
 import stillstand.uplift.LevelAnswer.Agreement;
@@ -86,7 +86,8 @@ public final class SampleStudy {
                         choice("other-curve", Optional.of(-13.5), 0.25),
                         choice(CurveChoice.EVIDENCE_WEIGHTED, Optional.of(-12.75), 1),
                         choice(CurveChoice.EQUAL_WEIGHTED, Optional.empty(), 1)),
-                List.of(new CurveEvidence("all sites", List.of("North cliff", "South cliff"), "made-up-curve", -25, 0.875)),
+                List.of(new CurveEvidence(
+                        "all sites", List.of("North cliff", "South cliff"), "made-up-curve", -25, 0.875)),
                 List.of(new InputWarning("levels.csv", 3, 4, "elevation_m: 1200 looks like feet")),
                 List.of(new Failure("East bay", "its curve ends at 20 ka")),
                 List.of(

@@ -69,11 +69,15 @@ final class PredictCommand implements Callable<Integer> {
     @Override
     public Integer call() throws IOException {
         UpliftHistory history = history();
-        Loaded<Study> loaded =
-                workshop.reader().read(folder, new SettingsChanges(
-                        Optional.empty(),
-                        Optional.empty(),
-                        curves.stream().map(id -> new WeightedCurve(id, 1)).toList()));
+        Loaded<Study> loaded = workshop.reader()
+                .read(
+                        folder,
+                        new SettingsChanges(
+                                Optional.empty(),
+                                Optional.empty(),
+                                curves.stream()
+                                        .map(id -> new WeightedCurve(id, 1))
+                                        .toList()));
         if (!loaded.problems().isEmpty() || loaded.value().isEmpty()) {
             Workshop.list(loaded.problems(), workshop.err());
             return ExitCode.PROBLEMS;

@@ -37,7 +37,8 @@ record SettingsChanges(Optional<Long> seed, Optional<Integer> draws, List<Weight
         List<WeightedCurve> different = curves.stream()
                 .filter(curve -> own.overrides().isPresent()
                         || curve.overrides().isEmpty()
-                        || curves.stream().noneMatch(other -> other.equals(new WeightedCurve(curve.id(), curve.weight()))))
+                        || curves.stream()
+                                .noneMatch(other -> other.equals(new WeightedCurve(curve.id(), curve.weight()))))
                 .toList();
         return new SeaLevelChoice(
                 different,

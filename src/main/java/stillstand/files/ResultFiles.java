@@ -109,8 +109,8 @@ public final class ResultFiles {
         return table.text(
                         "records",
                         row -> row.matches().stream()
-                                .map(match -> match.level() + " "
-                                        + match.highstand().orElse("none"))
+                                .map(match ->
+                                        match.level() + " " + match.highstand().orElse("none"))
                                 .collect(Collectors.joining("; ")))
                 .write();
     }

@@ -52,7 +52,8 @@ final class CurveChoiceReport {
                 + (region.equals(CurveEvidence.EVERYWHERE) ? "the study" : region)
                 + " together weigh the curves: "
                 + rows.stream()
-                        .sorted(Comparator.comparingDouble(CurveEvidence::weight).reversed())
+                        .sorted(Comparator.comparingDouble(CurveEvidence::weight)
+                                .reversed())
                         .limit(CURVES_SHOWN)
                         .map(row -> row.curve() + " " + weight(row.weight()))
                         .collect(Collectors.joining(", "))
@@ -76,8 +77,8 @@ final class CurveChoiceReport {
         String shown = curves.stream()
                 .sorted(Comparator.comparingDouble(CurveChoice::weight).reversed())
                 .limit(CURVES_SHOWN)
-                .map(choice ->
-                        Wording.rate(choice.rate()) + " with " + choice.curve() + " (weight " + weight(choice.weight()) + ")")
+                .map(choice -> Wording.rate(choice.rate()) + " with " + choice.curve() + " (weight "
+                        + weight(choice.weight()) + ")")
                 .collect(Collectors.joining(", "));
         return curves.size() > CURVES_SHOWN
                 ? shown + ", and " + (curves.size() - CURVES_SHOWN) + " more in curve-choice.csv"
@@ -169,8 +170,10 @@ final class CurveChoiceReport {
     }
 
     private static double spread(List<CurveChoice> curves) {
-        double low = curves.stream().mapToDouble(each -> each.rate().median()).min().orElse(0);
-        double high = curves.stream().mapToDouble(each -> each.rate().median()).max().orElse(0);
+        double low =
+                curves.stream().mapToDouble(each -> each.rate().median()).min().orElse(0);
+        double high =
+                curves.stream().mapToDouble(each -> each.rate().median()).max().orElse(0);
         return high - low;
     }
 

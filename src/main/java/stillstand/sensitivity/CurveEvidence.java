@@ -33,8 +33,7 @@ public record CurveEvidence(String region, List<String> sites, String curve, dou
      * @param choices of the whole study
      * @param regionOf a site; empty where it belongs to none
      */
-    public static List<CurveEvidence> pooled(
-            List<CurveChoice> choices, Function<String, Optional<String>> regionOf) {
+    public static List<CurveEvidence> pooled(List<CurveChoice> choices, Function<String, Optional<String>> regionOf) {
         Map<String, Map<String, Double>> bySite = new LinkedHashMap<>();
         for (CurveChoice choice : choices) {
             if (choice.level().isEmpty() && !choice.mixesCurves()) {
@@ -73,7 +72,8 @@ public record CurveEvidence(String region, List<String> sites, String curve, dou
             sums.put(
                     curve,
                     sites.stream()
-                            .mapToDouble(site -> bySite.getOrDefault(site, Map.of()).getOrDefault(curve, 0.0))
+                            .mapToDouble(
+                                    site -> bySite.getOrDefault(site, Map.of()).getOrDefault(curve, 0.0))
                             .sum());
         }
         double highest = sums.values().stream().mapToDouble(v -> v).max().orElseThrow();

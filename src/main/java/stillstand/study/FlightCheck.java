@@ -136,14 +136,18 @@ final class FlightCheck {
         List<Optional<Crossing>> crossings =
                 tables.stream().map(table -> crossing(flight, table)).toList();
         if (crossings.stream().allMatch(Optional::isPresent)) {
-            crossings.stream().flatMap(Optional::stream).findFirst().ifPresent(crossing -> crossing.level()
-                    .reader()
-                    .problem(
-                            HIGHSTAND,
-                            quote(crossing.level().reader().text(HIGHSTAND)),
-                            "a highstand older than " + quote(crossing.stage()) + ", to which level "
-                                    + quote(crossing.below()) + " below it is tied: higher shorelines are older, and each"
-                                    + " highstand left one"));
+            crossings.stream()
+                    .flatMap(Optional::stream)
+                    .findFirst()
+                    .ifPresent(crossing -> crossing.level()
+                            .reader()
+                            .problem(
+                                    HIGHSTAND,
+                                    quote(crossing.level().reader().text(HIGHSTAND)),
+                                    "a highstand older than " + quote(crossing.stage()) + ", to which level "
+                                            + quote(crossing.below())
+                                            + " below it is tied: higher shorelines are older, and each"
+                                            + " highstand left one"));
         }
     }
 

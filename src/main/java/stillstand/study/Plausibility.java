@@ -133,15 +133,10 @@ final class Plausibility {
 
     /** The age of a level that reads the curve at its own age must lie on the curve. */
     private static void checkSpan(
-            SamplesTable.SampleRow row,
-            DatedSample sample,
-            LevelsTable.LevelRow level,
-            List<SeaLevelCase> seaLevel) {
+            SamplesTable.SampleRow row, DatedSample sample, LevelsTable.LevelRow level, List<SeaLevelCase> seaLevel) {
         List<SeaLevelCurve> curves =
                 seaLevel.stream().flatMap(sea -> sea.curve().stream()).toList();
-        if (level.formsAt() != FormsAt.ANY
-                || curves.isEmpty()
-                || sample.ageKa().isEmpty()) {
+        if (level.formsAt() != FormsAt.ANY || curves.isEmpty() || sample.ageKa().isEmpty()) {
             return;
         }
         double age = sample.ageKa().get().quantile(0.5);

@@ -34,9 +34,8 @@ final class SeaLevelCheck {
         this.choice = stated.settings().seaLevel();
         this.library = library;
         this.findings = findings;
-        this.overrides = choice.overrides()
-                .map(id -> overrides(id, OVERRIDES))
-                .orElse(Optional.of(HighstandOverrides.NONE));
+        this.overrides =
+                choice.overrides().map(id -> overrides(id, OVERRIDES)).orElse(Optional.of(HighstandOverrides.NONE));
     }
 
     /** The study's accounts of sea level; empty where they have problems. */

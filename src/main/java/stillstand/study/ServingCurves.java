@@ -81,7 +81,8 @@ final class ServingCurves {
                         + quote(level.key().level()) + " is tied");
             }
             if (level.formsAt() == FormsAt.ANY && !reaches(level, samples, sea.curve())) {
-                return Optional.of("it does not reach the age of level " + quote(level.key().level()));
+                return Optional.of("it does not reach the age of level "
+                        + quote(level.key().level()));
             }
         }
         return Optional.empty();

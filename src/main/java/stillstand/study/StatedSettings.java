@@ -41,8 +41,9 @@ public record StatedSettings(
             "seed",
             settings -> String.valueOf(settings.seed()),
             CURVES,
-            settings ->
-                    settings.seaLevel().curves().stream().map(WeightedCurve::label).collect(Collectors.joining(", ")));
+            settings -> settings.seaLevel().curves().stream()
+                    .map(WeightedCurve::label)
+                    .collect(Collectors.joining(", ")));
 
     public StatedSettings {
         defaults = List.copyOf(defaults);

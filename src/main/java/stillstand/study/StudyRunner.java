@@ -200,8 +200,7 @@ public final class StudyRunner {
             for (int k = 0; k < ensemble.size(); k++) {
                 int number = k;
                 answers.rateUnder(site, level, ensemble.bases().get(k), plan.prior())
-                        .ifPresent(found ->
-                                each.add(new CurveChoice.OfCurve(number, found.rate(), found.highstand())));
+                        .ifPresent(found -> each.add(new CurveChoice.OfCurve(number, found.rate(), found.highstand())));
             }
             curveChoice.addAll(CurveChoice.ofLevel(site.name(), level.name(), ensemble, each));
         }

@@ -24,10 +24,8 @@ public final class FlightMixture {
     private FlightMixture(List<FlightResult> flights, List<Double> priorWeights) {
         this.flights = List.copyOf(flights);
         double priors = priorWeights.stream().mapToDouble(w -> w).sum();
-        double highest = flights.stream()
-                .mapToDouble(FlightResult::logEvidence)
-                .max()
-                .orElseThrow();
+        double highest =
+                flights.stream().mapToDouble(FlightResult::logEvidence).max().orElseThrow();
         List<Double> parts = new ArrayList<>();
         for (int k = 0; k < flights.size(); k++) {
             parts.add(priorWeights.get(k) / priors * Math.exp(flights.get(k).logEvidence() - highest));
@@ -63,7 +61,8 @@ public final class FlightMixture {
         Map<String, List<Integer>> parts = new LinkedHashMap<>();
         for (int k = 0; k < residuals.size(); k++) {
             int number = k;
-            residuals.get(k)
+            residuals
+                    .get(k)
                     .forEach(each -> parts.computeIfAbsent(each.level(), level -> new ArrayList<>())
                             .add(number));
         }
@@ -75,8 +74,7 @@ public final class FlightMixture {
                             .findFirst()
                             .orElseThrow())
                     .toList();
-            List<Double> shares =
-                    accounts.stream().map(mixture.weights::get).toList();
+            List<Double> shares = accounts.stream().map(mixture.weights::get).toList();
             double mean = mean(own, shares, LevelResidual::predictedMetres);
             mixed.add(new LevelResidual(
                     own.get(0).site(),
@@ -156,7 +154,8 @@ public final class FlightMixture {
 
     /** Stretch by stretch where all accounts have as many; else those of the heaviest. */
     private List<FlightResult.Segment> segments(FlightResult main) {
-        if (!flights.stream().allMatch(flight -> flight.segments().size() == main.segments().size())) {
+        if (!flights.stream()
+                .allMatch(flight -> flight.segments().size() == main.segments().size())) {
             return main.segments();
         }
         List<FlightResult.Segment> mixed = new ArrayList<>();
@@ -205,7 +204,11 @@ public final class FlightMixture {
             List<Quantity> ages = new ArrayList<>();
             List<Double> shares = new ArrayList<>();
             for (int k = 0; k < flights.size(); k++) {
-                double weight = weights.get(k) * (1 - flights.get(k).probabilityUnmatched(level.level()).orElse(1.0));
+                double weight = weights.get(k)
+                        * (1
+                                - flights.get(k)
+                                        .probabilityUnmatched(level.level())
+                                        .orElse(1.0));
                 flights.get(k).predictedAges().stream()
                         .filter(age -> weight > 0 && age.level().equals(level.level()))
                         .findFirst()

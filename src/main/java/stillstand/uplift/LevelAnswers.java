@@ -123,8 +123,8 @@ public final class LevelAnswers {
         List<HeightTerm> height = FormerSeaLevel.ofLandform(site, level, rule);
         Uncertain lowering = level.loweringMetresPerKyr();
         String key = site.name() + " / " + level.name();
-        Future<Optional<LevelAnswer.Budget>> budget = executor.submit(
-                () -> new RateBudget(height, lowering, found.explanations(), choice(ensemble))
+        Future<Optional<LevelAnswer.Budget>> budget =
+                executor.submit(() -> new RateBudget(height, lowering, found.explanations(), choice(ensemble))
                         .shares(streams, key, scrambles()));
         LevelRates.Outcome outcome = rates.of(key, height, lowering, found.explanations(), prior);
         assumptions.addAll(said(outcome, found, prior, where));
@@ -165,9 +165,7 @@ public final class LevelAnswers {
                 where, FormerSeaLevel.ofLandform(site, level, rule), level.loweringMetresPerKyr(), explanations, prior);
         return Optional.of(new Found(
                 outcome.rate(),
-                stages(explanations).stream()
-                        .findFirst()
-                        .map(LevelAnswer.StageProbability::highstand)));
+                stages(explanations).stream().findFirst().map(LevelAnswer.StageProbability::highstand)));
     }
 
     /** What the choice among explanations is a question of. */
@@ -289,8 +287,7 @@ public final class LevelAnswers {
         return new LevelAnswer.SampleAnswer(sample.name(), age, Optional.of(outcome.rate()), Optional.empty());
     }
 
-    private static Optional<Rate> coralsTogether(
-            Site site, Level level, SeaLevelEnsemble ensemble, RatePrior prior) {
+    private static Optional<Rate> coralsTogether(Site site, Level level, SeaLevelEnsemble ensemble, RatePrior prior) {
         List<Rate> rates = new ArrayList<>();
         List<Double> weights = new ArrayList<>();
         for (int k = 0; k < ensemble.size(); k++) {

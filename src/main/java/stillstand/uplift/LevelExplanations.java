@@ -67,7 +67,9 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
                 .toList();
         double speaking = 0;
         for (int k = 0; k < each.size(); k++) {
-            speaking += each.get(k).explanations().isEmpty() ? 0 : ensemble.weights().get(k);
+            speaking += each.get(k).explanations().isEmpty()
+                    ? 0
+                    : ensemble.weights().get(k);
         }
         List<SeaAtLevel> explanations = new ArrayList<>();
         Set<Assumption> said = new LinkedHashSet<>();
@@ -79,10 +81,14 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
             said.addAll(one.assumptions());
             if (one.explanations().isEmpty() && speaking > 0) {
                 said.add(new Assumption(
-                        "curve " + ensemble.bases().get(k).id() + " says nothing of a level", one.whyNone(), OURS, where));
+                        "curve " + ensemble.bases().get(k).id() + " says nothing of a level",
+                        one.whyNone(),
+                        OURS,
+                        where));
             }
         }
-        return new LevelExplanations(explanations, speaking > 0 ? "" : each.get(0).whyNone(), List.copyOf(said));
+        return new LevelExplanations(
+                explanations, speaking > 0 ? "" : each.get(0).whyNone(), List.copyOf(said));
     }
 
     /** Adds an explanation, to its equal where one stands: independent highstands are the same under all curves. */

@@ -3,6 +3,7 @@ package stillstand.uplift;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.Set;
 import java.util.TreeSet;
 import stillstand.uncertainty.DensityBins;
 
@@ -26,8 +27,8 @@ public final class RateMixture {
     public static Rate of(List<Rate> rates, List<Double> weights) {
         double sum = weights.stream().mapToDouble(w -> w).sum();
         if (rates.isEmpty() || rates.size() != weights.size() || !(sum > 0 && sum < Double.POSITIVE_INFINITY)) {
-            throw new IllegalArgumentException(
-                    "a mixture needs a weight for each of one or more rates but has " + weights + " for " + rates.size());
+            throw new IllegalArgumentException("a mixture needs a weight for each of one or more rates but has "
+                    + weights + " for " + rates.size());
         }
         List<Rate> parts = new ArrayList<>();
         List<Double> shares = new ArrayList<>();
@@ -95,7 +96,7 @@ public final class RateMixture {
     /** The density that {@link #of} reads from; weights that add up to 1. */
     static RatePosterior posterior(List<Rate> parts, List<Double> shares) {
         List<Line> lines = parts.stream().map(Line::of).toList();
-        TreeSet<Double> nodes = new TreeSet<>();
+        Set<Double> nodes = new TreeSet<>();
         lines.forEach(line -> line.addNodes(nodes));
         double[] rates = nodes.stream().mapToDouble(v -> v).toArray();
         double[] density = new double[rates.length];
@@ -108,7 +109,17 @@ public final class RateMixture {
     }
 
     /** A density as a broken line through the middles of its bins, 0 half a bin beyond the outermost. */
-    private record Line(double from, double step, double[] density) {
+    private static final class Line {
+        private final double from;
+        private final double step;
+        private final double[] density;
+
+        private Line(double from, double step, double[] density) {
+            this.from = from;
+            this.step = step;
+            this.density = density;
+        }
+
         static Line of(Rate rate) {
             DensityBins bins = rate.density()
                     .orElseGet(() -> new DensityBins(rate.median() - NARROW, rate.median() + NARROW, List.of(1.0)));
@@ -122,7 +133,7 @@ public final class RateMixture {
             return new Line(bins.from() - step / 2, step, density);
         }
 
-        void addNodes(TreeSet<Double> nodes) {
+        void addNodes(Set<Double> nodes) {
             for (int i = 0; i < density.length; i++) {
                 nodes.add(from + i * step);
             }

@@ -19,9 +19,8 @@ public record SeaLevelEnsemble(List<SeaLevelBasis> bases, List<Double> weights) 
     public SeaLevelEnsemble {
         bases = List.copyOf(bases);
         if (bases.isEmpty() || bases.size() != weights.size()) {
-            throw new IllegalArgumentException(
-                    "an ensemble needs a weight for each of one or more curves but has " + weights.size() + " for "
-                            + bases.size());
+            throw new IllegalArgumentException("an ensemble needs a weight for each of one or more curves but has "
+                    + weights.size() + " for " + bases.size());
         }
         double sum = 0;
         for (double weight : weights) {
@@ -55,7 +54,6 @@ public record SeaLevelEnsemble(List<SeaLevelBasis> bases, List<Double> weights) 
     /** The same accounts, all alike in weight. */
     public SeaLevelEnsemble equallyWeighted() {
         return new SeaLevelEnsemble(
-                bases,
-                IntStream.range(0, bases.size()).mapToObj(i -> 1.0).toList());
+                bases, IntStream.range(0, bases.size()).mapToObj(i -> 1.0).toList());
     }
 }

@@ -70,8 +70,7 @@ public record SiteRelations(
             List<JointLevels.Entry> entries = entries(site, ensemble.bases().get(k), rule, dates);
             entries.forEach(entry -> first.putIfAbsent(entry.name(), entry));
             if (entries.size() >= 2) {
-                JointLevels joint =
-                        new JointLevels(site.name(), site.coast().orElse(site.name()), entries, streams);
+                JointLevels joint = new JointLevels(site.name(), site.coast().orElse(site.name()), entries, streams);
                 double weight = ensemble.weights().get(k);
                 List<List<JointLevels.Drawn>> drawn = BlockTasks.inOrder(executor, 0, blocks, joint::draw);
                 for (int block = 0; block < blocks; block++) {

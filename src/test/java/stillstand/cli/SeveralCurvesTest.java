@@ -42,7 +42,11 @@ class SeveralCurvesTest {
                         "  \"stillstand\": {\"kind\": \"highstands\", \"complete\": true}},",
                         "  {\"name\": \"high-sea\", \"path\": \"high.csv\",",
                         "  \"stillstand\": {\"kind\": \"highstands\", \"complete\": true}}]}")
-                .with("curves/low.csv", "stage,age_ka,age_1sigma_ka,level_m,level_1sigma_m", "5a,80,2,-20,3", "5e,120,0,0,2")
+                .with(
+                        "curves/low.csv",
+                        "stage,age_ka,age_1sigma_ka,level_m,level_1sigma_m",
+                        "5a,80,2,-20,3",
+                        "5e,120,0,0,2")
                 .with(
                         "curves/high.csv",
                         "stage,age_ka,age_1sigma_ka,level_m,level_1sigma_m",
@@ -65,7 +69,8 @@ class SeveralCurvesTest {
             double exact = new BrentSolver(1e-12)
                     .solve(
                             200,
-                            rate -> 0.75 * low.cumulativeProbability(rate) + 0.25 * high.cumulativeProbability(rate)
+                            rate -> 0.75 * low.cumulativeProbability(rate)
+                                    + 0.25 * high.cumulativeProbability(rate)
                                     - check[0],
                             0,
                             1);
@@ -138,9 +143,10 @@ class SeveralCurvesTest {
         assertEquals(1, study.execute("run"));
         assertTrue(
                 study.err()
-                        .endsWith("sites.csv:2:1: site: found \"Stair\", which no curve of the study serves (low-sea: it"
-                                + " shows no 5c, to which level \"T2\" is tied; high-sea: it shows no 5a, to which level"
-                                + " \"T1\" is tied), expected levels that at least one curve can serve together\n"),
+                        .endsWith(
+                                "sites.csv:2:1: site: found \"Stair\", which no curve of the study serves (low-sea: it"
+                                        + " shows no 5c, to which level \"T2\" is tied; high-sea: it shows no 5a, to which level"
+                                        + " \"T1\" is tied), expected levels that at least one curve can serve together\n"),
                 study.err());
     }
 
@@ -183,7 +189,6 @@ class SeveralCurvesTest {
     }
 
     private static CurveChoice choice(FlightResult flight, String site, String curve, double logEvidence) {
-        return new CurveChoice(
-                site, Optional.empty(), curve, flight.rate(), Optional.of(logEvidence), 0.5, List.of());
+        return new CurveChoice(site, Optional.empty(), curve, flight.rate(), Optional.of(logEvidence), 0.5, List.of());
     }
 }

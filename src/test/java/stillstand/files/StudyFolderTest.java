@@ -219,7 +219,9 @@ class StudyFolderTest {
 
     @Test
     void aWeightOfZeroIsAProblem() throws IOException {
-        write("study.json", "{\"title\": \"x\", \"sea_level\": {\"curves\": [{\"id\": \"waelbroeck-2002\", \"weight\": 0}]}}");
+        write(
+                "study.json",
+                "{\"title\": \"x\", \"sea_level\": {\"curves\": [{\"id\": \"waelbroeck-2002\", \"weight\": 0}]}}");
         assertEquals(
                 List.of("study.json:1:77: sea_level.curves[0].weight: found 0, expected a number above 0"), problems());
     }

@@ -106,8 +106,7 @@ class RateMixtureTest {
     }
 
     private static double quantile(DoubleUnaryOperator below, double probability) {
-        return new BrentSolver(1e-12, 1e-12)
-                .solve(200, rate -> below.applyAsDouble(rate) - probability, -1000, 1000);
+        return new BrentSolver(1e-12, 1e-12).solve(200, rate -> below.applyAsDouble(rate) - probability, -1000, 1000);
     }
 
     private static Rate normal(double mean, double sd) {
@@ -140,8 +139,7 @@ class RateMixtureTest {
 
     private static Quantity age(double mean, double sd) {
         NormalDistribution normal = new NormalDistribution(mean, sd);
-        return new Quantity(
-                mean, Optional.of(mean), Optional.of(sd), tails(normal, 0.6827), tails(normal, 0.95), "ka");
+        return new Quantity(mean, Optional.of(mean), Optional.of(sd), tails(normal, 0.6827), tails(normal, 0.95), "ka");
     }
 
     private static Interval tails(NormalDistribution normal, double probability) {
