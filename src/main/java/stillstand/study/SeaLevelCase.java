@@ -2,6 +2,7 @@ package stillstand.study;
 
 import java.util.Optional;
 import stillstand.sealevel.HighstandTable;
+import stillstand.sealevel.LocalDeparture;
 import stillstand.sealevel.SeaLevelCurve;
 
 /**
@@ -13,6 +14,20 @@ import stillstand.sealevel.SeaLevelCurve;
  * @param highstands with overrides, defaults and the study's own settings in them
  */
 public record SeaLevelCase(String id, double weight, Optional<SeaLevelCurve> curve, HighstandTable highstands) {
+    /**
+     * The same account as it stands on a coast.
+     *
+     * @param where the site, for the ledger
+     * @param source who says so
+     */
+    SeaLevelCase at(LocalDeparture departure, String where, String source) {
+        return new SeaLevelCase(
+                id,
+                weight,
+                curve.map(each -> each.at(departure, where, source)),
+                highstands.at(departure, where, source));
+    }
+
     public SeaLevelCase {
         if (!(weight > 0 && weight < Double.POSITIVE_INFINITY)) {
             throw new IllegalArgumentException("weight must be above 0 but is " + weight);
