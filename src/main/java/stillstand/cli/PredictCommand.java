@@ -69,7 +69,7 @@ final class PredictCommand implements Callable<Integer> {
     public Integer call() throws IOException {
         UpliftHistory history = history();
         Loaded<Study> loaded =
-                workshop.reader().read(folder, new SettingsChanges(Optional.empty(), Optional.empty(), curves));
+                workshop.reader().read(folder, new SettingsChanges(Optional.empty(), Optional.empty(), curves, false));
         if (!loaded.problems().isEmpty() || loaded.value().isEmpty()) {
             Workshop.list(loaded.problems(), workshop.err());
             return ExitCode.PROBLEMS;

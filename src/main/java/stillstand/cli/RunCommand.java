@@ -76,6 +76,11 @@ final class RunCommand implements Callable<Integer> {
     @Option(names = "--figures", paramLabel = "WHICH", description = "all (default) or none")
     private String figures = ALL_FIGURES;
 
+    @Option(
+            names = "--leverage",
+            description = "say also what to measure next, and what other assumptions and each sample do")
+    private boolean leverage;
+
     @Option(names = "--json", description = "print results.json in place of the summary")
     private boolean json;
 
@@ -95,7 +100,7 @@ final class RunCommand implements Callable<Integer> {
                     spec.commandLine(), "--figures must be all or none but is " + InputProblem.quote(figures));
         }
         Instant started = workshop.clock().instant();
-        Loaded<Study> loaded = workshop.reader().read(folder, new SettingsChanges(seed, draws, curves));
+        Loaded<Study> loaded = workshop.reader().read(folder, new SettingsChanges(seed, draws, curves, leverage));
         if (!loaded.problems().isEmpty() || loaded.value().isEmpty()) {
             Workshop.list(loaded.problems(), workshop.err());
             return ExitCode.PROBLEMS;

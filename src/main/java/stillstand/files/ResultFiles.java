@@ -34,6 +34,7 @@ public final class ResultFiles {
         write(folder, "pairings.csv", pairings(result));
         write(folder, "budget.csv", budget(result));
         write(folder, "ledger.csv", ledger(result));
+        LeverageTables.write(folder, result.leverage());
     }
 
     private static void write(Path folder, String name, String text) throws IOException {

@@ -78,6 +78,7 @@ public final class TerminalReport {
         table(levels).lines().forEach(line -> lines.add("  " + Wording.cut(line, WIDTH - 2)));
         result.flight(name).ifPresent(this::flight);
         levels.forEach(this::remarks);
+        new LeverageReport(name, result.leverage()).lines().forEach(line -> say("  " + line));
         for (BetweenLevels between : result.intervals()) {
             if (between.site().equals(name)) {
                 say("  Between " + between.fromLevel() + " and " + between.toLevel() + ": "

@@ -57,20 +57,20 @@ final class LevelInputs {
         }
         add(Role.AGE, AGE, "ka", sea.ageKa());
         if (sea instanceof SeaAtLevel.AtHighstand stand) {
-            add(Role.SEA_LEVEL, "level of the highstand", "m", stand.seaLevelMetres());
+            add(Role.SEA_LEVEL, "highstand level", "m", stand.seaLevelMetres());
             addSpread(
-                    "offset shared by highstands",
+                    "shared offset",
                     stand.highstand().takesOffset() ? stand.shared().offsetSigmaMetres() : 0);
             addSpread(
-                    "factor shared by interstadials",
+                    "interstadial factor",
                     stand.highstand().takesInterstadialFactor() ? stand.shared().interstadialSigmaMetres() : 0);
             addSpread("local sea level", stand.highstand().localOffsetSigmaMetres());
         } else if (sea instanceof SeaAtLevel.OnCurve read) {
-            add(Role.CURVE_BAND, "band of the curve", "sigma", STANDARD);
+            add(Role.CURVE_BAND, "curve band", "sigma", STANDARD);
             if (read.curveAgeSigmaKa() > 0) {
-                add(Role.CURVE_AGE, "ages of the curve", "ka", new Normal(0, read.curveAgeSigmaKa()));
+                add(Role.CURVE_AGE, "curve ages", "ka", new Normal(0, read.curveAgeSigmaKa()));
             }
-            addSpread("offset of the curve", read.sharedSigmaMetres());
+            addSpread("curve offset", read.sharedSigmaMetres());
         }
         add(Role.LOWERING, "surface lowering", "m/kyr", loweringMetresPerKyr);
     }
@@ -92,7 +92,7 @@ final class LevelInputs {
     /** What a term of a height is called. */
     static String name(Source source) {
         return switch (source) {
-            case SURVEY -> "survey of the height";
+            case SURVEY -> "survey";
             case PALAEODEPTH -> "depth of growth";
             case COSEISMIC_STEP -> "co-seismic step";
             default -> source.name().toLowerCase(Locale.ROOT).replace('_', ' ');

@@ -1,6 +1,7 @@
 package stillstand.sensitivity;
 
 import java.util.Comparator;
+import java.util.Locale;
 import java.util.Optional;
 
 /**
@@ -10,7 +11,7 @@ import java.util.Optional;
  * @param rateOf the level whose own rate it is, or "flight" for the rate of the whole flight
  * @param level that is measured
  * @param sample of that level that is measured; absent where it is the level itself
- * @param measurement what is done
+ * @param measurement what is done: {@code date}, {@code survey}, {@code indicator} or {@code taxon} (see {@link Kind})
  * @param sigma one standard deviation of its result
  * @param unit of {@code sigma}
  * @param width95 width of the rate's 95 % interval (equal tails) as it is, m/kyr
@@ -27,7 +28,7 @@ public record NextMeasurement(
         String rateOf,
         String level,
         Optional<String> sample,
-        Kind measurement,
+        String measurement,
         double sigma,
         String unit,
         double width95,
@@ -56,7 +57,12 @@ public record NextMeasurement(
         /** What the landform stands for made out, so that the spread of that halves. */
         INDICATOR,
         /** The taxon of a coral identified, so that the spread of its depth of growth halves. */
-        TAXON
+        TAXON;
+
+        /** The word in results. */
+        public String id() {
+            return name().toLowerCase(Locale.ROOT);
+        }
     }
 
     /**
@@ -82,7 +88,7 @@ public record NextMeasurement(
                 rateOf,
                 level,
                 sample,
-                kind,
+                kind.id(),
                 sigma,
                 kind == Kind.DATE ? "ka" : "m",
                 found.width95(),

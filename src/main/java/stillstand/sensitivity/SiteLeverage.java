@@ -63,9 +63,34 @@ public final class SiteLeverage {
             RunMonitor monitor) {
         SiteLeverage site = new SiteLeverage(base, streams, executor, monitor);
         return new Leverage(
+                tornados(base),
                 site.nextMeasurements(plan),
                 new AssumptionSwitches(base, site.answers).all(others),
                 site.samplesLeftOut());
+    }
+
+    /** The part that every run has: the tornado of each level with a rate of its own. */
+    public static Leverage tornadosOf(Supposition base) {
+        return new Leverage(tornados(base), List.of(), List.of(), List.of());
+    }
+
+    private static List<LevelTornado> tornados(Supposition base) {
+        List<LevelTornado> found = new ArrayList<>();
+        for (Level level : base.site().levels()) {
+            String site = base.site().name();
+            LevelExplanations explained =
+                    LevelExplanations.of(level, base.basis(), base.dates(), site + " / " + level.name());
+            if (!explained.explanations().isEmpty()) {
+                LevelTornado.of(
+                                site,
+                                level.name(),
+                                FormerSeaLevel.ofLandform(base.site(), level, base.indicativeRange()),
+                                level.loweringMetresPerKyr(),
+                                explained.explanations())
+                        .ifPresent(found::add);
+            }
+        }
+        return found;
     }
 
     private List<NextMeasurement> nextMeasurements(MeasurementPlan plan) {

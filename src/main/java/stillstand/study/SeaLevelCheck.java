@@ -143,7 +143,11 @@ final class SeaLevelCheck {
 
     private SeaLevelCase caseOf(SeaLevelCurve curve, double weight, HighstandOverrides replaced) {
         HighstandTable table = HighstandTable.fromCurve(curve, library.stages(), replaced, options());
-        return new SeaLevelCase(curve.id(), weight, Optional.of(curve), underSettings(table));
+        Optional<HighstandTable> own = Optional.of(HighstandOverrides.NONE)
+                .filter(none -> !none.equals(replaced))
+                .map(none ->
+                        underSettings(HighstandTable.fromCurve(curve, library.stages(), none, options())));
+        return new SeaLevelCase(curve.id(), weight, Optional.of(curve), underSettings(table), own);
     }
 
     private Optional<SeaLevelCase> fromTable(String id, List<SeaLevelCurve> curves) {

@@ -4,6 +4,7 @@ import java.util.List;
 import java.util.Optional;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputWarning;
+import stillstand.sensitivity.Leverage;
 import stillstand.uplift.BetweenLevels;
 import stillstand.uplift.FlightResult;
 import stillstand.uplift.ImpliedSeaLevel;
@@ -21,6 +22,7 @@ import stillstand.uplift.LevelResidual;
  * @param flights one for each site with a level to be matched
  * @param intervals rates between levels of a site
  * @param impliedSeaLevel sea level that dated levels imply, given the uplift of the others
+ * @param leverage what the answers hang on
  * @param residuals measured against predicted heights of the flights
  * @param warnings what was odd in the input
  * @param failures sites that could not be done
@@ -34,6 +36,7 @@ public record StudyResult(
         List<FlightResult> flights,
         List<BetweenLevels> intervals,
         List<ImpliedSeaLevel> impliedSeaLevel,
+        Leverage leverage,
         List<LevelResidual> residuals,
         List<InputWarning> warnings,
         List<Failure> failures,
@@ -60,6 +63,7 @@ public record StudyResult(
                 flights,
                 intervals,
                 impliedSeaLevel,
+                leverage,
                 residuals,
                 warnings,
                 failures,

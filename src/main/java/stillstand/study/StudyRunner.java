@@ -42,6 +42,7 @@ public final class StudyRunner {
     private final DateRules dates;
     private final LevelAnswers answers;
     private final Flights matching;
+    private final SiteHinges hinges;
 
     private final List<LevelAnswer> levels = new ArrayList<>();
     private final List<StudyResult.Waiting> waiting = new ArrayList<>();
@@ -72,7 +73,9 @@ public final class StudyRunner {
                 executor,
                 settings.indicativeRange(),
                 dates);
-        matching = new Flights(streams, executor, monitor, rules(settings.matching()), settings.indicativeRange());
+        MatchingRules rules = rules(settings.matching());
+        matching = new Flights(streams, executor, monitor, rules, settings.indicativeRange());
+        hinges = new SiteHinges(settings, rules, dates, streams, executor, monitor);
     }
 
     /** Settings of matching as the engine takes them: what is not stated stays its own default. */
@@ -149,6 +152,7 @@ public final class StudyRunner {
                 flights,
                 intervals,
                 implied,
+                hinges.leverage(),
                 residuals,
                 study.warnings(),
                 failures,
@@ -178,6 +182,8 @@ public final class StudyRunner {
         implied.addAll(relations.impliedSeaLevel());
         ledger.addAll(relations.assumptions());
         runFlight(plan, basis, (double) levels.size() / Math.max(1, allLevels));
+        monitor.step(plan.site().name() + " / what it hangs on", (double) levels.size() / Math.max(1, allLevels));
+        ledger.addAll(hinges.add(plan, sea));
     }
 
     private void runFlight(SitePlan plan, SeaLevelBasis basis, double fraction) {

@@ -10,6 +10,7 @@ import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import stillstand.SampleStudy;
 import stillstand.figure.Figures.Absence;
+import stillstand.sensitivity.Leverage;
 import stillstand.study.StudyResult;
 import stillstand.uncertainty.Digits;
 import stillstand.uplift.FlightResult;
@@ -132,6 +133,7 @@ class FiguresTest {
                 List.of(),
                 List.of(),
                 List.of(),
+                Leverage.NONE,
                 List.of(),
                 List.of(),
                 List.of(),

@@ -12,6 +12,7 @@ import org.junit.jupiter.params.provider.MethodSource;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.Loaded;
+import stillstand.sensitivity.MeasurementPlan;
 import stillstand.shoreline.IndicativeRule;
 import stillstand.study.StatedSettings;
 import stillstand.study.StatedSettings.Place;
@@ -62,7 +63,8 @@ class StudyJsonTest {
                     Optional.empty(),
                     Optional.empty(),
                     Optional.empty(),
-                    Optional.empty()));
+                    Optional.empty()),
+            Optional.empty());
 
     private record Case(String json, List<String> messages) {
         @Override
@@ -223,7 +225,8 @@ class StudyJsonTest {
                         Optional.of(1.0),
                         Optional.of(20.0),
                         Optional.of("mean"),
-                        Optional.of(true)));
+                        Optional.of(true)),
+                Optional.of(new MeasurementPlan(2, 0.3)));
         StudySettings read = parse(json).value().orElseThrow().settings();
         assertEquals(expected, read);
         assertEquals(

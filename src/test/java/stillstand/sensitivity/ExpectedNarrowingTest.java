@@ -42,7 +42,7 @@ class ExpectedNarrowingTest {
     void aSecondSurveyOfALoneLevel() {
         for (double again : new double[] {3, 1}) {
             Optional<NextMeasurement> found = level(new Exact(AGE_KA))
-                    .of(NextMeasurement.Kind.SURVEY, "survey of the height", again);
+                    .of(NextMeasurement.Kind.SURVEY, "survey", again);
             checkSurvey(found.orElseThrow(), again, 0);
         }
     }

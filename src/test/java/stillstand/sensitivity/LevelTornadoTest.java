@@ -65,7 +65,7 @@ class LevelTornadoTest {
         LevelTornado tornado = tornado(new Exact(0.1), stand("5c", 1, 100, -20));
         assertEquals(Optional.of("5c"), tornado.stage());
         assertEquals((60 + 20) / 100.0 + 0.1, tornado.rate(), 1e-12);
-        LevelTornado.Bar survey = bar(tornado, "survey of the height");
+        LevelTornado.Bar survey = bar(tornado, "survey");
         assertEquals((60 - TWO * 2 + 20) / 100 + 0.1, survey.rateAtLow95(), 1e-6);
         assertEquals((60 + ONE * 2 + 20) / 100 + 0.1, survey.rateAtHigh68(), 1e-5);
         assertEquals(61 + TWO * 2, survey.input95().high(), 1e-5);
@@ -74,15 +74,15 @@ class LevelTornadoTest {
         LevelTornado.Bar age = bar(tornado, "age");
         assertEquals(80 / (100 - TWO * 4) + 0.1, age.rateAtLow95(), 1e-6);
         assertEquals("ka", age.unit());
-        assertEquals((80 - TWO * 3) / 100 + 0.1, bar(tornado, "offset shared by highstands").rateAtHigh95(), 1e-6);
-        assertEquals((80 - TWO * 6) / 100 + 0.1, bar(tornado, "factor shared by interstadials").rateAtHigh95(), 1e-6);
+        assertEquals((80 - TWO * 3) / 100 + 0.1, bar(tornado, "shared offset").rateAtHigh95(), 1e-6);
+        assertEquals((80 - TWO * 6) / 100 + 0.1, bar(tornado, "interstadial factor").rateAtHigh95(), 1e-6);
         assertEquals((80 - TWO * 5) / 100 + 0.1, bar(tornado, "local sea level").rateAtHigh95(), 1e-6);
     }
 
     @Test
     void longestBarComesFirstAndWhatIsExactHasNone() {
         LevelTornado tornado = tornado(new Exact(0), stand("5c", 1, 100, -20));
-        assertEquals("factor shared by interstadials", tornado.bars().get(0).input());
+        assertEquals("interstadial factor", tornado.bars().get(0).input());
         for (int i = 1; i < tornado.bars().size(); i++) {
             assertTrue(tornado.bars().get(i - 1).span95() >= tornado.bars().get(i).span95());
         }
