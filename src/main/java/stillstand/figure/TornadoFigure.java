@@ -102,12 +102,22 @@ final class TornadoFigure {
     }
 
     private static void paint(Pen pen, Row row, double y) {
+        if (row.bar().isEmpty()) {
+            double above = y - ROW / 2;
+            pen.line(pen.left(), above, pen.right(), above, Style.MUTED, Style.line(0.5));
+        }
         row.bar().ifPresent(bar -> {
-            half(pen, y, bar.rateAtLow95() - row.rate(), HALF_BAR_95, LOW);
-            half(pen, y, bar.rateAtHigh95() - row.rate(), HALF_BAR_95, HIGH);
-            half(pen, y, bar.rateAtLow68() - row.rate(), HALF_BAR_68, LOW);
-            half(pen, y, bar.rateAtHigh68() - row.rate(), HALF_BAR_68, HIGH);
+            halves(pen, y, bar.rateAtLow95() - row.rate(), bar.rateAtHigh95() - row.rate(), HALF_BAR_95);
+            halves(pen, y, bar.rateAtLow68() - row.rate(), bar.rateAtHigh68() - row.rate(), HALF_BAR_68);
         });
+    }
+
+    /** Both ends of an input; where they move the rate the same way, the low end above the high one. */
+    private static void halves(Pen pen, double y, double atLow, double atHigh, double halfHeight) {
+        boolean sameSide = atLow * atHigh > 0;
+        double shift = sameSide ? halfHeight / 2 : 0;
+        half(pen, y - shift, atLow, halfHeight - shift, LOW);
+        half(pen, y + shift, atHigh, halfHeight - shift, HIGH);
     }
 
     private static void half(Pen pen, double y, double change, double halfHeight, Color colour) {

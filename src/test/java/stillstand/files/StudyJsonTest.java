@@ -101,7 +101,7 @@ class StudyJsonTest {
                         "study.json:2:3: sede: found an unknown key, expected \"seed\""),
                 bad(
                         "{\"title\": \"x\", \"qqqqqqqqq\": 1}",
-                        "study.json:1:16: qqqqqqqqq: found an unknown key, expected one of title, note, seed, draws, sea_level, rate, matching, indicative_range, screening"),
+                        "study.json:1:16: qqqqqqqqq: found an unknown key, expected one of title, note, seed, draws, sea_level, rate, matching, indicative_range, screening, leverage"),
                 bad(
                         "{\"title\": \"x\", \"title\": \"y\"}",
                         "study.json:1:16: title: found this key a second time, expected it once"),
@@ -193,7 +193,8 @@ class StudyJsonTest {
                         + "\"stray_age_maximum_ka\": 500, \"wrong_date_probability\": 0.1, \"trace_probability\": 0.9},"
                         + "\"indicative_range\": \"uniform\","
                         + "\"screening\": {\"calcite_maximum_percent\": 2, \"initial_d234u_permil\": [140, 152], \"th232_maximum_ppb\": 1,"
-                        + "\"th230_th232_minimum\": 20, \"replicates\": \"mean\", \"stratigraphic_order\": true}}";
+                        + "\"th230_th232_minimum\": 20, \"replicates\": \"mean\", \"stratigraphic_order\": true},"
+                        + "\"leverage\": {\"date_1sigma_ka\": 2}}";
         StudySettings expected = new StudySettings(
                 "A",
                 "b",
