@@ -3,6 +3,7 @@ package stillstand;
 import java.util.List;
 import java.util.Optional;
 import stillstand.sensitivity.AssumptionSwitch;
+import stillstand.sensitivity.CurveLeftOut;
 import stillstand.sensitivity.Leverage;
 import stillstand.sensitivity.LevelTornado;
 import stillstand.sensitivity.LevelTornado.Bar;
@@ -76,7 +77,9 @@ public final class SampleLeverage {
                         Optional.of(rate(0.436)),
                         Optional.empty(),
                         Optional.of(rate(0.435)),
-                        Optional.of(rate(0.41)))));
+                        Optional.of(rate(0.41)))),
+                List.of(new CurveLeftOut(
+                        "North cliff", NextMeasurement.FLIGHT, "made-up-curve", 0.75, rate(0.435), rate(0.45))));
     }
 
     /** A tornado of three inputs. */

@@ -8,6 +8,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
 import stillstand.sensitivity.AssumptionSwitch;
+import stillstand.sensitivity.CurveLeftOut;
 import stillstand.sensitivity.Leverage;
 import stillstand.sensitivity.LevelTornado;
 import stillstand.sensitivity.LevelTornado.Bar;
@@ -25,6 +26,7 @@ final class LeverageTables {
         write(folder, "next-measurements.csv", leverage.nextMeasurements(), nextMeasurements(leverage));
         write(folder, "assumption-switches.csv", leverage.assumptionSwitches(), switches(leverage));
         write(folder, "samples-left-out.csv", leverage.samplesLeftOut(), samples(leverage));
+        write(folder, "curves-left-out.csv", leverage.curvesLeftOut(), curves(leverage));
     }
 
     private static void write(Path folder, String name, List<?> rows, String text) throws IOException {
@@ -103,6 +105,18 @@ final class LeverageTables {
         rate(table, "level_rate_without", SampleLeftOut::levelRateWithout);
         rate(table, "flight_rate", SampleLeftOut::flightRate);
         rate(table, "flight_rate_without", SampleLeftOut::flightRateWithout);
+        return table.write();
+    }
+
+    /** A row for each rate and each of several curves. */
+    static String curves(Leverage leverage) {
+        CsvTable<CurveLeftOut> table = new CsvTable<>(leverage.curvesLeftOut())
+                .text("site", CurveLeftOut::site)
+                .text("rate_of", CurveLeftOut::rateOf)
+                .text("curve", CurveLeftOut::curve)
+                .number("weight", row -> Optional.of(row.weight()));
+        rate(table, "rate", row -> Optional.of(row.rate()));
+        rate(table, "rate_without", row -> Optional.of(row.rateWithout()));
         return table.write();
     }
 

@@ -47,6 +47,7 @@ public final class ResultsFolder implements AutoCloseable {
             "next-measurements.csv",
             "assumption-switches.csv",
             "samples-left-out.csv",
+            "curves-left-out.csv",
             "ledger.csv",
             "figures",
             "report.html",

@@ -9,13 +9,17 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.stream.Collectors;
 import stillstand.sensitivity.AssumptionSwitch;
+import stillstand.sensitivity.CurveLeftOut;
 import stillstand.sensitivity.Leverage;
 import stillstand.sensitivity.NextMeasurement;
 import stillstand.sensitivity.SampleLeftOut;
 import stillstand.sensitivity.ShortRate;
 import stillstand.uncertainty.Digits;
 
-/** What the answers of one site hang on, in sentences: what to measure next, what other assumptions and each sample would do. */
+/**
+ * What the answers of one site hang on, in sentences: what to measure next, what other assumptions would
+ * do, and what each sample and curve does.
+ */
 final class LeverageReport {
     private static final int SHOWN = 4;
     /** A change is worth a word where it is so many errors of its calculation. */
@@ -37,6 +41,7 @@ final class LeverageReport {
         next(lines);
         switches(lines);
         samples(lines);
+        curves(lines);
         return lines;
     }
 
@@ -71,19 +76,23 @@ final class LeverageReport {
                 && each.width95ChangePercent() < -1;
     }
 
-    private static String measurement(NextMeasurement each) {
+    /** {@code a date of T4 to 3 ka}. */
+    private static String named(NextMeasurement each) {
         String thing = each.sample().orElse(each.level());
         String sigma = " to " + Wording.number(Digits.text(each.sigma(), each.sigma(), 1)) + " " + each.unit();
-        String what =
-                switch (each.measurement()) {
-                    case "date" -> "a date of " + thing + sigma;
-                    case "survey" -> "a survey of " + thing + sigma;
-                    case "taxon" -> "the taxon of " + thing;
-                    default -> "the indicative meaning of " + thing + sigma;
-                };
-        return what + " "
+        return switch (each.measurement()) {
+            case "date" -> "a date of " + thing + sigma;
+            case "survey" -> "a survey of " + thing + sigma;
+            case "taxon" -> "the taxon of " + thing;
+            default -> "the indicative meaning of " + thing + sigma;
+        };
+    }
+
+    private static String measurement(NextMeasurement each) {
+        String form = each.width95ChangePercentError() < 0.95 ? "%.1f ± %.1f %%" : "%.0f ± %.0f %%";
+        return named(each) + " "
                 + Wording.number(String.format(
-                        Locale.ROOT, "%.0f ± %.0f %%", each.width95ChangePercent(), each.width95ChangePercentError()));
+                        Locale.ROOT, form, each.width95ChangePercent(), each.width95ChangePercentError()));
     }
 
     private static Optional<String> surest(List<NextMeasurement> own) {
@@ -96,7 +105,7 @@ final class LeverageReport {
                 .max(Comparator.comparingDouble(each -> each.pairing()
                         .map(gain -> gain.expectedCertainty() - gain.certainty())
                         .orElse(0.0)))
-                .map(each -> "  Pairings: " + measurement(each).replaceFirst(" [−-]?\\d+ ± \\d+ %$", "")
+                .map(each -> "  Pairings: " + named(each)
                         + " would raise their mean certainty from "
                         + each.pairing()
                                 .map(gain -> String.format(
@@ -120,8 +129,7 @@ final class LeverageReport {
         telling.forEach((title, rates) -> lines.add("If otherwise: " + title + ": "
                 + rates.stream()
                         .limit(SHOWN)
-                        .map(each -> name(each.rateOf()) + " would be " + rate(each.rateWouldBe(), each.rate())
-                                + ", not " + rate(Optional.of(each.rate()), each.rate()))
+                        .map(each -> name(each.rateOf()) + would(each.rateWouldBe(), each.rate()))
                         .collect(Collectors.joining("; "))
                 + (rates.size() > SHOWN ? "; and " + (rates.size() - SHOWN) + " more" : "") + "."));
         long quiet = own.stream()
@@ -145,14 +153,10 @@ final class LeverageReport {
             List<String> moved = new ArrayList<>();
             out.levelRate()
                     .filter(rate -> move(rate, out.levelRateWithout()) >= NEWS)
-                    .ifPresent(rate -> moved.add(out.levelRateWithout().isEmpty()
-                            ? out.level() + " would have no rate of its own"
-                            : out.level() + " would be " + rate(out.levelRateWithout(), rate) + ", not "
-                                    + rate(Optional.of(rate), rate)));
+                    .ifPresent(rate -> moved.add(out.level() + would(out.levelRateWithout(), rate)));
             out.flightRate()
                     .filter(rate -> move(rate, out.flightRateWithout()) >= NEWS)
-                    .ifPresent(rate -> moved.add("the flight would be " + rate(out.flightRateWithout(), rate) + ", not "
-                            + rate(Optional.of(rate), rate)));
+                    .ifPresent(rate -> moved.add("the flight" + would(out.flightRateWithout(), rate)));
             if (!moved.isEmpty()) {
                 lines.add("Without sample " + out.sample() + " " + String.join("; ", moved) + ".");
             }
@@ -173,12 +177,25 @@ final class LeverageReport {
         return half > 0 ? moved / half : moved > 0 ? Double.MAX_VALUE : 0;
     }
 
-    /** {@code 0.43 (0.39 to 0.47)} to the digits that the present rate's spread leaves. */
-    private static String rate(Optional<ShortRate> rate, ShortRate now) {
+    private void curves(List<String> lines) {
+        for (CurveLeftOut out : leverage.curvesLeftOut()) {
+            if (out.site().equals(site) && move(out.rate(), Optional.of(out.rateWithout())) >= NEWS) {
+                lines.add("Without curve " + out.curve() + " " + name(out.rateOf())
+                        + would(Optional.of(out.rateWithout()), out.rate()) + ".");
+            }
+        }
+    }
+
+    /** {@code  would be 0.43 (0.39 to 0.47), not 0.45 (0.41 to 0.49)}, to the digits that the spread as it is leaves. */
+    private static String would(Optional<ShortRate> then, ShortRate now) {
         double sigma = Math.max(now.interval95().width() / 4, 1e-6);
-        return rate.map(each -> Wording.number(Digits.text(each.median(), sigma, 1)) + " ("
-                        + Wording.number(Digits.text(each.interval95().low(), sigma, 1)) + " to "
-                        + Wording.number(Digits.text(each.interval95().high(), sigma, 1)) + ")")
-                .orElse("without a rate");
+        return then.map(rate -> " would be " + rate(rate, sigma)).orElse(" would have no rate of its own") + ", not "
+                + rate(now, sigma);
+    }
+
+    private static String rate(ShortRate rate, double sigma) {
+        return Wording.number(Digits.text(rate.median(), sigma, 1)) + " ("
+                + Wording.number(Digits.text(rate.interval95().low(), sigma, 1)) + " to "
+                + Wording.number(Digits.text(rate.interval95().high(), sigma, 1)) + ")";
     }
 }

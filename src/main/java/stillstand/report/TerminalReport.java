@@ -78,13 +78,13 @@ public final class TerminalReport {
         table(levels).lines().forEach(line -> lines.add("  " + Wording.cut(line, WIDTH - 2)));
         result.flight(name).ifPresent(this::flight);
         levels.forEach(this::remarks);
-        new LeverageReport(name, result.leverage()).lines().forEach(line -> say("  " + line));
         for (BetweenLevels between : result.intervals()) {
             if (between.site().equals(name)) {
                 say("  Between " + between.fromLevel() + " and " + between.toLevel() + ": "
                         + Wording.rate(between.rate()) + " m/kyr, 95 % " + Wording.interval95(between.rate()) + ".");
             }
         }
+        new LeverageReport(name, result.leverage()).lines().forEach(line -> say("  " + line));
     }
 
     private void flight(FlightResult flight) {

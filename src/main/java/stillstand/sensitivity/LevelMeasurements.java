@@ -18,7 +18,7 @@ import stillstand.uplift.SeaAtLevel;
  */
 final class LevelMeasurements {
     private static final int SCRAMBLES = 16;
-    private static final int POINTS = 1024;
+    private static final int POINTS = 512;
     private static final int OUTCOMES = 320;
     private static final double HALVING = 1 / Math.sqrt(3);
 

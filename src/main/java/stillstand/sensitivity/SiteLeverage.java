@@ -66,12 +66,13 @@ public final class SiteLeverage {
                 tornados(base),
                 site.nextMeasurements(plan),
                 new AssumptionSwitches(base, site.answers).all(others),
-                site.samplesLeftOut());
+                site.samplesLeftOut(),
+                List.of());
     }
 
     /** The part that every run has: the tornado of each level with a rate of its own. */
     public static Leverage tornadosOf(Supposition base) {
-        return new Leverage(tornados(base), List.of(), List.of(), List.of());
+        return new Leverage(tornados(base), List.of(), List.of(), List.of(), List.of());
     }
 
     private static List<LevelTornado> tornados(Supposition base) {

@@ -8,6 +8,7 @@ import stillstand.ledger.Assumption;
 import stillstand.ledger.RunCancelledException;
 import stillstand.ledger.RunMonitor;
 import stillstand.sensitivity.AssumptionSwitch;
+import stillstand.sensitivity.CurveLeftOut;
 import stillstand.sensitivity.Leverage;
 import stillstand.sensitivity.LevelTornado;
 import stillstand.sensitivity.NextMeasurement;
@@ -33,6 +34,7 @@ final class SiteHinges {
     private final List<NextMeasurement> next = new ArrayList<>();
     private final List<AssumptionSwitch> switches = new ArrayList<>();
     private final List<SampleLeftOut> leftOut = new ArrayList<>();
+    private final List<CurveLeftOut> curves = new ArrayList<>();
 
     SiteHinges(
             StudySettings settings,
@@ -90,6 +92,6 @@ final class SiteHinges {
 
     /** All sites so far. */
     Leverage leverage() {
-        return new Leverage(tornado, next, switches, leftOut);
+        return new Leverage(tornado, next, switches, leftOut, curves);
     }
 }

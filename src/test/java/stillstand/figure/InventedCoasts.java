@@ -208,7 +208,7 @@ final class InventedCoasts {
     }
 
     private static Leverage tornados(List<LevelAnswer> levels) {
-        return new Leverage(tornadosOf(levels), List.of(), List.of(), List.of());
+        return new Leverage(tornadosOf(levels), List.of(), List.of(), List.of(), List.of());
     }
 
     /** High at the highstands, low half-way between them, straight in between. */

@@ -97,6 +97,15 @@ class StudyJsonTest {
                 bad("{\"title\": \"\"}", "study.json:1:11: title: found \"\", expected a title in words"),
                 bad("{\"title\": 3}", "study.json:1:11: title: found 3, expected a title in words"),
                 bad(
+                        "{\"title\": \"A\", \"leverage\": {\"date_1sigma_ka\": 0}}",
+                        "study.json:1:47: leverage.date_1sigma_ka: found 0, expected a number above 0"),
+                bad(
+                        "{\"title\": \"A\", \"leverage\": {\"survey_2sigma_m\": 1}}",
+                        "study.json:1:29: leverage.survey_2sigma_m: found an unknown key, expected \"survey_1sigma_m\""),
+                bad(
+                        "{\"title\": \"A\", \"leverage\": true}",
+                        "study.json:1:28: leverage: found true, expected an object { … }"),
+                bad(
                         "{\"title\": \"x\",\n  \"sede\": 1}",
                         "study.json:2:3: sede: found an unknown key, expected \"seed\""),
                 bad(
