@@ -64,6 +64,8 @@ public class FigureBenchmark {
                 all.impliedSeaLevel(),
                 all.leverage(),
                 all.residuals(),
+                all.curveChoice(),
+                all.curveEvidence(),
                 all.warnings(),
                 all.failures(),
                 all.ledger());

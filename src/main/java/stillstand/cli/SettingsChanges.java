@@ -14,10 +14,10 @@ import stillstand.study.StudySettings.WeightedCurve;
  *
  * @param seed in place of the study's
  * @param draws so many for each level, without an adaptive stop
- * @param curves in place of the study's, with equal weights; empty = the study's own
+ * @param curves in place of the study's; empty = the study's own
  * @param leverage whether to say what the answers hang on, even where the study does not ask for it
  */
-record SettingsChanges(Optional<Long> seed, Optional<Integer> draws, List<String> curves, boolean leverage)
+record SettingsChanges(Optional<Long> seed, Optional<Integer> draws, List<WeightedCurve> curves, boolean leverage)
         implements UnaryOperator<StudySettings> {
     @Override
     public StudySettings apply(StudySettings settings) {
@@ -36,8 +36,15 @@ record SettingsChanges(Optional<Long> seed, Optional<Integer> draws, List<String
     }
 
     private SeaLevelChoice withCurves(SeaLevelChoice own) {
+        // own picks differ from the study's only where that replaces any
+        List<WeightedCurve> different = curves.stream()
+                .filter(curve -> own.overrides().isPresent()
+                        || curve.overrides().isEmpty()
+                        || curves.stream()
+                                .noneMatch(other -> other.equals(new WeightedCurve(curve.id(), curve.weight()))))
+                .toList();
         return new SeaLevelChoice(
-                curves.stream().map(id -> new WeightedCurve(id, 1)).toList(),
+                different,
                 own.highstandTable(),
                 own.overrides(),
                 own.olderThanCurve(),

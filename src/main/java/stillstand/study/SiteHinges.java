@@ -1,13 +1,16 @@
 package stillstand.study;
 
 import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Optional;
+import java.util.Map;
 import java.util.concurrent.ExecutorService;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.RunCancelledException;
 import stillstand.ledger.RunMonitor;
 import stillstand.sensitivity.AssumptionSwitch;
+import stillstand.sensitivity.CurveChoice;
 import stillstand.sensitivity.CurveLeftOut;
 import stillstand.sensitivity.Leverage;
 import stillstand.sensitivity.LevelTornado;
@@ -19,6 +22,7 @@ import stillstand.sensitivity.Supposition;
 import stillstand.uncertainty.DrawStreams;
 import stillstand.uplift.DateRules;
 import stillstand.uplift.MatchingRules;
+import stillstand.uplift.RateMixture;
 import stillstand.uplift.SeaLevelBasis;
 
 /** Gathers, site by site, what the answers of a study hang on: the tornados always, the rest where the study asks for it. */
@@ -52,15 +56,19 @@ final class SiteHinges {
     }
 
     /**
-     * One site, under the first of its accounts of sea level.
+     * One site, under the account of sea level that weighs most among its own.
      *
+     * @param curveChoice what each of several curves makes of its rates
      * @return what that rests on
      * @throws RunCancelledException if the monitor asks to stop
      */
-    List<Assumption> add(SitePlan plan, SeaLevelCase sea) {
+    List<Assumption> add(SitePlan plan, List<CurveChoice> curveChoice) {
+        SeaLevelCase sea = plan.seaLevel().stream()
+                .max(Comparator.comparingDouble(SeaLevelCase::weight))
+                .orElseThrow();
         SeaLevelBasis basis = new SeaLevelBasis(sea.id(), sea.curve(), sea.highstands());
-        Supposition base = new Supposition(
-                plan.site(), basis, plan.prior(), matching, settings.indicativeRange(), dates);
+        Supposition base =
+                new Supposition(plan.site(), basis, plan.prior(), matching, settings.indicativeRange(), dates);
         Leverage found = settings.leverage()
                 .map(asked -> SiteLeverage.of(base, asked, others(sea), streams, executor, monitor))
                 .orElseGet(() -> SiteLeverage.tornadosOf(base));
@@ -68,7 +76,22 @@ final class SiteHinges {
         next.addAll(found.nextMeasurements());
         switches.addAll(found.assumptionSwitches());
         leftOut.addAll(found.samplesLeftOut());
-        return settings.leverage().isPresent() ? said(plan, sea) : List.of();
+        curves.addAll(curvesLeftOut(plan.site().name(), curveChoice));
+        boolean toSay = settings.leverage().isPresent() || plan.seaLevel().size() > 1;
+        return toSay ? said(plan, sea) : List.of();
+    }
+
+    private static List<CurveLeftOut> curvesLeftOut(String site, List<CurveChoice> curveChoice) {
+        Map<String, List<CurveLeftOut.Answer>> answers = new LinkedHashMap<>();
+        for (CurveChoice row : curveChoice) {
+            if (row.site().equals(site) && !row.mixesCurves()) {
+                answers.computeIfAbsent(row.level().orElse(NextMeasurement.FLIGHT), rateOf -> new ArrayList<>())
+                        .add(new CurveLeftOut.Answer(row.curve(), row.weight(), row.rate()));
+            }
+        }
+        return answers.entrySet().stream()
+                .flatMap(of -> CurveLeftOut.each(site, of.getKey(), of.getValue(), RateMixture::of).stream())
+                .toList();
     }
 
     private List<OtherSeaLevel> others(SeaLevelCase sea) {

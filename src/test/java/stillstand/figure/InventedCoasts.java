@@ -196,6 +196,8 @@ final class InventedCoasts {
                 residuals,
                 List.of(),
                 List.of(),
+                List.of(),
+                List.of(),
                 List.of());
     }
 
