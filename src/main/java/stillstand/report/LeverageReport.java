@@ -177,13 +177,18 @@ final class LeverageReport {
         return half > 0 ? moved / half : moved > 0 ? Double.MAX_VALUE : 0;
     }
 
+    /** For each rate the curve without which it would move the most. */
     private void curves(List<String> lines) {
-        for (CurveLeftOut out : leverage.curvesLeftOut()) {
-            if (out.site().equals(site) && move(out.rate(), Optional.of(out.rateWithout())) >= NEWS) {
-                lines.add("Without curve " + out.curve() + " " + name(out.rateOf())
-                        + would(Optional.of(out.rateWithout()), out.rate()) + ".");
-            }
-        }
+        Map<String, CurveLeftOut> most = new LinkedHashMap<>();
+        leverage.curvesLeftOut().stream()
+                .filter(out -> out.site().equals(site) && move(out) >= NEWS)
+                .forEach(out -> most.merge(out.rateOf(), out, (a, b) -> move(b) > move(a) ? b : a));
+        most.forEach((rateOf, out) -> lines.add("Without curve " + out.curve() + " " + name(rateOf)
+                + would(Optional.of(out.rateWithout()), out.rate()) + "."));
+    }
+
+    private static double move(CurveLeftOut out) {
+        return move(out.rate(), Optional.of(out.rateWithout()));
     }
 
     /** {@code  would be 0.43 (0.39 to 0.47), not 0.45 (0.41 to 0.49)}, to the digits that the spread as it is leaves. */
