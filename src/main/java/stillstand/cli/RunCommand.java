@@ -111,7 +111,8 @@ final class RunCommand implements Callable<Integer> {
             throw new ParameterException(spec.commandLine(), "--every-curve goes without --curve");
         }
         Instant started = workshop.clock().instant();
-        Loaded<Study> loaded = workshop.reader().read(folder, new SettingsChanges(seed, draws, namedCurves(), leverage));
+        Loaded<Study> loaded =
+                workshop.reader().read(folder, new SettingsChanges(seed, draws, namedCurves(), leverage));
         if (!loaded.problems().isEmpty() || loaded.value().isEmpty()) {
             Workshop.list(loaded.problems(), workshop.err());
             return ExitCode.PROBLEMS;

@@ -57,10 +57,8 @@ final class TornadoFigure {
                 name,
                 site.site() + ": what each input does to the rate by itself",
                 List.of(
-                        new Page.KeyEntry(
-                                "input at its low end", (pen, x, y) -> box(pen, x + 2, x + 12, y, 3, LOW)),
-                        new Page.KeyEntry(
-                                "at its high end", (pen, x, y) -> box(pen, x + 2, x + 12, y, 3, HIGH)),
+                        new Page.KeyEntry("input at its low end", (pen, x, y) -> box(pen, x + 2, x + 12, y, 3, LOW)),
+                        new Page.KeyEntry("at its high end", (pen, x, y) -> box(pen, x + 2, x + 12, y, 3, HIGH)),
                         new Page.KeyEntry(
                                 "thick 68 %, thin 95 %",
                                 (pen, x, y) -> pen.line(x + 2, y, x + 12, y, Style.INK, Style.line(1)))),
@@ -77,9 +75,9 @@ final class TornadoFigure {
         if (!(longest > 0)) {
             return rows;
         }
-        String title = tornado.level() + tornado.stage().map(stage -> " at " + stage).orElse("");
-        rows.add(new Row(
-                title, Numbers.rounded(tornado.rate(), longest / 4), tornado.rate(), Optional.empty()));
+        String title =
+                tornado.level() + tornado.stage().map(stage -> " at " + stage).orElse("");
+        rows.add(new Row(title, Numbers.rounded(tornado.rate(), longest / 4), tornado.rate(), Optional.empty()));
         for (Bar bar : tornado.bars()) {
             if (bar.span95() >= LEAST * longest) {
                 rows.add(new Row("– " + bar.input(), range(bar), tornado.rate(), Optional.of(bar)));

@@ -55,7 +55,8 @@ final class LeverageReport {
         Map<String, List<NextMeasurement>> byRate = new LinkedHashMap<>();
         own.forEach(each ->
                 byRate.computeIfAbsent(each.rateOf(), name -> new ArrayList<>()).add(each));
-        lines.add("What to measure next: mean change of the width of the 95 % interval (what it costs is for you to say).");
+        lines.add(
+                "What to measure next: mean change of the width of the 95 % interval (what it costs is for you to say).");
         byRate.forEach((rateOf, ranked) -> {
             String best = ranked.stream()
                     .sorted(Comparator.comparingDouble(NextMeasurement::width95ChangePercent))
@@ -136,7 +137,8 @@ final class LeverageReport {
                 .filter(each -> move(each.rate(), each.rateWouldBe()) < NEWS)
                 .count();
         if (quiet > 0) {
-            lines.add(Wording.counted((int) quiet, "other rate") + " under a switched assumption would move by less than a"
+            lines.add(Wording.counted((int) quiet, "other rate")
+                    + " under a switched assumption would move by less than a"
                     + " twentieth of the 95 % interval (assumption-switches.csv).");
         }
     }
@@ -172,8 +174,10 @@ final class LeverageReport {
         double moved = Math.max(
                 Math.abs(other.get().median() - rate.median()),
                 Math.max(
-                        Math.abs(other.get().interval95().low() - rate.interval95().low()),
-                        Math.abs(other.get().interval95().high() - rate.interval95().high())));
+                        Math.abs(other.get().interval95().low()
+                                - rate.interval95().low()),
+                        Math.abs(other.get().interval95().high()
+                                - rate.interval95().high())));
         return half > 0 ? moved / half : moved > 0 ? Double.MAX_VALUE : 0;
     }
 

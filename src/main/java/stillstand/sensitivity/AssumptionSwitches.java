@@ -58,13 +58,11 @@ final class AssumptionSwitches {
     }
 
     private void indicativeRange() {
-        if (base.site().levels().stream()
-                .noneMatch(level -> level.meaning().rangeMetres() > 0)) {
+        if (base.site().levels().stream().noneMatch(level -> level.meaning().rangeMetres() > 0)) {
             return;
         }
         IndicativeRule rule = base.indicativeRange();
-        IndicativeRule other =
-                rule == IndicativeRule.UNIFORM ? IndicativeRule.QUADRATURE : IndicativeRule.UNIFORM;
+        IndicativeRule other = rule == IndicativeRule.UNIFORM ? IndicativeRule.QUADRATURE : IndicativeRule.UNIFORM;
         String what = "an indicative range means";
         levels(what, rule.id(), other.id(), base.with(other));
         flight(what, rule.id(), other.id(), base.with(other));
@@ -99,8 +97,7 @@ final class AssumptionSwitches {
 
     private void recording() {
         MatchingRules rules = base.matching();
-        SharedPriors.Recording other =
-                rules.recording().equals(USUAL_RECORDING) ? OTHER_RECORDING : USUAL_RECORDING;
+        SharedPriors.Recording other = rules.recording().equals(USUAL_RECORDING) ? OTHER_RECORDING : USUAL_RECORDING;
         flight(
                 "recording probability of a surviving shoreline",
                 text(rules.recording()),
@@ -153,8 +150,7 @@ final class AssumptionSwitches {
     private void levels(String what, String was, String wouldBe, Supposition switched) {
         for (Level level : base.site().levels()) {
             Optional<ShortRate> now = answers.level(base, level).map(own -> ShortRate.of(own.rate()));
-            Optional<ShortRate> then =
-                    answers.level(switched, level).map(own -> ShortRate.of(own.rate()));
+            Optional<ShortRate> then = answers.level(switched, level).map(own -> ShortRate.of(own.rate()));
             if (now.isPresent() && !now.equals(then)) {
                 add(level.name(), what, was, wouldBe, now.get(), then);
             }
@@ -170,8 +166,7 @@ final class AssumptionSwitches {
         }
     }
 
-    private void add(
-            String rateOf, String what, String was, String wouldBe, ShortRate now, Optional<ShortRate> then) {
+    private void add(String rateOf, String what, String was, String wouldBe, ShortRate now, Optional<ShortRate> then) {
         found.add(new AssumptionSwitch(base.site().name(), rateOf, what, was, wouldBe, now, then));
     }
 }

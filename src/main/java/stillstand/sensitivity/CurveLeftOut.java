@@ -28,7 +28,8 @@ public record CurveLeftOut(
         /** @throws IllegalArgumentException if the weight is negative or not finite */
         public Answer {
             if (!(weight >= 0 && weight < Double.POSITIVE_INFINITY)) {
-                throw new IllegalArgumentException("weight of curve '" + curve + "' must be 0 or more but is " + weight);
+                throw new IllegalArgumentException(
+                        "weight of curve '" + curve + "' must be 0 or more but is " + weight);
             }
         }
     }
@@ -44,8 +45,7 @@ public record CurveLeftOut(
         double total = answers.stream().mapToDouble(Answer::weight).sum();
         List<CurveLeftOut> found = new ArrayList<>();
         for (Answer out : answers) {
-            List<Answer> others =
-                    answers.stream().filter(other -> other != out).toList();
+            List<Answer> others = answers.stream().filter(other -> other != out).toList();
             if (others.stream().anyMatch(other -> other.weight() > 0)) {
                 found.add(new CurveLeftOut(
                         site,

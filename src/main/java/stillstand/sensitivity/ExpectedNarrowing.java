@@ -101,8 +101,7 @@ record ExpectedNarrowing(
                         throw new RunCancelledException();
                     }
                     for (int k = 0; k < weighed.length; k++) {
-                        weighed[k] =
-                                draws.blocks[k] == block ? 0 : draws.weights[k] * foretold.density(result, k);
+                        weighed[k] = draws.blocks[k] == block ? 0 : draws.weights[k] * foretold.density(result, k);
                     }
                     effective[block * each + i] = effective(weighed);
                     double share = blockTotals[block] / each;

@@ -64,7 +64,8 @@ final class LevelMeasurements {
     }
 
     private String key() {
-        return "next measurement of " + site + " / " + level + sample.map(name -> " / " + name).orElse("");
+        return "next measurement of " + site + " / " + level
+                + sample.map(name -> " / " + name).orElse("");
     }
 
     private RateDraws drawn() {
@@ -157,7 +158,6 @@ final class LevelMeasurements {
                 OUTCOMES,
                 streams.stream("results of the " + key(), 0),
                 monitor);
-        return Optional.of(NextMeasurement.of(
-                site, level, level, sample, kind, sigma, found, functions.size() > 1));
+        return Optional.of(NextMeasurement.of(site, level, level, sample, kind, sigma, found, functions.size() > 1));
     }
 }

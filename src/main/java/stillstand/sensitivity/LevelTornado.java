@@ -21,12 +21,7 @@ import stillstand.uplift.SeaAtLevel;
  * @param otherStages the rate at the medians under each other highstand that may explain the level
  */
 public record LevelTornado(
-        String site,
-        String level,
-        Optional<String> stage,
-        double rate,
-        List<Bar> bars,
-        List<OtherStage> otherStages) {
+        String site, String level, Optional<String> stage, double rate, List<Bar> bars, List<OtherStage> otherStages) {
     public LevelTornado {
         bars = List.copyOf(bars);
         otherStages = List.copyOf(otherStages);
@@ -102,8 +97,9 @@ public record LevelTornado(
         List<OtherStage> others = new ArrayList<>();
         for (SeaAtLevel sea : ranked.subList(1, ranked.size())) {
             LevelInputs under = new LevelInputs(height, loweringMetresPerKyr, sea);
-            stage(sea).ifPresent(stage -> others.add(
-                    new OtherStage(stage, sea.probability(), under.rateMetresPerKyr(under.medians()))));
+            stage(sea)
+                    .ifPresent(stage -> others.add(
+                            new OtherStage(stage, sea.probability(), under.rateMetresPerKyr(under.medians()))));
         }
         return Optional.of(new LevelTornado(site, level, stage(ranked.get(0)), middle, bars, others));
     }

@@ -97,8 +97,8 @@ public record NextMeasurement(
                 100 * found.changeError(),
                 found.probabilityWider(),
                 hasPairings
-                        ? Optional.of(new PairingGain(
-                                found.certainty(), found.expectedCertainty(), found.certaintyError()))
+                        ? Optional.of(
+                                new PairingGain(found.certainty(), found.expectedCertainty(), found.certaintyError()))
                         : Optional.empty(),
                 found.effectiveDraws());
     }

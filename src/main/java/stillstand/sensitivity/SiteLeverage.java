@@ -33,8 +33,7 @@ public final class SiteLeverage {
     private final Optional<FlightSetup> setup;
     private final Optional<RatePosterior> flight;
 
-    private SiteLeverage(
-            Supposition base, DrawStreams streams, ExecutorService executor, RunMonitor monitor) {
+    private SiteLeverage(Supposition base, DrawStreams streams, ExecutorService executor, RunMonitor monitor) {
         this.base = base;
         this.streams = streams;
         this.monitor = monitor;
@@ -99,8 +98,10 @@ public final class SiteLeverage {
         if (setup.isPresent() && flight.isPresent()) {
             FlightSetup own = setup.get();
             Map<String, Double> surveys = new HashMap<>();
-            base.site().levels().forEach(level -> surveys.put(
-                    level.name(), level.elevationMetres().standardDeviation()));
+            base.site()
+                    .levels()
+                    .forEach(level ->
+                            surveys.put(level.name(), level.elevationMetres().standardDeviation()));
             List<Double> sigmas = own.model().levels().stream()
                     .map(level -> surveys.getOrDefault(level.name(), 0.0))
                     .toList();
@@ -172,7 +173,8 @@ public final class SiteLeverage {
                 POINTS,
                 streams,
                 "sample left out of " + base.site().name())));
-        Optional<ShortRate> whole = points.flatMap(each -> each.rateOf(setup.orElseThrow().model(), monitor))
+        Optional<ShortRate> whole = points.flatMap(
+                        each -> each.rateOf(setup.orElseThrow().model(), monitor))
                 .map(Rate::of)
                 .map(ShortRate::of);
         List<SampleLeftOut> found = new ArrayList<>();

@@ -176,8 +176,7 @@ final class SeaLevelCheck {
         HighstandTable table = HighstandTable.fromCurve(curve, library.stages(), replaced, options());
         Optional<HighstandTable> own = Optional.of(HighstandOverrides.NONE)
                 .filter(none -> !none.equals(replaced))
-                .map(none ->
-                        underSettings(HighstandTable.fromCurve(curve, library.stages(), none, options())));
+                .map(none -> underSettings(HighstandTable.fromCurve(curve, library.stages(), none, options())));
         return new SeaLevelCase(curve.id(), weight, Optional.of(curve), underSettings(table), own);
     }
 

@@ -12,8 +12,8 @@ import stillstand.ledger.RunMonitor;
 import stillstand.sensitivity.AssumptionSwitch;
 import stillstand.sensitivity.CurveChoice;
 import stillstand.sensitivity.CurveLeftOut;
-import stillstand.sensitivity.Leverage;
 import stillstand.sensitivity.LevelTornado;
+import stillstand.sensitivity.Leverage;
 import stillstand.sensitivity.NextMeasurement;
 import stillstand.sensitivity.OtherSeaLevel;
 import stillstand.sensitivity.SampleLeftOut;
@@ -95,7 +95,8 @@ final class SiteHinges {
     }
 
     private List<OtherSeaLevel> others(SeaLevelCase sea) {
-        return sea.withoutOverrides()
+        return sea
+                .withoutOverrides()
                 .map(table -> new OtherSeaLevel(
                         "level and age of the best known highstands",
                         "independent estimates",

@@ -21,6 +21,7 @@ public final class WhatIfPoints {
     private static final int CELLS = 100;
     /** A point that weighs less than this part of the heaviest is not worth drawing a correlation for. */
     private static final double NEGLIGIBLE = 1e-6;
+
     private static final int SWEEP = 400;
     private static final double BEND = 0.02;
     private static final double ROOT = 0.3;
@@ -170,7 +171,8 @@ public final class WhatIfPoints {
             if (weight > NEGLIGIBLE) {
                 stopIfCancelled(monitor);
                 sampler.prepare(new UpliftHistory.ConstantRate(rates[k]), numbers[k]);
-                draws.add(new WeighedDraw(new FlightDraw(rates[k], numbers[k], sampler.draw(random)), weight, blocks[k]));
+                draws.add(
+                        new WeighedDraw(new FlightDraw(rates[k], numbers[k], sampler.draw(random)), weight, blocks[k]));
             }
         }
         return draws;

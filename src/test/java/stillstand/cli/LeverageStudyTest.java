@@ -39,7 +39,9 @@ class LeverageStudyTest {
         StudyOnDisk study = study("{\"title\": \"A cape\"}");
         StudyResult found = study.run("--leverage", "--draws", "1");
         Leverage leverage = found.leverage();
-        assertEquals(List.of("T1", "T2"), leverage.tornado().stream().map(each -> each.level()).toList());
+        assertEquals(
+                List.of("T1", "T2"),
+                leverage.tornado().stream().map(each -> each.level()).toList());
         NextMeasurement survey = leverage.nextMeasurements().stream()
                 .filter(each -> each.measurement().equals("survey"))
                 .findFirst()

@@ -65,7 +65,14 @@ class FiguresTest {
     void whatASiteWithoutFlightLacksIsSaid() throws IOException {
         StudyResult slow = InventedCoasts.slow();
         assertEquals(
-                List.of("curves", "forest", "stair-still-bay", "rates-still-bay", "budget-still-bay", "tornado-still-bay"), names(slow));
+                List.of(
+                        "curves",
+                        "forest",
+                        "stair-still-bay",
+                        "rates-still-bay",
+                        "budget-still-bay",
+                        "tornado-still-bay"),
+                names(slow));
         Absence first = Figures.of(slow).absences().get(0);
         assertEquals(new Absence(FigureKind.PAIRINGS, Optional.of("Still Bay"), "no flight was matched there"), first);
         assertTrue(String.join(" ", words(slow, FigureKind.STAIR)).contains("No flight was matched here"));

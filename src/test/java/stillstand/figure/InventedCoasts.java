@@ -7,8 +7,8 @@ import java.util.stream.IntStream;
 import stillstand.SampleFlight;
 import stillstand.SampleLeverage;
 import stillstand.SampleStudy;
-import stillstand.sensitivity.Leverage;
 import stillstand.sensitivity.LevelTornado;
+import stillstand.sensitivity.Leverage;
 import stillstand.study.StudyResult;
 import stillstand.study.StudyResult.CurvePoint;
 import stillstand.study.StudyResult.CurveUsed;
@@ -203,9 +203,11 @@ final class InventedCoasts {
 
     private static List<LevelTornado> tornadosOf(List<LevelAnswer> levels) {
         return levels.stream()
-                .flatMap(level -> level.rate()
-                        .map(rate -> SampleLeverage.tornado(level.site(), level.level(), rate.median()))
-                        .stream())
+                .flatMap(
+                        level -> level
+                                .rate()
+                                .map(rate -> SampleLeverage.tornado(level.site(), level.level(), rate.median()))
+                                .stream())
                 .toList();
     }
 

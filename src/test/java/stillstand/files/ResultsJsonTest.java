@@ -62,8 +62,7 @@ class ResultsJsonTest {
                 "site rate_of level measurement sigma unit width95 expected_width95 width95_change_percent"
                         + " width95_change_percent_error probability_wider pairing effective_draws",
                 keys(tree.at("/leverage/next_measurements/0")));
-        assertEquals(
-                "certainty expected_certainty error", keys(tree.at("/leverage/next_measurements/0/pairing")));
+        assertEquals("certainty expected_certainty error", keys(tree.at("/leverage/next_measurements/0/pairing")));
         assertEquals(
                 "site rate_of assumption was would_be rate rate_would_be",
                 keys(tree.at("/leverage/assumption_switches/0")));

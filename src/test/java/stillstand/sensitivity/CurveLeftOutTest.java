@@ -31,7 +31,8 @@ class CurveLeftOutTest {
                 "T1",
                 List.of(answer("a", 2, 1), answer("b", 1, 4), answer("c", 1, 8)),
                 CurveLeftOutTest::meanOf);
-        assertEquals(List.of("a", "b", "c"), found.stream().map(CurveLeftOut::curve).toList());
+        assertEquals(
+                List.of("a", "b", "c"), found.stream().map(CurveLeftOut::curve).toList());
         assertEquals(0.5, found.get(0).weight());
         assertEquals(3.5, found.get(0).rate().median(), 1e-12);
         assertEquals(6, found.get(0).rateWithout().median(), 1e-12);

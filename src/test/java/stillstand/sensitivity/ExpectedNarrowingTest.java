@@ -41,8 +41,7 @@ class ExpectedNarrowingTest {
     @Test
     void aSecondSurveyOfALoneLevel() {
         for (double again : new double[] {3, 1}) {
-            Optional<NextMeasurement> found = level(new Exact(AGE_KA))
-                    .of(NextMeasurement.Kind.SURVEY, "survey", again);
+            Optional<NextMeasurement> found = level(new Exact(AGE_KA)).of(NextMeasurement.Kind.SURVEY, "survey", again);
             checkSurvey(found.orElseThrow(), again, 0);
         }
     }
@@ -60,8 +59,7 @@ class ExpectedNarrowingTest {
         assertEquals(WIDTH * now, found.width95(), 0.02 * WIDTH * now);
         double change = 100 * (then / now - 1);
         assertEquals(change, found.width95ChangePercent(), 4 * found.width95ChangePercentError() + 0.3);
-        assertTrue(
-                found.width95ChangePercentError() < 1.5, "error " + found.width95ChangePercentError() + " per cent");
+        assertTrue(found.width95ChangePercentError() < 1.5, "error " + found.width95ChangePercentError() + " per cent");
         assertTrue(found.effectiveDraws() > 300, "draws " + found.effectiveDraws());
     }
 
@@ -94,7 +92,18 @@ class ExpectedNarrowingTest {
 
     private static LevelMeasurements level(stillstand.uncertainty.Uncertain ageKa) {
         Highstand stand = new Highstand(
-                "5e", HighstandClass.INTERGLACIAL, AGE_KA, 0, new Normal(5, SEA), 0, 1, false, false, false, 0, "invented");
+                "5e",
+                HighstandClass.INTERGLACIAL,
+                AGE_KA,
+                0,
+                new Normal(5, SEA),
+                0,
+                1,
+                false,
+                false,
+                false,
+                0,
+                "invented");
         List<HeightTerm> height = List.of(
                 new HeightTerm(HeightTerm.Source.SURVEY, 1, new Normal(65, SURVEY)),
                 new HeightTerm(HeightTerm.Source.INDICATIVE_RANGE, 1, new Normal(0, REST)));
@@ -130,7 +139,6 @@ class ExpectedNarrowingTest {
                 new SharedPriors.Recording.Known(1),
                 List.of(Double.POSITIVE_INFINITY),
                 new SharedPriors.Strays.Known(0.1));
-        return new FlightMeasurements(
-                "site", model, List.of(SURVEY), whole, prior, shared, STREAMS, RunMonitor.SILENT);
+        return new FlightMeasurements("site", model, List.of(SURVEY), whole, prior, shared, STREAMS, RunMonitor.SILENT);
     }
 }

@@ -63,12 +63,7 @@ final class InventedFlights {
         levels.set(
                 level,
                 new FlightLevel(
-                        old.name(),
-                        new Normal(heightMetres, sigmaMetres),
-                        old.datesKa(),
-                        1,
-                        Optional.empty(),
-                        true));
+                        old.name(), new Normal(heightMetres, sigmaMetres), old.datesKa(), 1, Optional.empty(), true));
         return model.withLevels(levels);
     }
 

@@ -39,9 +39,7 @@ final class InventedSites {
         for (int i = 0; i < heightsMetres.length; i++) {
             boolean dated = Math.abs(heightsMetres[i] - 56) < 6;
             levels.add(level(
-                    "T" + (i + 1),
-                    heightsMetres[i],
-                    dated ? List.of(date("D" + (i + 1), 125, 4)) : List.of()));
+                    "T" + (i + 1), heightsMetres[i], dated ? List.of(date("D" + (i + 1), 125, 4)) : List.of()));
         }
         return new Supposition(
                 site(levels),

@@ -75,7 +75,8 @@ class LevelTornadoTest {
         assertEquals(80 / (100 - TWO * 4) + 0.1, age.rateAtLow95(), 1e-6);
         assertEquals("ka", age.unit());
         assertEquals((80 - TWO * 3) / 100 + 0.1, bar(tornado, "shared offset").rateAtHigh95(), 1e-6);
-        assertEquals((80 - TWO * 6) / 100 + 0.1, bar(tornado, "interstadial factor").rateAtHigh95(), 1e-6);
+        assertEquals(
+                (80 - TWO * 6) / 100 + 0.1, bar(tornado, "interstadial factor").rateAtHigh95(), 1e-6);
         assertEquals((80 - TWO * 5) / 100 + 0.1, bar(tornado, "local sea level").rateAtHigh95(), 1e-6);
     }
 
@@ -84,7 +85,8 @@ class LevelTornadoTest {
         LevelTornado tornado = tornado(new Exact(0), stand("5c", 1, 100, -20));
         assertEquals("interstadial factor", tornado.bars().get(0).input());
         for (int i = 1; i < tornado.bars().size(); i++) {
-            assertTrue(tornado.bars().get(i - 1).span95() >= tornado.bars().get(i).span95());
+            assertTrue(
+                    tornado.bars().get(i - 1).span95() >= tornado.bars().get(i).span95());
         }
         assertTrue(tornado.bars().stream().noneMatch(bar -> bar.input().equals("datum")));
         assertTrue(tornado.bars().stream().noneMatch(bar -> bar.input().equals("surface lowering")));
@@ -106,7 +108,6 @@ class LevelTornadoTest {
     @Test
     void noExplanationIsABadCall() {
         assertThrows(
-                IllegalArgumentException.class,
-                () -> LevelTornado.of("site", "T1", HEIGHT, new Exact(0), List.of()));
+                IllegalArgumentException.class, () -> LevelTornado.of("site", "T1", HEIGHT, new Exact(0), List.of()));
     }
 }

@@ -73,9 +73,7 @@ class NextMeasurementStatisticalTest {
             // the draws are in the order of their rates: one from each stratum
             int k = (int) ((r + random.nextDouble()) * draws.size() / REPLICATES);
             FlightDraw truth = draws.get(k);
-            FlightModel again = date
-                    ? withDate(model, truth, level, random)
-                    : withSurvey(model, truth, level, random);
+            FlightModel again = date ? withDate(model, truth, level, random) : withSurvey(model, truth, level, random);
             SampledFlightAnswer then = answer(again, AGAIN, "again");
             changes.add(Math.log(width(then) / width));
             sure.add(certainty(then.answer().pairings(), model));
@@ -99,13 +97,16 @@ class NextMeasurementStatisticalTest {
                 standardError(sure),
                 expected.effectiveDraws());
         System.out.println(what);
-        // the ranking's own draws are an eighth as many to each end of the interval: the error of the whole answer, and 3 %
-        double end = Math.hypot(whole.error().lower95MetresPerKyr(), whole.error().upper95MetresPerKyr());
+        // the ranking's own draws are an eighth as many to each end of the interval: the error of the whole answer, and
+        // 3 %
+        double end =
+                Math.hypot(whole.error().lower95MetresPerKyr(), whole.error().upper95MetresPerKyr());
         assertEquals(width, expected.width95(), 4 * Math.sqrt(2) * end + 0.03 * width, what);
         assertEquals(change, expected.width95ChangePercent(), 4 * error + 1, what);
         NextMeasurement.PairingGain gain = expected.pairing().orElseThrow();
         assertEquals(certainty(whole.answer().pairings(), model), gain.certainty(), 0.03, what);
-        assertEquals(mean(sure), gain.expectedCertainty(), 4 * Math.hypot(standardError(sure), gain.error()) + 0.01, what);
+        assertEquals(
+                mean(sure), gain.expectedCertainty(), 4 * Math.hypot(standardError(sure), gain.error()) + 0.01, what);
         assertTrue(expected.effectiveDraws() > NextMeasurement.FEW_DRAWS, what);
     }
 
@@ -169,7 +170,8 @@ class NextMeasurementStatisticalTest {
 
     private static double standardError(List<Double> values) {
         double mean = mean(values);
-        double squares = values.stream().mapToDouble(v -> (v - mean) * (v - mean)).sum();
+        double squares =
+                values.stream().mapToDouble(v -> (v - mean) * (v - mean)).sum();
         return Math.sqrt(squares / (values.size() - 1) / values.size());
     }
 }

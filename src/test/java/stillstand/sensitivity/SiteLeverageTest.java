@@ -43,8 +43,7 @@ class SiteLeverageTest {
                 .toList();
         assertEquals(9, flight.size());
         for (int i = 1; i < flight.size(); i++) {
-            assertTrue(flight.get(i - 1).width95ChangePercent()
-                    <= flight.get(i).width95ChangePercent());
+            assertTrue(flight.get(i - 1).width95ChangePercent() <= flight.get(i).width95ChangePercent());
         }
         assertEquals(
                 List.of("T1", "T2", "T3"),
@@ -56,7 +55,9 @@ class SiteLeverageTest {
         for (NextMeasurement each : flight) {
             assertTrue(each.effectiveDraws() > NextMeasurement.FEW_DRAWS, each.toString());
             assertTrue(each.pairing().orElseThrow().expectedCertainty()
-                    > each.pairing().orElseThrow().certainty() - 4 * each.pairing().get().error() - 1e-9);
+                    > each.pairing().orElseThrow().certainty()
+                            - 4 * each.pairing().get().error()
+                            - 1e-9);
         }
     }
 
@@ -121,12 +122,15 @@ class SiteLeverageTest {
                 .all(List.of());
         ShortRate usual = FOUND.assumptionSwitches().get(0).rate();
         assertFalse(back.isEmpty());
-        assertTrue(back.stream().anyMatch(each -> each.wouldBe().equals("quadrature") && each.was().equals("uniform")));
+        assertTrue(back.stream()
+                .anyMatch(each ->
+                        each.wouldBe().equals("quadrature") && each.was().equals("uniform")));
         assertTrue(back.stream().anyMatch(each -> each.wouldBe().startsWith("cauchy")));
         assertEquals(
                 usual,
                 back.stream()
-                        .filter(each -> each.rateOf().equals("T3") && each.wouldBe().equals("quadrature"))
+                        .filter(each ->
+                                each.rateOf().equals("T3") && each.wouldBe().equals("quadrature"))
                         .findFirst()
                         .flatMap(AssumptionSwitch::rateWouldBe)
                         .orElseThrow());
