@@ -37,7 +37,7 @@ public record CurveLeftOut(
     /**
      * Leaves out each curve in turn; none where that leaves nothing of any weight.
      *
-     * @param answers of the curves
+     * @param answers of the curves, of different ids
      * @param mixture of rates by weights that need not add up to 1
      */
     public static List<CurveLeftOut> each(
@@ -45,7 +45,7 @@ public record CurveLeftOut(
         double total = answers.stream().mapToDouble(Answer::weight).sum();
         List<CurveLeftOut> found = new ArrayList<>();
         for (Answer out : answers) {
-            List<Answer> others = answers.stream().filter(other -> other != out).toList();
+            List<Answer> others = answers.stream().filter(other -> !other.curve().equals(out.curve())).toList();
             if (others.stream().anyMatch(other -> other.weight() > 0)) {
                 found.add(new CurveLeftOut(
                         site,

@@ -10,6 +10,7 @@ import stillstand.ledger.RunCancelledException;
 import stillstand.ledger.RunMonitor;
 import stillstand.shoreline.DatedSample;
 import stillstand.shoreline.FormerSeaLevel;
+import stillstand.shoreline.FormsAt;
 import stillstand.shoreline.Level;
 import stillstand.uncertainty.DrawStreams;
 import stillstand.uncertainty.Exact;
@@ -182,7 +183,7 @@ public final class SiteLeverage {
             for (DatedSample sample : level.samples()) {
                 if (sample.used() && sample.ageKa().isPresent()) {
                     Supposition without = base.without(level.name(), sample.name());
-                    boolean inFlight = FlightSetup.takesPart(level.formsAt());
+                    boolean inFlight = speaksInFlight(level.formsAt());
                     found.add(new SampleLeftOut(
                             base.site().name(),
                             level.name(),
@@ -200,6 +201,13 @@ public final class SiteLeverage {
             }
         }
         return found;
+    }
+
+    /** A level that bounds the rate on one side takes no part in the matching, yet its date bears on the flight. */
+    private static boolean speaksInFlight(FormsAt formsAt) {
+        return FlightSetup.takesPart(formsAt)
+                || formsAt == FormsAt.MARINE_LIMITING
+                || formsAt == FormsAt.TERRESTRIAL_LIMITING;
     }
 
     private Optional<ShortRate> rate(Supposition supposed, String level) {
