@@ -45,7 +45,9 @@ public record CurveLeftOut(
         double total = answers.stream().mapToDouble(Answer::weight).sum();
         List<CurveLeftOut> found = new ArrayList<>();
         for (Answer out : answers) {
-            List<Answer> others = answers.stream().filter(other -> !other.curve().equals(out.curve())).toList();
+            List<Answer> others = answers.stream()
+                    .filter(other -> !other.curve().equals(out.curve()))
+                    .toList();
             if (others.stream().anyMatch(other -> other.weight() > 0)) {
                 found.add(new CurveLeftOut(
                         site,
