@@ -94,6 +94,7 @@ public final class TerminalReport {
                         + Wording.rate(between.rate()) + " m/kyr, 95 % " + Wording.interval95(between.rate()) + ".");
             }
         }
+        new LeverageReport(name, result.leverage()).lines().forEach(line -> say("  " + line));
     }
 
     private void flight(FlightResult flight) {

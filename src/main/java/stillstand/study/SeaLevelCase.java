@@ -12,8 +12,14 @@ import stillstand.sealevel.SeaLevelCurve;
  * @param weight among the study's cases, above 0
  * @param curve read where a level or coral uses its own age; absent where highstands come from a table and no curve is named
  * @param highstands with overrides, defaults and the study's own settings in them
+ * @param withoutOverrides the curve's own highstands, where independent estimates replaced some of them
  */
-public record SeaLevelCase(String id, double weight, Optional<SeaLevelCurve> curve, HighstandTable highstands) {
+public record SeaLevelCase(
+        String id,
+        double weight,
+        Optional<SeaLevelCurve> curve,
+        HighstandTable highstands,
+        Optional<HighstandTable> withoutOverrides) {
     /**
      * The same account as it stands on a coast.
      *
@@ -25,12 +31,18 @@ public record SeaLevelCase(String id, double weight, Optional<SeaLevelCurve> cur
                 id,
                 weight,
                 curve.map(each -> each.at(departure, where, source)),
-                highstands.at(departure, where, source));
+                highstands.at(departure, where, source),
+                withoutOverrides.map(each -> each.at(departure, where, source)));
     }
 
     public SeaLevelCase {
         if (!(weight > 0 && weight < Double.POSITIVE_INFINITY)) {
             throw new IllegalArgumentException("weight must be above 0 but is " + weight);
         }
+    }
+
+    /** A case in which nothing was replaced. */
+    public SeaLevelCase(String id, double weight, Optional<SeaLevelCurve> curve, HighstandTable highstands) {
+        this(id, weight, curve, highstands, Optional.empty());
     }
 }
