@@ -40,7 +40,9 @@ final class FlightReport {
                 .ifPresent(
                         bound -> lines.add("The flight as a whole moves " + Wording.bound(bound, flight.rate()) + "."));
         lines.add("Flight of " + Wording.counted(flight.unmatched().size(), "level") + ": "
-                + Wording.rate(flight.rate()) + " m/kyr, 95 % " + Wording.interval95(flight.rate()) + ".");
+                + Wording.rate(flight.rate()) + " m/kyr" + (flight.history().isPresent() ? " today" : "") + ", 95 % "
+                + Wording.interval95(flight.rate()) + ".");
+        flight.history().ifPresent(history -> lines.addAll(new HistoryReport(flight, history).lines()));
         if (flight.regions95().size() > 1) {
             lines.add(flight.regions95().size() + " correlations remain possible: "
                     + IntStream.range(0, flight.regions95().size())
@@ -168,7 +170,7 @@ final class FlightReport {
     }
 
     /** {@code 0.86}; never 0 or 1 where it is neither. */
-    private static String probability(double probability) {
+    static String probability(double probability) {
         if (probability < 0.005) {
             return probability > 0 ? "<0.01" : "0";
         }

@@ -17,7 +17,6 @@ import stillstand.shoreline.DatedSample;
 import stillstand.shoreline.Level;
 import stillstand.shoreline.Site;
 import stillstand.study.StatedSettings.Place;
-import stillstand.study.StudySettings.Changes;
 
 /**
  * Every check of a study, on tables: all problems at once, in reading order, before anything is computed. Terminal and
@@ -77,6 +76,8 @@ public final class StudyCheck {
                 .orElse(List.of());
         Plausibility.check(sites, levels, samples, at);
         FlightCheck.check(sites, levels, at);
+        input.settings()
+                .ifPresent(stated -> ChangesCheck.check(stated.settings().rate(), sites, levels, samples));
 
         List<InputWarning> warnings = sorted(findings.warnings());
         if (findings.problemCount() > 0 || input.settings().isEmpty()) {
@@ -96,7 +97,6 @@ public final class StudyCheck {
         stated.defaults().forEach(findings::add);
         warnUnused(stated, "matching.trace_probability", stated.states("matching.trace_probability"));
         warnUnused(stated, "screening", stated.states("screening"));
-        warnUnused(stated, "rate.changes", stated.settings().rate().changes() != Changes.NONE);
     }
 
     private void warnUnused(StatedSettings stated, String keyPath, boolean isStated) {

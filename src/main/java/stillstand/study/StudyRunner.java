@@ -25,6 +25,7 @@ import stillstand.uplift.LevelAnswers;
 import stillstand.uplift.LevelRates;
 import stillstand.uplift.LevelResidual;
 import stillstand.uplift.MatchingRules;
+import stillstand.uplift.RateChanges;
 import stillstand.uplift.SeaLevelBasis;
 import stillstand.uplift.SharedPriors;
 import stillstand.uplift.SiteRelations;
@@ -72,7 +73,20 @@ public final class StudyRunner {
                 executor,
                 settings.indicativeRange(),
                 dates);
-        matching = new Flights(streams, executor, monitor, rules(settings.matching()), settings.indicativeRange());
+        matching = new Flights(
+                streams,
+                executor,
+                monitor,
+                rules(settings.matching()),
+                settings.indicativeRange(),
+                changes(settings.rate()));
+    }
+
+    private static RateChanges changes(StudySettings.RateChoice rate) {
+        return new RateChanges(
+                RateChanges.Models.valueOf(rate.changes().name()),
+                rate.changeBetweenKa().low(),
+                rate.changeBetweenKa().high());
     }
 
     /** Settings of matching as the engine takes them: what is not stated stays its own default. */
