@@ -121,7 +121,7 @@ final class FlightReport {
         if (missed.isEmpty()) {
             return;
         }
-        lines.add("Highstands without a terrace (recorded / unseen / re-occupied / outside the survey / absent):");
+        lines.add("Stands of the sea without a level (recorded / unseen / re-occupied / outside the survey / absent):");
         missed.stream()
                 .limit(FATES_SHOWN)
                 .forEach(fate -> lines.add("  "

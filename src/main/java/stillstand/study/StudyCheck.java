@@ -76,6 +76,7 @@ public final class StudyCheck {
                 .orElse(List.of());
         Plausibility.check(sites, levels, samples, at);
         FlightCheck.check(sites, levels, at);
+        DrownedCheck.check(sites, levels, at);
         input.settings()
                 .ifPresent(stated -> ChangesCheck.check(stated.settings().rate(), sites, levels, samples));
 

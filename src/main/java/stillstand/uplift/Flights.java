@@ -72,10 +72,12 @@ public final class Flights {
      */
     public Answered of(Site site, SeaLevelBasis basis, RatePrior prior) {
         FlightSetup setup = FlightSetup.of(site, basis, rules, rule);
-        Answered constant = new Question(site.name(), setup, prior).answer();
-        return changes.isAsked()
-                ? new ChangingFlights(streams, executor, monitor, changes).of(site.name(), setup, prior, constant)
+        RatePrior held = FlightMirror.of(prior, setup.mirrored());
+        Answered constant = new Question(site.name(), setup, held).answer();
+        Answered answered = changes.isAsked()
+                ? new ChangingFlights(streams, executor, monitor, changes).of(site.name(), setup, held, constant)
                 : constant;
+        return setup.mirrored() ? FlightMirror.of(answered) : answered;
     }
 
     /** What the engine found, whichever way it went. */
