@@ -3,7 +3,6 @@ package stillstand.study;
 import static stillstand.ledger.InputProblem.quote;
 
 import java.util.List;
-import java.util.Optional;
 import java.util.function.Function;
 import stillstand.shoreline.FormsAt;
 
@@ -17,7 +16,7 @@ final class DrownedCheck {
     static void check(
             List<SitesTable.SiteRow> sites,
             List<LevelsTable.LevelRow> levels,
-            Function<String, Optional<SeaLevelCase>> seaLevel) {
+            Function<String, List<SeaLevelCase>> seaLevel) {
         for (SitesTable.SiteRow site : sites) {
             List<LevelsTable.LevelRow> own = levels.stream()
                     .filter(level -> level.key().site().equals(site.name()))
@@ -32,11 +31,12 @@ final class DrownedCheck {
                             .filter(level -> level.formsAt() == FormsAt.HIGHSTAND)
                             .findFirst()
                             .ifPresent(raised -> mixed(first, raised)));
-            seaLevel.apply(site.name())
-                    .filter(sea -> sea.curve()
-                            .filter(curve -> curve.id().equals(sea.highstands().id()))
-                            .isPresent())
-                    .ifPresent(sea -> drowned.forEach(DrownedCheck::checkPin));
+            boolean picked = seaLevel.apply(site.name()).stream().anyMatch(sea -> sea.curve()
+                    .filter(curve -> curve.id().equals(sea.highstands().id()))
+                    .isPresent());
+            if (picked) {
+                drowned.forEach(DrownedCheck::checkPin);
+            }
         }
     }
 

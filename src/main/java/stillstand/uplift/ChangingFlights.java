@@ -227,7 +227,7 @@ final class ChangingFlights {
                 ToDoubleFunction<UpliftHistory> mean = history ->
                         (history.upliftMetresSince(old) - history.upliftMetresSince(young)) / (old - young);
                 bins.add(new FlightResult.Segment(
-                        young, Optional.of(old), Rate.of(all.of(mean).posterior(0)).withoutDensity()));
+                        young, Optional.of(old), Rate.of(all.of(mean).posterior(0))));
             }
             return bins;
         }

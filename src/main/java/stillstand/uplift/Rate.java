@@ -69,12 +69,6 @@ public record Rate(
                 UNIT);
     }
 
-    /** The same rate without the density that figures draw. */
-    Rate withoutDensity() {
-        return new Rate(
-                median, mean, sd, interval68, interval95, shortest68, shortest95, Optional.empty(), unit);
-    }
-
     private static Interval interval(RateRegion region) {
         return new Interval(region.fromMetresPerKyr(), region.toMetresPerKyr());
     }
