@@ -81,6 +81,7 @@ public final class StudyCheck {
         Plausibility.check(sites, levels, samples, at);
         FlightCheck.check(sites, levels, at);
         DrownedCheck.check(sites, levels, at);
+        input.settings().ifPresent(stated -> TraceCheck.check(stated.settings(), levels, at));
         input.settings()
                 .ifPresent(stated -> ChangesCheck.check(stated.settings().rate(), sites, levels, samples));
         Function<String, List<SeaLevelCase>> serving = ServingCurves.of(sites, levels, samples, at, findings);
@@ -101,7 +102,6 @@ public final class StudyCheck {
 
     private void checkSettings(StatedSettings stated) {
         stated.defaults().forEach(findings::add);
-        warnUnused(stated, "matching.trace_probability", stated.states("matching.trace_probability"));
         warnUnused(stated, "screening", stated.states("screening"));
     }
 
