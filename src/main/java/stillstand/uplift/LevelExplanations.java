@@ -48,7 +48,7 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
             case MARINE_LIMITING -> none("it formed somewhere below the sea, which bounds a rate on one side only");
             case TERRESTRIAL_LIMITING ->
                 none("it formed somewhere above the sea, which bounds a rate on one side only");
-            case EVENT -> none("it is one earthquake's step and records no sea level");
+            case EVENT -> none(LevelAnswers.ONE_EARTHQUAKE);
         };
     }
 
