@@ -4,8 +4,6 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
-import org.apache.commons.rng.UniformRandomProvider;
 import stillstand.ledger.RunCancelledException;
 import stillstand.ledger.RunMonitor;
 import stillstand.uncertainty.DrawStreams;
@@ -26,7 +24,6 @@ public final class FlightMonteCarlo {
     private static final double FLAT = 0.2;
     private static final double ROOT = 0.3;
     private static final double HOPELESS = 25;
-    private static final double NEGLIGIBLE = 1e-6;
     private static final double[] PROBABILITIES = {0.025, 0.15865, 0.5, 0.84135, 0.975};
 
     private final FlightModel model;
@@ -143,23 +140,23 @@ public final class FlightMonteCarlo {
         WeightedRates weighted = new WeightedRates(rates, weights, blocks);
         double logEvidence = highest + Math.log(weighted.total(-1) / rates.length);
         RatePosterior posterior = weighted.posterior(logEvidence);
-        int[] chosen = weighted.chosen(effort.draws());
-        PairingSums[] parts = new PairingSums[effort.scrambles()];
-        PairingSums[] sums = new PairingSums[2];
-        JointDraws[] joint = new JointDraws[1];
-        double top = highest;
-        workers.run(List.of(
-                () -> sums[0] = sums(coarse, chosen, weights, logCoarse, top, parts),
-                () -> sums[1] = sums(fine, chosen, weights, logFine, top, new PairingSums[effort.scrambles()]),
-                () -> joint[0] = draws(chosen)));
-        PairingSums coarseSums = sums[0];
-        PairingSums fineSums = sums[1];
-        PairingTable table = coarseSums.extrapolatedWith(fineSums);
+        List<ChosenDraws.Chosen> draws = new ArrayList<>();
+        for (int k : weighted.chosen(effort.draws())) {
+            draws.add(new ChosenDraws.Chosen(
+                    new UpliftHistory.ConstantRate(rates[k]),
+                    numbers[k],
+                    Math.exp(logCoarse[k] - highest) / weights[k],
+                    Math.exp(logFine[k] - highest) / weights[k],
+                    blocks[k]));
+        }
+        ChosenDraws.Found found =
+                new ChosenDraws(coarse, fine, draws, effort.scrambles(), monitor).found(streams, key, workers);
         double stray = Math.exp(logAllStray(highest) - Math.log(weighted.total(-1)));
         double probabilityAllStray = model.countsAllStray() ? Math.min(1, stray) : stray / (1 + stray);
         FlightAnswer answer =
-                new FlightAnswer(posterior, table, ages(table, fineSums), positions(chosen), probabilityAllStray);
-        return new SampledFlightAnswer(answer, error(weighted, coarseSums, parts), joint[0], weighted.effectiveDraws());
+                new FlightAnswer(posterior, found.table(), found.ages(), found.positions(), probabilityAllStray);
+        return new SampledFlightAnswer(
+                answer, error(weighted, found.pairingError()), found.joint(), weighted.effectiveDraws());
     }
 
     /** The density that rates are drawn from. */
@@ -274,63 +271,6 @@ public final class FlightMonteCarlo {
         }
     }
 
-    private PairingSums sums(
-            ShorelineFilter filter,
-            int[] chosen,
-            double[] weights,
-            double[] logs,
-            double highest,
-            PairingSums[] parts) {
-        FilterWorkspace workspace = filter.workspace(true);
-        BackwardPass pass = new BackwardPass(filter, workspace);
-        PairingSums all = new PairingSums(model.levels().size(), model.rows().size());
-        for (int block = 0; block < parts.length; block++) {
-            parts[block] = new PairingSums(model.levels().size(), model.rows().size());
-        }
-        int before = -1;
-        for (int k : chosen) {
-            if (k != before) {
-                stopIfCancelled();
-                pass.run(new UpliftHistory.ConstantRate(rates[k]), numbers[k]);
-                before = k;
-            }
-            double share = Math.exp(logs[k] - highest) / weights[k];
-            all.add(workspace, share);
-            parts[blocks[k]].add(workspace, share);
-        }
-        return all;
-    }
-
-    private List<Optional<LevelAge>> ages(PairingTable table, PairingSums sums) {
-        List<Optional<LevelAge>> ages = new ArrayList<>();
-        for (int i = 0; i < table.levels(); i++) {
-            List<LevelAge.Part> parts = new ArrayList<>();
-            for (int j = 0; j < table.rows(); j++) {
-                if (table.probability(i, j) > NEGLIGIBLE) {
-                    parts.add(sums.agePart(i, j, table.probability(i, j)));
-                }
-            }
-            ages.add(parts.isEmpty() ? Optional.empty() : Optional.of(new LevelAge(parts)));
-        }
-        return ages;
-    }
-
-    private List<RowPosition> positions(int[] chosen) {
-        RowCells cells = new RowCells(coarse.cells.count());
-        List<RowPosition> positions = new ArrayList<>();
-        for (FlightRow row : model.rows()) {
-            double first = 0;
-            double second = 0;
-            for (int k : chosen) {
-                cells.moments(row, new UpliftHistory.ConstantRate(rates[k]), numbers[k]);
-                first += cells.meanMetres / chosen.length;
-                second += (cells.varianceMetres2 + cells.meanMetres * cells.meanMetres) / chosen.length;
-            }
-            positions.add(new RowPosition(first, Math.sqrt(Math.max(0, second - first * first))));
-        }
-        return positions;
-    }
-
     /** All strays, summed over points as the weights are: no draw of the expected strays is needed. */
     private double logAllStray(double highest) {
         double log = shared.strays().logMeanOfAllStray(model.levels().size()) + coarse.logStrayDensities();
@@ -341,23 +281,7 @@ public final class FlightMonteCarlo {
         return Math.log(sum);
     }
 
-    private JointDraws draws(int[] chosen) {
-        CorrelationSampler sampler = new CorrelationSampler(coarse);
-        UniformRandomProvider random = streams.stream(key + " correlations", 0);
-        List<FlightDraw> draws = new ArrayList<>();
-        int before = -1;
-        for (int k : chosen) {
-            if (k != before) {
-                stopIfCancelled();
-                sampler.prepare(new UpliftHistory.ConstantRate(rates[k]), numbers[k]);
-                before = k;
-            }
-            draws.add(new FlightDraw(rates[k], numbers[k], sampler.draw(random)));
-        }
-        return new JointDraws(draws);
-    }
-
-    private SampledFlightAnswer.NumericalError error(WeightedRates weighted, PairingSums all, PairingSums[] parts) {
+    private SampledFlightAnswer.NumericalError error(WeightedRates weighted, double pairingError) {
         int count = effort.scrambles();
         double[][] without = new double[2 + PROBABILITIES.length][count];
         for (int block = 0; block < count; block++) {
@@ -376,7 +300,7 @@ public final class FlightMonteCarlo {
                 jackknife(without[5]),
                 jackknife(without[2]),
                 jackknife(without[6]),
-                all.largestError(parts));
+                pairingError);
     }
 
     /** Standard error of an estimate from its values without one block each. */
