@@ -23,7 +23,11 @@ public final class FlightMonteCarlo {
     private static final int PILOT_RATES = 300;
     private static final double FLAT = 0.2;
     private static final double ROOT = 0.3;
-    private static final double HOPELESS = 25;
+    /** A point this far below the best, in log evidence, weighs too little for its finer pass to matter. */
+    private static final double HOPELESS = 12;
+    /** Scrambles are added until no error of median or 68 % ends is above this part of half the 68 % interval. */
+    private static final double TOLERANCE = 0.02;
+
     private static final double[] PROBABILITIES = {0.025, 0.15865, 0.5, 0.84135, 0.975};
 
     private final FlightModel model;
@@ -47,18 +51,24 @@ public final class FlightMonteCarlo {
     /**
      * How much to compute.
      *
-     * @param scrambles independent scrambles, 4 or more
+     * @param scrambles independent scrambles to begin with, 4 or more
+     * @param mostScrambles as many at most, where the error is still too large
      * @param points in each, a power of two
      * @param cells cells of height in the coarser of the two passes, 10 or more
      * @param draws joint draws, from which the pairings are averaged, 100 or more
      */
-    public record Effort(int scrambles, int points, int cells, int draws) {
-        /** 16 scrambles of 512 points, 100 and 200 cells, 1000 draws. */
-        public static final Effort FULL = new Effort(16, 512, 100, 1000);
+    public record Effort(int scrambles, int mostScrambles, int points, int cells, int draws) {
+        /** 16 to 64 scrambles of 512 points, 100 and 200 cells, 1000 draws. */
+        public static final Effort FULL = new Effort(16, 64, 512, 100, 1000);
+
+        /** An effort that never grows. */
+        public Effort(int scrambles, int points, int cells, int draws) {
+            this(scrambles, scrambles, points, cells, draws);
+        }
 
         /** @throws IllegalArgumentException if a number is too small or {@code points} no power of two */
         public Effort {
-            if (!(scrambles >= 4 && cells >= 10 && draws >= 100 && Integer.bitCount(points) == 1)) {
+            if (!(scrambles >= 4 && mostScrambles >= scrambles && cells >= 10 && draws >= 100 && Integer.bitCount(points) == 1)) {
                 throw new IllegalArgumentException("effort is too small: " + scrambles + " scrambles, " + points
                         + " points, " + cells + " cells, " + draws + " draws");
             }
@@ -84,7 +94,7 @@ public final class FlightMonteCarlo {
         this.workers = workers;
         coarse = new ShorelineFilter(model, effort.cells());
         fine = new ShorelineFilter(model, 2 * effort.cells());
-        int count = effort.scrambles() * effort.points();
+        int count = effort.mostScrambles() * effort.points();
         rates = new double[count];
         numbers = new SharedNumbers[count];
         logCoarse = new double[count];
@@ -126,37 +136,81 @@ public final class FlightMonteCarlo {
 
     private SampledFlightAnswer answer() {
         RatePosterior proposal = proposal();
-        evaluate(proposal);
+        int scrambles = effort.scrambles();
+        evaluate(proposal, 0, scrambles);
+        double highest = highest(scrambles);
+        WeightedRates weighted = weighted(scrambles, highest);
+        while (scrambles < effort.mostScrambles() && !isSettled(weighted, scrambles)) {
+            int more = Math.min(2 * scrambles, effort.mostScrambles());
+            evaluate(proposal, scrambles, more);
+            scrambles = more;
+            highest = highest(scrambles);
+            weighted = weighted(scrambles, highest);
+        }
+        return answer(weighted, scrambles, highest);
+    }
+
+    private double highest(int scrambles) {
         double highest = Double.NEGATIVE_INFINITY;
-        for (int k = 0; k < rates.length; k++) {
+        for (int k = 0; k < scrambles * effort.points(); k++) {
             highest = Math.max(highest, Math.max(logCoarse[k], logFine[k]));
         }
-        double[] weights = new double[rates.length];
-        for (int k = 0; k < rates.length; k++) {
-            double one = Math.exp(logCoarse[k] - highest);
-            double two = Math.exp(logFine[k] - highest);
-            weights[k] = Math.max(0, two + (two - one) / 3);
+        return highest;
+    }
+
+    private WeightedRates weighted(int scrambles, double highest) {
+        int count = scrambles * effort.points();
+        double[] weights = new double[count];
+        for (int k = 0; k < count; k++) {
+            weights[k] = weight(k, highest);
         }
-        WeightedRates weighted = new WeightedRates(rates, weights, blocks);
-        double logEvidence = highest + Math.log(weighted.total(-1) / rates.length);
+        return new WeightedRates(Arrays.copyOf(rates, count), weights, Arrays.copyOf(blocks, count));
+    }
+
+    /** Evidence of a point at vanishing cells, relative to the best. */
+    private double weight(int point, double highest) {
+        double one = Math.exp(logCoarse[point] - highest);
+        double two = Math.exp(logFine[point] - highest);
+        return Math.max(0, two + (two - one) / 3);
+    }
+
+    private static boolean isSettled(WeightedRates weighted, int scrambles) {
+        double[] ends = {PROBABILITIES[1], PROBABILITIES[2], PROBABILITIES[3]};
+        double[][] without = new double[ends.length][scrambles];
+        for (int block = 0; block < scrambles; block++) {
+            double[] quantiles = weighted.quantiles(ends, block);
+            for (int i = 0; i < ends.length; i++) {
+                without[i][block] = quantiles[i];
+            }
+        }
+        double[] all = weighted.quantiles(ends, -1);
+        double largest = Arrays.stream(without)
+                .mapToDouble(FlightMonteCarlo::jackknife)
+                .max()
+                .orElseThrow();
+        return largest <= TOLERANCE * (all[2] - all[0]) / 2;
+    }
+
+    private SampledFlightAnswer answer(WeightedRates weighted, int scrambles, double highest) {
+        double logEvidence = highest + Math.log(weighted.total(-1) / (scrambles * effort.points()));
         RatePosterior posterior = weighted.posterior(logEvidence);
         List<ChosenDraws.Chosen> draws = new ArrayList<>();
         for (int k : weighted.chosen(effort.draws())) {
             draws.add(new ChosenDraws.Chosen(
                     new UpliftHistory.ConstantRate(rates[k]),
                     numbers[k],
-                    Math.exp(logCoarse[k] - highest) / weights[k],
-                    Math.exp(logFine[k] - highest) / weights[k],
+                    Math.exp(logCoarse[k] - highest) / weight(k, highest),
+                    Math.exp(logFine[k] - highest) / weight(k, highest),
                     blocks[k]));
         }
         ChosenDraws.Found found =
-                new ChosenDraws(coarse, fine, draws, effort.scrambles(), monitor).found(streams, key, workers);
-        double stray = Math.exp(logAllStray(highest) - Math.log(weighted.total(-1)));
+                new ChosenDraws(coarse, fine, draws, scrambles, monitor).found(streams, key, workers);
+        double stray = Math.exp(logAllStray(scrambles, highest) - Math.log(weighted.total(-1)));
         double probabilityAllStray = model.countsAllStray() ? Math.min(1, stray) : stray / (1 + stray);
         FlightAnswer answer =
                 new FlightAnswer(posterior, found.table(), found.ages(), found.positions(), probabilityAllStray);
         return new SampledFlightAnswer(
-                answer, error(weighted, found.pairingError()), found.joint(), weighted.effectiveDraws());
+                answer, error(weighted, scrambles, found.pairingError()), found.joint(), weighted.effectiveDraws());
     }
 
     /** The density that rates are drawn from. */
@@ -230,12 +284,14 @@ public final class FlightMonteCarlo {
         }
     }
 
-    /** The first scramble says what is hopeless; the others may be worked out in any order. */
-    private void evaluate(RatePosterior proposal) {
-        evaluate(proposal, 0, Double.NEGATIVE_INFINITY);
+    /** The first scramble of all says what is hopeless; the others may be worked out in any order. */
+    private void evaluate(RatePosterior proposal, int from, int to) {
+        if (from == 0) {
+            evaluate(proposal, 0, Double.NEGATIVE_INFINITY);
+        }
         double highest = Arrays.stream(logCoarse, 0, effort.points()).max().orElseThrow();
         List<Runnable> others = new ArrayList<>();
-        for (int block = 1; block < effort.scrambles(); block++) {
+        for (int block = Math.max(1, from); block < to; block++) {
             int number = block;
             others.add(() -> evaluate(proposal, number, highest));
         }
@@ -272,17 +328,16 @@ public final class FlightMonteCarlo {
     }
 
     /** All strays, summed over points as the weights are: no draw of the expected strays is needed. */
-    private double logAllStray(double highest) {
+    private double logAllStray(int scrambles, double highest) {
         double log = shared.strays().logMeanOfAllStray(model.levels().size()) + coarse.logStrayDensities();
         double sum = 0;
-        for (double nothing : logNothing) {
-            sum += Math.exp(nothing + log - highest);
+        for (int k = 0; k < scrambles * effort.points(); k++) {
+            sum += Math.exp(logNothing[k] + log - highest);
         }
         return Math.log(sum);
     }
 
-    private SampledFlightAnswer.NumericalError error(WeightedRates weighted, double pairingError) {
-        int count = effort.scrambles();
+    private SampledFlightAnswer.NumericalError error(WeightedRates weighted, int count, double pairingError) {
         double[][] without = new double[2 + PROBABILITIES.length][count];
         for (int block = 0; block < count; block++) {
             without[0][block] = Math.log(weighted.total(block));

@@ -173,8 +173,9 @@ public final class Flights {
                             ? "on a grid of rates, at 250 and 500 cells of height"
                             : String.format(
                                     Locale.ROOT,
-                                    "by %d scrambles of %d randomised Sobol' points, at %d and %d cells of height",
+                                    "by %d to %d scrambles of %d randomised Sobol' points, at %d and %d cells of height",
                                     FlightMonteCarlo.Effort.FULL.scrambles(),
+                                    FlightMonteCarlo.Effort.FULL.mostScrambles(),
                                     FlightMonteCarlo.Effort.FULL.points(),
                                     FlightMonteCarlo.Effort.FULL.cells(),
                                     2 * FlightMonteCarlo.Effort.FULL.cells()),
