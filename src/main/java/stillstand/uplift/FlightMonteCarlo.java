@@ -68,7 +68,11 @@ public final class FlightMonteCarlo {
 
         /** @throws IllegalArgumentException if a number is too small or {@code points} no power of two */
         public Effort {
-            if (!(scrambles >= 4 && mostScrambles >= scrambles && cells >= 10 && draws >= 100 && Integer.bitCount(points) == 1)) {
+            if (!(scrambles >= 4
+                    && mostScrambles >= scrambles
+                    && cells >= 10
+                    && draws >= 100
+                    && Integer.bitCount(points) == 1)) {
                 throw new IllegalArgumentException("effort is too small: " + scrambles + " scrambles, " + points
                         + " points, " + cells + " cells, " + draws + " draws");
             }
@@ -203,8 +207,7 @@ public final class FlightMonteCarlo {
                     Math.exp(logFine[k] - highest) / weight(k, highest),
                     blocks[k]));
         }
-        ChosenDraws.Found found =
-                new ChosenDraws(coarse, fine, draws, scrambles, monitor).found(streams, key, workers);
+        ChosenDraws.Found found = new ChosenDraws(coarse, fine, draws, scrambles, monitor).found(streams, key, workers);
         double stray = Math.exp(logAllStray(scrambles, highest) - Math.log(weighted.total(-1)));
         double probabilityAllStray = model.countsAllStray() ? Math.min(1, stray) : stray / (1 + stray);
         FlightAnswer answer =
