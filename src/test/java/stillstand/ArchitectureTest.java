@@ -32,10 +32,11 @@ class ArchitectureTest {
             Map.entry("shoreline", Set.of("ledger", "uncertainty", "dating")),
             Map.entry("uplift", Set.of("ledger", "uncertainty", "sealevel", "dating", "shoreline")),
             Map.entry("study", ENGINE),
-            Map.entry("files", with(ENGINE, "study")),
+            Map.entry("files", with(ENGINE, "study", "figure")),
             Map.entry("figure", with(ENGINE, "study")),
             Map.entry("report", with(ENGINE, "study", "figure")),
-            Map.entry("cli", with(ENGINE, "study", "files", "figure", "report")));
+            Map.entry("cli", with(ENGINE, "study", "files", "figure", "report")),
+            Map.entry("view", with(ENGINE, "study", "files", "figure", "report")));
 
     private static Set<String> with(Set<String> base, String... more) {
         Set<String> all = new TreeSet<>(base);
@@ -163,6 +164,26 @@ class ArchitectureTest {
                 .should()
                 .dependOnClassesThat()
                 .resideInAnyPackage("java.nio.file..", "java.time..", "javafx..")
+                .check(CODE);
+    }
+
+    @Test
+    void windowStaysInViewAndModelsKnowNoControl() {
+        noClasses()
+                .that()
+                .resideOutsideOfPackage("stillstand.view..")
+                .should()
+                .dependOnClassesThat()
+                .resideInAPackage("javafx..")
+                .check(CODE);
+        noClasses()
+                .that()
+                .resideInAPackage("stillstand.view..")
+                .and()
+                .haveSimpleNameEndingWith("Model")
+                .should()
+                .dependOnClassesThat()
+                .resideInAnyPackage("javafx.scene..", "javafx.stage..", "javafx.application..")
                 .check(CODE);
     }
 

@@ -17,8 +17,9 @@ import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
-import stillstand.cli.FigureFiles.Fault;
 import stillstand.figure.Figures;
+import stillstand.files.FigureFiles;
+import stillstand.files.FigureFiles.Fault;
 import stillstand.files.ResultFiles;
 import stillstand.files.ResultsFolder;
 import stillstand.files.ResultsJson;
@@ -116,7 +117,7 @@ final class RunCommand implements Callable<Integer> {
                     faults.addAll(draw(result, fresh));
                 });
                 tell(study, result, place);
-                faults.forEach(fault -> workshop.err().println(DrawCommand.sentence(fault)));
+                faults.forEach(fault -> workshop.err().println(fault.sentence()));
                 return result.failures().isEmpty() && faults.isEmpty() ? ExitCode.DONE : ExitCode.FAILED;
             } catch (RunCancelledException e) {
                 workshop.err().println("Interrupted. Earlier results are as they were.");
