@@ -5,6 +5,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.function.ToDoubleFunction;
+import javafx.geometry.Point2D;
 import javafx.geometry.VPos;
 import javafx.scene.canvas.GraphicsContext;
 import javafx.scene.paint.Color;
@@ -42,7 +43,7 @@ final class StairPainter {
     }
 
     /** What is being pointed at or dragged. */
-    record Pointing(String level, String stage, Optional<double[]> dragTo) {
+    record Pointing(String level, String stage, Optional<Point2D> dragTo) {
         static final Pointing NOTHING = new Pointing("", "", Optional.empty());
     }
 
@@ -396,11 +397,11 @@ final class StairPainter {
     }
 
     /** The line that is being dragged. */
-    void dragged(Mark level, double[] to) {
+    void dragged(Mark level, Point2D to) {
         pen(palette.tried(), 2.4);
-        g.strokeLine(to[0], to[1], scale.present, scale.y(level.metres()));
+        g.strokeLine(to.getX(), to.getY(), scale.present, scale.y(level.metres()));
         g.setFill(palette.tried());
-        dot(to[0], to[1], 4);
+        dot(to.getX(), to.getY(), 4);
     }
 
     private void dot(double x, double y, double r) {

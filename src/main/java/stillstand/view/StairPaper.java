@@ -5,6 +5,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.function.Consumer;
 import javafx.animation.AnimationTimer;
+import javafx.geometry.Point2D;
 import javafx.scene.AccessibleRole;
 import javafx.scene.Cursor;
 import javafx.scene.canvas.Canvas;
@@ -253,7 +254,7 @@ final class StairPaper extends Region {
         onReading.accept(over.map(stand -> "Let go: " + level + " is " + stand.stage())
                 .orElse(forbids.isEmpty() ? level + ": drag onto a highstand" : "Let go: " + level + " is not " + forbids));
         point(new Pointing(
-                level, over.map(Stand::stage).orElse(""), Optional.of(new double[] {event.getX(), event.getY()})));
+                level, over.map(Stand::stage).orElse(""), Optional.of(new Point2D(event.getX(), event.getY()))));
     }
 
     private void release(MouseEvent event) {
