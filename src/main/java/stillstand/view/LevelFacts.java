@@ -46,13 +46,22 @@ final class LevelFacts {
         add("Sea then, on today's land", metres(level.metres()) + ", 95 % " + metres(level.interval95().low()) + " to "
                 + metres(level.interval95().high()));
         if (level.takesPart()) {
-            add("You say", choice.text().isEmpty() ? "any highstand" : choice.text());
+            add("You say", words(choice));
         }
         preview.ifPresent(this::preview);
         answer().ifPresent(this::rate);
         flight().ifPresent(this::ofFlight);
         answer().ifPresent(this::evidence);
         return List.copyOf(facts);
+    }
+
+    /** {@code 5a or 5c}, {@code not 5e}. */
+    static String words(StageChoice choice) {
+        String only = String.join(" or ", choice.only());
+        String never = choice.never().isEmpty() ? "" : "not " + String.join(", not ", choice.never());
+        return only.isEmpty() && never.isEmpty()
+                ? "any highstand"
+                : only + (only.isEmpty() || never.isEmpty() ? "" : ", ") + never;
     }
 
     private Optional<LevelAnswer> answer() {

@@ -121,6 +121,9 @@ final class RateStrip extends HBox {
         g.setTextAlign(javafx.scene.text.TextAlignment.CENTER);
         g.setTextBaseline(javafx.geometry.VPos.TOP);
         for (double tick : StairScale.ticks(range.low(), range.high(), strip.getWidth(), 80)) {
+            if (x(tick) < INSET + 6 || x(tick) > strip.getWidth() - INSET - 6) {
+                continue; // half a number at an end says nothing
+            }
             g.strokeLine(x(tick), STRIP - 13, x(tick), STRIP - 10);
             g.fillText(Wording.number(Digits.text(Math.rint(tick * 1e6) / 1e6)), x(tick), STRIP - 10);
         }

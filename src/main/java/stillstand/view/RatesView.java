@@ -20,7 +20,6 @@ import javafx.scene.control.SelectionMode;
 import javafx.scene.control.TableCell;
 import javafx.scene.control.TableColumn;
 import javafx.scene.control.TableView;
-import javafx.scene.control.Tooltip;
 import javafx.scene.input.Clipboard;
 import javafx.scene.input.ClipboardContent;
 import javafx.scene.input.KeyCode;
@@ -30,7 +29,9 @@ import javafx.scene.input.KeyEvent;
 import javafx.scene.layout.BorderPane;
 import javafx.scene.layout.HBox;
 import javafx.scene.paint.Paint;
+import stillstand.report.Wording;
 import stillstand.uncertainty.DensityBins;
+import stillstand.uncertainty.Digits;
 import stillstand.uncertainty.Interval;
 import stillstand.uplift.Rate;
 import stillstand.view.RatesModel.Row;
@@ -38,7 +39,7 @@ import stillstand.view.RatesModel.Row;
 /** All rates in a table that sorts by any column, each with its density on one shared axis. */
 public final class RatesView extends BorderPane {
     private static final String ALL = "all sites";
-    private static final double STRIP = 230;
+    private static final double STRIP = 150;
     private static final double ROW = 26;
 
     private final RatesModel model;
@@ -110,22 +111,22 @@ public final class RatesView extends BorderPane {
     }
 
     private void columns() {
-        text("Site", Row::site, 120);
-        text("Rate of", Row::name, 110);
-        text("Kind", row -> row.kind().toString(), 96);
-        number("Median ± 1σ", Row::median, row -> row.rate().map(Rate::median), 104);
-        number("Shortest 68 %", Row::interval68, row -> row.rate().map(rate -> rate.shortest68().low()), 112);
-        number("Shortest 95 %", Row::interval95, row -> row.rate().map(rate -> rate.shortest95().low()), 112);
+        text("Site", Row::site, 106);
+        text("Rate of", Row::name, 100);
+        text("Kind", row -> row.kind().toString(), 116);
+        text("Bound, or why none", Row::says, 236);
+        number("Median ± sd", Row::median, row -> row.rate().map(Rate::median), 102);
+        number("68 %", Row::interval68, row -> row.rate().map(rate -> rate.shortest68().low()), 104);
+        number("95 %", Row::interval95, row -> row.rate().map(rate -> rate.shortest95().low()), 104);
         density();
-        text("Highstand", Row::stages, 120);
-        number("Age (ka)", Row::ageText, row -> row.age().map(age -> age.median()), 104);
-        text("What to know", Row::says, 420);
+        text("Highstand", Row::stages, 100);
+        number("Age (ka)", Row::ageText, row -> row.age().map(age -> age.median()), 110);
     }
 
     private void text(String name, Function<Row, String> words, double width) {
         TableColumn<Row, String> column = new TableColumn<>(name);
         column.setCellValueFactory(cell -> new ReadOnlyStringWrapper(words.apply(cell.getValue())));
-        column.setCellFactory(made -> new TipCell());
+        column.setCellFactory(made -> new WrappedCell<>());
         column.setPrefWidth(width);
         table.getColumns().add(column);
     }
@@ -196,28 +197,10 @@ public final class RatesView extends BorderPane {
         for (double tick : StairScale.ticks(range.low(), range.high(), STRIP, 52)) {
             g.strokeLine(x(tick), 13, x(tick), 16);
             g.fillText(
-                    stillstand.report.Wording.number(
-                            stillstand.uncertainty.Digits.text(Math.rint(tick * 1e6) / 1e6)),
+                    Wording.number(
+                            Digits.text(Math.rint(tick * 1e6) / 1e6)),
                     x(tick),
                     10);
-        }
-    }
-
-    /** A cell whose whole text a pointer can read. */
-    private static final class TipCell extends TableCell<Row, String> {
-        @Override
-        protected void updateItem(String text, boolean empty) {
-            super.updateItem(text, empty);
-            String shown = empty || text == null ? "" : text;
-            setText(shown);
-            if (shown.length() > 14) {
-                Tooltip tip = new Tooltip(shown);
-                tip.setWrapText(true);
-                tip.setMaxWidth(460);
-                setTooltip(tip);
-            } else {
-                setTooltip(null);
-            }
         }
     }
 

@@ -11,6 +11,7 @@ import javafx.beans.property.ReadOnlyStringWrapper;
 import javafx.collections.ListChangeListener;
 import javafx.geometry.Insets;
 import javafx.geometry.Pos;
+import javafx.geometry.VPos;
 import javafx.scene.control.Button;
 import javafx.scene.control.CheckBox;
 import javafx.scene.control.ChoiceBox;
@@ -27,6 +28,7 @@ import javafx.scene.control.Tooltip;
 import javafx.scene.input.Clipboard;
 import javafx.scene.input.ClipboardContent;
 import javafx.scene.layout.BorderPane;
+import javafx.scene.layout.FlowPane;
 import javafx.scene.layout.HBox;
 import javafx.scene.layout.Priority;
 import javafx.scene.layout.Region;
@@ -41,6 +43,8 @@ import stillstand.view.RecordModel.FigureWish;
 
 /** The ledger to search, what was odd, how to get it all again, and what to take away. */
 public final class RecordView extends BorderPane {
+    private static final int LONGEST = 48;
+
     private final RecordModel model;
     private final Supplier<Optional<Path>> askFolder;
     private final TableView<Assumption> ledger = new TableView<>();
@@ -105,7 +109,7 @@ public final class RecordView extends BorderPane {
     private void column(String name, Function<Assumption, String> words, double wide) {
         TableColumn<Assumption, String> column = new TableColumn<>(name);
         column.setCellValueFactory(cell -> new ReadOnlyStringWrapper(words.apply(cell.getValue())));
-        column.setCellFactory(made -> new WrappedCell());
+        column.setCellFactory(made -> new WrappedCell<>());
         column.setPrefWidth(wide);
         ledger.getColumns().add(column);
     }
@@ -157,10 +161,12 @@ public final class RecordView extends BorderPane {
         });
         titled.setSelected(true);
         dpi.setEditable(true);
-        dpi.setPrefWidth(96);
+        dpi.setPrefWidth(120);
         dpi.setAccessibleText("Dots an inch, of PNG");
-        HBox second = new HBox(10, width, titled, new Label("PNG dots an inch"), dpi);
-        second.setAlignment(Pos.CENTER_LEFT);
+        Label dots = new Label("PNG dots an inch");
+        dots.setLabelFor(dpi);
+        FlowPane second = new FlowPane(10, 8, width, titled, dots, dpi);
+        second.setRowValignment(VPos.CENTER);
         Button all = new Button("Export all figures …");
         Button chosen = new Button("Export chosen …");
         all.setId("record-export-all");
@@ -222,7 +228,7 @@ public final class RecordView extends BorderPane {
             HBox bar = new HBox(10, head("How to get it again"), copy);
             bar.setAlignment(Pos.CENTER_LEFT);
             notes.getChildren().add(bar);
-            provenance.forEach(fact -> notes.getChildren().add(line(fact.label() + ": " + fact.text())));
+            provenance.forEach(fact -> notes.getChildren().add(line(fact.label() + ": " + cut(fact.text()))));
         }
     }
 
@@ -231,6 +237,11 @@ public final class RecordView extends BorderPane {
             notes.getChildren().add(head(title));
             (lines.isEmpty() ? List.of(none) : lines).forEach(text -> notes.getChildren().add(line(text)));
         }
+    }
+
+    /** A checksum cut to what an eye compares; the copy has all of it. */
+    private static String cut(String text) {
+        return text.length() > LONGEST ? text.substring(0, LONGEST) + "…" : text;
     }
 
     private static Label head(String text) {

@@ -247,9 +247,9 @@ final class SeaLevelPaper extends Region {
             g.strokeLine(x(stand.ageKa() + stand.ageSigmaKa()), y, x(stand.ageKa() - stand.ageSigmaKa()), y);
             g.strokeLine(x, y(stand.metres() + stand.sigmaMetres()), x, y(stand.metres() - stand.sigmaMetres()));
             if (stand.replaced()) {
-                g.fillPolygon(new double[] {x - 5, x, x + 5, x}, new double[] {y, y - 5, y, y + 5}, 4);
+                g.fillPolygon(new double[] {x - 7, x, x + 7, x}, new double[] {y, y - 7, y, y + 7}, 4);
             } else {
-                g.fillOval(x - 4, y - 4, 8, 8);
+                g.fillOval(x - 4.5, y - 4.5, 9, 9);
             }
             label(g, stand, x, y, taken, colour);
         }
@@ -278,22 +278,29 @@ final class SeaLevelPaper extends Region {
         g.strokeLine(LEFT, bottom, LEFT + width(), bottom);
         for (double tick : StairScale.ticks(pane.metres().low(), pane.metres().high(), height(), 50)) {
             double y = Math.rint(y(tick)) + 0.5;
+            pen(g, palette.ink(), 1);
             g.strokeLine(LEFT - 5, y, LEFT, y);
             text(g, number(tick), LEFT - 8, y, TextAlignment.RIGHT, palette.ink(), false);
         }
         for (double tick : StairScale.ticks(pane.agesKa().low(), pane.agesKa().high(), width(), 80)) {
             double x = Math.rint(x(tick)) + 0.5;
+            pen(g, palette.ink(), 1);
             g.strokeLine(x, bottom, x, bottom + 5);
             text(g, number(tick), x, bottom + 13, TextAlignment.CENTER, palette.ink(), false);
         }
         text(g, "Sea level (m above today's)", 8, TOP - 20, TextAlignment.LEFT, palette.muted(), false);
         text(g, "Age (ka)", LEFT + width() / 2, bottom + 31, TextAlignment.CENTER, palette.muted(), false);
         if (pane.metres().contains(0)) {
-            g.setStroke(palette.muted());
+            pen(g, palette.muted(), 0.9);
             g.setLineDashes(1, 3);
             g.strokeLine(LEFT, Math.rint(y(0)) + 0.5, LEFT + width(), Math.rint(y(0)) + 0.5);
             g.setLineDashes();
         }
+    }
+
+    private static void pen(GraphicsContext g, Color colour, double width) {
+        g.setStroke(colour);
+        g.setLineWidth(width);
     }
 
     private void key(GraphicsContext g, List<Line> lines) {

@@ -27,6 +27,9 @@ import stillstand.view.SeaLevelModel.Curve;
 
 /** Curves to draw and to use, their highstands, and what replaces them. */
 public final class SeaLevelView extends BorderPane {
+    /** What a study uses comes first, then what it was picked from. */
+    private static final List<Integer> COLUMNS = List.of(0, 5, 6, 7, 2, 3, 4, 1);
+
     private final SeaLevelModel model;
     private final SeaLevelPaper paper;
     private final GridPane curves = new GridPane();
@@ -47,7 +50,7 @@ public final class SeaLevelView extends BorderPane {
         paper.setId("sea-paper");
         paper.onReading(reading::setText);
         SplitPane split = new SplitPane(chart(), table());
-        split.setDividerPositions(0.63);
+        split.setDividerPositions(0.6);
         setCenter(split);
         setLeft(chooser());
         status.textFillProperty().addListener(
@@ -117,7 +120,7 @@ public final class SeaLevelView extends BorderPane {
         box.setPadding(new Insets(10, 12, 12, 14));
         ScrollPane scroll = new ScrollPane(box);
         scroll.setFitToWidth(true);
-        scroll.setPrefWidth(286);
+        scroll.setPrefWidth(262);
         scroll.setHbarPolicy(ScrollPane.ScrollBarPolicy.NEVER);
         return scroll;
     }
@@ -131,11 +134,11 @@ public final class SeaLevelView extends BorderPane {
     }
 
     private Region table() {
-        for (int i = 0; i < CurveReport.HIGHSTAND_COLUMNS.size(); i++) {
+        for (int i : COLUMNS) {
             int at = i;
             TableColumn<List<String>, String> column = new TableColumn<>(CurveReport.HIGHSTAND_COLUMNS.get(i));
             column.setCellValueFactory(cell -> new ReadOnlyStringWrapper(cell.getValue().get(at)));
-            column.setPrefWidth(List.of(54, 92, 66, 66, 92, 92, 92, 50).get(i));
+            column.setPrefWidth(List.of(66, 104, 86, 82, 122, 104, 100, 62).get(i));
             column.setSortable(false);
             column.setReorderable(false);
             highstands.getColumns().add(column);

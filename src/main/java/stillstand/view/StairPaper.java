@@ -126,7 +126,7 @@ final class StairPaper extends Region {
             return "Stair of " + model.siteProperty().get() + ". " + status;
         }
         StageChoice choice = model.choiceOf(level);
-        return "Level " + level + (choice.text().isEmpty() ? "" : ", tied by you: " + choice.text())
+        return "Level " + level + (choice.text().isEmpty() ? "" : ", you say " + LevelFacts.words(choice))
                 + (keyStage.isEmpty() ? "" : ", highstand " + keyStage) + ". " + status;
     }
 

@@ -240,11 +240,12 @@ record StairPicture(
             low = Math.min(low, level.interval95().low());
             high = Math.max(high, level.interval95().high());
         }
+        for (Link link : links()) {
+            low = Math.min(low, link.seaMetres());
+            high = Math.max(high, link.seaMetres());
+        }
         for (Stand stand : stands) {
-            if (stand.ageKa() <= oldestKa) {
-                low = Math.min(low, Math.max(stand.metres(), low - 30));
-                high = Math.max(high, stand.metres());
-            }
+            high = stand.ageKa() <= oldestKa ? Math.max(high, stand.metres()) : high;
         }
         double depths = curves.stream()
                 .limit(1)
