@@ -17,7 +17,6 @@ import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
-import stillstand.figure.Figures;
 import stillstand.files.FigureFiles;
 import stillstand.files.FigureFiles.Fault;
 import stillstand.files.ResultFiles;
@@ -113,8 +112,7 @@ final class RunCommand implements Callable<Integer> {
                 StudyResult result = run(study, started, interruption);
                 List<Fault> faults = new ArrayList<>();
                 results.replace(fresh -> {
-                    ResultFiles.write(fresh, study, result);
-                    faults.addAll(draw(result, fresh));
+                    faults.addAll(write(study, result, fresh));
                 });
                 tell(study, result, place);
                 faults.forEach(fault -> workshop.err().println(fault.sentence()));
@@ -141,11 +139,12 @@ final class RunCommand implements Callable<Integer> {
     }
 
     /** Chart classes are loaded here and not before: a run without figures starts without them. */
-    private List<Fault> draw(StudyResult result, Path folder) throws IOException {
+    private List<Fault> write(Study study, StudyResult result, Path fresh) throws IOException {
         if (figures.equals(NO_FIGURES)) {
+            ResultFiles.write(fresh, study, result);
             return List.of();
         }
-        return FigureFiles.OF_RUN.write(Figures.of(result).figures(), folder.resolve("figures"), workers());
+        return ResultFiles.write(fresh, study, result, FigureFiles.OF_RUN, workers());
     }
 
     private int workers() {

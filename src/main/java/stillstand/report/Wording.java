@@ -40,6 +40,13 @@ public final class Wording {
                 + number(Digits.text(rate.shortest95().high(), sigma, RATE_DIGITS));
     }
 
+    /** {@code 0.42 to 0.45}: the shortest interval of probability 0.6827. */
+    public static String interval68(Rate rate) {
+        double sigma = sigma(rate.sd(), rate.interval68());
+        return number(Digits.text(rate.shortest68().low(), sigma, RATE_DIGITS)) + " to "
+                + number(Digits.text(rate.shortest68().high(), sigma, RATE_DIGITS));
+    }
+
     /** {@code 0.44 ± 0.02} of the law of propagation. */
     public static String firstOrder(FirstOrder firstOrder) {
         return number(Digits.text(firstOrder.rate(), firstOrder.sigma(), RATE_DIGITS))

@@ -3,6 +3,7 @@ package stillstand.study;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import stillstand.shoreline.IndicativeRule;
 import stillstand.shoreline.Level;
 import stillstand.shoreline.Site;
 import stillstand.shoreline.StageChoice;
@@ -40,6 +41,11 @@ public final class SitePreview {
     /** The first account of sea level the site runs under. */
     public SeaLevelBasis basis() {
         return basis;
+    }
+
+    /** What an indicative range means in the study. */
+    public IndicativeRule indicativeRange() {
+        return study.settings().indicativeRange();
     }
 
     /** Why there can be no preview; empty where there can. */

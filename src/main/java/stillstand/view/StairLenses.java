@@ -1,0 +1,66 @@
+package stillstand.view;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+import stillstand.report.Wording;
+import stillstand.study.SitePreview;
+import stillstand.uncertainty.Interval;
+import stillstand.uplift.FlightPreview;
+import stillstand.uplift.FlightResult;
+import stillstand.uplift.FlightResult.Match;
+import stillstand.uplift.FlightResult.Pairing;
+import stillstand.view.StairModel.Lens;
+
+/** The ways to look at the correlations of one flight: all together, each range of rates that remains possible, the likeliest. */
+final class StairLenses {
+    private StairLenses() {}
+
+    /**
+     * The lenses of a flight.
+     *
+     * @param tries says which pairings go with a range of rates; absent where the study is no longer the one that was run
+     */
+    static List<Lens> of(StairPicture picture, Optional<FlightResult> flight, Optional<SitePreview> tries) {
+        List<Lens> lenses = new ArrayList<>(List.of(Lens.ANSWER));
+        if (flight.isPresent()) {
+            List<Interval> regions = flight.get().regions95();
+            for (int i = 0; i < regions.size() && regions.size() > 1; i++) {
+                Interval region = regions.get(i);
+                Optional<FlightPreview> within = tries.flatMap(each -> each.previewWithin(region));
+                lenses.add(new Lens(
+                        String.format(
+                                Locale.ROOT,
+                                "Possible correlation %d of %d: %s to %s m/kyr, probability %.2f%s",
+                                i + 1,
+                                regions.size(),
+                                Wording.number(String.format(Locale.ROOT, "%.2f", region.low())),
+                                Wording.number(String.format(Locale.ROOT, "%.2f", region.high())),
+                                flight.get().weights95().get(i),
+                                within.isPresent() ? " (lines by preview)" : ""),
+                        within.map(found -> picture.links(found.pairings())),
+                        Optional.of((region.low() + region.high()) / 2)));
+            }
+            lenses.add(mostProbable(picture, flight.get().mostProbable()));
+        }
+        return lenses;
+    }
+
+    private static Lens mostProbable(StairPicture picture, FlightResult.Correlation single) {
+        List<Pairing> pairs = single.matches().stream()
+                .flatMap(match -> pairing(match).stream())
+                .toList();
+        return new Lens(
+                String.format(
+                        Locale.ROOT,
+                        "Most probable single correlation (%.0f %% of draws): not the answer",
+                        100 * single.share()),
+                Optional.of(picture.links(pairs)),
+                Optional.empty());
+    }
+
+    private static Optional<Pairing> pairing(Match match) {
+        return match.highstand().map(stage -> new Pairing(match.level(), stage, 1));
+    }
+}
