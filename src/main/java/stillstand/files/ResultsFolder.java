@@ -2,17 +2,13 @@ package stillstand.files;
 
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
-import java.nio.file.FileVisitResult;
 import java.nio.file.Files;
 import java.nio.file.NoSuchFileException;
 import java.nio.file.Path;
-import java.nio.file.SimpleFileVisitor;
-import java.nio.file.attribute.BasicFileAttributes;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
 import java.util.stream.Stream;
-import org.jspecify.annotations.Nullable;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.Loaded;
 
@@ -116,7 +112,7 @@ public final class ResultsFolder implements AutoCloseable {
     /** The steps of a replacement, of which tests take only the first few, as a killed process does. */
     void replace(Filling filling, int steps) throws IOException {
         if (steps >= 1) {
-            deleteTree(fresh);
+            FolderTree.delete(fresh);
             Files.createDirectory(fresh);
             filling.into(fresh);
         }
@@ -127,7 +123,7 @@ public final class ResultsFolder implements AutoCloseable {
             Files.move(fresh, folder);
         }
         if (steps >= 4) {
-            deleteTree(old);
+            FolderTree.delete(old);
         }
     }
 
@@ -142,8 +138,8 @@ public final class ResultsFolder implements AutoCloseable {
         if (!Files.exists(folder) && Files.exists(old)) {
             Files.move(Files.exists(fresh) ? fresh : old, folder);
         }
-        deleteTree(fresh);
-        deleteTree(old);
+        FolderTree.delete(fresh);
+        FolderTree.delete(old);
     }
 
     private Optional<Loaded<ResultsFolder>> refusal(Path asGiven) throws IOException {
@@ -196,29 +192,5 @@ public final class ResultsFolder implements AutoCloseable {
 
     private static Path sibling(Path folder, String what) {
         return folder.resolveSibling("." + folder.getFileName() + ".stillstand-" + what);
-    }
-
-    /** Removes a folder and all in it, following no link; one that is not there is removed already. */
-    private static void deleteTree(Path tree) throws IOException {
-        if (!Files.exists(tree)) {
-            return;
-        }
-        Files.walkFileTree(tree, new SimpleFileVisitor<>() {
-            @Override
-            public FileVisitResult visitFile(Path file, BasicFileAttributes attributes) throws IOException {
-                Files.delete(file);
-                return FileVisitResult.CONTINUE;
-            }
-
-            @Override
-            public FileVisitResult postVisitDirectory(Path directory, @Nullable IOException failure)
-                    throws IOException {
-                if (failure != null) {
-                    throw failure;
-                }
-                Files.delete(directory);
-                return FileVisitResult.CONTINUE;
-            }
-        });
     }
 }

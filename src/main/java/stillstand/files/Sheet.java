@@ -53,7 +53,7 @@ public final class Sheet implements DraftFile {
      *
      * @param above comments and blank lines above it, each with its line end
      * @param cells trimmed
-     * @param written how it stands in the file with its line end; "" where that has to be made
+     * @param written how it stands in the file, with its line end but for the last; "" where it does not
      */
     private record Line(String above, List<String> cells, String written) {
         boolean isBlank() {
@@ -63,7 +63,7 @@ public final class Sheet implements DraftFile {
 
     /** An empty table of these columns. */
     public static Sheet of(String name, List<String> header) {
-        return new Sheet(name, "", ',', "\n", new Line("", List.copyOf(header), ""), List.of(), "");
+        return new Sheet(name, "", ',', "\n", line(',', "\n", "", header), List.of(), "");
     }
 
     /**
@@ -202,7 +202,7 @@ public final class Sheet implements DraftFile {
             out.append(each.above);
             line += lines(each.above).size();
             if (i == 0 || !each.isBlank()) {
-                String text = each.written.isEmpty() ? format(each.cells) + newLine : each.written;
+                String text = each.written;
                 out.append(text);
                 line += lines(text).size();
                 boolean last = i == rows.size() && tail.isEmpty();
@@ -215,13 +215,19 @@ public final class Sheet implements DraftFile {
         return places;
     }
 
-    private String format(List<String> cells) {
-        return CSVFormat.DEFAULT
+    /** A line that is spelt anew. */
+    private Line line(String above, List<String> cells) {
+        return line(separator, newLine, above, cells);
+    }
+
+    private static Line line(char separator, String newLine, String above, List<String> cells) {
+        String written = CSVFormat.DEFAULT
                 .builder()
                 .setDelimiter(separator)
                 .setCommentMarker('#')
                 .get()
                 .format(cells.toArray());
+        return new Line(above, List.copyOf(cells), written + newLine);
     }
 
     /** The same table with a block of cells written into it; rows and columns it lacks are made. */
@@ -236,8 +242,7 @@ public final class Sheet implements DraftFile {
             while (changed.size() <= row + i) {
                 changed.add(new Line("", padded(List.of(), 0), ""));
             }
-            Line after = new Line(before.above, List.copyOf(cells), "");
-            changed.set(row + i, before.cells.equals(after.cells) ? before : after);
+            changed.set(row + i, before.cells.equals(cells) ? before : line(before.above, cells));
         }
         return with(header, changed);
     }
@@ -289,7 +294,7 @@ public final class Sheet implements DraftFile {
             names.add("");
         }
         names.set(column, named.strip());
-        Sheet renamed = with(new Line(header.above, List.copyOf(names), ""), rows);
+        Sheet renamed = with(line(header.above, names), rows);
         return renamed.header.cells.size() == header.cells.size() ? renamed : renamed.allPadded();
     }
 
@@ -299,7 +304,7 @@ public final class Sheet implements DraftFile {
                 rows.stream()
                         .map(row -> row.cells.size() >= header.cells.size()
                                 ? row
-                                : new Line(row.above, List.copyOf(padded(row.cells, 0)), ""))
+                                : line(row.above, padded(row.cells, 0)))
                         .toList());
     }
 
@@ -310,13 +315,13 @@ public final class Sheet implements DraftFile {
                 rows.stream().map(row -> without(row, column)).toList());
     }
 
-    private static Line without(Line line, int column) {
+    private Line without(Line line, int column) {
         if (column >= line.cells.size()) {
             return line;
         }
         List<String> cells = new ArrayList<>(line.cells);
         cells.remove(column);
-        return new Line(line.above, List.copyOf(cells), "");
+        return line(line.above, cells);
     }
 
     private Sheet with(Line newHeader, List<Line> newRows) {

@@ -72,6 +72,11 @@ public final class StudyFolder {
         return new StudyFolder(folder, edited).read(library, UnaryOperator.identity());
     }
 
+    /** What the tool knows, with the study's own curves and tables beside it as far as they can be read. */
+    public static Library library(Path folder, Library shipped) {
+        return new StudyFolder(folder, Map.of()).withOwnCurves(shipped);
+    }
+
     /** Reads and checks a whole study as it stands. */
     public static Loaded<Study> read(Path folder, Library library) {
         return read(folder, library, UnaryOperator.identity());

@@ -130,11 +130,6 @@ public final class StudyStore implements AutoCloseable {
                 .toList();
     }
 
-    /** From now on what is on the disk counts as known: the next save writes over it. */
-    public void keepMine() throws IOException {
-        onDisk = bytesOnDisk();
-    }
-
     /**
      * Saves what differs from the disk, all of it or nothing.
      *

@@ -13,6 +13,8 @@ import stillstand.ledger.InputProblem;
 public final class StudyTemplate {
     private static final List<String> FILES = List.of("study.json", "sites.csv", "levels.csv", "samples.csv");
 
+    private static final String PASSING = "stillstand-demo-";
+
     private StudyTemplate() {}
 
     /** Its files, in the order in which to look at them. */
@@ -34,6 +36,22 @@ public final class StudyTemplate {
     /** Writes the demo, an invented island, in the same way. */
     public static Optional<InputProblem> writeDemo(Path folder) throws IOException {
         return write("/stillstand/demo/", folder);
+    }
+
+    /** Writes the demo into a new folder of the system's place for passing files. */
+    public static Path writePassingDemo() throws IOException {
+        Path copy = Files.createTempDirectory(PASSING).resolve("velloe-island");
+        writeDemo(copy);
+        return copy;
+    }
+
+    /** Removes a passing demo with all in it. */
+    public static void removePassing(Path demo) throws IOException {
+        Path parent = demo.getParent();
+        if (parent == null || !String.valueOf(parent.getFileName()).startsWith(PASSING)) {
+            throw new IllegalArgumentException("demo must be a passing one but is " + demo);
+        }
+        FolderTree.delete(parent);
     }
 
     private static Optional<InputProblem> write(String from, Path folder) throws IOException {

@@ -80,7 +80,7 @@ class StudyStoreTest {
             Files.writeString(demo.resolve("levels.csv"), "site,level,elevation_m,elevation_1sigma_m\n");
             Files.delete(demo.resolve("samples.csv"));
             assertEquals(List.of("levels.csv", "samples.csv"), store.changedOnDisk());
-            store.keepMine();
+            store.read();
             assertEquals(List.of(), store.changedOnDisk());
         }
     }
