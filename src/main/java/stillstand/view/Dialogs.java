@@ -32,6 +32,11 @@ final class Dialogs implements Questions {
         return folder(title).map(Dialogs::freeIn);
     }
 
+    @Override
+    public Optional<Path> folderToWrite() {
+        return folder("Where to write");
+    }
+
     private static Path freeIn(Path chosen) {
         try (Stream<Path> entries = Files.list(chosen)) {
             if (entries.findAny().isEmpty()) {

@@ -11,6 +11,9 @@ interface Questions {
     /** A folder for a study that is not there yet, absent or empty. */
     Optional<Path> folderForNew(String title);
 
+    /** A folder to write figures or results into. */
+    Optional<Path> folderToWrite();
+
     /** What to do with unsaved edits. */
     Unsaved unsaved(String title);
 

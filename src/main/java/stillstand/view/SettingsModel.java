@@ -44,6 +44,11 @@ final class SettingsModel {
         return document;
     }
 
+    /** What the study may name. */
+    Library library() {
+        return library;
+    }
+
     /** All fields but the curves, in the order of the form. */
     List<Field> fields() {
         List<String> tables = library.highstandIds();

@@ -1,7 +1,5 @@
 package stillstand.view;
 
-import java.util.EnumMap;
-import java.util.Map;
 import java.util.Optional;
 import java.util.function.Consumer;
 import javafx.geometry.Pos;
@@ -17,6 +15,7 @@ import javafx.scene.layout.StackPane;
 import javafx.scene.layout.VBox;
 import stillstand.files.SettingsText;
 import stillstand.files.StudyJson;
+import stillstand.study.Library;
 import stillstand.view.WindowModel.Area;
 
 /** The frame: menus, the study's name, the switch between areas, the area itself, and the line at the foot. */
@@ -24,25 +23,37 @@ final class ShellView extends BorderPane {
     private final WindowModel model;
     private final WindowActions actions;
     private final StackPane place = new StackPane();
-    private final Map<Area, Node> areas = new EnumMap<>(Area.class);
+    private final AreasOf areasOf;
     private final Label title = new Label();
     private final Label state = new Label();
     private final Button run = new Button("Run");
     private final HBox header;
     private Optional<EvidenceView> evidence = Optional.empty();
+    private Optional<ResultAreas> areas = Optional.empty();
 
-    ShellView(WindowModel model, WindowActions actions, Consumer<Boolean> darkens, Runnable quits) {
+    /** Makes the areas of results for a study that was opened. */
+    @FunctionalInterface
+    interface AreasOf {
+        /** Areas for studies that may name what is in this library. */
+        ResultAreas areas(Library library);
+    }
+
+    ShellView(
+            WindowModel model, WindowActions actions, AreasOf areasOf, Consumer<Boolean> darkens, Runnable quits) {
         this.model = model;
         this.actions = actions;
+        this.areasOf = areasOf;
         getStyleClass().add("shell");
         header = header();
         setTop(new VBox(
                 new WindowMenu(model, actions, () -> evidence, darkens, quits), header, new NoticesView(model)));
         setCenter(place);
         setBottom(new StatusView(model, this::showProblems));
-        areas.putAll(ResultAreas.of(model));
+        model.shownProperty().addListener((source, before, after) -> areas.ifPresent(each -> each.show(after)));
         model.evidenceProperty().addListener((source, before, after) -> {
             evidence = after.map(EvidenceView::new);
+            areas = after.map(opened -> areasOf.areas(opened.settings().library()));
+            areas.ifPresent(each -> each.show(model.shownProperty().get()));
             after.ifPresent(opened -> {
                 opened.document().draftProperty().addListener((draft, was, is) -> showTitle());
                 opened.document().editedProperty().addListener((edited, was, is) -> showTitle());
@@ -92,7 +103,9 @@ final class ShellView extends BorderPane {
         Area area = model.areaProperty().get();
         Node shown = !isOpen
                 ? new WelcomeView(model, actions)
-                : area == Area.EVIDENCE ? evidence.orElseThrow() : areas.getOrDefault(area, new Region());
+                : area == Area.EVIDENCE
+                        ? evidence.orElseThrow()
+                        : areas.orElseThrow().view(area);
         place.getChildren().setAll(shown);
         showTitle();
         showRunButton();

@@ -32,6 +32,7 @@ public final class StillstandWindow extends Application {
 
     private final ExecutorService disk = Executors.newSingleThreadExecutor(work -> daemon(work, "disk and check"));
     private final ExecutorService runs = Executors.newSingleThreadExecutor(work -> daemon(work, "run"));
+    private final ExecutorService previews = Executors.newSingleThreadExecutor(work -> daemon(work, "previews"));
     private final ScheduledExecutorService looks =
             Executors.newSingleThreadScheduledExecutor(work -> daemon(work, "looking at the disk"));
     private Optional<WindowModel> model = Optional.empty();
@@ -79,6 +80,7 @@ public final class StillstandWindow extends Application {
         shell[0] = new ShellView(
                 window,
                 actions,
+                library -> new ResultAreas(window, library, questions, previews, Platform::runLater),
                 isDark -> {
                     memory.keepDark(isDark);
                     useTheme(shell[0], isDark);
@@ -163,6 +165,7 @@ public final class StillstandWindow extends Application {
     public void stop() {
         model.filter(window -> window.document().isPresent()).ifPresent(window -> window.close(false));
         looks.shutdownNow();
+        previews.shutdown();
         runs.shutdown();
         disk.shutdown();
         try {

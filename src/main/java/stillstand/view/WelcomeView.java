@@ -39,10 +39,8 @@ final class WelcomeView extends VBox {
                         "A folder with study.json, sites.csv and levels.csv in it.",
                         actions::open));
         ways.getStyleClass().add("welcome-ways");
-        Label caution = new Label(StatusView.CAUTION);
-        caution.getStyleClass().add("quiet");
         recent.getStyleClass().add("welcome-recent");
-        getChildren().addAll(name, what, ways, recent, caution);
+        getChildren().addAll(name, what, ways, recent);
         showRecent(actions);
     }
 

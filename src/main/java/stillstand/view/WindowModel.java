@@ -44,6 +44,7 @@ final class WindowModel {
     private final ReadOnlyObjectWrapper<Shown> shown = new ReadOnlyObjectWrapper<>(Shown.NOTHING);
     private final ObjectProperty<Area> area = new SimpleObjectProperty<>(Area.EVIDENCE);
     private final ObservableList<Notice> notices = FXCollections.observableArrayList();
+    private final ObservableList<Notice> readableNotices = FXCollections.unmodifiableObservableList(notices);
     private Optional<Study> lastGood = Optional.empty();
     private Optional<Path> passingCopy = Optional.empty();
 
@@ -136,7 +137,7 @@ final class WindowModel {
     }
 
     ObservableList<Notice> notices() {
-        return FXCollections.unmodifiableObservableList(notices);
+        return readableNotices;
     }
 
     /** Whether the study is an unkept copy that goes when the window does. */
