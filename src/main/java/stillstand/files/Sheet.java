@@ -328,9 +328,14 @@ public final class Sheet implements DraftFile {
         return new Sheet(name, mark, separator, newLine, newHeader, List.copyOf(newRows), tail);
     }
 
+    /** Whether the other has the same rows, blank ones counted, and would be written in the same way. */
     @Override
     public boolean equals(Object other) {
-        return this == other || (other instanceof Sheet sheet && name.equals(sheet.name) && text().equals(sheet.text()));
+        return this == other
+                || (other instanceof Sheet sheet
+                        && name.equals(sheet.name)
+                        && rows.size() == sheet.rows.size()
+                        && text().equals(sheet.text()));
     }
 
     @Override

@@ -160,10 +160,6 @@ final class StudyDocument {
         StudyDraft before = draft.get();
         StudyDraft after = change.apply(before);
         if (isReadOnly() || after.equals(before)) {
-            if (after != before && !isReadOnly()) {
-                draft.set(after); // such as a blank row, which no file will hold
-                latest = after;
-            }
             return;
         }
         done.push(new Step(what, before));
@@ -190,7 +186,7 @@ final class StudyDocument {
     private void become(StudyDraft now) {
         latest = now;
         draft.set(now);
-        edited.set(!now.equals(saved));
+        edited.set(!now.texts().equals(saved.texts()));
         undoable.set(Optional.ofNullable(done.peek()).map(Step::what));
         redoable.set(Optional.ofNullable(undone.peek()).map(Step::what));
         check();
@@ -249,7 +245,7 @@ final class StudyDocument {
                 store.save(asked);
                 foreground.execute(() -> {
                     saved = asked;
-                    edited.set(!draft.get().equals(asked));
+                    edited.set(!draft.get().texts().equals(asked.texts()));
                     trouble.set(Optional.empty());
                     whenSaved.run();
                 });
