@@ -57,7 +57,11 @@ final class RateStrip extends HBox {
         exact.setAccessibleText("Rate slid by hand, metres per thousand years");
         exact.setOnAction(event -> typed());
         exact.focusedProperty().addListener((property, before, now) -> write());
-        getChildren().addAll(label, tracks, exact, new Label("m/kyr"));
+        Label unit = new Label("m/kyr");
+        unit.setMinWidth(USE_PREF_SIZE);
+        label.setMinWidth(USE_PREF_SIZE);
+        tracks.setPrefWidth(200);
+        getChildren().addAll(label, tracks, exact, unit);
         bind();
     }
 

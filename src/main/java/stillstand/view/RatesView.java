@@ -39,7 +39,7 @@ import stillstand.view.RatesModel.Row;
 /** All rates in a table that sorts by any column, each with its density on one shared axis. */
 public final class RatesView extends BorderPane {
     private static final String ALL = "all sites";
-    private static final double STRIP = 150;
+    private static final double STRIP = 144;
     private static final double ROW = 26;
 
     private final RatesModel model;
@@ -111,22 +111,24 @@ public final class RatesView extends BorderPane {
     }
 
     private void columns() {
-        text("Site", Row::site, 106);
-        text("Rate of", Row::name, 100);
-        text("Kind", row -> row.kind().toString(), 116);
-        text("Bound, or why none", Row::says, 236);
-        number("Median ± sd", Row::median, row -> row.rate().map(Rate::median), 102);
+        text("Site", Row::site, 112, false);
+        text("Rate of", Row::name, 98, false);
+        text("Kind", row -> row.kind().toString(), 118, false);
+        text("Bound, or why none", Row::says, 216, true);
+        number("Median ± sd", Row::median, row -> row.rate().map(Rate::median), 112);
         number("68 %", Row::interval68, row -> row.rate().map(rate -> rate.shortest68().low()), 104);
         number("95 %", Row::interval95, row -> row.rate().map(rate -> rate.shortest95().low()), 104);
         density();
-        text("Highstand", Row::stages, 100);
-        number("Age (ka)", Row::ageText, row -> row.age().map(age -> age.median()), 110);
+        text("Highstand", Row::stages, 102, false);
+        number("Age (ka)", Row::ageText, row -> row.age().map(age -> age.median()), 122);
     }
 
-    private void text(String name, Function<Row, String> words, double width) {
+    private void text(String name, Function<Row, String> words, double width, boolean wraps) {
         TableColumn<Row, String> column = new TableColumn<>(name);
         column.setCellValueFactory(cell -> new ReadOnlyStringWrapper(words.apply(cell.getValue())));
-        column.setCellFactory(made -> new WrappedCell<>());
+        if (wraps) {
+            column.setCellFactory(made -> new WrappedCell<>());
+        }
         column.setPrefWidth(width);
         table.getColumns().add(column);
     }

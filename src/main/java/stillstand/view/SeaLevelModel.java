@@ -376,7 +376,7 @@ public final class SeaLevelModel {
                 .mapToDouble(line -> line.points().isEmpty()
                         ? 0
                         : line.points().get(line.points().size() - 1).ageKa())
-                .min()
+                .max()
                 .orElse(USUAL_SPAN_KA);
         double to = Math.min(USUAL_SPAN_KA, Math.max(LEAST_SPAN_KA, oldest));
         double low = -130;

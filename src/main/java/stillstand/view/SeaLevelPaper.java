@@ -171,22 +171,18 @@ final class SeaLevelPaper extends Region {
     }
 
     private void lines(GraphicsContext g, List<Line> lines) {
-        for (int i = lines.size() - 1; i >= 0; i--) {
+        for (int i = 0; i < lines.size(); i++) {
             List<CurvePoint> points = inView(lines.get(i).points());
-            if (points.isEmpty()) {
-                continue;
-            }
             if (i == 0) {
                 band(g, points, CurvePoint::low95Metres, CurvePoint::high95Metres, palette.band95());
                 band(g, points, CurvePoint::low68Metres, CurvePoint::high68Metres, palette.band68());
             } else {
-                band(
-                        g,
-                        points,
-                        CurvePoint::low68Metres,
-                        CurvePoint::high68Metres,
-                        palette.curve(i).deriveColor(0, 1, 1, 0.14));
+                Color fill = palette.curve(i).deriveColor(0, 1, 1, 0.14);
+                band(g, points, CurvePoint::low68Metres, CurvePoint::high68Metres, fill);
             }
+        }
+        for (int i = lines.size() - 1; i >= 0; i--) {
+            List<CurvePoint> points = inView(lines.get(i).points());
             g.setStroke(palette.curve(i));
             g.setLineWidth(lines.get(i).inUse() ? 2 : 1.2);
             g.setLineDashes(lines.get(i).inUse() ? new double[0] : new double[] {5, 3});

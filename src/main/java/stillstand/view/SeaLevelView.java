@@ -50,7 +50,7 @@ public final class SeaLevelView extends BorderPane {
         paper.setId("sea-paper");
         paper.onReading(reading::setText);
         SplitPane split = new SplitPane(chart(), table());
-        split.setDividerPositions(0.6);
+        split.setDividerPositions(0.58);
         setCenter(split);
         setLeft(chooser());
         status.textFillProperty().addListener(
@@ -120,7 +120,7 @@ public final class SeaLevelView extends BorderPane {
         box.setPadding(new Insets(10, 12, 12, 14));
         ScrollPane scroll = new ScrollPane(box);
         scroll.setFitToWidth(true);
-        scroll.setPrefWidth(262);
+        scroll.setPrefWidth(276);
         scroll.setHbarPolicy(ScrollPane.ScrollBarPolicy.NEVER);
         return scroll;
     }
@@ -138,7 +138,7 @@ public final class SeaLevelView extends BorderPane {
             int at = i;
             TableColumn<List<String>, String> column = new TableColumn<>(CurveReport.HIGHSTAND_COLUMNS.get(i));
             column.setCellValueFactory(cell -> new ReadOnlyStringWrapper(cell.getValue().get(at)));
-            column.setPrefWidth(List.of(66, 104, 86, 82, 122, 104, 100, 62).get(i));
+            column.setPrefWidth(List.of(62, 104, 92, 84, 132, 104, 116, 62).get(i));
             column.setSortable(false);
             column.setReorderable(false);
             highstands.getColumns().add(column);
@@ -161,6 +161,8 @@ public final class SeaLevelView extends BorderPane {
         Label look = new Label("Draw");
         use.getStyleClass().addAll(Styles.TEXT_SMALL, Styles.TEXT_MUTED);
         look.getStyleClass().addAll(Styles.TEXT_SMALL, Styles.TEXT_MUTED);
+        use.setMinWidth(USE_PREF_SIZE);
+        look.setMinWidth(USE_PREF_SIZE);
         curves.addRow(0, use, look);
         for (Curve curve : model.curves()) {
             CheckBox used = new CheckBox();

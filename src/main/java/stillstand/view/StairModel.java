@@ -183,16 +183,19 @@ public final class StairModel {
     private void setRate(boolean otherSite) {
         Optional<Rate> known = answeredRate();
         if (known.isPresent()) {
-            Interval within = known.get().shortest95();
-            double reach = Math.max(LEAST_REACH, 2.5 * within.width());
-            rateRange.set(new Interval(
-                    Math.min(0, within.low() - reach), Math.max(0, within.high() + reach)));
+            rateRange.set(around(known.get()));
         } else if (otherSite) {
             rateRange.set(new Interval(-0.5, 1.5));
         }
         double rate = rates.getOrDefault(site.get(), known.map(Rate::median).orElse(USUAL_RATE));
         presetRate = rates.containsKey(site.get()) ? presetRate : rate;
         slideTo(rate);
+    }
+
+    private static Interval around(Rate rate) {
+        Interval within = rate.shortest95();
+        double reach = Math.max(LEAST_REACH, 2.5 * within.width());
+        return new Interval(Math.min(0, within.low() - reach), Math.max(0, within.high() + reach));
     }
 
     /** A rate that was slid by hand comes back with its site. */
@@ -328,6 +331,7 @@ public final class StairModel {
                 working = false;
                 if (tries.isPresent() && tries.get() == of && isPreviewWanted()) {
                     preview.set(found);
+                    found.ifPresent(this::followFirst);
                 }
                 if (wanted && tries.isPresent()) {
                     work();
@@ -336,6 +340,16 @@ public final class StairModel {
                 }
             });
         });
+    }
+
+    /** Before the first run the slider stands where the preview does, until it is slid by hand. */
+    private void followFirst(FlightPreview found) {
+        boolean untouched = Math.abs(rateMetresPerKyr.get() - presetRate) <= SLID && !rates.containsKey(site.get());
+        if (answeredRate().isEmpty() && untouched) {
+            presetRate = found.rate().median();
+            rateRange.set(around(found.rate()));
+            slideTo(presetRate);
+        }
     }
 
     private static Optional<FlightPreview> attempted(SitePreview of, Map<String, StageChoice> choices) {

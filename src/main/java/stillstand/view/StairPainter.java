@@ -396,6 +396,12 @@ final class StairPainter {
                 .orElse(40);
     }
 
+    /** A frame that says that keys go here. */
+    void focus() {
+        pen(palette.strength(palette.predicted(), 0.7), 1.5);
+        g.strokeRect(1, 1, g.getCanvas().getWidth() - 2, g.getCanvas().getHeight() - 2);
+    }
+
     /** The line that is being dragged. */
     void dragged(Mark level, Point2D to) {
         pen(palette.tried(), 2.4);

@@ -180,6 +180,9 @@ final class StairPaper extends Region {
                 : pointing;
         painter.stands(shownStage);
         painter.levels(selected, pointing, model::choiceOf);
+        if (isFocused()) {
+            painter.focus();
+        }
         pointing.dragTo().ifPresent(to -> picture.level(pointing.level()).ifPresent(level -> painter.dragged(level, to)));
     }
 

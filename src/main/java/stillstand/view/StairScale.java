@@ -115,7 +115,7 @@ final class StairScale {
         }
         List<Double> ticks = new ArrayList<>();
         for (double tick = Math.ceil(low / step) * step; tick <= high + step * 1e-9; tick += step) {
-            ticks.add(Math.rint(tick / step) * step);
+            ticks.add(Math.rint(tick / step) * step + 0.0); // + 0.0: never -0
         }
         return ticks;
     }

@@ -89,6 +89,7 @@ public final class StairView extends BorderPane {
         lens.setAccessibleText("Correlations to look at");
         lens.setMaxWidth(Double.MAX_VALUE);
         lens.setMinWidth(120);
+        lens.setPrefWidth(300);
         lens.getSelectionModel().selectedItemProperty().addListener((property, before, now) -> {
             if (now != null && !following) {
                 model.look(now);
@@ -99,7 +100,10 @@ public final class StairView extends BorderPane {
         Button next = step("›", "Next correlation", 1);
         Label name = new Label("Site");
         name.setLabelFor(site);
+        name.setMinWidth(USE_PREF_SIZE);
+        site.setMinWidth(USE_PREF_SIZE);
         Label look = new Label("Look at");
+        look.setMinWidth(USE_PREF_SIZE);
         look.setLabelFor(lens);
         HBox choosers = new HBox(8, name, site, look, before, lens, next);
         choosers.setAlignment(Pos.CENTER_LEFT);

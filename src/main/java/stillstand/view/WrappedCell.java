@@ -10,7 +10,12 @@ final class WrappedCell<T> extends TableCell<T, String> {
     private final Text words = new Text();
 
     WrappedCell() {
-        words.wrappingWidthProperty().bind(widthProperty().subtract(16));
+        tableColumnProperty().addListener((property, before, column) -> {
+            words.wrappingWidthProperty().unbind();
+            if (column != null) {
+                words.wrappingWidthProperty().bind(column.widthProperty().subtract(18)); // known before the first layout
+            }
+        });
         words.fillProperty().bind(textFillProperty());
         setAlignment(Pos.CENTER_LEFT);
         setPadding(new Insets(5, 8, 5, 8));
