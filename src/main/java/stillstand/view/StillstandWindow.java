@@ -61,17 +61,17 @@ public final class StillstandWindow extends Application {
     public void start(Stage stage) {
         WindowMemory memory = WindowMemory.ofUser();
         List<String> arguments = getParameters().getRaw();
-        show(stage, memory, new Dialogs(stage));
+        show(stage, memory, new Dialogs(stage), StudyRunner::run);
         if (!arguments.isEmpty()) {
             model.orElseThrow().open(Path.of(arguments.get(0)));
         }
     }
 
-    /** Fills a stage with the window; tests bring their own memory and answers. */
-    WindowModel show(Stage stage, WindowMemory memory, Questions questions) {
+    /** Fills a stage with the window; tests bring their own memory, answers and engine. */
+    WindowModel show(Stage stage, WindowMemory memory, Questions questions, RunModel.Engine engine) {
         StudyReader reader = new StudyReader();
         disk.execute(reader::shipped);
-        RunModel run = new RunModel(runs, Platform::runLater, Clock.systemUTC(), StudyRunner::run);
+        RunModel run = new RunModel(runs, Platform::runLater, Clock.systemUTC(), engine);
         WindowModel window = new WindowModel(reader, run, memory, disk, Platform::runLater);
         model = Optional.of(window);
         WindowActions actions = new WindowActions(window, questions);
