@@ -128,8 +128,9 @@ class EvidenceWindowTest {
         robot.open(study("site,level,elevation_m,elevation_1sigma_m\nA,one,5,1\nA,two,8,1\n"));
         robot.choose("levels.csv", 0, 2);
         robot.write("6");
-        robot.clickOn((Node) robot.lookup(node -> node instanceof GridCell cell && "two".equals(cell.getText()))
-                .query());
+        Node other = robot.lookup(node -> node instanceof GridCell cell && "two".equals(cell.getText()))
+                .query();
+        robot.clickOn(other);
         assertEquals("6", robot.grid("levels.csv").cell(0, 2));
         assertEquals(CellRange.at(1, 1), robot.grid("levels.csv").chosen());
     }
