@@ -75,12 +75,12 @@ class WindowTest {
 
     @Test
     void demoShowsAResultInThreeClicks() {
-        robot.push("#welcome-demo");
+        robot.clickOn("#welcome-demo");
         robot.waitFor(() -> robot.model().canRun());
         assertTrue(robot.isShown("#notice-copy"));
-        robot.push("#run");
+        robot.clickOn("#run");
         robot.waitFor(() -> robot.model().run().state() == State.DONE);
-        robot.push("#area-rates");
+        robot.clickOn("#area-rates");
         assertTrue(robot.lookup("#rates-table").queryTableView().getItems().size() > 0);
         assertTrue(robot.text("#work").startsWith("Done in"));
         assertFalse(robot.isShown("#stale"));
