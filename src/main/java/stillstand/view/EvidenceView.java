@@ -52,10 +52,11 @@ final class EvidenceView extends BorderPane {
         sentence.setMaxWidth(Double.MAX_VALUE);
         VBox upper = new VBox(content, sentence);
         VBox.setVgrow(content, Priority.ALWAYS);
-        SplitPane split = new SplitPane(upper, findingList());
+        BorderPane lower = findingList();
+        SplitPane split = new SplitPane(upper, lower);
         split.setOrientation(Orientation.VERTICAL);
         split.setDividerPositions(0.8);
-        SplitPane.setResizableWithParent(findings, false);
+        SplitPane.setResizableWithParent(lower, false);
         setTop(top);
         setCenter(split);
         model.partProperty().addListener((source, before, after) -> show());

@@ -15,6 +15,11 @@ import stillstand.study.Library;
 
 /** The settings of a study, key by key, as a form shows them. Blank = not stated: Stillstand's default, which the ledger names. */
 final class SettingsModel {
+    static final String STUDY = "Study";
+    static final String SEA_LEVEL = "Sea level";
+    static final String PRIOR = "Prior of the rate";
+    static final String MATCHING = "Matching";
+
     private static final String CURVES = "sea_level.curves";
 
     private final StudyDocument document;
@@ -56,37 +61,37 @@ final class SettingsModel {
                 Stream.concat(Stream.of("none"), tables.stream()).toList();
         List<String> flags = List.of("true", "false");
         return List.of(
-                words("Study", "title", "Title"),
-                words("Study", "note", "Note"),
-                number("Study", "seed", "Seed of the draws"),
-                number("Study", "draws.maximum", "Draws a level, at most"),
-                number("Study", "draws.significant_digits", "Steady digits"),
-                choice("Sea level", "sea_level.highstands.from", "Highstands from", List.of("curve", "table")),
-                choice("Sea level", "sea_level.highstands.table", "Table of highstands", tables),
-                choice("Sea level", "sea_level.highstands.overrides", "Overrides of picks", overrides),
-                choice("Sea level", "sea_level.highstands.older_than_curve", "Go on beyond the curve", flags),
-                number("Sea level", "sea_level.shared_level_1sigma_m", "Shared error, 1 sigma, m"),
-                number("Sea level", "sea_level.interstadial_1sigma_m", "Interstadial error, 1 sigma, m"),
-                number("Sea level", "sea_level.curve_age_1sigma_ka", "Age scale of the curve, 1 sigma, ka"),
-                number("Sea level", "sea_level.correlation_time_ka", "Correlation time, ka"),
-                choice("Sea level", "sea_level.rezero", "Move the curve to 0 today", flags),
+                words(STUDY, "title", "Title"),
+                words(STUDY, "note", "Note"),
+                number(STUDY, "seed", "Seed of the draws"),
+                number(STUDY, "draws.maximum", "Draws a level, at most"),
+                number(STUDY, "draws.significant_digits", "Steady digits"),
+                choice(SEA_LEVEL, "sea_level.highstands.from", "Highstands from", List.of("curve", "table")),
+                choice(SEA_LEVEL, "sea_level.highstands.table", "Table of highstands", tables),
+                choice(SEA_LEVEL, "sea_level.highstands.overrides", "Overrides of picks", overrides),
+                choice(SEA_LEVEL, "sea_level.highstands.older_than_curve", "Go on beyond the curve", flags),
+                number(SEA_LEVEL, "sea_level.shared_level_1sigma_m", "Shared error, 1 sigma, m"),
+                number(SEA_LEVEL, "sea_level.interstadial_1sigma_m", "Interstadial error, 1 sigma, m"),
+                number(SEA_LEVEL, "sea_level.curve_age_1sigma_ka", "Age scale of the curve, 1 sigma, ka"),
+                number(SEA_LEVEL, "sea_level.correlation_time_ka", "Correlation time, ka"),
+                choice(SEA_LEVEL, "sea_level.rezero", "Move the curve to 0 today", flags),
                 choice(
-                        "Prior of the rate",
+                        PRIOR,
                         "rate.prior.kind",
                         "Kind",
                         List.of("cauchy", "half-cauchy", "log-uniform", "normal")),
-                number("Prior of the rate", "rate.prior.location", "Location, m/kyr"),
-                number("Prior of the rate", "rate.prior.scale", "Scale, m/kyr"),
-                number("Prior of the rate", "rate.prior.mean", "Mean, m/kyr"),
-                number("Prior of the rate", "rate.prior.sigma", "Sigma, m/kyr"),
-                number("Prior of the rate", "rate.prior.from", "From, m/kyr"),
-                number("Prior of the rate", "rate.prior.to", "To, m/kyr"),
-                number("Matching", "matching.recording_probability", "Recording probability"),
-                number("Matching", "matching.recording_decay_ka", "Recording decay, ka"),
-                number("Matching", "matching.expected_strays", "Expected strays"),
-                number("Matching", "matching.stray_age_maximum_ka", "Oldest stray, ka"),
-                number("Matching", "matching.wrong_date_probability", "Wrong date probability"),
-                choice("Matching", "indicative_range", "Indicative range", List.of("quadrature", "uniform")));
+                number(PRIOR, "rate.prior.location", "Location, m/kyr"),
+                number(PRIOR, "rate.prior.scale", "Scale, m/kyr"),
+                number(PRIOR, "rate.prior.mean", "Mean, m/kyr"),
+                number(PRIOR, "rate.prior.sigma", "Sigma, m/kyr"),
+                number(PRIOR, "rate.prior.from", "From, m/kyr"),
+                number(PRIOR, "rate.prior.to", "To, m/kyr"),
+                number(MATCHING, "matching.recording_probability", "Recording probability"),
+                number(MATCHING, "matching.recording_decay_ka", "Recording decay, ka"),
+                number(MATCHING, "matching.expected_strays", "Expected strays"),
+                number(MATCHING, "matching.stray_age_maximum_ka", "Oldest stray, ka"),
+                number(MATCHING, "matching.wrong_date_probability", "Wrong date probability"),
+                choice(MATCHING, "indicative_range", "Indicative range", List.of("quadrature", "uniform")));
     }
 
     private static Field words(String group, String keyPath, String label) {

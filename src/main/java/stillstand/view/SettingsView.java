@@ -7,7 +7,6 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.function.Consumer;
 import java.util.function.Supplier;
-import javafx.geometry.Pos;
 import javafx.scene.Node;
 import javafx.scene.control.CheckBox;
 import javafx.scene.control.ComboBox;
@@ -22,7 +21,6 @@ import javafx.scene.layout.BorderPane;
 import javafx.scene.layout.GridPane;
 import javafx.scene.layout.HBox;
 import javafx.scene.layout.Priority;
-import javafx.scene.layout.TilePane;
 import javafx.scene.layout.VBox;
 import stillstand.files.StudyJson;
 import stillstand.view.SettingsModel.Field;
@@ -31,6 +29,7 @@ import stillstand.view.SettingsModel.Field;
 final class SettingsView extends BorderPane {
     private static final String DEFAULT = "default";
     private static final String WRONG = "wrong";
+    private static final double LABEL_WIDTH = 226;
 
     private final SettingsModel model;
     private final Map<String, Control> inputs = new HashMap<>();
@@ -40,20 +39,19 @@ final class SettingsView extends BorderPane {
     SettingsView(SettingsModel model) {
         this.model = model;
         getStyleClass().add("settings");
-        TilePane groups = new TilePane();
-        groups.getStyleClass().add("settings-groups");
-        groups.setPrefColumns(2);
-        groups.setTileAlignment(Pos.TOP_LEFT);
         Map<String, GridPane> byGroup = new HashMap<>();
         for (Field field : model.fields()) {
-            GridPane form = byGroup.computeIfAbsent(field.group(), name -> {
-                GridPane fresh = form();
-                groups.getChildren().add(group(name, fresh));
-                return fresh;
-            });
-            addRow(form, field);
+            addRow(byGroup.computeIfAbsent(field.group(), name -> form()), field);
         }
-        groups.getChildren().add(1, group("Curves and their weights", curves()));
+        HBox groups = new HBox(
+                column(
+                        group(SettingsModel.STUDY, byGroup.get(SettingsModel.STUDY)),
+                        group(SettingsModel.PRIOR, byGroup.get(SettingsModel.PRIOR)),
+                        group(SettingsModel.MATCHING, byGroup.get(SettingsModel.MATCHING))),
+                column(
+                        group("Curves and their weights", curves()),
+                        group(SettingsModel.SEA_LEVEL, byGroup.get(SettingsModel.SEA_LEVEL))));
+        groups.getStyleClass().add("settings-groups");
         ScrollPane scroll = new ScrollPane(groups);
         scroll.setFitToWidth(true);
         scroll.setId("settings");
@@ -62,6 +60,13 @@ final class SettingsView extends BorderPane {
         StudyDocument document = model.document();
         document.draftProperty().addListener((source, before, after) -> refresh());
         document.checkedProperty().addListener((source, before, after) -> refresh());
+    }
+
+    private static VBox column(VBox... groups) {
+        VBox column = new VBox(groups);
+        column.getStyleClass().add("settings-column");
+        HBox.setHgrow(column, Priority.ALWAYS);
+        return column;
     }
 
     private static GridPane form() {
@@ -88,7 +93,8 @@ final class SettingsView extends BorderPane {
         inputs.put(field.keyPath(), input);
         Label label = new Label(field.label());
         label.setLabelFor(input);
-        label.setMinWidth(190);
+        label.setMinWidth(LABEL_WIDTH);
+        label.setPrefWidth(LABEL_WIDTH);
         Label wrong = wrongLabel();
         refreshers.add(() -> {
             Optional<String> problem = model.problem(field.keyPath());
@@ -160,7 +166,14 @@ final class SettingsView extends BorderPane {
         input.getItems().add("");
         input.getItems().addAll(field.words());
         input.setPromptText(DEFAULT);
-        refreshers.add(() -> input.setValue(model.value(field)));
+        refreshers.add(() -> {
+            String value = model.value(field);
+            if (value.isEmpty()) {
+                input.getSelectionModel().clearSelection(); // shows that the default holds
+            } else {
+                input.setValue(value);
+            }
+        });
         input.setOnAction(event -> {
             if (!isRefreshing && input.getValue() != null) {
                 model.write(field, input.getValue());

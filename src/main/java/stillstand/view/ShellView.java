@@ -120,13 +120,12 @@ final class ShellView extends BorderPane {
                     .flatMap(settings -> settings.value("title"))
                     .orElse("A study without title"));
             title.setTooltip(new Tooltip(folder));
+            String where =
+                    model.isPassingCopy() ? "a passing copy" : "in " + document.folder().getFileName();
             state.setText(
                     document.isReadOnly()
                             ? "for reading alone"
-                            : (model.isPassingCopy() ? "a passing copy" : "") + (document.isEdited() ? " edited" : ""));
-            if (state.getText().isEmpty()) {
-                state.setText("saved in " + document.folder().getFileName());
-            }
+                            : where + (document.isEdited() ? ", edits not saved" : ", saved"));
         });
     }
 
