@@ -48,6 +48,11 @@ public final class SitePreview {
         return study.settings().indicativeRange();
     }
 
+    /** Whether the site runs under more accounts of sea level than the first. */
+    public boolean isOfFirstCurveAlone() {
+        return plan.seaLevel(study).size() > 1;
+    }
+
     /** Why there can be no preview; empty where there can. */
     public Optional<String> whyNot() {
         if (plan.site().levels().stream().noneMatch(level -> FlightSetup.takesPart(level.formsAt()))) {
