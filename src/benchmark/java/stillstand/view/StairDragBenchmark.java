@@ -116,7 +116,7 @@ public final class StairDragBenchmark {
                 site.own());
         return new Study(
                 demo.settings(),
-                List.of(new SitePlan(ten, plan.prior(), plan.localSeaLevel())),
+                List.of(new SitePlan(ten, plan.prior(), plan.seaLevel())),
                 demo.seaLevel(),
                 demo.warnings(),
                 demo.ledger(),
