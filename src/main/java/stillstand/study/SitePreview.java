@@ -21,7 +21,7 @@ public final class SitePreview {
     private SitePreview(Study study, SitePlan plan) {
         this.study = study;
         this.plan = plan;
-        SeaLevelCase sea = plan.seaLevel(study).get(0);
+        SeaLevelCase sea = plan.seaLevel().get(0);
         this.basis = new SeaLevelBasis(sea.id(), sea.curve(), sea.highstands());
     }
 
@@ -46,6 +46,11 @@ public final class SitePreview {
     /** What an indicative range means in the study. */
     public IndicativeRule indicativeRange() {
         return study.settings().indicativeRange();
+    }
+
+    /** Whether the site runs under more accounts of sea level than the first. */
+    public boolean isOfFirstCurveAlone() {
+        return plan.seaLevel().size() > 1;
     }
 
     /** Why there can be no preview; empty where there can. */

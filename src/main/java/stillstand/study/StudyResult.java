@@ -4,6 +4,8 @@ import java.util.List;
 import java.util.Optional;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputWarning;
+import stillstand.sensitivity.CurveChoice;
+import stillstand.sensitivity.CurveEvidence;
 import stillstand.uplift.BetweenLevels;
 import stillstand.uplift.FlightResult;
 import stillstand.uplift.ImpliedSeaLevel;
@@ -22,6 +24,8 @@ import stillstand.uplift.LevelResidual;
  * @param intervals rates between levels of a site
  * @param impliedSeaLevel sea level that dated levels imply, given the uplift of the others
  * @param residuals measured against predicted heights of the flights
+ * @param curveChoice what each of several curves makes of each level and flight, beside their mixtures
+ * @param curveEvidence what the flights of a region together say of the curves
  * @param warnings what was odd in the input
  * @param failures sites that could not be done
  * @param ledger what it rests on
@@ -35,6 +39,8 @@ public record StudyResult(
         List<BetweenLevels> intervals,
         List<ImpliedSeaLevel> impliedSeaLevel,
         List<LevelResidual> residuals,
+        List<CurveChoice> curveChoice,
+        List<CurveEvidence> curveEvidence,
         List<InputWarning> warnings,
         List<Failure> failures,
         List<Assumption> ledger) {
@@ -45,6 +51,8 @@ public record StudyResult(
         intervals = List.copyOf(intervals);
         impliedSeaLevel = List.copyOf(impliedSeaLevel);
         residuals = List.copyOf(residuals);
+        curveChoice = List.copyOf(curveChoice);
+        curveEvidence = List.copyOf(curveEvidence);
         warnings = List.copyOf(warnings);
         failures = List.copyOf(failures);
         ledger = List.copyOf(ledger);
@@ -61,6 +69,8 @@ public record StudyResult(
                 intervals,
                 impliedSeaLevel,
                 residuals,
+                curveChoice,
+                curveEvidence,
                 warnings,
                 failures,
                 ledger);

@@ -18,7 +18,7 @@ import stillstand.uncertainty.Interval;
  * @param unmatched for each level, the probability that it is no shoreline
  */
 public record FlightPreview(Rate rate, List<FlightResult.Pairing> pairings, List<FlightResult.Unmatched> unmatched) {
-    private static final int RATES = 160;
+    private static final int RATES = 300;
     private static final double LEAST_PROBABILITY = 1e-3;
     /** Rates of less weight than this change no pairing that can be seen. */
     private static final double LEAST_WEIGHT = 1e-4;

@@ -38,8 +38,9 @@ final class StairLenses {
                                 Wording.number(String.format(Locale.ROOT, "%.2f", region.low())),
                                 Wording.number(String.format(Locale.ROOT, "%.2f", region.high())),
                                 flight.get().weights95().get(i),
-                                within.isPresent() ? " (lines by preview)" : ""),
-                        within.map(found -> picture.links(found.pairings())),
+                                within.isPresent() ? " (lines by preview)" : " (run again to see its lines)"),
+                        Optional.of(within.map(found -> picture.links(found.pairings()))
+                                .orElse(List.of())),
                         Optional.of((region.low() + region.high()) / 2)));
             }
             lenses.add(mostProbable(picture, flight.get().mostProbable()));

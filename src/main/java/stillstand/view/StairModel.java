@@ -374,13 +374,22 @@ public final class StairModel {
                 return "Every level is tied to one highstand: a run gives each its own rate and matches no flight.";
             }
             return preview.get()
-                    .map(found -> "Preview, not the answer: " + Wording.rate(found.rate()) + " m/kyr, 95 % "
-                            + Wording.interval95(found.rate()) + ". Run for the answer.")
+                    .map(this::previewed)
                     .orElse(isPreviewing.get() ? "Preview …" : "No rate of the prior can have left these pairings.");
         }
         return flight().map(flight -> "Answer of the last run: " + Wording.rate(flight.rate()) + " m/kyr, 95 % "
-                        + Wording.interval95(flight.rate()) + ".")
+                        + Wording.interval95(flight.rate()) + "."
+                        + (flight.model().equals(FlightResult.CONSTANT)
+                                ? ""
+                                : " Its rate changes with time (" + flight.model() + "); a slid rate does not."))
                 .orElse("No flight was matched here: each level stands for itself.");
+    }
+
+    private String previewed(FlightPreview found) {
+        boolean first = tries.map(SitePreview::isOfFirstCurveAlone).orElse(false);
+        String under = first ? " under " + tries.orElseThrow().basis().id() + " alone" : "";
+        return "Preview, not the answer" + under + ": " + Wording.rate(found.rate()) + " m/kyr, 95 % "
+                + Wording.interval95(found.rate()) + ". Run for the answer.";
     }
 
     /** What a line says. */

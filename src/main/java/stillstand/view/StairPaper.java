@@ -202,8 +202,9 @@ final class StairPaper extends Region {
         Optional<Mark> level = scale.levelAt(x, y);
         Optional<Link> preview = scale.linkAt(x, y, model.previewLinks());
         Optional<Link> link = preview.or(() -> scale.linkAt(x, y, model.answerLinks()));
-        String reading = stand.map(StairPaper::reading)
-                .or(() -> level.map(StairPaper::reading))
+        String reading = stand.map(StairReadings::stand)
+                .or(() -> beside(x, y))
+                .or(() -> level.map(StairReadings::level))
                 .or(() -> link.map(found -> model.reading(found, preview.isPresent())))
                 .orElseGet(() -> x > scale.left && x < scale.present && y > scale.top && y < scale.bottom
                         ? StairReadings.place(model.pictureProperty().get(), scale.ageKaAt(x), scale.metresAt(y))
@@ -216,12 +217,22 @@ final class StairPaper extends Region {
                 Optional.empty()));
     }
 
-    private static String reading(Stand stand) {
-        return StairReadings.stand(stand);
-    }
-
-    private static String reading(Mark level) {
-        return StairReadings.level(level);
+    /** What stands at the wall beside the levels: predicted steps, and shorelines that no level records. */
+    private Optional<String> beside(double x, double y) {
+        if (x < scale.present - 5 || x > scale.profileLeft) {
+            return Optional.empty();
+        }
+        Optional<String> lost = x > scale.present + 5
+                ? Optional.empty()
+                : model.pictureProperty().get().lost().stream()
+                        .filter(fate -> Math.abs(scale.y(fate.heightMetres()) - y) < 4)
+                        .findFirst()
+                        .map(StairReadings::lost);
+        return lost.or(() -> model.predictedProperty().get().stream()
+                .flatMap(stair -> stair.steps().stream())
+                .filter(step -> step.ageKa() <= scale.oldestKa && Math.abs(scale.y(step.heightMetres()) - y) < 5)
+                .findFirst()
+                .map(StairReadings::step));
     }
 
     private void press(MouseEvent event) {
@@ -314,7 +325,7 @@ final class StairPaper extends Region {
                     .get()
                     .stand(stage)
                     .filter(stand -> code == KeyCode.LEFT || code == KeyCode.RIGHT)
-                    .map(StairPaper::reading)
+                    .map(StairReadings::stand)
                     .orElse(""));
             groundChanged();
         }

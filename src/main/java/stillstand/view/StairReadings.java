@@ -4,6 +4,8 @@ import java.util.Comparator;
 import java.util.Locale;
 import stillstand.report.Wording;
 import stillstand.study.StudyResult.CurvePoint;
+import stillstand.uplift.FlightResult.Fate;
+import stillstand.uplift.PredictedStair;
 import stillstand.view.StairPicture.Mark;
 import stillstand.view.StairPicture.Stand;
 
@@ -23,6 +25,29 @@ final class StairReadings {
         return format(
                 "Level %s: its sea stands at %.1f m today (95 %%: %.1f to %.1f m)",
                 level.name(), level.metres(), level.interval95().low(), level.interval95().high());
+    }
+
+    /** A step that a slid rate predicts. */
+    static String step(PredictedStair.Step step) {
+        return format(
+                "Predicted by the slid rate: %s at %.1f ± %.1f m (1 sigma)%s",
+                step.stage(),
+                step.heightMetres(),
+                step.heightSigmaMetres(),
+                step.overrunBy().map(by -> ", overrun by " + by).orElse(""));
+    }
+
+    /** What became of a shoreline that no level records. */
+    static String lost(Fate fate) {
+        return format(
+                "%s would stand at %.0f ± %.0f m: recorded %.2f, unseen %.2f, re-occupied %.2f, outside the survey %.2f",
+                fate.highstand(),
+                fate.heightMetres(),
+                fate.heightSigmaMetres(),
+                fate.recorded(),
+                fate.unseen(),
+                fate.reoccupied(),
+                fate.outside());
     }
 
     /** An age, a height, and the sea of that age. */

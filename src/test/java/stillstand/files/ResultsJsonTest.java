@@ -32,7 +32,7 @@ class ResultsJsonTest {
     void keysAreThoseOfTheFormat() {
         JsonNode tree = new JsonMapper().readTree(TEXT);
         assertEquals(
-                "provenance sea_level levels waiting flights intervals implied_sea_level residuals warnings failures ledger",
+                "provenance sea_level levels waiting flights intervals implied_sea_level residuals curve_choice curve_evidence warnings failures ledger",
                 keys(tree));
         assertEquals(
                 "site model rate probability_uplift regions68 regions95 weights68 weights95 segments pairings unmatched"
@@ -116,6 +116,8 @@ class ResultsJsonTest {
                 good.intervals(),
                 good.impliedSeaLevel(),
                 good.residuals(),
+                good.curveChoice(),
+                good.curveEvidence(),
                 good.warnings(),
                 good.failures(),
                 good.ledger());

@@ -91,12 +91,13 @@ final class InventedStair {
                         stand("9e", 328, -4)),
                 SharedErrors.NONE,
                 List.of());
+        List<SeaLevelCase> sea = List.of(new SeaLevelCase("made-up-table", 1, Optional.empty(), table));
         return new Study(
                 SampleStudy.settings(),
                 List.of(
-                        new SitePlan(site, CauchyPrior.DEFAULT, Optional.empty()),
-                        new SitePlan(unsurveyed, CauchyPrior.DEFAULT, Optional.empty())),
-                List.of(new SeaLevelCase("made-up-table", 1, Optional.empty(), table)),
+                        new SitePlan(site, CauchyPrior.DEFAULT, sea),
+                        new SitePlan(unsurveyed, CauchyPrior.DEFAULT, sea)),
+                sea,
                 List.of(),
                 SampleStudy.result().ledger(),
                 SampleStudy.result().provenance().inputs());
@@ -168,6 +169,8 @@ final class InventedStair {
                         new LevelResidual(SITE, "P2", 40.6, 40.6, 3),
                         new LevelResidual(SITE, "P3", 68.8, 68.8, 3),
                         new LevelResidual(SITE, "P4", 99.5, 99.5, 3)),
+                List.of(),
+                List.of(),
                 base.warnings(),
                 base.failures(),
                 base.ledger());
