@@ -79,12 +79,21 @@ public final class SettingsText {
         return with(keyPath, text.isEmpty() ? Optional.empty() : Optional.of(node(text)));
     }
 
-    /** The text with the curves of a study and their weights in place of those before. */
+    /**
+     * The text with the curves of a study and their weights in place of those before; a blank weight is not stated. What else
+     * the text says of a curve that stays, stays.
+     */
     public String withCurves(Map<String, String> weights) {
         ArrayNode list = JsonNodeFactory.instance.arrayNode();
+        JsonNode before = root.path("sea_level").path("curves");
         weights.forEach((id, weight) -> {
             ObjectNode curve = list.addObject();
             curve.put("id", id);
+            before.values().stream()
+                    .filter(item -> item.path("id").stringValue("").equals(id))
+                    .findFirst()
+                    .ifPresent(item -> item.properties().forEach(key -> curve.set(key.getKey(), key.getValue())));
+            curve.remove("weight");
             if (!weight.isBlank()) {
                 curve.set("weight", node(weight.strip()));
             }

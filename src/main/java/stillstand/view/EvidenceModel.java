@@ -10,6 +10,7 @@ import javafx.beans.property.ReadOnlyObjectProperty;
 import javafx.beans.property.ReadOnlyObjectWrapper;
 import javafx.beans.property.SimpleObjectProperty;
 import stillstand.files.Sheet;
+import stillstand.files.StudyDraft;
 import stillstand.files.StudyJson;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.InputWarning;
@@ -18,8 +19,11 @@ import stillstand.view.StudyDocument.Checked;
 
 /** The evidence of a study: its settings and tables, and the list of everything wrong or odd in them. */
 final class EvidenceModel {
-    /** The parts that can be looked at, in order. */
-    static final List<String> PARTS = List.of(StudyJson.NAME, "sites.csv", "levels.csv", "samples.csv");
+    /** The parts there may be, in order. */
+    static final List<String> PARTS = StudyDraft.NAMES;
+
+    /** Parts that are offered only where a study has them. */
+    private static final List<String> SELDOM = List.of("points.csv", "gia.csv");
 
     private final StudyDocument document;
     private final SettingsModel settings;
@@ -104,6 +108,11 @@ final class EvidenceModel {
             return Optional.empty();
         }
         return Optional.of(grids.computeIfAbsent(table, name -> new GridModel(document, name)));
+    }
+
+    /** Whether a part is worth a button. */
+    boolean isOffered(String part) {
+        return !SELDOM.contains(part) || hasText(part);
     }
 
     /** Whether the study has a file of this name that can be read as text. */

@@ -61,6 +61,7 @@ final class EvidenceView extends BorderPane {
         setCenter(split);
         model.partProperty().addListener((source, before, after) -> show());
         model.document().draftProperty().addListener((source, before, after) -> {
+            showParts();
             if (isOutdated()) {
                 show();
             }
@@ -68,7 +69,15 @@ final class EvidenceView extends BorderPane {
         model.findingsProperty().addListener((source, before, after) -> showFindings());
         model.wantedKeyProperty().addListener((source, before, after) -> after.ifPresent(settings::goTo));
         show();
+        showParts();
         showFindings();
+    }
+
+    private void showParts() {
+        parts.forEach((part, button) -> {
+            button.setVisible(model.isOffered(part));
+            button.setManaged(model.isOffered(part));
+        });
     }
 
     private HBox switcher() {

@@ -54,6 +54,15 @@ class SettingsTextTest {
     }
 
     @Test
+    void whatElseIsSaidOfACurveStays() {
+        SettingsText settings =
+                at("{\"sea_level\": {\"curves\": [{\"id\": \"b\", \"weight\": 2, \"overrides\": \"none\"}]}}");
+        assertEquals(
+                Optional.of("{\"id\":\"b\",\"overrides\":\"none\"}"),
+                at(settings.withCurves(new TreeMap<>(Map.of("a", "", "b", "")))).value("sea_level.curves[1]"));
+    }
+
+    @Test
     void brokenJsonIsNoSettings() {
         assertFalse(SettingsText.parse("{\"title\": ").isPresent());
         assertFalse(SettingsText.parse("[1]").isPresent());
