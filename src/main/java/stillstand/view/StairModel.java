@@ -3,7 +3,6 @@ package stillstand.view;
 import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.concurrent.Executor;
@@ -19,7 +18,6 @@ import javafx.beans.property.SimpleDoubleProperty;
 import javafx.collections.FXCollections;
 import javafx.collections.ObservableList;
 import stillstand.figure.SiteView;
-import stillstand.report.Wording;
 import stillstand.shoreline.StageChoice;
 import stillstand.study.SitePlan;
 import stillstand.study.SitePreview;
@@ -374,40 +372,10 @@ public final class StairModel {
                 return "Every level is tied to one highstand: a run gives each its own rate and matches no flight.";
             }
             return preview.get()
-                    .map(this::previewed)
+                    .map(found -> StairReadings.previewed(found, tries.get()))
                     .orElse(isPreviewing.get() ? "Preview …" : "No rate of the prior can have left these pairings.");
         }
-        return flight().map(flight -> "Answer of the last run: " + Wording.rate(flight.rate()) + " m/kyr, 95 % "
-                        + Wording.interval95(flight.rate()) + "."
-                        + (flight.model().equals(FlightResult.CONSTANT)
-                                ? ""
-                                : " Its rate changes with time (" + flight.model() + "); a slid rate does not."))
-                .orElse("No flight was matched here: each level stands for itself.");
-    }
-
-    private String previewed(FlightPreview found) {
-        boolean first = tries.map(SitePreview::isOfFirstCurveAlone).orElse(false);
-        String under = first ? " under " + tries.orElseThrow().basis().id() + " alone" : "";
-        return "Preview, not the answer" + under + ": " + Wording.rate(found.rate()) + " m/kyr, 95 % "
-                + Wording.interval95(found.rate()) + ". Run for the answer.";
-    }
-
-    /** What a line says. */
-    public String reading(Link link, boolean isPreview) {
-        String slope = String.format(
-                Locale.ROOT,
-                "(%.1f − %s m) in %.1f kyr = %s m/kyr",
-                link.metres(),
-                link.seaMetres() < 0
-                        ? String.format(Locale.ROOT, "(−%.1f)", -link.seaMetres())
-                        : String.format(Locale.ROOT, "%.1f", link.seaMetres()),
-                link.ageKa(),
-                Wording.number(String.format(Locale.ROOT, "%.3f", link.rateMetresPerKyr())));
-        if (link.stage().isEmpty()) {
-            return link.level() + " at its own age: " + slope;
-        }
-        return (isPreview ? "Preview: " : "") + link.level() + " records " + link.stage() + " with probability "
-                + String.format(Locale.ROOT, "%.2f", link.probability()) + ": " + slope;
+        return flight().map(StairReadings::answered).orElse("No flight was matched here: each level stands for itself.");
     }
 
     /** Lines of the preview; empty where there is none. */
@@ -424,27 +392,7 @@ public final class StairModel {
 
     /** How the predicted steps miss the levels; empty where there are none. */
     public Optional<String> miss() {
-        List<StairPicture.Mark> levels =
-                picture.get().levels().stream().filter(StairPicture.Mark::takesPart).toList();
-        List<PredictedStair.Step> standing = predicted.get().stream()
-                .flatMap(stair -> stair.steps().stream())
-                .filter(step -> step.overrunBy().isEmpty())
-                .toList();
-        if (levels.isEmpty() || standing.isEmpty()) {
-            return Optional.empty();
-        }
-        double squares = 0;
-        for (StairPicture.Mark level : levels) {
-            double nearest = standing.stream()
-                    .mapToDouble(step -> Math.abs(step.heightMetres() - level.metres()))
-                    .min()
-                    .orElseThrow();
-            squares += nearest * nearest / levels.size();
-        }
-        return Optional.of(String.format(
-                Locale.ROOT,
-                "The nearest steps miss the levels by %.1f m (root mean square). A good fit alone says little.",
-                Math.sqrt(squares)));
+        return predicted.get().flatMap(stair -> StairReadings.miss(picture.get(), stair));
     }
 
     /** All that is known of the selected level; empty where none is. */

@@ -205,7 +205,7 @@ final class StairPaper extends Region {
         String reading = stand.map(StairReadings::stand)
                 .or(() -> beside(x, y))
                 .or(() -> level.map(StairReadings::level))
-                .or(() -> link.map(found -> model.reading(found, preview.isPresent())))
+                .or(() -> link.map(found -> StairReadings.link(found, preview.isPresent())))
                 .orElseGet(() -> x > scale.left && x < scale.present && y > scale.top && y < scale.bottom
                         ? StairReadings.place(model.pictureProperty().get(), scale.ageKaAt(x), scale.metresAt(y))
                         : "");

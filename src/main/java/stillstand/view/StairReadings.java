@@ -1,17 +1,25 @@
 package stillstand.view;
 
+import java.util.Arrays;
 import java.util.Comparator;
+import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import stillstand.report.Wording;
+import stillstand.study.SitePreview;
 import stillstand.study.StudyResult.CurvePoint;
+import stillstand.uplift.FlightPreview;
+import stillstand.uplift.FlightResult;
 import stillstand.uplift.FlightResult.Fate;
 import stillstand.uplift.PredictedStair;
+import stillstand.view.StairPicture.Link;
 import stillstand.view.StairPicture.Mark;
 import stillstand.view.StairPicture.Stand;
 
-/** What the Stair says of the things under the pointer. */
+/** What the Stair says: of its answer, of a preview, of the things under the pointer. */
 final class StairReadings {
     private static final double STEP_KA = 1.5;
+    private static final String HYPHEN = "\u2010";
 
     private StairReadings() {}
 
@@ -25,6 +33,57 @@ final class StairReadings {
         return format(
                 "Level %s: its sea stands at %.1f m today (95 %%: %.1f to %.1f m)",
                 level.name(), level.metres(), level.interval95().low(), level.interval95().high());
+    }
+
+    /** What a line says. */
+    static String link(Link link, boolean isPreview) {
+        String sea = link.seaMetres() < 0 ? format("(%.1f)", link.seaMetres()) : format("%.1f", link.seaMetres());
+        String slope = format("(%.1f − %s m) in %.1f kyr = ", link.metres(), sea, link.ageKa())
+                + format("%.3f m/kyr", link.rateMetresPerKyr());
+        if (link.stage().isEmpty()) {
+            return link.level() + " at its own age: " + slope;
+        }
+        return (isPreview ? "Preview: " : "") + link.level() + " records " + link.stage() + " with probability "
+                + format("%.2f", link.probability()) + ": " + slope;
+    }
+
+    /** What a run found. */
+    static String answered(FlightResult flight) {
+        return "Answer of the last run: " + Wording.rate(flight.rate()) + " m/kyr, 95 % "
+                + Wording.interval95(flight.rate()) + "."
+                + (flight.model().equals(FlightResult.CONSTANT)
+                        ? ""
+                        : " Its rate changes with time (" + flight.model() + "); a slid rate does not.");
+    }
+
+    /** What a preview found, and that it is one. */
+    static String previewed(FlightPreview found, SitePreview of) {
+        String under = of.isOfFirstCurveAlone() ? " under " + of.basis().id() + " alone" : "";
+        return "Preview, not the answer" + under + ": " + Wording.rate(found.rate()) + " m/kyr, 95 % "
+                + Wording.interval95(found.rate()) + ". Run for the answer.";
+    }
+
+    /** How far predicted steps are from the levels; empty where there are none to compare. */
+    static Optional<String> miss(StairPicture picture, PredictedStair stair) {
+        List<Mark> levels =
+                picture.levels().stream().filter(Mark::takesPart).toList();
+        double[] standing = stair.steps().stream()
+                .filter(step -> step.overrunBy().isEmpty())
+                .mapToDouble(PredictedStair.Step::heightMetres)
+                .toArray();
+        if (levels.isEmpty() || standing.length == 0) {
+            return Optional.empty();
+        }
+        double squares = 0;
+        for (Mark level : levels) {
+            double nearest = Arrays.stream(standing)
+                    .map(metres -> Math.abs(metres - level.metres()))
+                    .min()
+                    .orElseThrow();
+            squares += nearest * nearest / levels.size();
+        }
+        return Optional.of(format("The nearest steps miss the levels by %.1f m (root mean square). ", Math.sqrt(squares))
+                + "A good fit alone says little.");
     }
 
     /** A step that a slid rate predicts. */
@@ -71,6 +130,8 @@ final class StairReadings {
     }
 
     private static String format(String text, Object... values) {
-        return Wording.number(String.format(Locale.ROOT, text.replace("-", "\u0001"), values)).replace('\u0001', '-');
+        // hyphens of the sentence itself stay hyphens, those of numbers become minus signs
+        return Wording.number(String.format(Locale.ROOT, text.replace("-", HYPHEN), values))
+                .replace(HYPHEN, "-");
     }
 }

@@ -52,7 +52,7 @@ class StairModelTest {
         assertEquals(0.5, line.rateMetresPerKyr(), 1e-12); // (40.6 - -9.4) m in 100 kyr
         assertEquals(
                 "P2 records 5c with probability 0.70: (40.6 − (−9.4) m) in 100.0 kyr = 0.500 m/kyr",
-                model.reading(line, false));
+                StairReadings.link(line, false));
         assertEquals(List.of("9e"), model.pictureProperty().get().lost().stream().map(f -> f.highstand()).toList());
     }
 
@@ -230,6 +230,14 @@ class StairModelTest {
                 model.answerLinks().stream().map(Link::level).toList());
         model.step(1);
         assertEquals(5, model.answerLinks().size());
+    }
+
+    @Test
+    void ofAChangedStudyAPossibleCorrelationHasNoLines() {
+        model.show(Shown.of(InventedStair.study(StageChoice.pinnedTo("5a")), InventedStair.result(), true));
+        model.step(1);
+        assertTrue(model.lensProperty().get().title().endsWith("(run again to see its lines)"));
+        assertEquals(List.of(), model.answerLinks());
     }
 
     @Test
