@@ -11,6 +11,14 @@ public final class Main {
     /** Executes a command line and ends the process with its exit code. */
     public static void main(String[] arguments) {
         System.setProperty("java.awt.headless", "true"); // figures are drawn without a display
-        System.exit(Commands.execute(Workshop.ofProcess(), List.of(new WindowCommand()), arguments));
+        String[] asked = arguments.length == 0 && isOpenedByHand() ? new String[] {"window"} : arguments;
+        System.exit(Commands.execute(Workshop.ofProcess(), List.of(new WindowCommand()), asked));
+    }
+
+    /** Whether the jar was opened from a desktop, where nobody could read how to use the commands. */
+    private static boolean isOpenedByHand() {
+        boolean hasDisplay =
+                !System.getProperty("os.name", "").startsWith("Linux") || System.getenv("DISPLAY") != null;
+        return System.console() == null && hasDisplay;
     }
 }

@@ -182,10 +182,13 @@ final class EvidenceView extends BorderPane {
         MenuButton add = new MenuButton("Add column");
         add.setId("add-column");
         add.setMnemonicParsing(false);
-        add.setOnShowing(event -> add.getItems()
-                .setAll(cells.columnsToAdd().stream()
-                        .map(header -> item(header, () -> cells.addColumn(header)))
-                        .toList()));
+        add.setOnShowing(event -> {
+            add.getItems()
+                    .setAll(cells.columnsToAdd().stream()
+                            .map(header -> item(header, () -> cells.addColumn(header)))
+                            .toList());
+            add.getItems().add(item("x_ and a name of your own…", shown::addOwnColumn));
+        });
         add.getItems().add(new MenuItem());
         tools.getChildren()
                 .addAll(

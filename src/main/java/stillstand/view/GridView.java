@@ -16,7 +16,6 @@ import javafx.scene.control.Tooltip;
 import javafx.scene.control.skin.VirtualFlow;
 import javafx.scene.input.Clipboard;
 import javafx.scene.input.ClipboardContent;
-import javafx.scene.input.KeyCode;
 import javafx.scene.input.KeyEvent;
 import javafx.scene.layout.BorderPane;
 import stillstand.files.Sheet;
@@ -176,25 +175,25 @@ final class GridView extends BorderPane {
         boolean isCommand = event.isShortcutDown();
         int page = Math.max(1, (int) (table.getHeight() / ROW_HEIGHT) - 2);
         CellRange at = model.chosen();
-        Runnable action =
+        Optional<Runnable> action =
                 switch (event.getCode()) {
-                    case UP -> () -> model.move(isCommand ? -at.row() : -1, 0, isShift);
-                    case DOWN -> () -> model.move(isCommand ? model.rowCount() : 1, 0, isShift);
-                    case LEFT -> () -> model.move(0, isCommand ? -at.column() : -1, isShift);
-                    case RIGHT -> () -> model.move(0, isCommand ? shownColumns : 1, isShift);
-                    case PAGE_UP -> () -> model.move(-page, 0, isShift);
-                    case PAGE_DOWN -> () -> model.move(page, 0, isShift);
-                    case HOME -> () -> model.move(isCommand ? -at.row() : 0, -at.column(), isShift);
-                    case END -> () -> model.move(isCommand ? model.rowCount() : 0, shownColumns, isShift);
-                    case DELETE, BACK_SPACE -> model::clear;
-                    case F2, ENTER -> () -> edit(Optional.empty());
-                    case A -> isCommand ? model::chooseAll : null;
-                    case SPACE -> isShift ? () -> model.chooseRow(at.row()) : null;
-                    default -> null;
+                    case UP -> Optional.of(() -> model.move(isCommand ? -at.row() : -1, 0, isShift));
+                    case DOWN -> Optional.of(() -> model.move(isCommand ? model.rowCount() : 1, 0, isShift));
+                    case LEFT -> Optional.of(() -> model.move(0, isCommand ? -at.column() : -1, isShift));
+                    case RIGHT -> Optional.of(() -> model.move(0, isCommand ? shownColumns : 1, isShift));
+                    case PAGE_UP -> Optional.of(() -> model.move(-page, 0, isShift));
+                    case PAGE_DOWN -> Optional.of(() -> model.move(page, 0, isShift));
+                    case HOME -> Optional.of(() -> model.move(isCommand ? -at.row() : 0, -at.column(), isShift));
+                    case END -> Optional.of(() -> model.move(isCommand ? model.rowCount() : 0, shownColumns, isShift));
+                    case DELETE, BACK_SPACE -> Optional.of(model::clear);
+                    case F2, ENTER -> isCommand ? Optional.empty() : Optional.of(() -> edit(Optional.empty()));
+                    case A -> isCommand ? Optional.of(model::chooseAll) : Optional.empty();
+                    case SPACE -> isShift ? Optional.of(() -> model.chooseRow(at.row())) : Optional.empty();
+                    default -> Optional.empty();
                 };
-        if (action != null && !event.isAltDown()) {
+        if (action.isPresent() && !event.isAltDown()) {
             event.consume();
-            action.run();
+            action.get().run();
         }
     }
 
@@ -253,12 +252,23 @@ final class GridView extends BorderPane {
     }
 
     void renameColumn(int place) {
-        TextInputDialog dialog = new TextInputDialog(model.header(place));
+        askName("Rename a column", "Name of column " + (place + 1), model.header(place))
+                .ifPresent(name -> model.renameColumn(place, name));
+    }
+
+    /** A column that Stillstand carries along and never reads. */
+    void addOwnColumn() {
+        askName("A column of your own", "Its name; x_ at its start says that it is yours", "x_")
+                .ifPresent(model::addColumn);
+    }
+
+    private Optional<String> askName(String title, String question, String first) {
+        TextInputDialog dialog = new TextInputDialog(first);
         dialog.initOwner(getScene().getWindow());
-        dialog.setTitle("Rename a column");
+        dialog.setTitle(title);
         dialog.setHeaderText(null);
-        dialog.setContentText("Name of column " + (place + 1));
-        dialog.showAndWait().ifPresent(name -> model.renameColumn(place, name));
+        dialog.setContentText(question);
+        return dialog.showAndWait();
     }
 
     private ContextMenu contextMenu() {

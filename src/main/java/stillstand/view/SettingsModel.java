@@ -10,6 +10,7 @@ import java.util.stream.Stream;
 import stillstand.files.SettingsText;
 import stillstand.files.StudyDraft;
 import stillstand.files.StudyJson;
+import stillstand.ledger.Assumption;
 import stillstand.ledger.InputProblem;
 import stillstand.study.Library;
 
@@ -20,6 +21,7 @@ final class SettingsModel {
     static final String PRIOR = "Prior of the rate";
     static final String MATCHING = "Matching";
 
+    private static final String PRIOR_KIND = "rate.prior.kind";
     private static final String CURVES = "sea_level.curves";
 
     private final StudyDocument document;
@@ -77,7 +79,7 @@ final class SettingsModel {
                 choice(SEA_LEVEL, "sea_level.rezero", "Move the curve to 0 today", flags),
                 choice(
                         PRIOR,
-                        "rate.prior.kind",
+                        PRIOR_KIND,
                         "Kind",
                         List.of("cauchy", "half-cauchy", "log-uniform", "normal")),
                 number(PRIOR, "rate.prior.location", "Location, m/kyr"),
@@ -115,6 +117,17 @@ final class SettingsModel {
     String value(Field field) {
         return settings(document.draft())
                 .flatMap(settings -> settings.value(field.keyPath))
+                .orElse("");
+    }
+
+    /** What holds where a field is blank, as far as the ledger of the study says it; "" where it does not. */
+    String defaultOf(Field field) {
+        return document.checked().study().stream()
+                .flatMap(study -> study.ledger().stream())
+                .filter(line -> line.assumption().equals(field.keyPath + " is not stated")
+                        || (field.keyPath.equals(PRIOR_KIND) && line.assumption().equals("rate.prior is not stated")))
+                .map(Assumption::value)
+                .findFirst()
                 .orElse("");
     }
 

@@ -126,9 +126,14 @@ final class SettingsView extends BorderPane {
 
     private TextField textField(Field field) {
         TextField input = new TextField();
-        input.setPromptText(DEFAULT);
+        refreshers.add(() -> input.setPromptText(prompt(field)));
         commitsBy(input, () -> model.value(field), typed -> model.write(field, typed));
         return input;
+    }
+
+    private String prompt(Field field) {
+        String value = model.defaultOf(field);
+        return value.isEmpty() ? DEFAULT : DEFAULT + ": " + value;
     }
 
     /** What is typed counts on Enter and when the field is left; Escape takes it back. */
@@ -165,8 +170,8 @@ final class SettingsView extends BorderPane {
         ComboBox<String> input = new ComboBox<>();
         input.getItems().add("");
         input.getItems().addAll(field.words());
-        input.setPromptText(DEFAULT);
         refreshers.add(() -> {
+            input.setPromptText(prompt(field));
             String value = model.value(field);
             if (value.isEmpty()) {
                 input.getSelectionModel().clearSelection(); // shows that the default holds

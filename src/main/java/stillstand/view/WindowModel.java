@@ -191,7 +191,7 @@ final class WindowModel {
                 StudyStore store = opened.value().get();
                 StudyDraft read = store.read();
                 Optional<StudyDraft> recovery = store.recovery();
-                Optional<StudyResult> earlier = earlier(store.results());
+                Optional<Loaded<StudyResult>> earlier = earlier(store.results());
                 Library library = reader.libraryOf(folder);
                 foreground.execute(() -> become(store, read, recovery, earlier, library, isCopy));
             } catch (IOException e) {
@@ -200,11 +200,11 @@ final class WindowModel {
         });
     }
 
-    /** Results of an earlier run; what cannot be read is no result, and the next run replaces it. */
-    private static Optional<StudyResult> earlier(Path results) throws IOException {
+    /** Results of an earlier run, where there are any. */
+    private static Optional<Loaded<StudyResult>> earlier(Path results) throws IOException {
         Path file = results.resolve(ResultsJson.FILE);
         return Files.isRegularFile(file)
-                ? ResultsJson.read(Files.readString(file, StandardCharsets.UTF_8)).value()
+                ? Optional.of(ResultsJson.read(new String(Files.readAllBytes(file), StandardCharsets.UTF_8)))
                 : Optional.empty();
     }
 
@@ -212,7 +212,7 @@ final class WindowModel {
             StudyStore store,
             StudyDraft read,
             Optional<StudyDraft> recovery,
-            Optional<StudyResult> earlier,
+            Optional<Loaded<StudyResult>> earlier,
             Library library,
             boolean isCopy) {
         notices.clear();
@@ -221,7 +221,14 @@ final class WindowModel {
         StudyDocument opened = new StudyDocument(store, read, reader, background, foreground, recovery.isPresent());
         evidence.set(Optional.of(new EvidenceModel(opened, new SettingsModel(opened, library))));
         document.set(Optional.of(opened));
-        run.show(earlier);
+        run.show(earlier.flatMap(Loaded::value));
+        earlier.filter(loaded -> loaded.value().isEmpty())
+                .ifPresent(loaded -> say(new Notice(
+                        "results",
+                        false,
+                        "Earlier results cannot be shown (" + loaded.problems().get(0).message()
+                                + "). The next run replaces them.",
+                        List.of())));
         opened.checkedProperty().addListener((source, before, after) -> refresh());
         opened.changedOnDiskProperty().addListener((source, before, after) -> sayChanged(opened, after));
         opened.troubleProperty().addListener((source, before, after) -> after.ifPresentOrElse(

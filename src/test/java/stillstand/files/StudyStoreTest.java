@@ -54,6 +54,16 @@ class StudyStoreTest {
     }
 
     @Test
+    void folderThatCannotBeWrittenIsReadAlone() throws IOException {
+        Path demo = demo();
+        Files.createDirectory(demo.resolve(".study.stillstand-lock")); // stands in for a disk without permission
+        try (StudyStore store = open(demo)) {
+            assertTrue(store.whyReadOnly().orElseThrow().startsWith("its folder cannot be written"));
+            assertEquals(4, store.read().files().size());
+        }
+    }
+
+    @Test
     void fullDiskLeavesTheOldFiles() throws IOException {
         try (FileSystem small = Jimfs.newFileSystem(
                 Configuration.unix().toBuilder().setBlockSize(512).setMaxSize(20 * 512).build())) {

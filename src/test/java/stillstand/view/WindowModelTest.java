@@ -62,6 +62,16 @@ class WindowModelTest {
     }
 
     @Test
+    void resultsThatCannotBeReadAreSaid() throws IOException {
+        Path study = study();
+        Files.createDirectories(study.resolve("results"));
+        Files.writeString(study.resolve("results/results.json"), "{\"provenance\": {\"version\": \"0.0.1\"}}");
+        window.open(study);
+        assertEquals(List.of("results"), abouts());
+        assertEquals(Optional.empty(), window.shownProperty().get().result());
+    }
+
+    @Test
     void runSavesFirstSoThatResultsAreOfTheFilesBesideThem() throws IOException {
         Path study = study();
         window.open(study);
