@@ -16,7 +16,9 @@ public final class Main {
     }
 
     /** Whether the jar was opened from a desktop, where nobody could read how to use the commands. */
+    @SuppressWarnings("SystemConsoleNull") // the property makes later Javas answer as 17 does
     private static boolean isOpenedByHand() {
+        System.setProperty("jdk.console", "java.base");
         boolean hasDisplay =
                 !System.getProperty("os.name", "").startsWith("Linux") || System.getenv("DISPLAY") != null;
         return System.console() == null && hasDisplay;

@@ -36,9 +36,9 @@ public final class RatesModel {
         /** One level. */
         LEVEL("level"),
         /** One sample read on the curve at its own age. */
-        SAMPLE("at its own age"),
+        SAMPLE("own age"),
         /** The time between two levels. */
-        BETWEEN("between levels");
+        BETWEEN("between");
 
         private final String word;
 

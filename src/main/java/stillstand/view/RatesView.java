@@ -19,6 +19,7 @@ import javafx.scene.control.Label;
 import javafx.scene.control.SelectionMode;
 import javafx.scene.control.TableCell;
 import javafx.scene.control.TableColumn;
+import javafx.scene.control.TableRow;
 import javafx.scene.control.TableView;
 import javafx.scene.input.Clipboard;
 import javafx.scene.input.ClipboardContent;
@@ -39,7 +40,9 @@ import stillstand.view.RatesModel.Row;
 /** All rates in a table that sorts by any column, each with its density on one shared axis. */
 public final class RatesView extends BorderPane {
     private static final String ALL = "all sites";
-    private static final double STRIP = 144;
+    private static final double LEAST_STRIP = 130;
+    private static final double BESIDE_STRIP = 18;
+    private static final double SCROLL_BAR = 18;
     private static final double ROW = 26;
 
     private final RatesModel model;
@@ -47,7 +50,7 @@ public final class RatesView extends BorderPane {
     private final ChoiceBox<String> site = new ChoiceBox<>();
     private final Label status = new Label();
     private final Label staleMark = new Label("OLDER THAN THE STUDY");
-    private final Canvas axis = new Canvas(STRIP, 16);
+    private final Canvas axis = new Canvas(LEAST_STRIP, 16);
     private boolean following;
 
     /** The view of a model. */
@@ -60,6 +63,7 @@ public final class RatesView extends BorderPane {
         table.getSelectionModel().setSelectionMode(SelectionMode.MULTIPLE);
         table.setPlaceholder(new Label("No rates yet: run the study."));
         table.setAccessibleText("Rates of levels and flights");
+        table.setRowFactory(made -> new KindRow());
         table.addEventHandler(KeyEvent.KEY_PRESSED, this::copy);
         setTop(bar());
         setCenter(table);
@@ -111,16 +115,16 @@ public final class RatesView extends BorderPane {
     }
 
     private void columns() {
-        text("Site", Row::site, 112, false);
+        text("Site", Row::site, 126, false);
         text("Rate of", Row::name, 98, false);
-        text("Kind", row -> row.kind().toString(), 118, false);
-        text("Bound, or why none", Row::says, 216, true);
-        number("Median ± sd", Row::median, row -> row.rate().map(Rate::median), 112);
-        number("68 %", Row::interval68, row -> row.rate().map(rate -> rate.shortest68().low()), 104);
-        number("95 %", Row::interval95, row -> row.rate().map(rate -> rate.shortest95().low()), 104);
+        text("Kind", row -> row.kind().toString(), 84, false);
+        text("Bound, or why none", Row::says, 194, true);
+        number("Median", Row::median, row -> row.rate().map(Rate::median), 114);
+        number("68 %", Row::interval68, row -> row.rate().map(rate -> rate.shortest68().low()), 114);
+        number("95 %", Row::interval95, row -> row.rate().map(rate -> rate.shortest95().low()), 114);
         density();
-        text("Highstand", Row::stages, 102, false);
-        number("Age (ka)", Row::ageText, row -> row.age().map(age -> age.median()), 122);
+        text("Highstand", Row::stages, 126, false);
+        number("Age (ka)", Row::ageText, row -> row.age().map(age -> age.median()), 118);
     }
 
     private void text(String name, Function<Row, String> words, double width, boolean wraps) {
@@ -162,9 +166,20 @@ public final class RatesView extends BorderPane {
         head.setContentDisplay(ContentDisplay.GRAPHIC_ONLY);
         head.setAccessibleText("Density, metres per thousand years");
         column.setGraphic(head);
-        column.setPrefWidth(STRIP + 18);
-        column.setMinWidth(STRIP + 18);
-        column.setResizable(false);
+        column.setMinWidth(LEAST_STRIP + BESIDE_STRIP);
+        column.setPrefWidth(LEAST_STRIP + BESIDE_STRIP);
+        column.widthProperty().addListener((property, before, now) -> {
+            axis.setWidth(now.doubleValue() - BESIDE_STRIP);
+            paintAxis();
+            table.refresh();
+        });
+        table.widthProperty().addListener((property, before, now) -> {
+            double others = table.getColumns().stream()
+                    .filter(other -> other != column)
+                    .mapToDouble(TableColumn::getWidth)
+                    .sum();
+            column.setPrefWidth(Math.max(LEAST_STRIP + BESIDE_STRIP, now.doubleValue() - others - SCROLL_BAR));
+        });
         column.setComparator(Comparator.comparingDouble(row ->
                 row.rate().map(rate -> rate.shortest95().width()).orElse(Double.POSITIVE_INFINITY)));
         column.setCellValueFactory(cell -> new ReadOnlyObjectWrapper<>(cell.getValue()));
@@ -184,19 +199,19 @@ public final class RatesView extends BorderPane {
 
     private double x(double rate) {
         Interval range = model.axisProperty().get();
-        return 4 + (STRIP - 8) * (rate - range.low()) / range.width();
+        return 4 + (axis.getWidth() - 8) * (rate - range.low()) / range.width();
     }
 
     private void paintAxis() {
         GraphicsContext g = axis.getGraphicsContext2D();
         Interval range = model.axisProperty().get();
-        g.clearRect(0, 0, STRIP, 16);
+        g.clearRect(0, 0, axis.getWidth(), 16);
         Paint ink = Palette.under(status.getTextFill()).muted();
         g.setFill(ink);
         g.setStroke(ink);
         g.setTextAlign(javafx.scene.text.TextAlignment.CENTER);
         g.setFont(javafx.scene.text.Font.font(10.5));
-        for (double tick : StairScale.ticks(range.low(), range.high(), STRIP, 52)) {
+        for (double tick : StairScale.ticks(range.low(), range.high(), axis.getWidth(), 52)) {
             g.strokeLine(x(tick), 13, x(tick), 16);
             g.fillText(
                     Wording.number(
@@ -206,9 +221,22 @@ public final class RatesView extends BorderPane {
         }
     }
 
+    /** Rows of flights stand out. */
+    private static final class KindRow extends TableRow<Row> {
+        @Override
+        protected void updateItem(Row row, boolean empty) {
+            super.updateItem(row, empty);
+            boolean isFlight = !empty && row != null && row.kind() == RatesModel.Kind.FLIGHT;
+            getStyleClass().remove(Styles.TEXT_BOLD);
+            if (isFlight) {
+                getStyleClass().add(Styles.TEXT_BOLD);
+            }
+        }
+    }
+
     /** A density with its two shortest intervals and its median. */
     private final class DensityCell extends TableCell<Row, Row> {
-        private final Canvas canvas = new Canvas(STRIP, ROW);
+        private final Canvas canvas = new Canvas(LEAST_STRIP, ROW);
 
         DensityCell() {
             setPadding(new Insets(0, 8, 0, 8));
@@ -226,9 +254,10 @@ public final class RatesView extends BorderPane {
         }
 
         private void paint(Rate rate) {
+            canvas.setWidth(axis.getWidth());
             Palette palette = Palette.under(status.getTextFill());
             GraphicsContext g = canvas.getGraphicsContext2D();
-            g.clearRect(0, 0, STRIP, ROW);
+            g.clearRect(0, 0, canvas.getWidth(), ROW);
             double foot = ROW - 5;
             g.setStroke(palette.hair());
             g.strokeLine(Math.rint(x(0)) + 0.5, 0, Math.rint(x(0)) + 0.5, ROW);
@@ -245,7 +274,7 @@ public final class RatesView extends BorderPane {
 
         private void bar(GraphicsContext g, Interval interval, double y, double height) {
             double from = Math.max(0, x(interval.low()));
-            double to = Math.min(STRIP, x(interval.high()));
+            double to = Math.min(canvas.getWidth(), x(interval.high()));
             g.fillRect(from, y, Math.max(1, to - from), height);
         }
 

@@ -82,10 +82,10 @@ public final class RecordView extends BorderPane {
     }
 
     private Region ledgerSide() {
-        column("What is assumed", Assumption::assumption, 250);
-        column("Value", Assumption::value, 230);
+        column("What is assumed", Assumption::assumption, 238);
+        column("Value", Assumption::value, 222);
         column("Says who", Assumption::source, 200);
-        column("For", Assumption::appliesTo, 110);
+        column("For", Assumption::appliesTo, 100);
         ledger.setItems(model.ledger());
         ledger.setId("record-ledger");
         ledger.setAccessibleText("Ledger: everything the result rests on");
