@@ -153,7 +153,7 @@ public final class WindowMeasures extends Application {
         onWindow(() -> model.evidence().orElseThrow().grid("levels.csv").orElseThrow().paste(text.toString()));
         waitFor(() -> {
             StudyDocument document = model.document().orElseThrow();
-            return document.checked().draft() == document.draft();
+            return document.checked().draft().equals(document.draft());
         });
         String beats = heart.end();
         tell(rows + " rows pasted and checked", start);

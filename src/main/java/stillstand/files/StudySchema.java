@@ -37,7 +37,7 @@ final class StudySchema {
     /** What should stand under a key, in words; "" for a key that it does not know. */
     String expectedAt(String keyPath) {
         JsonNode schemaOf = document;
-        for (String step : keyPath.replace("[", ".[").split("\\.")) {
+        for (String step : keyPath.replace("[", ".[").split("\\.", -1)) {
             schemaOf = step.startsWith("[")
                     ? schemaOf.path("items")
                     : schemaOf.path("properties").path(step);

@@ -116,7 +116,7 @@ public final class StudyStore implements AutoCloseable {
                     bytes.put(name, Files.readAllBytes(file));
                 }
             } catch (NoSuchFileException | AccessDeniedException e) {
-                continue; // the check of the study names it
+                bytes.remove(name); // the check of the study names it
             }
         }
         return bytes;

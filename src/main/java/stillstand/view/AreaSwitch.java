@@ -3,6 +3,7 @@ package stillstand.view;
 import java.util.EnumMap;
 import java.util.Locale;
 import java.util.Map;
+import java.util.Optional;
 import javafx.geometry.Pos;
 import javafx.scene.control.ToggleButton;
 import javafx.scene.control.ToggleGroup;
@@ -24,10 +25,10 @@ final class AreaSwitch extends HBox {
             ToggleButton step = new ToggleButton(area.title());
             step.setId("area-" + area.name().toLowerCase(Locale.ROOT).replace('_', '-'));
             step.setToggleGroup(group);
-            double height = LOWEST + RISE * area.ordinal();
+            double height = LOWEST + RISE * (area.number() - 1);
             step.setMinHeight(height);
             step.setPrefHeight(height);
-            step.setTooltip(new Tooltip(area.title() + " (Ctrl+" + (area.ordinal() + 1) + ")"));
+            step.setTooltip(new Tooltip(area.title() + " (Ctrl+" + area.number() + ")"));
             step.setOnAction(event -> {
                 model.areaProperty().set(area);
                 step.setSelected(true); // a step cannot be left without going to another
@@ -35,7 +36,8 @@ final class AreaSwitch extends HBox {
             steps.put(area, step);
             getChildren().add(step);
         }
-        Runnable show = () -> steps.get(model.areaProperty().get()).setSelected(true);
+        Runnable show = () -> Optional.ofNullable(steps.get(model.areaProperty().get()))
+                .ifPresent(step -> step.setSelected(true));
         model.areaProperty().addListener((source, before, after) -> show.run());
         show.run();
     }

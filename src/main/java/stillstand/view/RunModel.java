@@ -48,7 +48,7 @@ final class RunModel {
     private final ReadOnlyDoubleWrapper fraction = new ReadOnlyDoubleWrapper();
     private final ReadOnlyObjectWrapper<Optional<StudyResult>> result = new ReadOnlyObjectWrapper<>(Optional.empty());
     private AtomicBoolean asked = new AtomicBoolean();
-    private final AtomicReference<Optional<Thread>> writing = new AtomicReference<>(Optional.empty());
+    private volatile Optional<Thread> writing = Optional.empty();
 
     /** What a run is at. */
     enum State {
@@ -148,7 +148,7 @@ final class RunModel {
         if (state.get().isBusy()) {
             asked.set(true);
             state.set(State.CANCELLING);
-            writing.get().ifPresent(Thread::interrupt);
+            writing.ifPresent(Thread::interrupt);
         }
     }
 
@@ -212,13 +212,13 @@ final class RunModel {
         if (opened.value().isEmpty()) {
             throw new IOException(opened.problems().get(0).message());
         }
-        writing.set(Optional.of(Thread.currentThread()));
+        writing = Optional.of(Thread.currentThread());
         try (ResultsFolder folder = opened.value().get()) {
             List<Fault> faults = finished.write(folder, true, workers);
             String failed = faults.isEmpty() ? "" : " " + faults.get(0).sentence() + ".";
             return done(finished) + " Results are in " + shown(place) + "." + failed;
         } finally {
-            writing.set(Optional.empty());
+            writing = Optional.empty();
             boolean wasInterrupted = Thread.interrupted(); // the thread goes on to other work
             assert !wasInterrupted || cancelled.get();
         }

@@ -39,18 +39,12 @@ final class SettingsView extends BorderPane {
     SettingsView(SettingsModel model) {
         this.model = model;
         getStyleClass().add("settings");
-        Map<String, GridPane> byGroup = new HashMap<>();
-        for (Field field : model.fields()) {
-            addRow(byGroup.computeIfAbsent(field.group(), name -> form()), field);
-        }
         HBox groups = new HBox(
                 column(
-                        group(SettingsModel.STUDY, byGroup.get(SettingsModel.STUDY)),
-                        group(SettingsModel.PRIOR, byGroup.get(SettingsModel.PRIOR)),
-                        group(SettingsModel.MATCHING, byGroup.get(SettingsModel.MATCHING))),
-                column(
-                        group("Curves and their weights", curves()),
-                        group(SettingsModel.SEA_LEVEL, byGroup.get(SettingsModel.SEA_LEVEL))));
+                        form(SettingsModel.STUDY),
+                        form(SettingsModel.PRIOR),
+                        form(SettingsModel.MATCHING)),
+                column(group("Curves and their weights", curves()), form(SettingsModel.SEA_LEVEL)));
         groups.getStyleClass().add("settings-groups");
         ScrollPane scroll = new ScrollPane(groups);
         scroll.setFitToWidth(true);
@@ -69,10 +63,11 @@ final class SettingsView extends BorderPane {
         return column;
     }
 
-    private static GridPane form() {
+    private VBox form(String group) {
         GridPane form = new GridPane();
         form.getStyleClass().add("form");
-        return form;
+        model.fields().stream().filter(field -> field.group().equals(group)).forEach(field -> addRow(form, field));
+        return group(group, form);
     }
 
     private static VBox group(String name, Node content) {

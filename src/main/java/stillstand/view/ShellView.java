@@ -23,7 +23,6 @@ final class ShellView extends BorderPane {
     private final WindowModel model;
     private final WindowActions actions;
     private final StackPane place = new StackPane();
-    private final AreasOf areasOf;
     private final Label title = new Label();
     private final Label state = new Label();
     private final Button run = new Button("Run");
@@ -42,7 +41,6 @@ final class ShellView extends BorderPane {
             WindowModel model, WindowActions actions, AreasOf areasOf, Consumer<Boolean> darkens, Runnable quits) {
         this.model = model;
         this.actions = actions;
-        this.areasOf = areasOf;
         getStyleClass().add("shell");
         header = header();
         setTop(new VBox(

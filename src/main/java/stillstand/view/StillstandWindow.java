@@ -10,6 +10,7 @@ import java.util.Optional;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.Executors;
 import java.util.concurrent.ScheduledExecutorService;
+import java.util.concurrent.ScheduledFuture;
 import java.util.concurrent.TimeUnit;
 import javafx.application.Application;
 import javafx.application.Platform;
@@ -106,7 +107,7 @@ public final class StillstandWindow extends Application {
                         document -> document.folder().getFileName() + " \u00b7 Stillstand")
                 .orElse("Stillstand")));
         stage.focusedProperty().addListener((source, was, is) -> lookAtDisk(window));
-        looks.scheduleWithFixedDelay(
+        ScheduledFuture<?> unused = looks.scheduleWithFixedDelay(
                 () -> Platform.runLater(() -> lookAtDisk(window)), LOOK_SECONDS, LOOK_SECONDS, TimeUnit.SECONDS);
         stage.show();
         return window;

@@ -8,6 +8,7 @@ import java.util.Deque;
 import java.util.List;
 import java.util.Optional;
 import java.util.concurrent.Executor;
+import java.util.concurrent.atomic.AtomicLong;
 import java.util.function.UnaryOperator;
 import javafx.beans.property.ReadOnlyBooleanProperty;
 import javafx.beans.property.ReadOnlyBooleanWrapper;
@@ -42,7 +43,7 @@ final class StudyDocument {
     private final Deque<Step> undone = new ArrayDeque<>();
     private StudyDraft saved;
     private volatile boolean keepsEdits;
-    private volatile StudyDraft latest;
+    private final AtomicLong revision = new AtomicLong();
 
     /**
      * What the check said.
@@ -82,7 +83,6 @@ final class StudyDocument {
         this.foreground = foreground;
         this.keepsEdits = !isRecoveryOpen;
         this.saved = read;
-        this.latest = read;
         this.draft = new ReadOnlyObjectWrapper<>(read);
         this.checked =
                 new ReadOnlyObjectWrapper<>(new Checked(read, Optional.empty(), List.of(), List.of(), false));
@@ -184,7 +184,7 @@ final class StudyDocument {
     }
 
     private void become(StudyDraft now) {
-        latest = now;
+        revision.incrementAndGet();
         draft.set(now);
         edited.set(!now.texts().equals(saved.texts()));
         undoable.set(Optional.ofNullable(done.peek()).map(Step::what));
@@ -195,15 +195,16 @@ final class StudyDocument {
     /** Checks the newest draft, and keeps it beside the study while it is not saved. */
     private void check() {
         StudyDraft asked = draft.get();
+        long askedRevision = revision.get();
         boolean isUnsaved = edited.get();
         background.execute(() -> {
-            if (asked != latest) {
+            if (askedRevision != revision.get()) {
                 return; // a newer one waits behind this
             }
             Loaded<Study> loaded = reader.check(store.folder(), asked.texts());
             Checked found = new Checked(asked, loaded.value(), loaded.problems(), loaded.warnings(), true);
             foreground.execute(() -> {
-                if (draft.get() == asked) {
+                if (askedRevision == revision.get()) {
                     checked.set(found);
                 }
             });

@@ -111,7 +111,7 @@ final class WindowMenu extends MenuBar {
             look.getItems()
                     .add(item(
                             area.title(),
-                            "Shortcut+" + (area.ordinal() + 1),
+                            "Shortcut+" + area.number(),
                             () -> model.areaProperty().set(area)));
         }
         CheckMenuItem dark = new CheckMenuItem("_Dark");

@@ -50,16 +50,23 @@ final class WindowModel {
 
     /** The areas of the window, in the order of the switch. */
     enum Area {
-        EVIDENCE("Evidence"),
-        SEA_LEVEL("Sea level"),
-        STAIR("Stair"),
-        RATES("Rates"),
-        RECORD("Record");
+        EVIDENCE(1, "Evidence"),
+        SEA_LEVEL(2, "Sea level"),
+        STAIR(3, "Stair"),
+        RATES(4, "Rates"),
+        RECORD(5, "Record");
 
+        private final int number;
         private final String title;
 
-        Area(String title) {
+        Area(int number, String title) {
+            this.number = number;
             this.title = title;
+        }
+
+        /** Its place in the switch, and the number of its key. */
+        int number() {
+            return number;
         }
 
         String title() {

@@ -15,8 +15,19 @@ import stillstand.study.Table;
 
 /** A table that is edited keeps what was not edited. */
 class SheetTest {
-    private static final String LEVELS = "# heights in the harbour's datum\n\nsite,level,elevation_m,elevation_1sigma_m,note\n"
-            + "# the south\n\"North, Bay\" , N1 ,12.50,0.3,\"two\nlines\"\n,,,,\n\nNorth,N2,\u22124,0.3\n# the end\n";
+    private static final String LEVELS =
+            """
+            # heights in the harbour's datum
+
+            site,level,elevation_m,elevation_1sigma_m,note
+            # the south
+            "North, Bay" , N1 ,12.50,0.3,"two
+            lines"
+            ,,,,
+
+            North,N2,\u22124,0.3
+            # the end
+            """;
 
     @ParameterizedTest
     @ValueSource(

@@ -1,5 +1,6 @@
 package stillstand.files;
 
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
@@ -33,7 +34,7 @@ class StudyStoreTest {
         }
         List<byte[]> after = bytes(demo);
         for (int i = 0; i < before.size(); i++) {
-            assertEquals(new String(before.get(i)), new String(after.get(i)));
+            assertArrayEquals(before.get(i), after.get(i));
         }
     }
 

@@ -29,10 +29,11 @@ class EvidenceWindowTest {
     @TempDir
     private Path folder;
 
+    @SuppressWarnings("NullAway.Init") // before each test
     private WindowRobot robot;
 
     @Start
-    private void start(Stage stage) {
+    void start(Stage stage) {
         robot = new WindowRobot(stage);
     }
 
@@ -46,8 +47,17 @@ class EvidenceWindowTest {
         StudyDocument document = robot.open(study("site,level,elevation_m,elevation_1sigma_m,highstand\n"));
         String before = Files.readString(document.folder().resolve("levels.csv"));
         robot.choose("levels.csv", 0, 0);
-        robot.putOnClipboard("A\tL1\t3.1\t0.5\t1\nA\tL2\t18,4\t1\t5a\nA\tL3\t22.0\t1\t5c\nA\tL4\t43.0\t1\t5e\n"
-                + "A\tL5\t60\t1.5\t7a\nA\tL6\t63\t1.5\t7x\nA\tL7\t76\t2\t7e\nA\tL8\t103\t2\t9e\n");
+        robot.putOnClipboard(
+                """
+                A\tL1\t3.1\t0.5\t1
+                A\tL2\t18,4\t1\t5a
+                A\tL3\t22.0\t1\t5c
+                A\tL4\t43.0\t1\t5e
+                A\tL5\t60\t1.5\t7a
+                A\tL6\t63\t1.5\t7x
+                A\tL7\t76\t2\t7e
+                A\tL8\t103\t2\t9e
+                """);
         robot.command(KeyCode.V);
         robot.waitForCheck();
         assertEquals(8, robot.grid("levels.csv").sheet().rowCount());

@@ -10,6 +10,7 @@ import java.util.Optional;
 import java.util.TreeMap;
 import java.util.prefs.AbstractPreferences;
 import java.util.prefs.Preferences;
+import org.jspecify.annotations.Nullable;
 import stillstand.files.StudyStore;
 import stillstand.files.StudyTemplate;
 import stillstand.study.StudyRunner;
@@ -64,7 +65,7 @@ final class OpenStudies {
         }
 
         @Override
-        protected String getSpi(String key) {
+        protected @Nullable String getSpi(String key) {
             return values.get(key);
         }
 

@@ -106,7 +106,7 @@ final class WindowRobot extends FxRobot {
     void waitForCheck() {
         waitFor(() -> {
             StudyDocument document = model.document().orElseThrow();
-            return document.checked().isKnown() && document.checked().draft() == document.draft();
+            return document.checked().isKnown() && document.checked().draft().equals(document.draft());
         });
     }
 

@@ -47,10 +47,12 @@ class WindowTest {
 
     private final CountDownLatch held = new CountDownLatch(1);
     private boolean holds;
+
+    @SuppressWarnings("NullAway.Init") // before each test
     private WindowRobot robot;
 
     @Start
-    private void start(Stage stage) {
+    void start(Stage stage) {
         robot = new WindowRobot(stage, this::run);
     }
 
@@ -122,14 +124,14 @@ class WindowTest {
         List<KeyCode> keys =
                 List.of(KeyCode.DIGIT1, KeyCode.DIGIT2, KeyCode.DIGIT3, KeyCode.DIGIT4, KeyCode.DIGIT5);
         for (Area area : Area.values()) {
-            robot.command(keys.get(area.ordinal()));
+            robot.command(keys.get(area.number() - 1));
             assertEquals(area, robot.model().areaProperty().get());
         }
         assertFalse(robot.model().memory().isDark());
         robot.press(KeyCode.CONTROL, KeyCode.SHIFT, KeyCode.L).release(KeyCode.L, KeyCode.SHIFT, KeyCode.CONTROL);
         assertTrue(robot.model().memory().isDark());
         for (Area area : Area.values()) {
-            robot.command(keys.get(area.ordinal()));
+            robot.command(keys.get(area.number() - 1));
             assertEquals(area, robot.model().areaProperty().get());
         }
         robot.press(KeyCode.CONTROL, KeyCode.SHIFT, KeyCode.L).release(KeyCode.L, KeyCode.SHIFT, KeyCode.CONTROL);
@@ -208,6 +210,7 @@ class WindowTest {
     }
 
     @Test
+    @SuppressWarnings("try") // held, not used
     void lockedResultsAndSecondWindowAreSaid() throws IOException {
         Path study = study();
         try (StudyStore other = StudyStore.open(study).value().orElseThrow()) {
@@ -223,7 +226,7 @@ class WindowTest {
                 ResultsFolder.open(study.resolve("results")).value().orElseThrow()) {
             robot.push("#run");
             robot.waitFor(() -> robot.model().run().state() == State.FAILED);
-            assertTrue(robot.text("#work").contains("another run writing there"), held.toString());
+            assertTrue(robot.text("#work").contains("another run writing there"));
             assertTrue(robot.model().shownProperty().get().result().isPresent());
         }
     }
