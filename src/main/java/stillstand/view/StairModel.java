@@ -90,13 +90,22 @@ public final class StairModel {
      * @param title in words
      * @param links its lines; absent = those of the picture
      * @param rate that goes with it, m/kyr; absent = stays
+     * @param unread rates whose lines a preview still has to tell, when somebody looks; absent = none
      */
-    public record Lens(String title, Optional<List<Link>> links, Optional<Double> rate) {
+    public record Lens(String title, Optional<List<Link>> links, Optional<Double> rate, Optional<Interval> unread) {
         /** All correlations together. */
-        static final Lens ANSWER = new Lens("All correlations, each as strong as it is probable", Optional.empty(), Optional.empty());
+        static final Lens ANSWER = new Lens(
+                "All correlations, each as strong as it is probable",
+                Optional.empty(),
+                Optional.empty(),
+                Optional.empty());
 
         public Lens {
             links = links.map(List::copyOf);
+        }
+
+        private Lens read(List<Link> lines) {
+            return new Lens(title, Optional.of(lines), rate, Optional.empty());
         }
 
         @Override
@@ -149,7 +158,7 @@ public final class StairModel {
         }
         isPreviewing.set(false);
         preview.set(Optional.empty());
-        lenses.setAll(StairLenses.of(picture.get(), flight(), shown.stale() ? Optional.empty() : tries));
+        lenses.setAll(StairLenses.of(picture.get(), flight(), tries.isPresent() && !shown.stale()));
         lens.set(lenses.get(0));
         setRate(other);
         predict();
@@ -242,6 +251,25 @@ public final class StairModel {
     public void look(Lens through) {
         lens.set(through);
         through.rate().ifPresent(this::slideTo);
+        through.unread().ifPresent(rates -> tries.ifPresent(of -> read(through, rates, of)));
+    }
+
+    private void read(Lens through, Interval within, SitePreview of) {
+        background.execute(() -> {
+            Optional<FlightPreview> found = of.previewWithin(within);
+            onInterface.execute(() -> {
+                int at = lenses.indexOf(through);
+                if (tries.isPresent() && tries.get() == of && at >= 0) {
+                    boolean isLookedAt = lens.get().equals(through);
+                    Lens read = through.read(found.map(each -> picture.get().links(each.pairings()))
+                            .orElse(List.of()));
+                    lenses.set(at, read);
+                    if (isLookedAt) {
+                        lens.set(read);
+                    }
+                }
+            });
+        });
     }
 
     /** Steps to the next (+1) or previous (-1) of the lenses. */

@@ -154,7 +154,7 @@ public final class StairView extends BorderPane {
     private void follow() {
         following = true;
         site.setValue(model.siteProperty().get());
-        if (lens.getValue() != model.lensProperty().get()) {
+        if (!model.lensProperty().get().equals(lens.getValue())) {
             lens.setValue(model.lensProperty().get());
         }
         following = false;

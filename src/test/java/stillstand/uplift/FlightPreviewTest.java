@@ -91,6 +91,7 @@ class FlightPreviewTest {
         FlightPreview preview = FlightPreview.within(setup(LEVELS), PRIOR, fast).orElseThrow();
         assertTrue(preview.pairings().stream()
                 .noneMatch(pair -> pair.highstand().equals("H11")));
+        assertTrue(fast.contains(preview.rate().median()));
     }
 
     @Test

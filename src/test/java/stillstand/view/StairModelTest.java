@@ -222,6 +222,11 @@ class StairModelTest {
         model.step(1);
         assertTrue(model.lensProperty().get().title().startsWith("Possible correlation 1 of 2: 0.30 to 0.33 m/kyr"));
         assertEquals(0.315, model.rateProperty().get(), 1e-12);
+        // at 0.3 to 0.33 m/kyr the shoreline of 328 ka stands at 94 to 104 m, where P4 is
+        assertTrue(
+                model.answerLinks().stream()
+                        .anyMatch(link -> link.level().equals("P4") && link.stage().equals("9e")),
+                model.answerLinks().toString());
         model.step(2);
         assertTrue(model.lensProperty().get().title().endsWith("not the answer"));
         // P3 is matched to nothing in it
