@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import java.util.concurrent.TimeoutException;
 import javafx.application.Application;
 import javafx.geometry.Point2D;
@@ -25,9 +26,11 @@ import org.testfx.util.WaitForAsyncUtils;
 /** Hands on the Stair: a slider, a dragged line, keys and buttons; no display needed. */
 class StairWindowTest {
     private static final List<PairingEdit> EDITS = new ArrayList<>();
-    private static StairModel model;
-    private static StairView view;
-    private static StairPaper paper;
+    private static final StairModel model = new StairModel(Runnable::run, Runnable::run, EDITS::add);
+    private static Optional<StairView> opened = Optional.empty();
+
+    private final StairView view = opened.orElseThrow();
+    private final StairPaper paper = (StairPaper) view.lookup("#stair-paper");
 
     private final FxRobot robot = new FxRobot();
 
@@ -40,11 +43,10 @@ class StairWindowTest {
 
     private static void fill(Stage stage) {
         Application.setUserAgentStylesheet(new atlantafx.base.theme.PrimerLight().getUserAgentStylesheet());
-        model = new StairModel(Runnable::run, Runnable::run, EDITS::add);
-        view = new StairView(model);
+        StairView view = new StairView(model);
+        opened = Optional.of(view);
         stage.setScene(new Scene(view, 1200, 740));
         stage.show();
-        paper = (StairPaper) view.lookup("#stair-paper");
     }
 
     @AfterAll
