@@ -87,8 +87,8 @@ public record FlightPreview(Rate rate, List<FlightResult.Pairing> pairings, List
             byStage.entrySet().stream()
                     .filter(entry -> entry.getValue() >= LEAST_PROBABILITY)
                     .sorted(Comparator.comparing((Map.Entry<String, Double> entry) -> -entry.getValue()))
-                    .forEach(entry -> pairs.add(
-                            new FlightResult.Pairing(level, entry.getKey(), Math.min(1, entry.getValue()))));
+                    .forEach(entry ->
+                            pairs.add(new FlightResult.Pairing(level, entry.getKey(), Math.min(1, entry.getValue()))));
             unmatched.add(new FlightResult.Unmatched(level, Math.min(1, Math.max(0, 1 - matched))));
         }
         return new FlightPreview(Rate.of(posterior), pairs, unmatched);

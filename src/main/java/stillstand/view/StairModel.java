@@ -129,7 +129,9 @@ public final class StairModel {
                                 .toList())
                         .orElse(List.of()));
         sites.setAll(names);
-        String chosen = names.contains(site.get()) ? site.get() : names.stream().findFirst().orElse("");
+        String chosen = names.contains(site.get())
+                ? site.get()
+                : names.stream().findFirst().orElse("");
         open(chosen);
     }
 
@@ -168,7 +170,8 @@ public final class StairModel {
     private List<CurveUsed> curves() {
         return shown.result()
                 .map(result -> result.seaLevel().curves())
-                .or(() -> shown.study().map(study -> StudyResult.SeaLevelUsed.of(study).curves()))
+                .or(() -> shown.study()
+                        .map(study -> StudyResult.SeaLevelUsed.of(study).curves()))
                 .orElse(List.of());
     }
 
@@ -179,12 +182,13 @@ public final class StairModel {
 
     /** The rate that the last run gives for the site: the flight's, else that of its best known level. */
     Optional<Rate> answeredRate() {
-        return flight().map(FlightResult::rate).or(() -> shown.result().stream()
-                .flatMap(result -> result.levels().stream())
-                .filter(level -> level.site().equals(site.get()))
-                .flatMap(level -> level.rate().stream())
-                .min((a, b) ->
-                        Double.compare(a.interval68().width(), b.interval68().width())));
+        return flight().map(FlightResult::rate)
+                .or(() -> shown.result().stream()
+                        .flatMap(result -> result.levels().stream())
+                        .filter(level -> level.site().equals(site.get()))
+                        .flatMap(level -> level.rate().stream())
+                        .min((a, b) -> Double.compare(
+                                a.interval68().width(), b.interval68().width())));
     }
 
     private void setRate(boolean otherSite) {
@@ -279,7 +283,8 @@ public final class StairModel {
 
     /** What the study, and what is tried on top of it, says of a level's highstand. */
     public StageChoice choiceOf(String level) {
-        StageChoice own = picture.get().level(level).map(StairPicture.Mark::choice).orElse(StageChoice.ANY);
+        StageChoice own =
+                picture.get().level(level).map(StairPicture.Mark::choice).orElse(StageChoice.ANY);
         return tried.getOrDefault(level, own);
     }
 
@@ -330,7 +335,9 @@ public final class StairModel {
 
     /** Whether there is anything that the last run does not answer. */
     public boolean isPreviewWanted() {
-        return !tried.isEmpty() || shown.stale() || (flight().isEmpty() && !picture.get().answered());
+        return !tried.isEmpty()
+                || shown.stale()
+                || (flight().isEmpty() && !picture.get().answered());
     }
 
     private void refreshPreview() {
@@ -403,14 +410,13 @@ public final class StairModel {
                     .map(found -> StairReadings.previewed(found, tries.get()))
                     .orElse(isPreviewing.get() ? "Preview …" : "No rate of the prior can have left these pairings.");
         }
-        return flight().map(StairReadings::answered).orElse("No flight was matched here: each level stands for itself.");
+        return flight().map(StairReadings::answered)
+                .orElse("No flight was matched here: each level stands for itself.");
     }
 
     /** Lines of the preview; empty where there is none. */
     public List<Link> previewLinks() {
-        return preview.get()
-                .map(found -> picture.get().links(found.pairings()))
-                .orElse(List.of());
+        return preview.get().map(found -> picture.get().links(found.pairings())).orElse(List.of());
     }
 
     /** Lines of the answer, through the present lens. */

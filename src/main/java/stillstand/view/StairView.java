@@ -67,7 +67,9 @@ public final class StairView extends BorderPane {
         model.lensProperty().addListener(follow);
         model.previewingProperty().addListener(follow);
         model.lenses().addListener((ListChangeListener<Lens>) change -> followSoon());
-        model.predictedProperty().addListener((property, before, now) -> miss.setText(model.miss().orElse("")));
+        model.predictedProperty()
+                .addListener(
+                        (property, before, now) -> miss.setText(model.miss().orElse("")));
         follow();
     }
 
@@ -186,8 +188,9 @@ public final class StairView extends BorderPane {
                 panel.getChildren().add(words(model.status()));
             }
             model.flightSentences().forEach(sentence -> panel.getChildren().add(words(sentence.strip())));
-            panel.getChildren().add(muted("Click a level, or press Up and Down in the drawing, to open it. Drag its line onto a"
-                    + " highstand to pin it, away from all to forbid that one."));
+            panel.getChildren()
+                    .add(muted("Click a level, or press Up and Down in the drawing, to open it. Drag its line onto a"
+                            + " highstand to pin it, away from all to forbid that one."));
             return;
         }
         panel.getChildren().add(title("Level " + level));

@@ -97,9 +97,12 @@ class AreasWindowTest {
             model.show(Shown.of(study));
         });
         show(view[0]);
-        assertTrue(robot.lookup("#sea-use-spratt-lisiecki-2016").queryAs(CheckBox.class).isSelected());
+        assertTrue(robot.lookup("#sea-use-spratt-lisiecki-2016")
+                .queryAs(CheckBox.class)
+                .isSelected());
         robot.clickOn("#sea-use-waelbroeck-2002");
-        assertEquals(List.of("spratt-lisiecki-2016", "waelbroeck-2002"), edits.get(0).curves());
+        assertEquals(
+                List.of("spratt-lisiecki-2016", "waelbroeck-2002"), edits.get(0).curves());
         robot.interact(() -> view[0].lookup("#sea-paper").requestFocus());
         double before = model.paneProperty().get().agesKa().width();
         robot.type(KeyCode.PLUS);
@@ -118,7 +121,12 @@ class AreasWindowTest {
         });
         show(view[0]);
         robot.clickOn("#record-search").write("cauchy");
-        assertEquals(1, robot.lookup("#record-ledger").queryAs(TableView.class).getItems().size());
+        assertEquals(
+                1,
+                robot.lookup("#record-ledger")
+                        .queryAs(TableView.class)
+                        .getItems()
+                        .size());
     }
 
     @Test

@@ -21,9 +21,8 @@ class SeaLevelModelTest {
     private static final String SPRATT = "spratt-lisiecki-2016";
     private static final String WAELBROECK = "waelbroeck-2002";
     private static final Library LIBRARY = ShippedLibrary.load();
-    private static final Study STUDY = StudyFolder.read(Path.of("demo/velloe-island"), LIBRARY)
-            .value()
-            .orElseThrow();
+    private static final Study STUDY =
+            StudyFolder.read(Path.of("demo/velloe-island"), LIBRARY).value().orElseThrow();
 
     private final List<SeaLevelEdit> edits = new ArrayList<>();
     private final SeaLevelModel model = new SeaLevelModel(LIBRARY, edits::add);
@@ -57,8 +56,7 @@ class SeaLevelModelTest {
         assertTrue(last.replaced());
         assertEquals(121, last.pick().orElseThrow().ageKa(), 1); // where the curve itself has it
         assertFalse(stand("9e").replaced());
-        assertEquals(
-                8, model.pictureProperty().get().cells().get(0).size());
+        assertEquals(8, model.pictureProperty().get().cells().get(0).size());
     }
 
     @Test
