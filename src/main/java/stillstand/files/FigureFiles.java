@@ -27,7 +27,8 @@ public record FigureFiles(List<FigureFormat> formats, PageWidth width, boolean t
     public static final int DEFAULT_DPI = 300;
 
     /** As a run writes them. */
-    public static final FigureFiles OF_RUN = new FigureFiles(List.of(FigureFormat.values()), PageWidth.TWO, true, DEFAULT_DPI);
+    public static final FigureFiles OF_RUN =
+            new FigureFiles(List.of(FigureFormat.values()), PageWidth.TWO, true, DEFAULT_DPI);
 
     public FigureFiles {
         formats = List.copyOf(formats);

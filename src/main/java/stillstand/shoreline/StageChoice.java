@@ -48,8 +48,7 @@ public record StageChoice(List<String> only, List<String> never) {
 
     /** The same, with this stage forbidden too; a choice that allowed no other is then for any but this. */
     public StageChoice without(String stage) {
-        List<String> left =
-                only.stream().filter(label -> !label.equals(stage)).toList();
+        List<String> left = only.stream().filter(label -> !label.equals(stage)).toList();
         List<String> none = new ArrayList<>(never);
         if (left.isEmpty() && !none.contains(stage)) {
             none.add(stage);

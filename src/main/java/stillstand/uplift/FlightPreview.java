@@ -19,6 +19,7 @@ import stillstand.uncertainty.Interval;
  */
 public record FlightPreview(Rate rate, List<FlightResult.Pairing> pairings, List<FlightResult.Unmatched> unmatched) {
     private static final int RATES = 300;
+    private static final int RATES_WITHIN = 60;
     private static final double LEAST_PROBABILITY = 1e-3;
     /** Rates of less weight than this change no pairing that can be seen. */
     private static final double LEAST_WEIGHT = 1e-4;
@@ -35,24 +36,43 @@ public record FlightPreview(Rate rate, List<FlightResult.Pairing> pairings, List
 
     /** The preview of a flight; absent where no rate of the prior can have left it. */
     public static Optional<FlightPreview> of(FlightSetup setup, RatePrior prior) {
-        return within(setup, prior, new Interval(prior.fromMetresPerKyr(), prior.toMetresPerKyr()));
+        FlightModel model = separate(setup);
+        SharedNumbers middle = middle(setup.shared());
+        try {
+            RatePosterior posterior = FlightIntegration.preview(model, prior, SharedNodes.fixed(middle), RATES);
+            return Optional.of(
+                    summary(model, middle, posterior, posterior.ratesMetresPerKyr(), posterior.nodeWeights()));
+        } catch (IllegalArgumentException e) {
+            return Optional.empty();
+        }
     }
 
     /**
-     * The same for rates in an interval alone: one of several correlations that remain possible.
+     * The same for rates in an interval alone, however improbable: one of several correlations that remain possible.
      *
-     * @param rates m/kyr; the rate of the preview is still that of all rates
+     * @param rates m/kyr, within the prior's range
      */
     public static Optional<FlightPreview> within(FlightSetup setup, RatePrior prior, Interval rates) {
         FlightModel model = separate(setup);
         SharedNumbers middle = middle(setup.shared());
-        RatePosterior posterior;
+        SegmentRecursion recursion = new SegmentRecursion(model);
+        double[] nodes = new double[RATES_WITHIN];
+        double[] logs = new double[RATES_WITHIN];
+        for (int k = 0; k < RATES_WITHIN; k++) {
+            nodes[k] = rates.low() + rates.width() * (k + 0.5) / RATES_WITHIN;
+            logs[k] = recursion.logEvidence(new UpliftHistory.ConstantRate(nodes[k]), middle);
+        }
         try {
-            posterior = FlightIntegration.preview(model, prior, SharedNodes.fixed(middle), RATES);
+            RatePosterior posterior = RatePosterior.of(nodes, logs, prior);
+            return Optional.of(summary(model, middle, posterior, nodes, posterior.nodeWeights()));
         } catch (IllegalArgumentException e) {
             return Optional.empty();
         }
-        double[] pairing = pairings(model, middle, posterior, rates);
+    }
+
+    private static FlightPreview summary(
+            FlightModel model, SharedNumbers middle, RatePosterior posterior, double[] nodes, double[] weights) {
+        double[] pairing = pairings(model, middle, nodes, weights);
         List<FlightResult.Pairing> pairs = new ArrayList<>();
         List<FlightResult.Unmatched> unmatched = new ArrayList<>();
         int count = model.rows().size();
@@ -67,11 +87,11 @@ public record FlightPreview(Rate rate, List<FlightResult.Pairing> pairings, List
             byStage.entrySet().stream()
                     .filter(entry -> entry.getValue() >= LEAST_PROBABILITY)
                     .sorted(Comparator.comparing((Map.Entry<String, Double> entry) -> -entry.getValue()))
-                    .forEach(entry -> pairs.add(
-                            new FlightResult.Pairing(level, entry.getKey(), Math.min(1, entry.getValue()))));
+                    .forEach(entry ->
+                            pairs.add(new FlightResult.Pairing(level, entry.getKey(), Math.min(1, entry.getValue()))));
             unmatched.add(new FlightResult.Unmatched(level, Math.min(1, Math.max(0, 1 - matched))));
         }
-        return Optional.of(new FlightPreview(Rate.of(posterior), pairs, unmatched));
+        return new FlightPreview(Rate.of(posterior), pairs, unmatched);
     }
 
     private static FlightModel separate(FlightSetup setup) {
@@ -101,16 +121,13 @@ public record FlightPreview(Rate rate, List<FlightResult.Pairing> pairings, List
                 shared.strays().quantile(0.5));
     }
 
-    /** Probability that level i records row j, at {@code [i * rows + j]}, over the rates in the interval. */
-    private static double[] pairings(
-            FlightModel model, SharedNumbers middle, RatePosterior posterior, Interval rates) {
+    /** Probability that level i records row j, at {@code [i * rows + j]}, over weighted rates. */
+    private static double[] pairings(FlightModel model, SharedNumbers middle, double[] nodes, double[] weights) {
         SegmentRecursion recursion = new SegmentRecursion(model);
-        double[] nodes = posterior.ratesMetresPerKyr();
-        double[] weights = posterior.nodeWeights();
         double[] sum = new double[model.levels().size() * model.rows().size()];
         double all = 0;
         for (int k = 0; k < nodes.length; k++) {
-            if (weights[k] >= LEAST_WEIGHT && rates.contains(nodes[k])) {
+            if (weights[k] >= LEAST_WEIGHT) {
                 recursion.logEvidence(new UpliftHistory.ConstantRate(nodes[k]), middle);
                 double[] pairing = recursion.pairing();
                 all += weights[k];

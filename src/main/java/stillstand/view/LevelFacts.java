@@ -43,8 +43,10 @@ final class LevelFacts {
     }
 
     List<Fact> facts() {
-        add("Sea then, on today's land", metres(level.metres()) + ", 95 % " + metres(level.interval95().low()) + " to "
-                + metres(level.interval95().high()));
+        add(
+                "Sea then, on today's land",
+                metres(level.metres()) + ", 95 % " + metres(level.interval95().low()) + " to "
+                        + metres(level.interval95().high()));
         if (level.takesPart()) {
             add("You say", words(choice));
         }
@@ -81,13 +83,10 @@ final class LevelFacts {
     }
 
     private void rate(LevelAnswer answer) {
-        answer.bound()
-                .ifPresent(bound -> answer.rate().ifPresent(rate -> add("Moves", Wording.bound(bound, rate))));
+        answer.bound().ifPresent(bound -> answer.rate().ifPresent(rate -> add("Moves", Wording.bound(bound, rate))));
         answer.rate()
                 .ifPresentOrElse(
-                        rate -> add(
-                                "Rate of its own",
-                                Wording.rate(rate) + " m/kyr, 95 % " + Wording.interval95(rate)),
+                        rate -> add("Rate of its own", Wording.rate(rate) + " m/kyr, 95 % " + Wording.interval95(rate)),
                         () -> result.flatMap(found -> found.whyWaiting(site, level.name()))
                                 .ifPresent(why -> add("Waits", why)));
         answer.rateWithPrior().ifPresent(rate -> add("Under the prior", Wording.rate(rate) + " m/kyr"));
@@ -132,7 +131,10 @@ final class LevelFacts {
                 .ifPresent(agreement -> add(
                         "Its dates agree",
                         String.format(
-                                Locale.ROOT, "MSWD %.2f, by chance with probability %.2g", agreement.mswd(), agreement.p())));
+                                Locale.ROOT,
+                                "MSWD %.2f, by chance with probability %.2g",
+                                agreement.mswd(),
+                                agreement.p())));
         answer.budget().ifPresent(budget -> add("Its spread comes from", budget(budget)));
     }
 

@@ -151,9 +151,8 @@ public final class RatesModel {
     }
 
     private static Row flight(FlightResult flight) {
-        String regions = flight.regions95().size() > 1
-                ? flight.regions95().size() + " correlations remain possible."
-                : "";
+        String regions =
+                flight.regions95().size() > 1 ? flight.regions95().size() + " correlations remain possible." : "";
         return new Row(
                 flight.site(),
                 "the flight",
@@ -248,7 +247,8 @@ public final class RatesModel {
             return "No rates yet: run the study.";
         }
         long rated = shownRows.stream().filter(row -> row.rate().isPresent()).count();
-        return rated + " rates in m/kyr (the same as mm/yr), uplift positive: median ± one standard deviation, and the shortest"
+        return rated
+                + " rates in m/kyr (the same as mm/yr), uplift positive: median ± one standard deviation, and the shortest"
                 + " intervals.";
     }
 

@@ -120,8 +120,12 @@ public final class RatesView extends BorderPane {
         text("Kind", row -> row.kind().toString(), 84, false);
         text("Bound, or why none", Row::says, 194, true);
         number("Median", Row::median, row -> row.rate().map(Rate::median), 114);
-        number("68 %", Row::interval68, row -> row.rate().map(rate -> rate.shortest68().low()), 114);
-        number("95 %", Row::interval95, row -> row.rate().map(rate -> rate.shortest95().low()), 114);
+        number(
+                "68 %",
+                Row::interval68, row -> row.rate().map(rate -> rate.shortest68().low()), 114);
+        number(
+                "95 %",
+                Row::interval95, row -> row.rate().map(rate -> rate.shortest95().low()), 114);
         density();
         text("Highstand", Row::stages, 126, false);
         number("Age (ka)", Row::ageText, row -> row.age().map(age -> age.median()), 118);
@@ -138,8 +142,7 @@ public final class RatesView extends BorderPane {
     }
 
     /** Sorts by the number and shows the words; what has none comes last. */
-    private void number(
-            String name, Function<Row, String> words, Function<Row, Optional<Double>> by, double width) {
+    private void number(String name, Function<Row, String> words, Function<Row, Optional<Double>> by, double width) {
         TableColumn<Row, Row> column = new TableColumn<>(name);
         ToDoubleFunction<Row> key = row -> by.apply(row).orElse(Double.POSITIVE_INFINITY);
         column.setComparator(Comparator.comparingDouble(key));
@@ -180,8 +183,8 @@ public final class RatesView extends BorderPane {
                     .sum();
             column.setPrefWidth(Math.max(LEAST_STRIP + BESIDE_STRIP, now.doubleValue() - others - SCROLL_BAR));
         });
-        column.setComparator(Comparator.comparingDouble(row ->
-                row.rate().map(rate -> rate.shortest95().width()).orElse(Double.POSITIVE_INFINITY)));
+        column.setComparator(Comparator.comparingDouble(
+                row -> row.rate().map(rate -> rate.shortest95().width()).orElse(Double.POSITIVE_INFINITY)));
         column.setCellValueFactory(cell -> new ReadOnlyObjectWrapper<>(cell.getValue()));
         column.setCellFactory(made -> new DensityCell());
         table.getColumns().add(column);
@@ -213,11 +216,7 @@ public final class RatesView extends BorderPane {
         g.setFont(javafx.scene.text.Font.font(10.5));
         for (double tick : StairScale.ticks(range.low(), range.high(), axis.getWidth(), 52)) {
             g.strokeLine(x(tick), 13, x(tick), 16);
-            g.fillText(
-                    Wording.number(
-                            Digits.text(Math.rint(tick * 1e6) / 1e6)),
-                    x(tick),
-                    10);
+            g.fillText(Wording.number(Digits.text(Math.rint(tick * 1e6) / 1e6)), x(tick), 10);
         }
     }
 

@@ -55,7 +55,8 @@ public final class RecordModel {
     }
 
     /** How figures are to be written. */
-    public record FigureWish(List<Figure> figures, List<FigureFormat> formats, PageWidth width, boolean titled, int dpi) {
+    public record FigureWish(
+            List<Figure> figures, List<FigureFormat> formats, PageWidth width, boolean titled, int dpi) {
         public FigureWish {
             figures = List.copyOf(figures);
             formats = List.copyOf(formats);
@@ -76,8 +77,7 @@ public final class RecordModel {
         List<String> parts = List.of(words.toLowerCase(Locale.ROOT).strip().split("\\s+", -1));
         ledger.setAll(lines().stream()
                 .filter(line -> {
-                    String all = String.join(
-                                    " ", line.assumption(), line.value(), line.source(), line.appliesTo())
+                    String all = String.join(" ", line.assumption(), line.value(), line.source(), line.appliesTo())
                             .toLowerCase(Locale.ROOT);
                     return parts.stream().allMatch(all::contains);
                 })
@@ -86,7 +86,10 @@ public final class RecordModel {
 
     /** Before a run, what the input alone brought with it. */
     private List<Assumption> lines() {
-        return shown.result().map(StudyResult::ledger).or(() -> shown.study().map(Study::ledger)).orElse(List.of());
+        return shown.result()
+                .map(StudyResult::ledger)
+                .or(() -> shown.study().map(Study::ledger))
+                .orElse(List.of());
     }
 
     /** {@code 12 of 63 lines}. */
@@ -97,7 +100,8 @@ public final class RecordModel {
 
     /** What was odd in the input, with its places. */
     public List<String> warnings() {
-        return shown.result()
+        return shown
+                .result()
                 .map(StudyResult::warnings)
                 .or(() -> shown.study().map(Study::warnings))
                 .orElse(List.of())
@@ -147,15 +151,12 @@ public final class RecordModel {
             return;
         }
         FigureFiles writer = new FigureFiles(wish.formats(), wish.width(), wish.titled(), wish.dpi());
-        export(
-                () -> told(
-                        writer.write(wish.figures(), folder, 1),
-                        (wish.figures().size() == 1 ? "1 figure" : wish.figures().size() + " figures") + " written to "
-                                + folder + " as "
-                                + wish.formats().stream()
-                                        .map(FigureFormat::id)
-                                        .collect(Collectors.joining(", "))
-                                + "."));
+        export(() -> told(
+                writer.write(wish.figures(), folder, 1),
+                (wish.figures().size() == 1 ? "1 figure" : wish.figures().size() + " figures") + " written to "
+                        + folder + " as "
+                        + wish.formats().stream().map(FigureFormat::id).collect(Collectors.joining(", "))
+                        + "."));
     }
 
     /** Writes the results folder, whole or not at all, in the background. */
@@ -163,7 +164,8 @@ public final class RecordModel {
         Optional<Study> study = shown.study();
         Optional<StudyResult> result = shown.result();
         if (shown.stale()) {
-            message.set("The study has changed since the run: run it again, then export, so that inputs and results agree.");
+            message.set(
+                    "The study has changed since the run: run it again, then export, so that inputs and results agree.");
         } else if (study.isEmpty() || result.isEmpty()) {
             message.set("There is nothing to export yet: run the study.");
         } else {
@@ -227,7 +229,9 @@ public final class RecordModel {
 
     /** One sentence on the figures. */
     public String figureStatus() {
-        return shown.result().isEmpty() ? "No figures yet: run the study." : figures.size() + " figures of the last run.";
+        return shown.result().isEmpty()
+                ? "No figures yet: run the study."
+                : figures.size() + " figures of the last run.";
     }
 
     /** Whether what is shown is older than the study. */

@@ -55,8 +55,7 @@ public final class RecordView extends BorderPane {
     private final List<CheckBox> formats = new ArrayList<>();
     private final ChoiceBox<PageWidth> width = new ChoiceBox<>();
     private final CheckBox titled = new CheckBox("Title and note");
-    private final Spinner<Integer> dpi =
-            new Spinner<>(Figure.LEAST_DPI, Figure.MOST_DPI, FigureFiles.DEFAULT_DPI, 50);
+    private final Spinner<Integer> dpi = new Spinner<>(Figure.LEAST_DPI, Figure.MOST_DPI, FigureFiles.DEFAULT_DPI, 50);
 
     /**
      * The view of a model.
@@ -115,7 +114,8 @@ public final class RecordView extends BorderPane {
     }
 
     private Region takeAway() {
-        VBox box = new VBox(10, head("Figures"), figureStatus, figureList(), figureChoice(), resultsRow(), message(), notes);
+        VBox box = new VBox(
+                10, head("Figures"), figureStatus, figureList(), figureChoice(), resultsRow(), message(), notes);
         box.setPadding(new Insets(8, 14, 12, 12));
         ScrollPane scroll = new ScrollPane(box);
         scroll.setFitToWidth(true);
@@ -181,7 +181,8 @@ public final class RecordView extends BorderPane {
     private Region resultsRow() {
         Button results = new Button("Export the results folder …");
         results.setId("record-export-results");
-        results.setTooltip(new Tooltip("Tables, ledger, figures and results.json, just as the command line writes them"));
+        results.setTooltip(
+                new Tooltip("Tables, ledger, figures and results.json, just as the command line writes them"));
         results.setOnAction(event -> askFolder.get().ifPresent(model::exportResults));
         results.disableProperty().bind(model.exportingProperty());
         return results;
@@ -235,7 +236,8 @@ public final class RecordView extends BorderPane {
     private void list(String title, List<String> lines, String none) {
         if (!lines.isEmpty() || !none.isEmpty()) {
             notes.getChildren().add(head(title));
-            (lines.isEmpty() ? List.of(none) : lines).forEach(text -> notes.getChildren().add(line(text)));
+            (lines.isEmpty() ? List.of(none) : lines)
+                    .forEach(text -> notes.getChildren().add(line(text)));
         }
     }
 

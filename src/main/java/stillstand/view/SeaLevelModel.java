@@ -138,11 +138,14 @@ public final class SeaLevelModel {
         curves.setAll(other.curves().stream()
                 .map(curve -> new Curve(curve.id(), says(curve)))
                 .toList());
-        overrides.setAll(Stream.concat(Stream.of(NO_OVERRIDES), other.highstands().stream()
-                        .filter(rows -> rows.entries().stream()
-                                .allMatch(entry ->
-                                        other.stages().find(entry.stage()).isPresent()))
-                        .map(HighstandRows::id))
+        overrides.setAll(Stream.concat(
+                        Stream.of(NO_OVERRIDES),
+                        other.highstands().stream()
+                                .filter(rows -> rows.entries().stream()
+                                        .allMatch(entry -> other.stages()
+                                                .find(entry.stage())
+                                                .isPresent()))
+                                .map(HighstandRows::id))
                 .toList());
         refresh();
     }
@@ -256,14 +259,17 @@ public final class SeaLevelModel {
                         chosen.contains(curve.id()),
                         drawn.computeIfAbsent(curve.id(), id -> points(curve))))
                 .toList();
-        Optional<HighstandTable> own =
-                ids.stream().findFirst().flatMap(library::curve).flatMap(curve -> table(curve, HighstandOverrides.NONE));
+        Optional<HighstandTable> own = ids.stream()
+                .findFirst()
+                .flatMap(library::curve)
+                .flatMap(curve -> table(curve, HighstandOverrides.NONE));
         Optional<HighstandTable> used = used(ids);
         List<Stand> stands = used.map(each -> stands(each, own)).orElse(List.of());
         List<List<String>> cells = used.map(each -> CurveReport.highstandRows(
                         own.orElse(each), each, ids.stream().findFirst().orElse(each.id())))
                 .orElse(List.of());
-        picture.set(new Picture(lines, stands, cells, used.map(HighstandTable::id).orElse(""), isStudys()));
+        picture.set(
+                new Picture(lines, stands, cells, used.map(HighstandTable::id).orElse(""), isStudys()));
     }
 
     /** The study's own where it is as the study has it, else what the choice would give. */
@@ -272,20 +278,15 @@ public final class SeaLevelModel {
         if (study.isPresent() && isStudys()) {
             return study.map(each -> each.seaLevel().get(0).highstands());
         }
-        return ids.stream()
-                .findFirst()
-                .flatMap(library::curve)
-                .flatMap(curve -> table(curve, replaced()));
+        return ids.stream().findFirst().flatMap(library::curve).flatMap(curve -> table(curve, replaced()));
     }
 
     private boolean isStudys() {
         return shown.study()
                 .map(study -> study.settings().seaLevel())
-                .map(choice -> choice.curves().stream()
-                                .map(WeightedCurve::id)
-                                .toList()
-                                .equals(chosen)
-                        && choice.overrides().orElse(NO_OVERRIDES).equals(replacing))
+                .map(choice ->
+                        choice.curves().stream().map(WeightedCurve::id).toList().equals(chosen)
+                                && choice.overrides().orElse(NO_OVERRIDES).equals(replacing))
                 .orElse(false);
     }
 
@@ -306,7 +307,8 @@ public final class SeaLevelModel {
                 .filter(row -> !row.isOlder())
                 .map(row -> {
                     Optional<Highstand> pick = own.flatMap(table -> table.find(row.stage()))
-                            .filter(found -> found.source().equals(own.orElseThrow().id()));
+                            .filter(found ->
+                                    found.source().equals(own.orElseThrow().id()));
                     return new Stand(
                             row.stage(),
                             row.ageKa(),

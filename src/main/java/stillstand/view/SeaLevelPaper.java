@@ -316,8 +316,7 @@ final class SeaLevelPaper extends Region {
 
     private void text(
             GraphicsContext g, String text, double x, double y, TextAlignment align, Color colour, boolean strong) {
-        g.setFont(Font.font(
-                Font.getDefault().getFamily(), strong ? FontWeight.SEMI_BOLD : FontWeight.NORMAL, 11.5));
+        g.setFont(Font.font(Font.getDefault().getFamily(), strong ? FontWeight.SEMI_BOLD : FontWeight.NORMAL, 11.5));
         g.setTextAlign(align);
         g.setTextBaseline(VPos.CENTER);
         g.setStroke(palette.paper());

@@ -53,8 +53,8 @@ public final class SeaLevelView extends BorderPane {
         split.setDividerPositions(0.58);
         setCenter(split);
         setLeft(chooser());
-        status.textFillProperty().addListener(
-                (property, before, now) -> paper.use(Palette.under(status.getTextFill())));
+        status.textFillProperty()
+                .addListener((property, before, now) -> paper.use(Palette.under(status.getTextFill())));
         model.curves().addListener((ListChangeListener<Curve>) change -> listCurves());
         model.pictureProperty().addListener((property, before, now) -> follow());
         listCurves();
@@ -112,8 +112,9 @@ public final class SeaLevelView extends BorderPane {
         Label replaces = new Label("Replaces the curve's own highstands");
         replaces.setLabelFor(overrides);
         replaces.setWrapText(true);
-        Label how = muted("Filled dots are picked from the curve: the highest turning point in each stage's window. Diamonds stand"
-                + " in their place; a ring and a thread show the pick they replaced. Bars are one sigma, shared errors in them.");
+        Label how = muted(
+                "Filled dots are picked from the curve: the highest turning point in each stage's window. Diamonds stand"
+                        + " in their place; a ring and a thread show the pick they replaced. Bars are one sigma, shared errors in them.");
         Label head = new Label("Curves");
         head.getStyleClass().add(Styles.TITLE_4);
         VBox box = new VBox(10, head, curves, replaces, overrides, how);
@@ -137,7 +138,8 @@ public final class SeaLevelView extends BorderPane {
         for (int i : COLUMNS) {
             int at = i;
             TableColumn<List<String>, String> column = new TableColumn<>(CurveReport.HIGHSTAND_COLUMNS.get(i));
-            column.setCellValueFactory(cell -> new ReadOnlyStringWrapper(cell.getValue().get(at)));
+            column.setCellValueFactory(
+                    cell -> new ReadOnlyStringWrapper(cell.getValue().get(at)));
             column.setPrefWidth(List.of(62, 104, 92, 84, 132, 104, 116, 62).get(i));
             column.setSortable(false);
             column.setReorderable(false);

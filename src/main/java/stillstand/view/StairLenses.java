@@ -5,9 +5,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import stillstand.report.Wording;
-import stillstand.study.SitePreview;
 import stillstand.uncertainty.Interval;
-import stillstand.uplift.FlightPreview;
 import stillstand.uplift.FlightResult;
 import stillstand.uplift.FlightResult.Match;
 import stillstand.uplift.FlightResult.Pairing;
@@ -20,15 +18,15 @@ final class StairLenses {
     /**
      * The lenses of a flight.
      *
-     * @param tries says which pairings go with a range of rates; absent where the study is no longer the one that was run
+     * @param isStudys whether the study is still the one that was run, so that a preview can tell which pairings go with a
+     *     range of rates
      */
-    static List<Lens> of(StairPicture picture, Optional<FlightResult> flight, Optional<SitePreview> tries) {
+    static List<Lens> of(StairPicture picture, Optional<FlightResult> flight, boolean isStudys) {
         List<Lens> lenses = new ArrayList<>(List.of(Lens.ANSWER));
         if (flight.isPresent()) {
             List<Interval> regions = flight.get().regions95();
             for (int i = 0; i < regions.size() && regions.size() > 1; i++) {
                 Interval region = regions.get(i);
-                Optional<FlightPreview> within = tries.flatMap(each -> each.previewWithin(region));
                 lenses.add(new Lens(
                         String.format(
                                 Locale.ROOT,
@@ -38,10 +36,10 @@ final class StairLenses {
                                 Wording.number(String.format(Locale.ROOT, "%.2f", region.low())),
                                 Wording.number(String.format(Locale.ROOT, "%.2f", region.high())),
                                 flight.get().weights95().get(i),
-                                within.isPresent() ? " (lines by preview)" : " (run again to see its lines)"),
-                        Optional.of(within.map(found -> picture.links(found.pairings()))
-                                .orElse(List.of())),
-                        Optional.of((region.low() + region.high()) / 2)));
+                                isStudys ? " (lines by preview)" : " (run again to see its lines)"),
+                        Optional.of(List.of()),
+                        Optional.of((region.low() + region.high()) / 2),
+                        isStudys ? Optional.of(region) : Optional.empty()));
             }
             lenses.add(mostProbable(picture, flight.get().mostProbable()));
         }
@@ -58,6 +56,7 @@ final class StairLenses {
                         "Most probable single correlation (%.0f %% of draws): not the answer",
                         100 * single.share()),
                 Optional.of(picture.links(pairs)),
+                Optional.empty(),
                 Optional.empty());
     }
 

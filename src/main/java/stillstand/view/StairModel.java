@@ -90,13 +90,22 @@ public final class StairModel {
      * @param title in words
      * @param links its lines; absent = those of the picture
      * @param rate that goes with it, m/kyr; absent = stays
+     * @param unread rates whose lines a preview still has to tell, when somebody looks; absent = none
      */
-    public record Lens(String title, Optional<List<Link>> links, Optional<Double> rate) {
+    public record Lens(String title, Optional<List<Link>> links, Optional<Double> rate, Optional<Interval> unread) {
         /** All correlations together. */
-        static final Lens ANSWER = new Lens("All correlations, each as strong as it is probable", Optional.empty(), Optional.empty());
+        static final Lens ANSWER = new Lens(
+                "All correlations, each as strong as it is probable",
+                Optional.empty(),
+                Optional.empty(),
+                Optional.empty());
 
         public Lens {
             links = links.map(List::copyOf);
+        }
+
+        private Lens read(List<Link> lines) {
+            return new Lens(title, Optional.of(lines), rate, Optional.empty());
         }
 
         @Override
@@ -120,7 +129,9 @@ public final class StairModel {
                                 .toList())
                         .orElse(List.of()));
         sites.setAll(names);
-        String chosen = names.contains(site.get()) ? site.get() : names.stream().findFirst().orElse("");
+        String chosen = names.contains(site.get())
+                ? site.get()
+                : names.stream().findFirst().orElse("");
         open(chosen);
     }
 
@@ -149,7 +160,7 @@ public final class StairModel {
         }
         isPreviewing.set(false);
         preview.set(Optional.empty());
-        lenses.setAll(StairLenses.of(picture.get(), flight(), shown.stale() ? Optional.empty() : tries));
+        lenses.setAll(StairLenses.of(picture.get(), flight(), tries.isPresent() && !shown.stale()));
         lens.set(lenses.get(0));
         setRate(other);
         predict();
@@ -159,7 +170,8 @@ public final class StairModel {
     private List<CurveUsed> curves() {
         return shown.result()
                 .map(result -> result.seaLevel().curves())
-                .or(() -> shown.study().map(study -> StudyResult.SeaLevelUsed.of(study).curves()))
+                .or(() -> shown.study()
+                        .map(study -> StudyResult.SeaLevelUsed.of(study).curves()))
                 .orElse(List.of());
     }
 
@@ -170,12 +182,13 @@ public final class StairModel {
 
     /** The rate that the last run gives for the site: the flight's, else that of its best known level. */
     Optional<Rate> answeredRate() {
-        return flight().map(FlightResult::rate).or(() -> shown.result().stream()
-                .flatMap(result -> result.levels().stream())
-                .filter(level -> level.site().equals(site.get()))
-                .flatMap(level -> level.rate().stream())
-                .min((a, b) ->
-                        Double.compare(a.interval68().width(), b.interval68().width())));
+        return flight().map(FlightResult::rate)
+                .or(() -> shown.result().stream()
+                        .flatMap(result -> result.levels().stream())
+                        .filter(level -> level.site().equals(site.get()))
+                        .flatMap(level -> level.rate().stream())
+                        .min((a, b) -> Double.compare(
+                                a.interval68().width(), b.interval68().width())));
     }
 
     private void setRate(boolean otherSite) {
@@ -242,6 +255,25 @@ public final class StairModel {
     public void look(Lens through) {
         lens.set(through);
         through.rate().ifPresent(this::slideTo);
+        through.unread().ifPresent(rates -> tries.ifPresent(of -> read(through, rates, of)));
+    }
+
+    private void read(Lens through, Interval within, SitePreview of) {
+        background.execute(() -> {
+            Optional<FlightPreview> found = of.previewWithin(within);
+            onInterface.execute(() -> {
+                int at = lenses.indexOf(through);
+                if (tries.isPresent() && tries.get() == of && at >= 0) {
+                    boolean isLookedAt = lens.get().equals(through);
+                    Lens read = through.read(found.map(each -> picture.get().links(each.pairings()))
+                            .orElse(List.of()));
+                    lenses.set(at, read);
+                    if (isLookedAt) {
+                        lens.set(read);
+                    }
+                }
+            });
+        });
     }
 
     /** Steps to the next (+1) or previous (-1) of the lenses. */
@@ -251,7 +283,8 @@ public final class StairModel {
 
     /** What the study, and what is tried on top of it, says of a level's highstand. */
     public StageChoice choiceOf(String level) {
-        StageChoice own = picture.get().level(level).map(StairPicture.Mark::choice).orElse(StageChoice.ANY);
+        StageChoice own =
+                picture.get().level(level).map(StairPicture.Mark::choice).orElse(StageChoice.ANY);
         return tried.getOrDefault(level, own);
     }
 
@@ -302,7 +335,9 @@ public final class StairModel {
 
     /** Whether there is anything that the last run does not answer. */
     public boolean isPreviewWanted() {
-        return !tried.isEmpty() || shown.stale() || (flight().isEmpty() && !picture.get().answered());
+        return !tried.isEmpty()
+                || shown.stale()
+                || (flight().isEmpty() && !picture.get().answered());
     }
 
     private void refreshPreview() {
@@ -375,14 +410,13 @@ public final class StairModel {
                     .map(found -> StairReadings.previewed(found, tries.get()))
                     .orElse(isPreviewing.get() ? "Preview …" : "No rate of the prior can have left these pairings.");
         }
-        return flight().map(StairReadings::answered).orElse("No flight was matched here: each level stands for itself.");
+        return flight().map(StairReadings::answered)
+                .orElse("No flight was matched here: each level stands for itself.");
     }
 
     /** Lines of the preview; empty where there is none. */
     public List<Link> previewLinks() {
-        return preview.get()
-                .map(found -> picture.get().links(found.pairings()))
-                .orElse(List.of());
+        return preview.get().map(found -> picture.get().links(found.pairings())).orElse(List.of());
     }
 
     /** Lines of the answer, through the present lens. */

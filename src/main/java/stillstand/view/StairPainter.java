@@ -71,8 +71,11 @@ final class StairPainter {
                 band(points, CurvePoint::low95Metres, CurvePoint::high95Metres, palette.band95());
                 band(points, CurvePoint::low68Metres, CurvePoint::high68Metres, palette.band68());
             }
-            double[] xs = points.stream().mapToDouble(point -> scale.x(point.ageKa())).toArray();
-            double[] ys = points.stream().mapToDouble(point -> scale.y(point.levelMetres())).toArray();
+            double[] xs =
+                    points.stream().mapToDouble(point -> scale.x(point.ageKa())).toArray();
+            double[] ys = points.stream()
+                    .mapToDouble(point -> scale.y(point.levelMetres()))
+                    .toArray();
             pen(palette.curve(i), i == 0 ? 1.8 : 1.2);
             g.strokePolyline(xs, ys, xs.length);
         }
@@ -129,14 +132,7 @@ final class StairPainter {
                 SMALL,
                 palette.muted(),
                 false);
-        text(
-                "Elevation, and sea level then (m)",
-                8,
-                scale.top - 22,
-                TextAlignment.LEFT,
-                SMALL,
-                palette.muted(),
-                false);
+        text("Elevation, and sea level then (m)", 8, scale.top - 22, TextAlignment.LEFT, SMALL, palette.muted(), false);
         text(
                 "The coast today, not to scale across",
                 (scale.profileLeft + scale.right) / 2,
@@ -185,7 +181,10 @@ final class StairPainter {
             points.add(new double[] {scale.stepX(i) - 0.66 * width, y + Math.min(0.3 * Math.max(0, below), fall)});
             points.add(new double[] {scale.stepX(i), y});
         }
-        points.add(new double[] {scale.profileRight, Math.max(scale.top, scale.y(picture.levels().get(n - 1).metres()) - 8)});
+        points.add(new double[] {
+            scale.profileRight,
+            Math.max(scale.top, scale.y(picture.levels().get(n - 1).metres()) - 8)
+        });
         return points;
     }
 
@@ -289,7 +288,8 @@ final class StairPainter {
             }
             double x = scale.x(stand.ageKa());
             double y = scale.y(stand.metres());
-            boolean meant = stand.stage().equals(pointing.stage()) && !pointing.stage().isEmpty();
+            boolean meant =
+                    stand.stage().equals(pointing.stage()) && !pointing.stage().isEmpty();
             g.setFill(meant ? palette.tried() : palette.paper());
             double r = meant ? 6 : 3.6;
             g.fillOval(x - r, y - r, 2 * r, 2 * r);
@@ -299,7 +299,8 @@ final class StairPainter {
             double at = y - 13;
             for (int tries = 0; tries < 6; tries++) {
                 double here = at;
-                if (taken.stream().noneMatch(box -> x + half > box[0] && x - half < box[1] && Math.abs(here - box[2]) < 12)) {
+                if (taken.stream()
+                        .noneMatch(box -> x + half > box[0] && x - half < box[1] && Math.abs(here - box[2]) < 12)) {
                     break;
                 }
                 at -= 12;
@@ -338,7 +339,11 @@ final class StairPainter {
             g.strokeLine(x, y, scale.profileRight, y);
             g.strokeLine(scale.profileRight, y, scale.nameX() - 3, scale.nameY(i));
             pen(palette.ink(), 1.3);
-            g.strokeLine(x, scale.y(level.interval95().low()), x, scale.y(level.interval95().high()));
+            g.strokeLine(
+                    x,
+                    scale.y(level.interval95().low()),
+                    x,
+                    scale.y(level.interval95().high()));
             g.setFill(level.takesPart() || level.ownAge().isPresent() ? palette.link() : palette.muted());
             dot(x, y, chosen || meant ? 5 : 3.6);
             dot(scale.present, y, chosen || meant ? 4.5 : 3);
@@ -391,7 +396,8 @@ final class StairPainter {
         return picture.levels().stream()
                 .mapToDouble(level -> width(level.name(), TEXT, true)
                         + 10
-                        + Math.max(width(said(choices.apply(level.name())), TEXT, false), width(best(level), TEXT, false)))
+                        + Math.max(
+                                width(said(choices.apply(level.name())), TEXT, false), width(best(level), TEXT, false)))
                 .max()
                 .orElse(40);
     }
@@ -420,8 +426,7 @@ final class StairPainter {
         g.setLineWidth(width);
     }
 
-    private void text(
-            String text, double x, double y, TextAlignment align, double size, Color colour, boolean strong) {
+    private void text(String text, double x, double y, TextAlignment align, double size, Color colour, boolean strong) {
         g.setFont(font(size, strong));
         g.setFill(colour);
         g.setTextAlign(align);

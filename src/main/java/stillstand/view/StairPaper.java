@@ -151,11 +151,7 @@ final class StairPaper extends Region {
         double oldest = picture.oldestKa(new ArrayList<>(model.previewLinks()));
         if (groundIsOld || (!dragging && Math.abs(oldest - scale.oldestKa) > 0.5)) {
             scale = new StairScale(
-                    picture,
-                    oldest,
-                    getWidth(),
-                    getHeight(),
-                    StairPainter.nameWidth(picture, model::choiceOf));
+                    picture, oldest, getWidth(), getHeight(), StairPainter.nameWidth(picture, model::choiceOf));
             new StairPainter(ground.getGraphicsContext2D(), scale, picture, palette).ground();
             liveIsOld = true;
             groundIsOld = false;
@@ -183,7 +179,8 @@ final class StairPaper extends Region {
         if (isFocused()) {
             painter.focus();
         }
-        pointing.dragTo().ifPresent(to -> picture.level(pointing.level()).ifPresent(level -> painter.dragged(level, to)));
+        pointing.dragTo()
+                .ifPresent(to -> picture.level(pointing.level()).ifPresent(level -> painter.dragged(level, to)));
     }
 
     private void point(Pointing other) {
@@ -264,9 +261,13 @@ final class StairPaper extends Region {
         } else {
             model.abandon(level);
         }
-        String forbids = grabbed.map(Link::stage).filter(stage -> !stage.isEmpty()).orElse("");
+        String forbids =
+                grabbed.map(Link::stage).filter(stage -> !stage.isEmpty()).orElse("");
         onReading.accept(over.map(stand -> "Let go: " + level + " is " + stand.stage())
-                .orElse(forbids.isEmpty() ? level + ": drag onto a highstand" : "Let go: " + level + " is not " + forbids));
+                .orElse(
+                        forbids.isEmpty()
+                                ? level + ": drag onto a highstand"
+                                : "Let go: " + level + " is not " + forbids));
         point(new Pointing(
                 level, over.map(Stand::stage).orElse(""), Optional.of(new Point2D(event.getX(), event.getY()))));
     }

@@ -88,14 +88,15 @@ record StairPicture(
 
     /** The picture of a site that has been run. */
     static StairPicture of(SiteView site, List<CurveUsed> curves, Optional<SitePreview> now) {
-        List<Stand> stands = now.map(StairPicture::stands).orElseGet(() -> site.stands().values().stream()
-                .map(stand -> new Stand(
-                        stand.stage(),
-                        stand.ageKa(),
-                        stand.ageSigmaKa(),
-                        stand.levelMetres(),
-                        stand.levelSigmaMetres()))
-                .toList());
+        List<Stand> stands = now.map(StairPicture::stands)
+                .orElseGet(() -> site.stands().values().stream()
+                        .map(stand -> new Stand(
+                                stand.stage(),
+                                stand.ageKa(),
+                                stand.ageSigmaKa(),
+                                stand.levelMetres(),
+                                stand.levelSigmaMetres()))
+                        .toList());
         List<Mark> marks = new ArrayList<>();
         for (LevelView level : site.stair()) {
             SiteView.Height height = level.height().orElseThrow();
@@ -183,10 +184,12 @@ record StairPicture(
     }
 
     private static Optional<Link> ownAge(LevelView level, double metres) {
-        return level.answer().age().flatMap(age -> level.answer()
-                .rate()
-                .map(rate -> new Link(
-                        level.name(), "", age.median(), metres - rate.median() * age.median(), metres, 1)));
+        return level.answer()
+                .age()
+                .flatMap(age -> level.answer()
+                        .rate()
+                        .map(rate -> new Link(
+                                level.name(), "", age.median(), metres - rate.median() * age.median(), metres, 1)));
     }
 
     Optional<Mark> level(String name) {
@@ -203,8 +206,7 @@ record StairPicture(
                 .flatMap(level -> Stream.concat(
                         level.ownAge().stream(),
                         level.claims().stream()
-                                .flatMap(claim ->
-                                        link(level, claim.highstand(), claim.probability()).stream())))
+                                .flatMap(claim -> link(level, claim.highstand(), claim.probability()).stream())))
                 .toList();
     }
 
@@ -219,8 +221,8 @@ record StairPicture(
     private Optional<Link> link(Mark level, String stage, double probability) {
         return stand(stage)
                 .filter(stand -> probability >= LEAST_LINE)
-                .map(stand -> new Link(
-                        level.name(), stage, stand.ageKa(), stand.metres(), level.metres(), probability));
+                .map(stand ->
+                        new Link(level.name(), stage, stand.ageKa(), stand.metres(), level.metres(), probability));
     }
 
     /** How far back to draw: a little beyond the oldest line. */
@@ -229,7 +231,11 @@ record StairPicture(
                 * Stream.concat(links().stream(), others.stream())
                         .mapToDouble(Link::ageKa)
                         .max()
-                        .orElse(stands.stream().mapToDouble(Stand::ageKa).filter(age -> age < 450).max().orElse(LEAST_AGE_KA));
+                        .orElse(stands.stream()
+                                .mapToDouble(Stand::ageKa)
+                                .filter(age -> age < 450)
+                                .max()
+                                .orElse(LEAST_AGE_KA));
     }
 
     /** Heights to draw: all that matters, and the sea's depths as far as levels still have room. */

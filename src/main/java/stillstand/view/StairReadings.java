@@ -32,7 +32,10 @@ final class StairReadings {
     static String level(Mark level) {
         return format(
                 "Level %s: its sea stands at %.1f m today (95 %%: %.1f to %.1f m)",
-                level.name(), level.metres(), level.interval95().low(), level.interval95().high());
+                level.name(),
+                level.metres(),
+                level.interval95().low(),
+                level.interval95().high());
     }
 
     /** What a line says. */
@@ -65,8 +68,7 @@ final class StairReadings {
 
     /** How far predicted steps are from the levels; empty where there are none to compare. */
     static Optional<String> miss(StairPicture picture, PredictedStair stair) {
-        List<Mark> levels =
-                picture.levels().stream().filter(Mark::takesPart).toList();
+        List<Mark> levels = picture.levels().stream().filter(Mark::takesPart).toList();
         double[] standing = stair.steps().stream()
                 .filter(step -> step.overrunBy().isEmpty())
                 .mapToDouble(PredictedStair.Step::heightMetres)
@@ -82,8 +84,9 @@ final class StairReadings {
                     .orElseThrow();
             squares += nearest * nearest / levels.size();
         }
-        return Optional.of(format("The nearest steps miss the levels by %.1f m (root mean square). ", Math.sqrt(squares))
-                + "A good fit alone says little.");
+        return Optional.of(
+                format("The nearest steps miss the levels by %.1f m (root mean square). ", Math.sqrt(squares))
+                        + "A good fit alone says little.");
     }
 
     /** A step that a slid rate predicts. */

@@ -51,7 +51,8 @@ final class StairScale {
         right = width - 8;
         bottom = height - BELOW;
         double names = Math.min(nameWidth, 0.3 * width);
-        double steps = Math.min(0.22 * width, 26 + 34 * Math.max(1, picture.levels().size()));
+        double steps =
+                Math.min(0.22 * width, 26 + 34 * Math.max(1, picture.levels().size()));
         present = Math.max(LEFT + 40, right - names - LEADER - steps - LADDER);
         profileLeft = present + LADDER;
         profileRight = right - names - LEADER;
@@ -85,7 +86,8 @@ final class StairScale {
 
     /** Inner edge of a level's tread. */
     double stepX(int level) {
-        double step = (profileRight - profileLeft) / Math.max(1, picture.levels().size());
+        double step =
+                (profileRight - profileLeft) / Math.max(1, picture.levels().size());
         return profileLeft + (level + 0.84) * step;
     }
 
@@ -160,8 +162,7 @@ final class StairScale {
         Optional<Link> best = Optional.empty();
         double least = REACH - 3;
         for (Link link : links) {
-            double distance = distance(
-                    x, y, x(link.ageKa()), y(link.seaMetres()), present, y(link.metres()));
+            double distance = distance(x, y, x(link.ageKa()), y(link.seaMetres()), present, y(link.metres()));
             double unlikely = 2 * (1 - link.probability());
             if (distance + unlikely < least) {
                 least = distance + unlikely;

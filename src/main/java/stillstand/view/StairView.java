@@ -4,6 +4,7 @@ import atlantafx.base.theme.Styles;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import javafx.application.Platform;
 import javafx.beans.value.ChangeListener;
 import javafx.collections.ListChangeListener;
 import javafx.geometry.Insets;
@@ -44,6 +45,7 @@ public final class StairView extends BorderPane {
     private final VBox panel = new VBox(8);
     private final ContextMenu menu = new ContextMenu();
     private boolean following;
+    private boolean followIsDue;
 
     /** The view of a model. */
     public StairView(StairModel model) {
@@ -58,14 +60,16 @@ public final class StairView extends BorderPane {
         paper.onReading(reading::setText);
         paper.onMenu(this::openMenu);
         status.textFillProperty().addListener((property, before, now) -> usePalette());
-        ChangeListener<Object> follow = (property, before, now) -> follow();
+        ChangeListener<Object> follow = (property, before, now) -> followSoon();
         model.pictureProperty().addListener(follow);
         model.previewProperty().addListener(follow);
         model.selectedProperty().addListener(follow);
         model.lensProperty().addListener(follow);
         model.previewingProperty().addListener(follow);
-        model.lenses().addListener((ListChangeListener<Lens>) change -> follow());
-        model.predictedProperty().addListener((property, before, now) -> miss.setText(model.miss().orElse("")));
+        model.lenses().addListener((ListChangeListener<Lens>) change -> followSoon());
+        model.predictedProperty()
+                .addListener(
+                        (property, before, now) -> miss.setText(model.miss().orElse("")));
         follow();
     }
 
@@ -151,10 +155,19 @@ public final class StairView extends BorderPane {
         return scroll;
     }
 
+    /** Once for all that changes together. */
+    private void followSoon() {
+        if (!followIsDue) {
+            followIsDue = true;
+            Platform.runLater(this::follow);
+        }
+    }
+
     private void follow() {
+        followIsDue = false;
         following = true;
         site.setValue(model.siteProperty().get());
-        if (lens.getValue() != model.lensProperty().get()) {
+        if (!model.lensProperty().get().equals(lens.getValue())) {
             lens.setValue(model.lensProperty().get());
         }
         following = false;
@@ -175,8 +188,9 @@ public final class StairView extends BorderPane {
                 panel.getChildren().add(words(model.status()));
             }
             model.flightSentences().forEach(sentence -> panel.getChildren().add(words(sentence.strip())));
-            panel.getChildren().add(muted("Click a level, or press Up and Down in the drawing, to open it. Drag its line onto a"
-                    + " highstand to pin it, away from all to forbid that one."));
+            panel.getChildren()
+                    .add(muted("Click a level, or press Up and Down in the drawing, to open it. Drag its line onto a"
+                            + " highstand to pin it, away from all to forbid that one."));
             return;
         }
         panel.getChildren().add(title("Level " + level));

@@ -13,7 +13,8 @@ final class WrappedCell<T> extends TableCell<T, String> {
         tableColumnProperty().addListener((property, before, column) -> {
             words.wrappingWidthProperty().unbind();
             if (column != null) {
-                words.wrappingWidthProperty().bind(column.widthProperty().subtract(18)); // known before the first layout
+                words.wrappingWidthProperty()
+                        .bind(column.widthProperty().subtract(18)); // known before the first layout
             }
         });
         words.fillProperty().bind(textFillProperty());

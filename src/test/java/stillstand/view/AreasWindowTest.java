@@ -17,6 +17,7 @@ import javafx.scene.Scene;
 import javafx.scene.control.CheckBox;
 import javafx.scene.control.TableView;
 import javafx.scene.input.KeyCode;
+import javafx.scene.layout.StackPane;
 import javafx.stage.Stage;
 import org.junit.jupiter.api.AfterAll;
 import org.junit.jupiter.api.BeforeAll;
@@ -33,7 +34,7 @@ import stillstand.view.RatesModel.Row;
 
 /** Hands on rates, sea level and record; no display needed. */
 class AreasWindowTest {
-    private static Scene scene;
+    private static Optional<Scene> opened = Optional.empty();
 
     @TempDir
     private Path folder;
@@ -48,7 +49,8 @@ class AreasWindowTest {
 
     private static void fill(Stage stage) {
         Application.setUserAgentStylesheet(new atlantafx.base.theme.PrimerDark().getUserAgentStylesheet());
-        scene = new Scene(new javafx.scene.layout.StackPane(), 1200, 740);
+        Scene scene = new Scene(new StackPane(), 1200, 740);
+        opened = Optional.of(scene);
         stage.setScene(scene);
         stage.show();
     }
@@ -59,7 +61,7 @@ class AreasWindowTest {
     }
 
     private void show(Parent area) {
-        robot.interact(() -> scene.setRoot(area));
+        robot.interact(() -> opened.orElseThrow().setRoot(area));
         WaitForAsyncUtils.waitForFxEvents();
     }
 
@@ -95,9 +97,12 @@ class AreasWindowTest {
             model.show(Shown.of(study));
         });
         show(view[0]);
-        assertTrue(robot.lookup("#sea-use-spratt-lisiecki-2016").queryAs(CheckBox.class).isSelected());
+        assertTrue(robot.lookup("#sea-use-spratt-lisiecki-2016")
+                .queryAs(CheckBox.class)
+                .isSelected());
         robot.clickOn("#sea-use-waelbroeck-2002");
-        assertEquals(List.of("spratt-lisiecki-2016", "waelbroeck-2002"), edits.get(0).curves());
+        assertEquals(
+                List.of("spratt-lisiecki-2016", "waelbroeck-2002"), edits.get(0).curves());
         robot.interact(() -> view[0].lookup("#sea-paper").requestFocus());
         double before = model.paneProperty().get().agesKa().width();
         robot.type(KeyCode.PLUS);
@@ -116,7 +121,12 @@ class AreasWindowTest {
         });
         show(view[0]);
         robot.clickOn("#record-search").write("cauchy");
-        assertEquals(1, robot.lookup("#record-ledger").queryAs(TableView.class).getItems().size());
+        assertEquals(
+                1,
+                robot.lookup("#record-ledger")
+                        .queryAs(TableView.class)
+                        .getItems()
+                        .size());
     }
 
     @Test

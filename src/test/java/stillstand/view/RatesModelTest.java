@@ -35,7 +35,8 @@ class RatesModelTest {
                 model.rows().stream().map(Row::name).toList());
         assertEquals("Waits: it is tied to no single highstand.", row("T2").says());
         assertEquals(
-                "No rate: the curve is too steep at this age to give a rate.", row("T4 / C-2").says());
+                "No rate: the curve is too steep at this age to give a rate.",
+                row("T4 / C-2").says());
         assertEquals("Not done: its curve ends at 20 ka", row("the whole site").says());
         assertEquals("2 correlations remain possible.", row("the flight").says());
         assertEquals(Kind.BETWEEN, row("T1 to T4").kind());
@@ -44,7 +45,9 @@ class RatesModelTest {
     @Test
     void slowCoastsGetTheirBoundFirst() {
         model.show(Shown.of(SampleStudy.study(), SampleStudy.result(), false));
-        assertEquals("Moves slower than 0.024 m/kyr up and 0.032 m/kyr down, at 95 %.", row("S1").says());
+        assertEquals(
+                "Moves slower than 0.024 m/kyr up and 0.032 m/kyr down, at 95 %.",
+                row("S1").says());
         assertEquals("0.00 ± 0.01", row("S1").median());
     }
 

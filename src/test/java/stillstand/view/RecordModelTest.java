@@ -40,7 +40,9 @@ class RecordModelTest {
         assertEquals("0 lines", model.found());
         assertEquals("No figures yet: run the study.", model.figureStatus());
         model.exportResults(folder.resolve("out"));
-        assertEquals("There is nothing to export yet: run the study.", model.messageProperty().get());
+        assertEquals(
+                "There is nothing to export yet: run the study.",
+                model.messageProperty().get());
         assertFalse(Files.exists(folder.resolve("out")));
     }
 
@@ -74,7 +76,9 @@ class RecordModelTest {
                 .findFirst()
                 .orElseThrow();
         model.exportFigures(svg(List.of(stair)), folder);
-        assertEquals("1 figure written to " + folder + " as svg.", model.messageProperty().get());
+        assertEquals(
+                "1 figure written to " + folder + " as svg.",
+                model.messageProperty().get());
         assertArrayEquals(
                 stair.bytes(FigureFormat.SVG, PageWidth.ONE, true, 300),
                 Files.readAllBytes(folder.resolve("stair-north-cliff.svg")));
@@ -84,7 +88,9 @@ class RecordModelTest {
     void nothingChosenIsSaid() {
         showSample(false);
         model.exportFigures(svg(List.of()), folder);
-        assertEquals("Choose at least one figure and one format.", model.messageProperty().get());
+        assertEquals(
+                "Choose at least one figure and one format.",
+                model.messageProperty().get());
     }
 
     @Test
@@ -93,8 +99,7 @@ class RecordModelTest {
         Path out = folder.resolve("out");
         model.exportResults(out);
         assertEquals("Results written to " + out + ".", model.messageProperty().get());
-        assertEquals(
-                ResultsJson.text(SampleStudy.withoutFailure()), Files.readString(out.resolve(ResultsJson.FILE)));
+        assertEquals(ResultsJson.text(SampleStudy.withoutFailure()), Files.readString(out.resolve(ResultsJson.FILE)));
         assertTrue(Files.exists(out.resolve("figures/stair-north-cliff.pdf")));
 
         Path theirs = Files.createDirectory(folder.resolve("theirs"));
@@ -102,7 +107,9 @@ class RecordModelTest {
         model.exportResults(theirs);
         assertEquals("years of work", Files.readString(theirs.resolve("thesis.txt")));
         assertFalse(Files.exists(theirs.resolve(ResultsJson.FILE)));
-        assertFalse(model.messageProperty().get().startsWith("Results written"), model.messageProperty().get());
+        assertFalse(
+                model.messageProperty().get().startsWith("Results written"),
+                model.messageProperty().get());
     }
 
     @Test
@@ -118,7 +125,9 @@ class RecordModelTest {
         showSample(false);
         Path file = Files.writeString(folder.resolve("file"), "no folder");
         model.exportFigures(svg(model.figures()), file.resolve("inside"));
-        assertTrue(model.messageProperty().get().startsWith("Not written: "), model.messageProperty().get());
+        assertTrue(
+                model.messageProperty().get().startsWith("Not written: "),
+                model.messageProperty().get());
         assertFalse(model.exportingProperty().get());
     }
 

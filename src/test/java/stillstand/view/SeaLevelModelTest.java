@@ -8,7 +8,6 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
-import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import stillstand.files.ShippedLibrary;
 import stillstand.files.StudyFolder;
@@ -21,17 +20,12 @@ import stillstand.view.SeaLevelModel.Stand;
 class SeaLevelModelTest {
     private static final String SPRATT = "spratt-lisiecki-2016";
     private static final String WAELBROECK = "waelbroeck-2002";
-    private static Library library;
-    private static Study study;
+    private static final Library LIBRARY = ShippedLibrary.load();
+    private static final Study STUDY =
+            StudyFolder.read(Path.of("demo/velloe-island"), LIBRARY).value().orElseThrow();
 
     private final List<SeaLevelEdit> edits = new ArrayList<>();
-    private final SeaLevelModel model = new SeaLevelModel(library, edits::add);
-
-    @BeforeAll
-    static void read() {
-        library = ShippedLibrary.load();
-        study = StudyFolder.read(Path.of("demo/velloe-island"), library).value().orElseThrow();
-    }
+    private final SeaLevelModel model = new SeaLevelModel(LIBRARY, edits::add);
 
     private Stand stand(String stage) {
         return model.pictureProperty().get().stands().stream()
@@ -50,7 +44,7 @@ class SeaLevelModelTest {
 
     @Test
     void theStudysCurveIsDrawnWithItsHighstandsAsUsed() {
-        model.show(Shown.of(study));
+        model.show(Shown.of(STUDY));
         assertEquals(
                 List.of(SPRATT),
                 model.pictureProperty().get().lines().stream().map(Line::id).toList());
@@ -62,13 +56,12 @@ class SeaLevelModelTest {
         assertTrue(last.replaced());
         assertEquals(121, last.pick().orElseThrow().ageKa(), 1); // where the curve itself has it
         assertFalse(stand("9e").replaced());
-        assertEquals(
-                8, model.pictureProperty().get().cells().get(0).size());
+        assertEquals(8, model.pictureProperty().get().cells().get(0).size());
     }
 
     @Test
     void choosingHandsOutCurvesAndOverrides() {
-        model.show(Shown.of(study));
+        model.show(Shown.of(STUDY));
         model.choose(WAELBROECK, true);
         model.override(SeaLevelModel.NO_OVERRIDES);
         assertEquals(
@@ -83,7 +76,7 @@ class SeaLevelModelTest {
 
     @Test
     void theLastCurveCannotBeLeft() {
-        model.show(Shown.of(study));
+        model.show(Shown.of(STUDY));
         model.choose(SPRATT, false);
         assertTrue(model.isChosen(SPRATT));
         assertEquals(List.of(), edits);
@@ -91,7 +84,7 @@ class SeaLevelModelTest {
 
     @Test
     void curvesForComparisonAreDrawnAndNotAskedFor() {
-        model.show(Shown.of(study));
+        model.show(Shown.of(STUDY));
         model.lookAt(WAELBROECK, true);
         assertEquals(2, model.pictureProperty().get().lines().size());
         assertFalse(model.pictureProperty().get().lines().get(1).inUse());
@@ -118,7 +111,7 @@ class SeaLevelModelTest {
 
     @Test
     void hoverReadsEveryCurveThatCoversTheAge() {
-        model.show(Shown.of(study));
+        model.show(Shown.of(STUDY));
         model.lookAt(WAELBROECK, true);
         String there = model.reading(20);
         assertTrue(there.startsWith("20.0 ka; " + SPRATT + " −1"), there); // the last glacial, more than 100 m lower

@@ -53,7 +53,11 @@ class StairModelTest {
         assertEquals(
                 "P2 records 5c with probability 0.70: (40.6 − (−9.4) m) in 100.0 kyr = 0.500 m/kyr",
                 StairReadings.link(line, false));
-        assertEquals(List.of("9e"), model.pictureProperty().get().lost().stream().map(f -> f.highstand()).toList());
+        assertEquals(
+                List.of("9e"),
+                model.pictureProperty().get().lost().stream()
+                        .map(f -> f.highstand())
+                        .toList());
     }
 
     @Test
@@ -66,7 +70,10 @@ class StairModelTest {
         assertEquals("7a", of7a.stage());
         assertEquals(49.5, of7a.heightMetres(), 1e-9); // -0.5 + 0.25 x 200
         model.rateProperty().set(0.5);
-        assertEquals(99.5, model.predictedProperty().get().orElseThrow().steps().get(3).heightMetres(), 1e-9);
+        assertEquals(
+                99.5,
+                model.predictedProperty().get().orElseThrow().steps().get(3).heightMetres(),
+                1e-9);
         // P1 to P4 stand where they were put: 5a and 5c are off by nothing, 5e by 0.05 m
         assertTrue(model.miss().orElseThrow().contains("by 0.0 m"), model.miss().orElseThrow());
     }
@@ -104,7 +111,8 @@ class StairModelTest {
         model.pin("P2", "5a");
         assertEquals(List.of(new PairingEdit(InventedStair.SITE, "P2", "5a")), edits);
         FlightPreview preview = model.previewProperty().get().orElseThrow();
-        assertTrue(preview.pairingsOf("P2").stream().allMatch(pair -> pair.highstand().equals("5a")));
+        assertTrue(preview.pairingsOf("P2").stream()
+                .allMatch(pair -> pair.highstand().equals("5a")));
         assertTrue(model.status().startsWith("Preview, not the answer: "), model.status());
         assertTrue(model.previewLinks().stream()
                 .anyMatch(link -> link.level().equals("P2") && link.stage().equals("5a")));
@@ -117,7 +125,8 @@ class StairModelTest {
         model.forbid("P2", "5a");
         model.free("P2");
         assertEquals(
-                List.of("!5c", "!5a", ""), edits.stream().map(PairingEdit::highstand).toList());
+                List.of("!5c", "!5a", ""),
+                edits.stream().map(PairingEdit::highstand).toList());
     }
 
     @Test
@@ -165,7 +174,13 @@ class StairModelTest {
         }
         assertEquals(2, worked); // the first, and the last of the two that came meanwhile
         assertEquals(
-                "5e", late.previewProperty().get().orElseThrow().pairingsOf("P2").get(0).highstand());
+                "5e",
+                late.previewProperty()
+                        .get()
+                        .orElseThrow()
+                        .pairingsOf("P2")
+                        .get(0)
+                        .highstand());
     }
 
     @Test
@@ -222,6 +237,12 @@ class StairModelTest {
         model.step(1);
         assertTrue(model.lensProperty().get().title().startsWith("Possible correlation 1 of 2: 0.30 to 0.33 m/kyr"));
         assertEquals(0.315, model.rateProperty().get(), 1e-12);
+        // at 0.3 to 0.33 m/kyr the shoreline of 328 ka stands at 94 to 104 m, where P4 is
+        assertTrue(
+                model.answerLinks().stream()
+                        .anyMatch(link ->
+                                link.level().equals("P4") && link.stage().equals("9e")),
+                model.answerLinks().toString());
         model.step(2);
         assertTrue(model.lensProperty().get().title().endsWith("not the answer"));
         // P3 is matched to nothing in it

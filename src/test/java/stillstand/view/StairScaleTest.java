@@ -51,15 +51,27 @@ class StairScaleTest {
         Link strong = new Link("P2", "5c", 100, -9.4, 40.6, 0.7);
         Link weak = new Link("P2", "5a", 80, -8.5, 40.6, 0.25);
         double nearWall = scale.x(1);
-        assertEquals("5c", scale.linkAt(nearWall, scale.y(40.2), List.of(weak, strong)).orElseThrow().stage());
+        assertEquals(
+                "5c",
+                scale.linkAt(nearWall, scale.y(40.2), List.of(weak, strong))
+                        .orElseThrow()
+                        .stage());
         double middle = (scale.x(80) + scale.present) / 2;
-        assertEquals("5a", scale.linkAt(middle, scale.y((40.6 - 8.5) / 2), List.of(weak, strong)).orElseThrow().stage());
+        assertEquals(
+                "5a",
+                scale.linkAt(middle, scale.y((40.6 - 8.5) / 2), List.of(weak, strong))
+                        .orElseThrow()
+                        .stage());
     }
 
     @Test
     void aLevelIsFoundByItsNameAndItsTread() {
-        assertEquals("P3", scale.levelAt(scale.nameX() + 5, scale.nameY(2)).orElseThrow().name());
-        assertEquals("P1", scale.levelAt(scale.stepX(0), scale.y(31.5) + 3).orElseThrow().name());
+        assertEquals(
+                "P3",
+                scale.levelAt(scale.nameX() + 5, scale.nameY(2)).orElseThrow().name());
+        assertEquals(
+                "P1",
+                scale.levelAt(scale.stepX(0), scale.y(31.5) + 3).orElseThrow().name());
         assertEquals(Optional.empty(), scale.levelAt(scale.stepX(0), scale.y(31.5) + 60));
     }
 

@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import java.util.concurrent.TimeoutException;
 import javafx.application.Application;
 import javafx.geometry.Point2D;
@@ -25,9 +26,11 @@ import org.testfx.util.WaitForAsyncUtils;
 /** Hands on the Stair: a slider, a dragged line, keys and buttons; no display needed. */
 class StairWindowTest {
     private static final List<PairingEdit> EDITS = new ArrayList<>();
-    private static StairModel model;
-    private static StairView view;
-    private static StairPaper paper;
+    private static final StairModel model = new StairModel(Runnable::run, Runnable::run, EDITS::add);
+    private static Optional<StairView> opened = Optional.empty();
+
+    private final StairView view = opened.orElseThrow();
+    private final StairPaper paper = (StairPaper) view.lookup("#stair-paper");
 
     private final FxRobot robot = new FxRobot();
 
@@ -40,11 +43,10 @@ class StairWindowTest {
 
     private static void fill(Stage stage) {
         Application.setUserAgentStylesheet(new atlantafx.base.theme.PrimerLight().getUserAgentStylesheet());
-        model = new StairModel(Runnable::run, Runnable::run, EDITS::add);
-        view = new StairView(model);
+        StairView view = new StairView(model);
+        opened = Optional.of(view);
         stage.setScene(new Scene(view, 1200, 740));
         stage.show();
-        paper = (StairPaper) view.lookup("#stair-paper");
     }
 
     @AfterAll
@@ -74,10 +76,12 @@ class StairWindowTest {
 
     @Test
     void slidingMovesTheStaircase() {
-        double before = model.predictedProperty().get().orElseThrow().steps().get(3).heightMetres();
+        double before =
+                model.predictedProperty().get().orElseThrow().steps().get(3).heightMetres();
         robot.interact(() -> view.lookup("#stair-rate").requestFocus());
         robot.type(KeyCode.RIGHT, 3);
-        double after = model.predictedProperty().get().orElseThrow().steps().get(3).heightMetres();
+        double after =
+                model.predictedProperty().get().orElseThrow().steps().get(3).heightMetres();
         assertTrue(after > before, after + " after " + before);
         assertTrue(text("#stair-miss").startsWith("The nearest steps miss the levels by "), text("#stair-miss"));
     }
@@ -106,12 +110,12 @@ class StairWindowTest {
 
     @Test
     void aClickOpensTheLevelAndAPointerReadsIt() {
-        robot.clickOn(paper.localToScreen(paper.scale().nameX() + 8, paper.scale().nameY(2)));
+        robot.clickOn(
+                paper.localToScreen(paper.scale().nameX() + 8, paper.scale().nameY(2)));
         assertEquals("P3", model.selectedProperty().get());
         assertFalse(robot.lookup("Level P3").tryQuery().isEmpty());
         // by hand: 1 m of survey and half of 2 m of indicative range make 1.41 m; 1.96 of it either side
-        assertEquals(
-                "Level P3: its sea stands at 68.8 m today (95 %: 66.0 to 71.6 m)", text("#stair-reading"));
+        assertEquals("Level P3: its sea stands at 68.8 m today (95 %: 66.0 to 71.6 m)", text("#stair-reading"));
         assertEquals(List.of(), EDITS);
     }
 
@@ -128,7 +132,8 @@ class StairWindowTest {
         robot.type(KeyCode.X);
         robot.type(KeyCode.F);
         assertEquals(
-                List.of("5a", "!5a", ""), EDITS.stream().map(PairingEdit::highstand).toList());
+                List.of("5a", "!5a", ""),
+                EDITS.stream().map(PairingEdit::highstand).toList());
         assertTrue(paper.getAccessibleText().startsWith("Level P2"), paper.getAccessibleText());
     }
 
