@@ -31,7 +31,7 @@ import stillstand.uncertainty.Uncertain;
 
 /** A study on disk: {@code study.json}, its tables, its own curves and calibrated ages. */
 public final class StudyFolder {
-    private static final List<String> LATER = List.of("points.csv", "gia.csv");
+    private static final List<String> LATER = List.of("points.csv");
     private static final String CURVES = "curves";
     private static final String AGES = "ages";
 
@@ -88,6 +88,7 @@ public final class StudyFolder {
         Optional<Table> sites = table("sites.csv");
         Optional<Table> levels = table("levels.csv");
         Optional<Table> samples = exists("samples.csv") ? table("samples.csv") : Optional.empty();
+        Optional<Table> gia = exists("gia.csv") ? table("gia.csv") : Optional.empty();
         Map<String, Uncertain> ages = ages();
         for (String name : LATER) {
             if (exists(name)) {
@@ -100,6 +101,7 @@ public final class StudyFolder {
                 sites,
                 levels,
                 samples,
+                gia,
                 ages,
                 problems,
                 warnings,

@@ -8,7 +8,8 @@ public final class TableColumns {
     private static final Map<String, Columns> TABLES = Map.of(
             SitesTable.NAME, SitesTable.COLUMNS,
             LevelsTable.NAME, LevelsTable.COLUMNS,
-            SamplesTable.NAME, SamplesTable.COLUMNS);
+            SamplesTable.NAME, SamplesTable.COLUMNS,
+            GiaTable.NAME, GiaTable.COLUMNS);
 
     private TableColumns() {}
 

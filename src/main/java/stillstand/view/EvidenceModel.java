@@ -23,7 +23,7 @@ final class EvidenceModel {
     static final List<String> PARTS = StudyDraft.NAMES;
 
     /** Parts that are offered only where a study has them. */
-    private static final List<String> SELDOM = List.of("points.csv", "gia.csv");
+    private static final List<String> SELDOM = List.of("points.csv");
 
     private final StudyDocument document;
     private final SettingsModel settings;
@@ -136,8 +136,11 @@ final class EvidenceModel {
             header.add("elevation_1sigma_m");
         } else if (name.equals("samples.csv")) {
             header.addAll(List.of("level", "age_ka", "age_2sigma_ka"));
+        } else if (name.equals("gia.csv")) {
+            header = new ArrayList<>(List.of("site", "highstand", "offset_m", "offset_1sigma_m"));
         }
-        document.edit("adding " + name, draft -> draft.with(Sheet.of(name, header)));
+        Sheet sheet = Sheet.of(name, header);
+        document.edit("adding " + name, draft -> draft.with(sheet));
     }
 
     /** Looks at the place of a finding; nothing happens where the window cannot show that file. */

@@ -101,7 +101,9 @@ final class EvidenceView extends BorderPane {
     private static String title(String part) {
         return part.equals(StudyJson.NAME)
                 ? "Settings"
-                : part.substring(0, 1).toUpperCase(Locale.ROOT)
+                : part.equals("gia.csv")
+                        ? "Local sea level"
+                        : part.substring(0, 1).toUpperCase(Locale.ROOT)
                         + part.substring(1).replace(".csv", "");
     }
 
@@ -258,7 +260,9 @@ final class EvidenceView extends BorderPane {
         Label nothing = new Label(
                 name.equals("samples.csv")
                         ? "This study has no dated samples."
-                        : "This study has no " + name + " that can be read as text.");
+                        : name.equals("gia.csv")
+                                ? "This study says nothing of local minus global sea level."
+                                : "This study has no " + name + " that can be read as text.");
         Button add = new Button("Add " + name);
         add.setId("add-table");
         add.setDisable(model.document().isReadOnly());

@@ -20,6 +20,7 @@ final class SettingsModel {
     static final String SEA_LEVEL = "Sea level";
     static final String PRIOR = "Prior of the rate";
     static final String MATCHING = "Matching";
+    static final String LEVERAGE = "A next measurement";
 
     private static final String PRIOR_KIND = "rate.prior.kind";
     private static final String CURVES = "sea_level.curves";
@@ -93,7 +94,9 @@ final class SettingsModel {
                 number(MATCHING, "matching.expected_strays", "Expected strays"),
                 number(MATCHING, "matching.stray_age_maximum_ka", "Oldest stray, ka"),
                 number(MATCHING, "matching.wrong_date_probability", "Wrong date probability"),
-                choice(MATCHING, "indicative_range", "Indicative range", List.of("quadrature", "uniform")));
+                choice(MATCHING, "indicative_range", "Indicative range", List.of("quadrature", "uniform")),
+                number(LEVERAGE, "leverage.date_1sigma_ka", "Date, 1 sigma, ka"),
+                number(LEVERAGE, "leverage.survey_1sigma_m", "Survey, 1 sigma, m"));
     }
 
     private static Field words(String group, String keyPath, String label) {
