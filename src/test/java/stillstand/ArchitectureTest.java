@@ -33,10 +33,11 @@ class ArchitectureTest {
             Map.entry("uplift", Set.of("ledger", "uncertainty", "sealevel", "dating", "shoreline")),
             Map.entry("sensitivity", Set.of("ledger", "uncertainty", "sealevel", "dating", "shoreline", "uplift")),
             Map.entry("study", ENGINE),
-            Map.entry("files", with(ENGINE, "study")),
+            Map.entry("files", with(ENGINE, "study", "figure")),
             Map.entry("figure", with(ENGINE, "study")),
             Map.entry("report", with(ENGINE, "study", "figure")),
-            Map.entry("cli", with(ENGINE, "study", "files", "figure", "report")));
+            Map.entry("cli", with(ENGINE, "study", "files", "figure", "report")),
+            Map.entry("view", with(ENGINE, "study", "files", "figure", "report")));
 
     private static Set<String> with(Set<String> base, String... more) {
         Set<String> all = new TreeSet<>(base);
@@ -108,9 +109,12 @@ class ArchitectureTest {
                 .check(CODE);
     }
 
+    /** But for the toolkit's chooser of folders, which hands one out. */
     @Test
     void nobodyUsesJavaIoFile() {
         noClasses()
+                .that()
+                .doNotHaveFullyQualifiedName("stillstand.view.Dialogs")
                 .should()
                 .dependOnClassesThat()
                 .haveFullyQualifiedName("java.io.File")
@@ -165,6 +169,26 @@ class ArchitectureTest {
                 .should()
                 .dependOnClassesThat()
                 .resideInAnyPackage("java.nio.file..", "java.time..", "javafx..")
+                .check(CODE);
+    }
+
+    @Test
+    void windowStaysInViewAndModelsKnowNoControl() {
+        noClasses()
+                .that()
+                .resideOutsideOfPackage("stillstand.view..")
+                .should()
+                .dependOnClassesThat()
+                .resideInAPackage("javafx..")
+                .check(CODE);
+        noClasses()
+                .that()
+                .resideInAPackage("stillstand.view..")
+                .and()
+                .haveSimpleNameEndingWith("Model")
+                .should()
+                .dependOnClassesThat()
+                .resideInAnyPackage("javafx.scene..", "javafx.stage..", "javafx.application..")
                 .check(CODE);
     }
 

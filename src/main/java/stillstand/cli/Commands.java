@@ -6,6 +6,7 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.AccessDeniedException;
 import java.nio.file.FileSystemException;
 import java.nio.file.NoSuchFileException;
+import java.util.List;
 import java.util.concurrent.Callable;
 import picocli.CommandLine;
 import picocli.CommandLine.Command;
@@ -42,7 +43,18 @@ public final class Commands implements Callable<Integer> {
      * @return the exit code
      */
     public static int execute(Workshop workshop, String... arguments) {
-        CommandLine line = line(workshop);
+        return execute(workshop, List.of(), arguments);
+    }
+
+    /**
+     * Executes a command line that knows more commands.
+     *
+     * @param more commands of other doors, each annotated as picocli wants it
+     * @param arguments as the shell gives them
+     * @return the exit code
+     */
+    public static int execute(Workshop workshop, List<? extends Callable<Integer>> more, String... arguments) {
+        CommandLine line = line(workshop, more);
         try {
             return line.execute(arguments);
         } catch (OutOfMemoryError e) {
@@ -55,7 +67,7 @@ public final class Commands implements Callable<Integer> {
         }
     }
 
-    private static CommandLine line(Workshop workshop) {
+    private static CommandLine line(Workshop workshop, List<? extends Callable<Integer>> more) {
         CommandLine line = new CommandLine(new Commands(workshop));
         line.addSubcommand(new NewCommand(workshop));
         line.addSubcommand(new CheckCommand(workshop));
@@ -63,6 +75,7 @@ public final class Commands implements Callable<Integer> {
         line.addSubcommand(new DrawCommand(workshop));
         line.addSubcommand(new PredictCommand(workshop));
         line.addSubcommand(curves(workshop));
+        more.forEach(line::addSubcommand);
         return line.setOut(new PrintWriter(workshop.out(), true, StandardCharsets.UTF_8))
                 .setErr(new PrintWriter(workshop.err(), true, StandardCharsets.UTF_8))
                 .setColorScheme(CommandLine.Help.defaultColorScheme(Ansi.OFF))

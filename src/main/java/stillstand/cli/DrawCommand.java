@@ -21,13 +21,14 @@ import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
-import stillstand.cli.FigureFiles.Fault;
 import stillstand.figure.Figure;
 import stillstand.figure.FigureFormat;
 import stillstand.figure.FigureKind;
 import stillstand.figure.Figures;
 import stillstand.figure.Figures.Absence;
 import stillstand.figure.PageWidth;
+import stillstand.files.FigureFiles;
+import stillstand.files.FigureFiles.Fault;
 import stillstand.files.ResultsJson;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.Loaded;
@@ -98,13 +99,8 @@ final class DrawCommand implements Callable<Integer> {
         List<Figure> chosen = chosen(all);
         List<Fault> faults = writer.write(chosen, into, Runtime.getRuntime().availableProcessors());
         tell(chosen, absent(all));
-        faults.forEach(fault -> workshop.err().println(sentence(fault)));
+        faults.forEach(fault -> workshop.err().println(fault.sentence()));
         return faults.isEmpty() ? ExitCode.DONE : ExitCode.FAILED;
-    }
-
-    /** What a figure that failed is told with. */
-    static String sentence(Fault fault) {
-        return fault.name() + " could not be drawn, a fault of Stillstand: " + fault.reason();
     }
 
     private Loaded<StudyResult> read() throws IOException {

@@ -2,9 +2,7 @@ package stillstand.cli;
 
 import java.io.IOException;
 import java.nio.file.Path;
-import java.time.Duration;
 import java.time.Instant;
-import java.time.temporal.ChronoUnit;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -17,9 +15,8 @@ import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
-import stillstand.cli.FigureFiles.Fault;
-import stillstand.figure.Figures;
-import stillstand.files.ResultFiles;
+import stillstand.files.FigureFiles.Fault;
+import stillstand.files.FinishedRun;
 import stillstand.files.ResultsFolder;
 import stillstand.files.ResultsJson;
 import stillstand.files.ShippedLibrary;
@@ -28,7 +25,6 @@ import stillstand.ledger.Loaded;
 import stillstand.ledger.NearestName;
 import stillstand.ledger.RunCancelledException;
 import stillstand.report.TerminalReport;
-import stillstand.study.Provenance;
 import stillstand.study.Study;
 import stillstand.study.StudyResult;
 import stillstand.study.StudySettings.WeightedCurve;
@@ -126,14 +122,11 @@ final class RunCommand implements Callable<Integer> {
                 return ExitCode.PROBLEMS;
             }
             try (ResultsFolder results = opened.value().get()) {
-                StudyResult result = run(study, started, interruption);
-                List<Fault> faults = new ArrayList<>();
-                results.replace(fresh -> {
-                    ResultFiles.write(fresh, study, result);
-                    faults.addAll(draw(result, fresh));
-                });
+                FinishedRun finished = run(study, started, interruption);
+                List<Fault> faults = finished.write(results, !figures.equals(NO_FIGURES), workers());
+                StudyResult result = finished.result();
                 tell(study, result, place);
-                faults.forEach(fault -> workshop.err().println(DrawCommand.sentence(fault)));
+                faults.forEach(fault -> workshop.err().println(fault.sentence()));
                 return result.failures().isEmpty() && faults.isEmpty() ? ExitCode.DONE : ExitCode.FAILED;
             } catch (RunCancelledException e) {
                 workshop.err().println("Interrupted. Earlier results are as they were.");
@@ -148,7 +141,7 @@ final class RunCommand implements Callable<Integer> {
                 : curves.stream().map(id -> new WeightedCurve(id, 1)).toList();
     }
 
-    private StudyResult run(Study study, Instant started, Interruption interruption) {
+    private FinishedRun run(Study study, Instant started, Interruption interruption) {
         ExecutorService executor = Executors.newFixedThreadPool(workers());
         Progress progress = new Progress(workshop, quiet, interruption::isAsked);
         try {
@@ -156,33 +149,14 @@ final class RunCommand implements Callable<Integer> {
             if (interruption.isAsked()) {
                 throw new RunCancelledException();
             }
-            return result.with(timed(result.provenance(), started));
+            return FinishedRun.of(study, result, started, workshop.clock().instant());
         } finally {
             executor.shutdownNow();
         }
     }
 
-    /** Chart classes are loaded here and not before: a run without figures starts without them. */
-    private List<Fault> draw(StudyResult result, Path folder) throws IOException {
-        if (figures.equals(NO_FIGURES)) {
-            return List.of();
-        }
-        return FigureFiles.OF_RUN.write(Figures.of(result).figures(), folder.resolve("figures"), workers());
-    }
-
     private int workers() {
         return threads.orElse(Runtime.getRuntime().availableProcessors());
-    }
-
-    private Provenance timed(Provenance engine, Instant started) {
-        double seconds = Duration.between(started, workshop.clock().instant()).toMillis() / 1000.0;
-        return new Provenance(
-                engine.version(),
-                engine.seed(),
-                engine.generator(),
-                engine.inputs(),
-                Optional.of(started.truncatedTo(ChronoUnit.SECONDS).toString()),
-                Optional.of(seconds));
     }
 
     private void tell(Study study, StudyResult result, Path place) {

@@ -4,7 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 
 /** Labels that want to stand at their own heights and must not overlap. */
-final class LabelColumn {
+public final class LabelColumn {
     private LabelColumn() {}
 
     /**
@@ -16,7 +16,7 @@ final class LabelColumn {
      * @param low least position
      * @param high greatest position; exceeded where there is not room enough
      */
-    static double[] places(double[] wanted, double gap, double low, double high) {
+    public static double[] places(double[] wanted, double gap, double low, double high) {
         List<double[]> pools = new ArrayList<>();
         for (int i = 0; i < wanted.length; i++) {
             pools.add(new double[] {wanted[i] - i * gap, 1});

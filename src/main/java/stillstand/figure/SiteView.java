@@ -24,12 +24,18 @@ import stillstand.uplift.Quantity;
  * @param residuals of the flight
  * @param stands the highstands of the study, each label once
  */
-record SiteView(
+public record SiteView(
         String site,
         List<LevelView> levels,
         Optional<FlightResult> flight,
         List<LevelResidual> residuals,
         Map<String, HighstandUsed> stands) {
+    public SiteView {
+        levels = List.copyOf(levels);
+        residuals = List.copyOf(residuals);
+        stands = Collections.unmodifiableMap(new LinkedHashMap<>(stands));
+    }
+
     /** Name of the rows beyond the curve: they share it, so that it says no age. */
     static final String OLDER = "older";
 
@@ -41,16 +47,20 @@ record SiteView(
      * @param claims highstands that may have made it, most probable first
      * @param answer its own answer
      */
-    record LevelView(String name, Optional<Height> height, List<Claim> claims, LevelAnswer answer) {}
+    public record LevelView(String name, Optional<Height> height, List<Claim> claims, LevelAnswer answer) {
+        public LevelView {
+            claims = List.copyOf(claims);
+        }
+    }
 
     /** A height and its 95 % interval, m. */
-    record Height(double metres, Interval interval95) {}
+    public record Height(double metres, Interval interval95) {}
 
     /** A highstand and its probability. */
-    record Claim(String highstand, double probability) {}
+    public record Claim(String highstand, double probability) {}
 
     /** Every site with a level, in the order of the study. */
-    static List<SiteView> all(StudyResult result) {
+    public static List<SiteView> all(StudyResult result) {
         Map<String, List<LevelAnswer>> sites = new LinkedHashMap<>();
         result.levels()
                 .forEach(level -> sites.computeIfAbsent(level.site(), name -> new ArrayList<>())
@@ -107,7 +117,7 @@ record SiteView(
     }
 
     /** Levels whose height is known, lowest first. */
-    List<LevelView> stair() {
+    public List<LevelView> stair() {
         return levels.stream()
                 .filter(level -> level.height().isPresent())
                 .sorted(Comparator.comparingDouble(SiteView::metres))

@@ -9,6 +9,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.stream.Collectors;
 import java.util.stream.Stream;
+import stillstand.figure.Figures;
 import stillstand.ledger.Assumption;
 import stillstand.sensitivity.CurveChoice;
 import stillstand.study.Study;
@@ -20,6 +21,8 @@ import stillstand.uplift.LevelAnswer.Share;
 
 /** The files of a results folder, from a study and what was found. */
 public final class ResultFiles {
+    private static final String FIGURES = "figures";
+
     private ResultFiles() {}
 
     /**
@@ -40,6 +43,21 @@ public final class ResultFiles {
         }
         write(folder, "ledger.csv", ledger(result));
         LeverageTables.write(folder, result.leverage());
+    }
+
+    /**
+     * Writes all of them, and the figures beside them.
+     *
+     * @param folder an empty folder
+     * @param figures how they are drawn
+     * @param threads at work at once
+     * @return figures that could not be drawn
+     * @throws IOException if a file cannot be written
+     */
+    public static List<FigureFiles.Fault> write(
+            Path folder, Study study, StudyResult result, FigureFiles figures, int threads) throws IOException {
+        write(folder, study, result);
+        return figures.write(Figures.of(result).figures(), folder.resolve(FIGURES), threads);
     }
 
     private static void write(Path folder, String name, String text) throws IOException {

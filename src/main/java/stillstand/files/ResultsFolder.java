@@ -1,24 +1,14 @@
 package stillstand.files;
 
 import java.io.IOException;
-import java.nio.ByteBuffer;
-import java.nio.channels.FileChannel;
-import java.nio.channels.FileLock;
-import java.nio.channels.OverlappingFileLockException;
 import java.nio.charset.StandardCharsets;
-import java.nio.file.FileVisitResult;
 import java.nio.file.Files;
 import java.nio.file.NoSuchFileException;
 import java.nio.file.Path;
-import java.nio.file.SimpleFileVisitor;
-import java.nio.file.StandardOpenOption;
-import java.nio.file.attribute.BasicFileAttributes;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
-import java.util.UUID;
 import java.util.stream.Stream;
-import org.jspecify.annotations.Nullable;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.Loaded;
 
@@ -28,11 +18,6 @@ import stillstand.ledger.Loaded;
  * Whoever opens it next finishes or undoes what a killed process left half done.
  */
 public final class ResultsFolder implements AutoCloseable {
-    /** Beyond this byte of the lock file lies the locked one, so that the others stay readable on every system. */
-    private static final long LOCKED_BYTE = 1L << 40;
-
-    private static final int LOCK_ATTEMPTS = 20;
-
     /** What a run writes; anything else in the folder is the user's and must not be lost. */
     private static final Set<String> WRITTEN = Set.of(
             ResultsJson.FILE,
@@ -56,14 +41,12 @@ public final class ResultsFolder implements AutoCloseable {
     private final Path folder;
     private final Path fresh;
     private final Path old;
-    private final Path lockFile;
-    private final FileChannel lock;
+    private final LockFile lock;
 
-    private ResultsFolder(Path folder, FileChannel lock) {
+    private ResultsFolder(Path folder, LockFile lock) {
         this.folder = folder;
         this.fresh = sibling(folder, "new");
         this.old = sibling(folder, "old");
-        this.lockFile = sibling(folder, "lock");
         this.lock = lock;
     }
 
@@ -93,7 +76,7 @@ public final class ResultsFolder implements AutoCloseable {
             return refused(folder, "the root of a file system", "a folder for results");
         }
         Files.createDirectories(parent);
-        Optional<FileChannel> lock = lock(sibling(place, "lock"));
+        Optional<LockFile> lock = LockFile.take(sibling(place, "lock"));
         if (lock.isEmpty()) {
             return refused(folder, "another run writing there", "one run at a time; wait for it or give another --out");
         }
@@ -134,7 +117,7 @@ public final class ResultsFolder implements AutoCloseable {
     /** The steps of a replacement, of which tests take only the first few, as a killed process does. */
     void replace(Filling filling, int steps) throws IOException {
         if (steps >= 1) {
-            deleteTree(fresh);
+            FolderTree.delete(fresh);
             Files.createDirectory(fresh);
             filling.into(fresh);
         }
@@ -145,16 +128,14 @@ public final class ResultsFolder implements AutoCloseable {
             Files.move(fresh, folder);
         }
         if (steps >= 4) {
-            deleteTree(old);
+            FolderTree.delete(old);
         }
     }
 
     /** Lets other processes write here. */
     @Override
     public void close() throws IOException {
-        try (lock) {
-            Files.deleteIfExists(lockFile); // before the lock goes: afterwards it may be another's
-        }
+        lock.close();
     }
 
     /** Finishes a swap whose old folder is already away, undoes any other. */
@@ -162,8 +143,8 @@ public final class ResultsFolder implements AutoCloseable {
         if (!Files.exists(folder) && Files.exists(old)) {
             Files.move(Files.exists(fresh) ? fresh : old, folder);
         }
-        deleteTree(fresh);
-        deleteTree(old);
+        FolderTree.delete(fresh);
+        FolderTree.delete(old);
     }
 
     private Optional<Loaded<ResultsFolder>> refusal(Path asGiven) throws IOException {
@@ -216,71 +197,5 @@ public final class ResultsFolder implements AutoCloseable {
 
     private static Path sibling(Path folder, String what) {
         return folder.resolveSibling("." + folder.getFileName() + ".stillstand-" + what);
-    }
-
-    /**
-     * The lock of the operating system on the lock file: it goes with its process, so none is ever stale. The file is
-     * removed by its holder; that the one locked is still the one in place is seen by its content.
-     */
-    private static Optional<FileChannel> lock(Path lockFile) throws IOException {
-        for (int attempt = 0; attempt < LOCK_ATTEMPTS; attempt++) {
-            FileChannel channel = FileChannel.open(
-                    lockFile, StandardOpenOption.CREATE, StandardOpenOption.READ, StandardOpenOption.WRITE);
-            if (tryLock(channel) == null) {
-                channel.close();
-                return Optional.empty();
-            }
-            String mark = UUID.randomUUID().toString();
-            channel.truncate(0);
-            channel.write(ByteBuffer.wrap(mark.getBytes(StandardCharsets.UTF_8)), 0);
-            if (mark.equals(content(lockFile))) {
-                return Optional.of(channel);
-            }
-            channel.close();
-        }
-        return Optional.empty();
-    }
-
-    private static @Nullable FileLock tryLock(FileChannel channel) throws IOException {
-        try {
-            return channel.tryLock(LOCKED_BYTE, 1, false);
-        } catch (OverlappingFileLockException e) {
-            return null; // another run in this very process
-        } catch (IOException e) {
-            channel.close();
-            throw e;
-        }
-    }
-
-    private static String content(Path file) throws IOException {
-        try {
-            return Files.readString(file, StandardCharsets.UTF_8);
-        } catch (NoSuchFileException e) {
-            return "";
-        }
-    }
-
-    /** Removes a folder and all in it, following no link; one that is not there is removed already. */
-    private static void deleteTree(Path tree) throws IOException {
-        if (!Files.exists(tree)) {
-            return;
-        }
-        Files.walkFileTree(tree, new SimpleFileVisitor<>() {
-            @Override
-            public FileVisitResult visitFile(Path file, BasicFileAttributes attributes) throws IOException {
-                Files.delete(file);
-                return FileVisitResult.CONTINUE;
-            }
-
-            @Override
-            public FileVisitResult postVisitDirectory(Path directory, @Nullable IOException failure)
-                    throws IOException {
-                if (failure != null) {
-                    throw failure;
-                }
-                Files.delete(directory);
-                return FileVisitResult.CONTINUE;
-            }
-        });
     }
 }

@@ -1,6 +1,7 @@
 package stillstand.files;
 
 import java.io.IOException;
+import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -35,13 +36,15 @@ public final class StudyFolder {
     private static final String AGES = "ages";
 
     private final Path folder;
+    private final Map<String, String> edited;
     private final List<InputProblem> problems = new ArrayList<>();
     private final List<InputWarning> warnings = new ArrayList<>();
     private final List<Assumption> ledger = new ArrayList<>();
     private final List<InputFile> inputs = new ArrayList<>();
 
-    private StudyFolder(Path folder) {
+    private StudyFolder(Path folder, Map<String, String> edited) {
         this.folder = folder;
+        this.edited = edited;
     }
 
     /**
@@ -57,7 +60,21 @@ public final class StudyFolder {
             return Loaded.failed(List.of(InputProblem.ofFile(
                     String.valueOf(folder), found, "the folder of a study, with study.json in it")));
         }
-        return new StudyFolder(folder).read(library, changes);
+        return new StudyFolder(folder, Map.of()).read(library, changes);
+    }
+
+    /**
+     * Reads and checks a study of which some files are being edited: what will be found once they are saved.
+     *
+     * @param edited texts by file name, in place of what the disk holds
+     */
+    public static Loaded<Study> read(Path folder, Map<String, String> edited, Library library) {
+        return new StudyFolder(folder, edited).read(library, UnaryOperator.identity());
+    }
+
+    /** What the tool knows, with the study's own curves and tables beside it as far as they can be read. */
+    public static Library library(Path folder, Library shipped) {
+        return new StudyFolder(folder, Map.of()).withOwnCurves(shipped);
     }
 
     /** Reads and checks a whole study as it stands. */
@@ -70,11 +87,11 @@ public final class StudyFolder {
         Library whole = withOwnCurves(library);
         Optional<Table> sites = table("sites.csv");
         Optional<Table> levels = table("levels.csv");
-        Optional<Table> samples = Files.exists(folder.resolve("samples.csv")) ? table("samples.csv") : Optional.empty();
-        Optional<Table> gia = Files.exists(folder.resolve("gia.csv")) ? table("gia.csv") : Optional.empty();
+        Optional<Table> samples = exists("samples.csv") ? table("samples.csv") : Optional.empty();
+        Optional<Table> gia = exists("gia.csv") ? table("gia.csv") : Optional.empty();
         Map<String, Uncertain> ages = ages();
         for (String name : LATER) {
-            if (Files.exists(folder.resolve(name))) {
+            if (exists(name)) {
                 warnings.add(new InputWarning(name, 0, 0, "this file is not used yet"));
             }
         }
@@ -93,9 +110,15 @@ public final class StudyFolder {
         return StudyCheck.check(input, whole);
     }
 
+    private boolean exists(String name) {
+        return edited.containsKey(name) || Files.exists(folder.resolve(name));
+    }
+
     /** The text of a file in the study, which counts among its inputs. */
     private Loaded<TextFile> text(String name) {
-        Loaded<TextFile> file = TextFile.read(folder.resolve(name), name);
+        Loaded<TextFile> file = Optional.ofNullable(edited.get(name))
+                .map(text -> TextFile.decode(name, text.getBytes(StandardCharsets.UTF_8)))
+                .orElseGet(() -> TextFile.read(folder.resolve(name), name));
         file.value().ifPresent(read -> inputs.add(read.inputFile()));
         return file;
     }

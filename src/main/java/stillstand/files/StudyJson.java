@@ -46,6 +46,11 @@ public final class StudyJson {
         this.root = root;
     }
 
+    /** What should stand under a key, in the words of a problem there; "" for an unknown key. */
+    public static String expectedAt(String keyPath) {
+        return SCHEMA.expectedAt(keyPath);
+    }
+
     /** Reads the settings that a text holds. */
     static Loaded<StatedSettings> parse(TextFile file) {
         JsonPlaces json = JsonPlaces.parse(file);

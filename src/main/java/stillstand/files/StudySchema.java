@@ -34,6 +34,17 @@ final class StudySchema {
         return new StudySchema(JsonMapper.builder().build().readTree(ShippedFile.bytes(RESOURCE)));
     }
 
+    /** What should stand under a key, in words; "" for a key that it does not know. */
+    String expectedAt(String keyPath) {
+        JsonNode schemaOf = document;
+        for (String step : keyPath.replace("[", ".[").split("\\.", -1)) {
+            schemaOf = step.startsWith("[")
+                    ? schemaOf.path("items")
+                    : schemaOf.path("properties").path(step);
+        }
+        return schemaOf.path("description").stringValue("");
+    }
+
     /** Everything in which a json text departs from the schema; one problem a key. */
     List<InputProblem> problems(JsonPlaces json, JsonNode root) {
         Map<String, InputProblem> problems = new LinkedHashMap<>();

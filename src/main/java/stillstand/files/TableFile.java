@@ -34,7 +34,7 @@ record TableFile(Table table, Separator separator) {
         SEMICOLON(';'),
         TAB('\t');
 
-        private final char character;
+        final char character;
 
         Separator(char character) {
             this.character = character;
@@ -69,7 +69,7 @@ record TableFile(Table table, Separator separator) {
         }
     }
 
-    private static CSVFormat format(Separator separator) {
+    static CSVFormat format(Separator separator) {
         return CSVFormat.DEFAULT
                 .builder()
                 .setDelimiter(separator.character)
@@ -132,7 +132,7 @@ record TableFile(Table table, Separator separator) {
     }
 
     /** The first line that is neither blank nor a comment. */
-    private static Optional<String> firstLine(String text) {
+    static Optional<String> firstLine(String text) {
         int start = 0;
         while (start < text.length()) {
             int end = start;
@@ -147,7 +147,7 @@ record TableFile(Table table, Separator separator) {
         return Optional.empty();
     }
 
-    private static Separator separatorOf(String header) {
+    static Separator separatorOf(String header) {
         Separator most = Separator.COMMA;
         for (Separator each : Separator.values()) {
             most = count(header, each) > count(header, most) ? each : most;

@@ -21,6 +21,10 @@ public final class CurveReport {
     /** The overrides of a study that states none. */
     private static final String USUAL_OVERRIDES = "independent-highstands";
 
+    /** Heads of {@link #highstandRows}. */
+    public static final List<String> HIGHSTAND_COLUMNS =
+            List.of("Stage", "Class", "Pick (ka)", "Pick (m)", "95 % (m)", "Used (ka)", "Used (m)", "From");
+
     private static final String INDENT = "  ";
     private static final String HANGING = "    ";
 
@@ -89,19 +93,28 @@ public final class CurveReport {
         lines.add("");
         say("Highstands: picked from the curve, and as a study uses them unless it says otherwise (* from table "
                 + USUAL_OVERRIDES + ", † Stillstand's own). ± is 1 sigma; in use it holds the shared errors too.");
-        PlainTable table = new PlainTable(
-                List.of("Stage", "Class", "Pick (ka)", "Pick (m)", "95 % (m)", "Used (ka)", "Used (m)", "From"), 2);
-        for (Highstand row : used.rows()) {
-            if (!row.isOlder()) {
-                table.row(cells(row, own.find(row.stage()).orElse(row), used.sharedErrors(), curve.id()));
-            }
-        }
+        PlainTable table = new PlainTable(HIGHSTAND_COLUMNS, 2);
+        highstandRows(own, used, curve.id()).forEach(table::row);
         table.lines().forEach(line -> lines.add(INDENT + line));
         long older = used.rows().stream().filter(Highstand::isOlder).count();
         say("Beyond them " + older + " generic ones follow, one every 41 ka.");
         if (curve.facts().spreadIsGuessed()) {
             say("Every band of a pick above is a guess: the source gives none that can be used.");
         }
+    }
+
+    /**
+     * The highstands of a curve as picked and as used, a row each, young to old, without the generic older ones.
+     *
+     * @param own as picked from the curve
+     * @param used with what replaces them
+     * @param curve its id
+     */
+    public static List<List<String>> highstandRows(HighstandTable own, HighstandTable used, String curve) {
+        return used.rows().stream()
+                .filter(row -> !row.isOlder())
+                .map(row -> cells(row, own.find(row.stage()).orElse(row), used.sharedErrors(), curve))
+                .toList();
     }
 
     private static List<String> cells(Highstand used, Highstand own, SharedErrors shared, String curve) {

@@ -15,7 +15,7 @@ import stillstand.uplift.FlightResult.LeftOut;
 import stillstand.uplift.FlightResult.Pairing;
 
 /** What the flight of a site reads like: the rate or rates, the pairings, what is missing, what would change the mind. */
-final class FlightReport {
+public final class FlightReport {
     private static final int NAME_WIDTH = 16;
     private static final double LEAST_SHOWN = 0.01;
     private static final double ALL_STRAY_TOLD = 0.05;
@@ -29,12 +29,13 @@ final class FlightReport {
 
     private final FlightResult flight;
 
-    FlightReport(FlightResult flight) {
+    /** The words for one flight. */
+    public FlightReport(FlightResult flight) {
         this.flight = flight;
     }
 
     /** Sentences before the table of pairings. */
-    List<String> opening() {
+    public List<String> opening() {
         List<String> lines = new ArrayList<>();
         flight.bound()
                 .ifPresent(
@@ -95,7 +96,7 @@ final class FlightReport {
     }
 
     /** Sentences after it. */
-    List<String> closing() {
+    public List<String> closing() {
         List<String> lines = new ArrayList<>();
         missing(lines);
         hinges(lines);

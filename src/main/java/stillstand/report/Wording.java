@@ -15,9 +15,9 @@ import stillstand.uplift.Quantity;
 import stillstand.uplift.Rate;
 
 /** The words for rates, quantities and stages, the same wherever a result is read: digits as the errors deserve. */
-final class Wording {
+public final class Wording {
     /** What every account of a result says first. */
-    static final String CAUTION =
+    public static final String CAUTION =
             "This is not a hazard assessment: rates over thousands of years are no forecast of the next ones. For"
                     + " building or planning, local codes and licensed practice decide.";
 
@@ -28,31 +28,39 @@ final class Wording {
     private Wording() {}
 
     /** {@code 0.44 ± 0.02}; the median alone where no standard deviation exists. */
-    static String rate(Rate rate) {
+    public static String rate(Rate rate) {
         String median = number(Digits.text(rate.median(), sigma(rate.sd(), rate.interval68()), RATE_DIGITS));
         return rate.sd().map(sd -> median + plusMinus(sd, RATE_DIGITS)).orElse(median);
     }
 
     /** {@code 0.40 to 0.47}: the shortest interval of probability 0.95. */
-    static String interval95(Rate rate) {
+    public static String interval95(Rate rate) {
         double sigma = sigma(rate.sd(), rate.interval68());
         return number(Digits.text(rate.shortest95().low(), sigma, RATE_DIGITS)) + " to "
                 + number(Digits.text(rate.shortest95().high(), sigma, RATE_DIGITS));
     }
 
-    static String firstOrder(FirstOrder firstOrder) {
+    /** {@code 0.42 to 0.45}: the shortest interval of probability 0.6827. */
+    public static String interval68(Rate rate) {
+        double sigma = sigma(rate.sd(), rate.interval68());
+        return number(Digits.text(rate.shortest68().low(), sigma, RATE_DIGITS)) + " to "
+                + number(Digits.text(rate.shortest68().high(), sigma, RATE_DIGITS));
+    }
+
+    /** {@code 0.44 ± 0.02} of the law of propagation. */
+    public static String firstOrder(FirstOrder firstOrder) {
         return number(Digits.text(firstOrder.rate(), firstOrder.sigma(), RATE_DIGITS))
                 + plusMinus(firstOrder.sigma(), RATE_DIGITS);
     }
 
     /** {@code 122.5 ± 3.3}, without the unit. */
-    static String quantity(Quantity quantity) {
+    public static String quantity(Quantity quantity) {
         double sigma = sigma(quantity.sd(), quantity.interval68());
         return number(Digits.text(quantity.median(), sigma, OTHER_DIGITS)) + plusMinus(sigma, OTHER_DIGITS);
     }
 
     /** {@code 5e}, or {@code 5e 75 %, 5c 20 %, …} where more than one may have made the level. */
-    static String stages(List<StageProbability> stages) {
+    public static String stages(List<StageProbability> stages) {
         List<StageProbability> likely = stages.stream()
                 .sorted((a, b) -> Double.compare(b.probability(), a.probability()))
                 .toList();
@@ -67,7 +75,7 @@ final class Wording {
     }
 
     /** {@code slower than 0.024 m/kyr up and 0.032 m/kyr down, at 95 %}; bounds are rounded up. */
-    static String bound(Bound bound, Rate rate) {
+    public static String bound(Bound bound, Rate rate) {
         double sigma = sigma(rate.sd(), rate.interval68());
         int decimals = sigma > 0 ? Digits.decimals(sigma, OTHER_DIGITS) : OTHER_DIGITS;
         return "slower than " + roundedUp(bound.upSlowerThan(), decimals) + " m/kyr up and "
@@ -91,12 +99,12 @@ final class Wording {
     }
 
     /** {@code 1 level}, {@code 2 levels}. */
-    static String counted(int number, String thing) {
+    public static String counted(int number, String thing) {
         return number + " " + thing + (number == 1 ? "" : "s");
     }
 
     /** A number's text with the true minus. */
-    static String number(String text) {
+    public static String number(String text) {
         return text.replace('-', '−');
     }
 

@@ -22,7 +22,7 @@ final class GiaTable {
     static final String NAME = "gia.csv";
 
     private static final Column OFFSET = Column.withSpread("offset", "m");
-    private static final Columns COLUMNS = new Columns(
+    static final Columns COLUMNS = new Columns(
             List.of(
                     Column.plain("site"),
                     Column.plain("coast"),

@@ -29,7 +29,7 @@ final class LevelsTable {
     private static final Column REFERENCE_WATER_LEVEL = Column.measured("reference_water_level", "m");
     private static final Column COVER = Column.measured("cover", "m");
     private static final Column LOWERING = Column.measured("lowering", "m_per_kyr");
-    private static final Columns COLUMNS = new Columns(
+    static final Columns COLUMNS = new Columns(
             List.of(
                     Column.plain("site"),
                     Column.plain("level"),

@@ -30,7 +30,7 @@ final class SamplesTable {
                     Column.measured("th232", "ppb"))
             .map(Column::notUsedYet)
             .toList();
-    private static final Columns COLUMNS = new Columns(
+    static final Columns COLUMNS = new Columns(
             Stream.of(
                             Stream.of(
                                     Column.plain("site"),

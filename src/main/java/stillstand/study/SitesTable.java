@@ -23,7 +23,7 @@ final class SitesTable {
     static final String NAME = "sites.csv";
 
     private static final Column DATUM_OFFSET = Column.measured("datum_offset", "m");
-    private static final Columns COLUMNS = new Columns(
+    static final Columns COLUMNS = new Columns(
             List.of(
                     Column.plain("site"),
                     Column.plain("latitude"),

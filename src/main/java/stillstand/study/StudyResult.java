@@ -99,6 +99,11 @@ public record StudyResult(
             curves = List.copyOf(curves);
             highstands = List.copyOf(highstands);
         }
+
+        /** What a run of this study would use. */
+        public static SeaLevelUsed of(Study study) {
+            return SeaLevelSummary.of(study);
+        }
     }
 
     /** A curve, its weight among the study's curves, and its line and band through time. */

@@ -93,7 +93,7 @@ public final class StudyRunner {
     }
 
     /** Settings of matching as the engine takes them: what is not stated stays its own default. */
-    private static MatchingRules rules(StudySettings.Matching settings) {
+    static MatchingRules rules(StudySettings.Matching settings) {
         return new MatchingRules(
                 settings.recordingProbability() instanceof StudySettings.Recording.Beta beta
                         ? new SharedPriors.Recording.BetaPrior(beta.alpha(), beta.beta())

@@ -1,4 +1,4 @@
-package stillstand.cli;
+package stillstand.files;
 
 import java.io.IOException;
 import java.nio.file.Files;
@@ -22,19 +22,25 @@ import stillstand.figure.PageWidth;
  * @param titled whether titles and notes are printed
  * @param dotsPerInch of pictures
  */
-record FigureFiles(List<FigureFormat> formats, PageWidth width, boolean titled, int dotsPerInch) {
+public record FigureFiles(List<FigureFormat> formats, PageWidth width, boolean titled, int dotsPerInch) {
     /** What most journals ask of a picture. */
-    static final int DEFAULT_DPI = 300;
+    public static final int DEFAULT_DPI = 300;
 
     /** As a run writes them. */
-    static final FigureFiles OF_RUN = new FigureFiles(List.of(FigureFormat.values()), PageWidth.TWO, true, DEFAULT_DPI);
+    public static final FigureFiles OF_RUN =
+            new FigureFiles(List.of(FigureFormat.values()), PageWidth.TWO, true, DEFAULT_DPI);
 
-    FigureFiles {
+    public FigureFiles {
         formats = List.copyOf(formats);
     }
 
     /** A figure that could not be drawn, and why: a fault of ours, which must not cost a run its results. */
-    record Fault(String name, String reason) {}
+    public record Fault(String name, String reason) {
+        /** What it is told with. */
+        public String sentence() {
+            return name + " could not be drawn, a fault of Stillstand: " + reason;
+        }
+    }
 
     /**
      * Draws figures into a folder, which is made where there is none.
@@ -43,7 +49,7 @@ record FigureFiles(List<FigureFormat> formats, PageWidth width, boolean titled, 
      * @return those that could not be drawn
      * @throws IOException if a file cannot be written
      */
-    List<Fault> write(List<Figure> figures, Path folder, int threads) throws IOException {
+    public List<Fault> write(List<Figure> figures, Path folder, int threads) throws IOException {
         Files.createDirectories(folder);
         ExecutorService executor = Executors.newFixedThreadPool(threads);
         try {

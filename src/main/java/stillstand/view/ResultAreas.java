@@ -1,0 +1,47 @@
+package stillstand.view;
+
+import java.util.EnumMap;
+import java.util.List;
+import java.util.Map;
+import java.util.concurrent.Executor;
+import java.util.function.Consumer;
+import javafx.scene.Node;
+import stillstand.study.Library;
+import stillstand.view.WindowModel.Area;
+
+/** The areas of an open study that show its sea level and its results. */
+final class ResultAreas {
+    private final Map<Area, Node> views = new EnumMap<>(Area.class);
+    private final List<Consumer<Shown>> models;
+
+    /**
+     * Areas that show nothing yet.
+     *
+     * @param library what the study may name
+     * @param background for previews and exports
+     * @param foreground the window's own thread
+     */
+    ResultAreas(WindowModel model, Library library, Questions questions, Executor background, Executor foreground) {
+        SeaLevelModel seaLevel = new SeaLevelModel(library, model::chooseSeaLevel);
+        StairModel stair = new StairModel(background, foreground, model::pair);
+        RatesModel rates = new RatesModel();
+        RecordModel record = new RecordModel(background, foreground);
+        views.put(Area.SEA_LEVEL, new SeaLevelView(seaLevel));
+        views.put(Area.STAIR, new StairView(stair));
+        views.put(Area.RATES, new RatesView(rates));
+        views.put(Area.RECORD, new RecordView(record, questions::folderToWrite));
+        models = List.of(seaLevel::show, stair::show, rates::show, record::show);
+    }
+
+    Node view(Area area) {
+        Node view = views.get(area);
+        if (view == null) {
+            throw new IllegalArgumentException("area must be one of results but is " + area);
+        }
+        return view;
+    }
+
+    void show(Shown shown) {
+        models.forEach(model -> model.accept(shown));
+    }
+}
