@@ -92,6 +92,7 @@ class ArchitectureTest {
                         "stillstand.dating..",
                         "stillstand.shoreline..",
                         "stillstand.uplift..",
+                        "stillstand.sensitivity..",
                         "stillstand.study..")
                 .should()
                 .dependOnClassesThat()

@@ -39,6 +39,7 @@ public final class ResultFiles {
             write(folder, "curve-choice.csv", curveChoice(result));
         }
         write(folder, "ledger.csv", ledger(result));
+        LeverageTables.write(folder, result.leverage());
     }
 
     private static void write(Path folder, String name, String text) throws IOException {

@@ -47,6 +47,7 @@ public final class StudyRunner {
     private final DateRules dates;
     private final LevelAnswers answers;
     private final Flights matching;
+    private final SiteHinges hinges;
 
     private final List<LevelAnswer> levels = new ArrayList<>();
     private final List<StudyResult.Waiting> waiting = new ArrayList<>();
@@ -78,13 +79,10 @@ public final class StudyRunner {
                 executor,
                 settings.indicativeRange(),
                 dates);
-        matching = new Flights(
-                streams,
-                executor,
-                monitor,
-                rules(settings.matching()),
-                settings.indicativeRange(),
-                changes(settings.rate()));
+        MatchingRules rules = rules(settings.matching());
+        RateChanges changes = changes(settings.rate());
+        matching = new Flights(streams, executor, monitor, rules, settings.indicativeRange(), changes);
+        hinges = new SiteHinges(settings, rules, dates, streams, executor, monitor);
     }
 
     private static RateChanges changes(StudySettings.RateChoice rate) {
@@ -170,6 +168,7 @@ public final class StudyRunner {
                 flights,
                 intervals,
                 implied,
+                hinges.leverage(),
                 residuals,
                 curveChoice,
                 CurveEvidence.pooled(curveChoice, this::coast),
@@ -225,6 +224,8 @@ public final class StudyRunner {
         implied.addAll(relations.impliedSeaLevel());
         ledger.addAll(relations.assumptions());
         runFlight(plan, ensemble, (double) levels.size() / Math.max(1, allLevels));
+        monitor.step(plan.site().name() + " / what it hangs on", (double) levels.size() / Math.max(1, allLevels));
+        ledger.addAll(hinges.add(plan, curveChoice));
     }
 
     private void runLevel(SitePlan plan, Level level, SeaLevelEnsemble ensemble) {
