@@ -64,7 +64,7 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
     }
 
     /** Whether the levels of a site are reefs that drowned on a sinking coast. */
-    static boolean isDrowned(Site site) {
+    public static boolean isDrowned(Site site) {
         return site.levels().stream().anyMatch(level -> level.formsAt() == FormsAt.DROWNING);
     }
 
