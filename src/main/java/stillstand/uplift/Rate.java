@@ -42,7 +42,7 @@ public record Rate(
      * @param draws rates, m/kyr
      * @param hasMean whether mean and standard deviation exist
      */
-    static Rate of(DrawDistribution draws, boolean hasMean) {
+    public static Rate of(DrawDistribution draws, boolean hasMean) {
         return new Rate(
                 draws.quantile(0.5),
                 hasMean ? Optional.of(draws.mean()) : Optional.empty(),
