@@ -29,7 +29,8 @@ record SettingsChanges(Optional<Long> seed, Optional<Integer> draws, List<String
                 settings.rate(),
                 settings.matching(),
                 settings.indicativeRange(),
-                settings.screening());
+                settings.screening(),
+                settings.comparison());
     }
 
     private SeaLevelChoice withCurves(SeaLevelChoice own) {

@@ -28,7 +28,7 @@ public record TerraceTilt(
     /**
      * A point of a terrace.
      *
-     * @param heightMetres above present mean sea level
+     * @param heightMetres as measured, in the datum of the survey
      * @param sigmaMetres of its own survey, above 0
      * @param distanceKm along the coast
      * @param position where it lies

@@ -77,6 +77,10 @@ public final class StudyCheck {
                 .orElse(List.of());
         Plausibility.check(sites, levels, samples, at);
         FlightCheck.check(sites, levels, at);
+        input.settings().ifPresent(settings -> ComparisonCheck.check(settings, sites, findings));
+        List<SitesData.TerracePoints> terraces = input.points()
+                .map(table -> new PointsTable(findings).read(table, byName(levels)))
+                .orElse(List.of());
 
         List<InputWarning> warnings = sorted(findings.warnings());
         if (findings.problemCount() > 0 || input.settings().isEmpty()) {
@@ -88,7 +92,8 @@ public final class StudyCheck {
                 cases,
                 warnings,
                 findings.ledger(),
-                input.inputs());
+                input.inputs(),
+                new SitesData(areas(sites), terraces));
         return new Loaded<>(Optional.of(study), List.of(), warnings);
     }
 
@@ -104,6 +109,12 @@ public final class StudyCheck {
             Place place = stated.places().getOrDefault(keyPath, new Place(0, 0));
             findings.add(new InputWarning(stated.file(), place.line(), place.column(), keyPath + " is not used yet"));
         }
+    }
+
+    private static Map<String, Double> areas(List<SitesTable.SiteRow> sites) {
+        Map<String, Double> areas = new HashMap<>();
+        sites.forEach(site -> site.areaKm2().ifPresent(km2 -> areas.put(site.name(), km2)));
+        return areas;
     }
 
     private static Map<String, Set<String>> byName(List<LevelsTable.LevelRow> levels) {

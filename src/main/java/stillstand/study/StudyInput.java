@@ -16,6 +16,7 @@ import stillstand.uncertainty.Uncertain;
  * @param sites table of sites
  * @param levels table of levels
  * @param samples table of dated samples; absent where a study has none
+ * @param points table of points measured on terraces; absent where a study has none
  * @param ages calibrated ages by name, ka before 1950
  * @param problems met in reading
  * @param warnings met in reading
@@ -27,6 +28,7 @@ public record StudyInput(
         Optional<Table> sites,
         Optional<Table> levels,
         Optional<Table> samples,
+        Optional<Table> points,
         Map<String, Uncertain> ages,
         List<InputProblem> problems,
         List<InputWarning> warnings,
@@ -40,6 +42,26 @@ public record StudyInput(
         inputs = List.copyOf(inputs);
     }
 
+    /** Input without points of terraces. */
+    public StudyInput(
+            Optional<StatedSettings> settings,
+            Optional<Table> sites,
+            Optional<Table> levels,
+            Optional<Table> samples,
+            Map<String, Uncertain> ages,
+            List<InputProblem> problems,
+            List<InputWarning> warnings,
+            List<Assumption> ledger,
+            List<InputFile> inputs) {
+        this(settings, sites, levels, samples, Optional.empty(), ages, problems, warnings, ledger, inputs);
+    }
+
+    /** The same input with a table of points of terraces. */
+    public StudyInput withPoints(Table table) {
+        return new StudyInput(
+                settings, sites, levels, samples, Optional.of(table), ages, problems, warnings, ledger, inputs);
+    }
+
     /** Input made in memory, with no file behind it and nothing wrong so far. */
     public static StudyInput of(StatedSettings settings, Table sites, Table levels, Optional<Table> samples) {
         return new StudyInput(
@@ -47,6 +69,7 @@ public record StudyInput(
                 Optional.of(sites),
                 Optional.of(levels),
                 samples,
+                Optional.empty(),
                 Map.of(),
                 List.of(),
                 List.of(),

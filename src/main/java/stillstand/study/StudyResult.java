@@ -2,6 +2,10 @@ package stillstand.study;
 
 import java.util.List;
 import java.util.Optional;
+import stillstand.comparison.SiteComparison;
+import stillstand.comparison.SiteGroup;
+import stillstand.comparison.SiteMotion;
+import stillstand.comparison.TerraceTilt;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputWarning;
 import stillstand.uplift.BetweenLevels;
@@ -22,6 +26,10 @@ import stillstand.uplift.LevelResidual;
  * @param intervals rates between levels of a site
  * @param impliedSeaLevel sea level that dated levels imply, given the uplift of the others
  * @param residuals measured against predicted heights of the flights
+ * @param comparison differences between sites
+ * @param siteMotion which sites go up, are stable or go down
+ * @param siteGroups what the sites of a coast or island group say together
+ * @param terraceTilts tilts of terraces from many points on each
  * @param warnings what was odd in the input
  * @param failures sites that could not be done
  * @param ledger what it rests on
@@ -35,6 +43,10 @@ public record StudyResult(
         List<BetweenLevels> intervals,
         List<ImpliedSeaLevel> impliedSeaLevel,
         List<LevelResidual> residuals,
+        List<SiteComparison> comparison,
+        List<SiteMotion> siteMotion,
+        List<SiteGroup> siteGroups,
+        List<TerraceTilt> terraceTilts,
         List<InputWarning> warnings,
         List<Failure> failures,
         List<Assumption> ledger) {
@@ -45,9 +57,44 @@ public record StudyResult(
         intervals = List.copyOf(intervals);
         impliedSeaLevel = List.copyOf(impliedSeaLevel);
         residuals = List.copyOf(residuals);
+        comparison = List.copyOf(comparison);
+        siteMotion = List.copyOf(siteMotion);
+        siteGroups = List.copyOf(siteGroups);
+        terraceTilts = List.copyOf(terraceTilts);
         warnings = List.copyOf(warnings);
         failures = List.copyOf(failures);
         ledger = List.copyOf(ledger);
+    }
+
+    /** A result that compares no sites. */
+    public StudyResult(
+            Provenance provenance,
+            SeaLevelUsed seaLevel,
+            List<LevelAnswer> levels,
+            List<Waiting> waiting,
+            List<FlightResult> flights,
+            List<BetweenLevels> intervals,
+            List<ImpliedSeaLevel> impliedSeaLevel,
+            List<LevelResidual> residuals,
+            List<InputWarning> warnings,
+            List<Failure> failures,
+            List<Assumption> ledger) {
+        this(
+                provenance,
+                seaLevel,
+                levels,
+                waiting,
+                flights,
+                intervals,
+                impliedSeaLevel,
+                residuals,
+                List.of(),
+                List.of(),
+                List.of(),
+                List.of(),
+                warnings,
+                failures,
+                ledger);
     }
 
     /** The same result with another provenance. */
@@ -61,6 +108,10 @@ public record StudyResult(
                 intervals,
                 impliedSeaLevel,
                 residuals,
+                comparison,
+                siteMotion,
+                siteGroups,
+                terraceTilts,
                 warnings,
                 failures,
                 ledger);

@@ -134,6 +134,15 @@ public final class StudyRunner {
                 failures.add(new StudyResult.Failure(site.site().name(), String.valueOf(e.getMessage())));
             }
         }
+        SiteComparisons sites = SiteComparisons.of(
+                study,
+                new SiteComparisons.Found(levels, flights),
+                dates,
+                rules(study.settings().matching()),
+                streams,
+                executor,
+                monitor);
+        ledger.addAll(sites.ledger());
         monitor.step("done", 1);
         return new StudyResult(
                 new Provenance(
@@ -150,6 +159,10 @@ public final class StudyRunner {
                 intervals,
                 implied,
                 residuals,
+                sites.pairs(),
+                sites.motions(),
+                sites.groups(),
+                sites.tilts(),
                 study.warnings(),
                 failures,
                 JoinedLedger.of(ledger));

@@ -2,6 +2,7 @@ package stillstand.study;
 
 import java.util.List;
 import java.util.Optional;
+import stillstand.comparison.ComparisonRules;
 import stillstand.shoreline.IndicativeRule;
 import stillstand.uplift.RatePrior;
 
@@ -17,6 +18,7 @@ import stillstand.uplift.RatePrior;
  * @param matching how levels are matched to highstands
  * @param indicativeRange what an indicative range means
  * @param screening limits on samples; each absent limit is off
+ * @param comparison how sites are compared
  */
 public record StudySettings(
         String title,
@@ -27,7 +29,31 @@ public record StudySettings(
         RateChoice rate,
         Matching matching,
         IndicativeRule indicativeRange,
-        Screening screening) {
+        Screening screening,
+        ComparisonRules comparison) {
+    /** Settings that say nothing of how sites are compared. */
+    public StudySettings(
+            String title,
+            String note,
+            long seed,
+            Draws draws,
+            SeaLevelChoice seaLevel,
+            RateChoice rate,
+            Matching matching,
+            IndicativeRule indicativeRange,
+            Screening screening) {
+        this(
+                title,
+                note,
+                seed,
+                draws,
+                seaLevel,
+                rate,
+                matching,
+                indicativeRange,
+                screening,
+                ComparisonRules.DEFAULT);
+    }
 
     /**
      * How many draws a level gets.

@@ -41,6 +41,7 @@ public final class ComparedLevels {
         }
         counts.remove("");
         String common = counts.entrySet().stream()
+                .filter(stage -> stage.getValue() > 1)
                 .max(Map.Entry.comparingByValue())
                 .map(Map.Entry::getKey)
                 .orElse("");
