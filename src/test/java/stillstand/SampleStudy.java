@@ -78,6 +78,10 @@ public final class SampleStudy {
                 List.of(new BetweenLevels("North cliff", "T1", "T4", rate(0.4, 0.05))),
                 List.of(new ImpliedSeaLevel("North cliff", "T4", age(), height(-8, 5), "T1", false)),
                 List.of(new LevelResidual("North cliff", "T4", 60.8, 60.9, 3.5)),
+                SampleComparison.pairs(),
+                SampleComparison.motions(),
+                SampleComparison.groups(),
+                SampleComparison.tilts(),
                 List.of(new InputWarning("levels.csv", 3, 4, "elevation_m: 1200 looks like feet")),
                 List.of(new Failure("East bay", "its curve ends at 20 ka")),
                 List.of(
@@ -97,6 +101,10 @@ public final class SampleStudy {
                 all.intervals(),
                 all.impliedSeaLevel(),
                 all.residuals(),
+                all.comparison(),
+                all.siteMotion(),
+                all.siteGroups(),
+                all.terraceTilts(),
                 all.warnings(),
                 List.of(),
                 all.ledger());

@@ -33,6 +33,12 @@ public final class ResultFiles {
         write(folder, "rates.csv", RatesTable.text(evidence, result));
         write(folder, "pairings.csv", pairings(result));
         write(folder, "budget.csv", budget(result));
+        if (!result.comparison().isEmpty()) {
+            write(folder, "comparison.csv", ComparisonTable.text(result));
+        }
+        if (SitesGeoJson.has(result)) {
+            write(folder, "sites.geojson", SitesGeoJson.text(result));
+        }
         write(folder, "ledger.csv", ledger(result));
     }
 

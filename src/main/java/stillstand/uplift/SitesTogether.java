@@ -50,8 +50,8 @@ public final class SitesTogether {
      * @param leastFraction below which the draws are made again, four times as many
      */
     public record Effort(int blocks, int draws, int points, int cells, double leastFraction) {
-        /** 4 blocks of common draws; 2000 draws with 32 rates each, at most 200 cells; again below 0.05. */
-        public static final Effort FULL = new Effort(4, 2000, 32, 200, 0.05);
+        /** 4 blocks of common draws; 1500 draws with 24 rates each, at most 160 cells; again below 0.05. */
+        public static final Effort FULL = new Effort(4, 1500, 24, 160, 0.05);
 
         /** @throws IllegalArgumentException if a number is too small */
         public Effort {

@@ -99,7 +99,7 @@ class StudyJsonTest {
                         "study.json:2:3: sede: found an unknown key, expected \"seed\""),
                 bad(
                         "{\"title\": \"x\", \"qqqqqqqqq\": 1}",
-                        "study.json:1:16: qqqqqqqqq: found an unknown key, expected one of title, note, seed, draws, sea_level, rate, matching, indicative_range, screening"),
+                        "study.json:1:16: qqqqqqqqq: found an unknown key, expected one of title, note, seed, draws, sea_level, rate, matching, indicative_range, screening, comparison"),
                 bad(
                         "{\"title\": \"x\", \"title\": \"y\"}",
                         "study.json:1:16: title: found this key a second time, expected it once"),
