@@ -54,16 +54,22 @@ final class CoastFigure {
 
     static Page page(String name, StudyResult result, String coast, double widthPoints) {
         List<Station> stations = stations(result, coast);
+        List<Double> heights = Stream.concat(
+                        Stream.of(0.0),
+                        stations.stream()
+                                .flatMap(station -> station.view().stair().stream())
+                                .map(SiteView::metres))
+                .sorted()
+                .toList();
+        double lowest = heights.get(0);
+        double highest = heights.get(heights.size() - 1);
         XYPlot plot = Style.plot(
                 Rows.around(Style::axis, "Distance along the coast (km)", stations.stream().map(Station::km)),
                 Rows.around(
                         Style::upright,
                         "Height above present mean sea level (m)",
-                        Stream.concat(
-                                Stream.of(0.0),
-                                stations.stream()
-                                        .flatMap(station -> station.view().stair().stream())
-                                        .map(SiteView::metres))));
+                        // above the highest level stand the numbers of the sites
+                        Stream.of(lowest, highest + 0.1 * (highest - lowest))));
         Style.levelGrid(plot);
         Layer.add(plot, pen -> paint(pen, stations));
         return new Page(

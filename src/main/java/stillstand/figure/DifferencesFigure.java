@@ -16,6 +16,12 @@ final class DifferencesFigure {
         return !result.comparison().isEmpty();
     }
 
+    /** Draws are too few to say 100. */
+    private static String percent(double probability) {
+        String percent = Numbers.percent(probability);
+        return percent.equals("100") ? ">99" : percent;
+    }
+
     static Page page(String name, StudyResult result, double widthPoints) {
         List<SiteComparison> pairs =
                 result.comparison().stream().limit(MOST_ROWS).toList();
@@ -34,7 +40,7 @@ final class DifferencesFigure {
                 pairs.stream().map(pair -> pair.a() + " less " + pair.b()).toList(),
                 pairs.stream()
                         .map(pair -> Numbers.rate(pair.difference()) + ", "
-                                + Numbers.percent(pair.probabilityAFaster()) + " %")
+                                + percent(pair.probabilityAFaster()) + " %")
                         .toList(),
                 widthPoints);
         Rows.grid(plot);

@@ -56,7 +56,7 @@ final class MapFigure {
         double high = Math.max(LEAST_DEGREES, 1.16 * (greatest(y) - least(y)));
         double wide = Math.max(LEAST_DEGREES, 1.16 * (greatest(x) - least(x)));
         double heightPoints = Math.max(
-                Math.max(0.6 * mapPoints, Math.min(1.4 * mapPoints, mapPoints * high / (wide * squeeze))),
+                Math.max(0.5 * mapPoints, Math.min(0.9 * mapPoints, mapPoints * high / (wide * squeeze))),
                 named ? sites.size() * LINE + 4 : 0);
         double degreesPerPoint = Math.max(wide * squeeze / mapPoints, high / heightPoints);
         double from = (least(x) + greatest(x)) / 2 - mapPoints * degreesPerPoint / squeeze / 2;

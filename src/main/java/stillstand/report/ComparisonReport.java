@@ -146,12 +146,12 @@ final class ComparisonReport {
                 + Wording.number(Digits.text(quantity.interval95().high(), sigma, 1));
     }
 
-    /** Never 0 or 100 % where it is neither. */
+    /** Never 0 or 100 %: draws are too few to say so. */
     private static String percent(double probability) {
-        if (probability > 0 && probability < 0.005) {
+        if (probability < 0.005) {
             return "<1 %";
         }
-        return probability < 1 && probability >= 0.995 ? ">99 %" : Math.round(100 * probability) + " %";
+        return probability >= 0.995 ? ">99 %" : Math.round(100 * probability) + " %";
     }
 
     private static void more(List<String> lines, int count, String things, String where) {

@@ -111,7 +111,15 @@ class CommandsTest {
         assertTrue(out().contains("0.44 ± 0.02"), out());
         assertEquals("", err());
         assertEquals(
-                List.of("budget.csv", "ledger.csv", "pairings.csv", "rates.csv", "results.json", "table1.csv"),
+                List.of(
+                        "budget.csv",
+                        "comparison.csv",
+                        "ledger.csv",
+                        "pairings.csv",
+                        "rates.csv",
+                        "results.json",
+                        "sites.geojson",
+                        "table1.csv"),
                 names(folder.resolve("results")));
         assertEquals(List.of("results"), names(folder));
         assertEquals(Optional.of("2026-12-01T12:00:00Z"), written().provenance().started());
