@@ -34,6 +34,7 @@ class ArchitectureTest {
             Map.entry(
                     "comparison",
                     Set.of("ledger", "uncertainty", "sealevel", "dating", "shoreline", "uplift")),
+            Map.entry("sensitivity", Set.of("ledger", "uncertainty", "sealevel", "dating", "shoreline", "uplift")),
             Map.entry("study", ENGINE),
             Map.entry("files", with(ENGINE, "study")),
             Map.entry("figure", with(ENGINE, "study")),

@@ -9,6 +9,8 @@ import stillstand.sealevel.Highstand;
 import stillstand.sealevel.HighstandClass;
 import stillstand.sealevel.HighstandTable;
 import stillstand.sealevel.SharedErrors;
+import stillstand.sensitivity.CurveChoice;
+import stillstand.sensitivity.CurveEvidence;
 import stillstand.shoreline.DatedSample;
 import stillstand.shoreline.FormsAt;
 import stillstand.shoreline.IndicativeMeaning;
@@ -36,6 +38,7 @@ import stillstand.uncertainty.Normal;
 import stillstand.uncertainty.Uncertain;
 import stillstand.uplift.BetweenLevels;
 import stillstand.uplift.CauchyPrior;
+import stillstand.uplift.FlightResult;
 import stillstand.uplift.ImpliedSeaLevel;
 import stillstand.uplift.LevelAnswer;
 import stillstand.uplift.LevelAnswer.Agreement;
@@ -78,6 +81,13 @@ public final class SampleStudy {
                 List.of(new BetweenLevels("North cliff", "T1", "T4", rate(0.4, 0.05))),
                 List.of(new ImpliedSeaLevel("North cliff", "T4", age(), height(-8, 5), "T1", false)),
                 List.of(new LevelResidual("North cliff", "T4", 60.8, 60.9, 3.5)),
+                List.of(
+                        choice("made-up-curve", Optional.of(-12.5), 0.75),
+                        choice("other-curve", Optional.of(-13.5), 0.25),
+                        choice(CurveChoice.EVIDENCE_WEIGHTED, Optional.of(-12.75), 1),
+                        choice(CurveChoice.EQUAL_WEIGHTED, Optional.empty(), 1)),
+                List.of(new CurveEvidence(
+                        "all sites", List.of("North cliff", "South cliff"), "made-up-curve", -25, 0.875)),
                 SampleComparison.pairs(),
                 SampleComparison.motions(),
                 SampleComparison.groups(),
@@ -87,6 +97,17 @@ public final class SampleStudy {
                 List.of(
                         new Assumption("datum offset", "0 m, exact", "Stillstand's default", "North cliff"),
                         new Assumption("=prior of the rate", "cauchy 0 0.5 from -10 to 15", "the study", "all")));
+    }
+
+    private static CurveChoice choice(String curve, Optional<Double> logEvidence, double weight) {
+        return new CurveChoice(
+                "North cliff",
+                Optional.empty(),
+                curve,
+                rate(0.4, 0.05),
+                logEvidence,
+                weight,
+                List.of(new FlightResult.Match("T4", Optional.of("5e"))));
     }
 
     /** The same results, with all sites done. */
@@ -101,6 +122,8 @@ public final class SampleStudy {
                 all.intervals(),
                 all.impliedSeaLevel(),
                 all.residuals(),
+                all.curveChoice(),
+                all.curveEvidence(),
                 all.comparison(),
                 all.siteMotion(),
                 all.siteGroups(),
@@ -233,12 +256,13 @@ public final class SampleStudy {
                         highstand("5e", HighstandClass.INTERGLACIAL, 122.5, 3.3, new Normal(7.5, 1.5))),
                 SharedErrors.NONE,
                 List.of());
+        SeaLevelCase sea = new SeaLevelCase("made-up-table", 1, Optional.empty(), table);
         return new Study(
                 settings(),
                 sites().stream()
-                        .map(site -> new SitePlan(site, CauchyPrior.DEFAULT, Optional.empty()))
+                        .map(site -> new SitePlan(site, CauchyPrior.DEFAULT, List.of(sea)))
                         .toList(),
-                List.of(new SeaLevelCase("made-up-table", 1, Optional.empty(), table)),
+                List.of(sea),
                 result().warnings(),
                 result().ledger(),
                 result().provenance().inputs());

@@ -63,6 +63,8 @@ public class FigureBenchmark {
                 all.intervals(),
                 all.impliedSeaLevel(),
                 all.residuals(),
+                all.curveChoice(),
+                all.curveEvidence(),
                 all.warnings(),
                 all.failures(),
                 all.ledger());

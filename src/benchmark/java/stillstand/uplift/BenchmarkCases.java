@@ -57,7 +57,7 @@ final class BenchmarkCases {
     }
 
     private static SeaAtLevel onCurve(Uncertain ageKa) {
-        return new SeaAtLevel.OnCurve(curve(), ageKa, 3, 3);
+        return new SeaAtLevel.OnCurve(curve(), ageKa, 3, 3, 1);
     }
 
     private static SeaAtLevel stageFive(Uncertain ageKa, Uncertain levelMetres) {
@@ -86,7 +86,7 @@ final class BenchmarkCases {
         SeaLevelCurve curve = curve();
         List<JointLevels.Entry> entries = new ArrayList<>();
         for (int i = 0; i < 8; i++) {
-            SeaAtLevel sea = new SeaAtLevel.OnCurve(curve, new Normal(20 + 14 * i, 1), 3, 3);
+            SeaAtLevel sea = new SeaAtLevel.OnCurve(curve, new Normal(20 + 14 * i, 1), 3, 3, 1);
             entries.add(new JointLevels.Entry(
                     "coral " + i, List.of(survey(new Normal(10 + 8 * i, 1))), NO_LOWERING, List.of(sea)));
         }

@@ -21,6 +21,7 @@ import stillstand.report.StairReport;
 import stillstand.study.SeaLevelCase;
 import stillstand.study.SitePlan;
 import stillstand.study.Study;
+import stillstand.study.StudySettings.WeightedCurve;
 import stillstand.uplift.PredictedStair;
 import stillstand.uplift.UpliftHistory;
 
@@ -68,8 +69,15 @@ final class PredictCommand implements Callable<Integer> {
     @Override
     public Integer call() throws IOException {
         UpliftHistory history = history();
-        Loaded<Study> loaded =
-                workshop.reader().read(folder, new SettingsChanges(Optional.empty(), Optional.empty(), curves));
+        Loaded<Study> loaded = workshop.reader()
+                .read(
+                        folder,
+                        new SettingsChanges(
+                                Optional.empty(),
+                                Optional.empty(),
+                                curves.stream()
+                                        .map(id -> new WeightedCurve(id, 1))
+                                        .toList()));
         if (!loaded.problems().isEmpty() || loaded.value().isEmpty()) {
             Workshop.list(loaded.problems(), workshop.err());
             return ExitCode.PROBLEMS;
@@ -106,7 +114,7 @@ final class PredictCommand implements Callable<Integer> {
         }
         for (SitePlan plan : study.sites()) {
             if (plan.site().name().equals(site.get())) {
-                return plan.seaLevel(study).get(0);
+                return plan.seaLevel().get(0);
             }
         }
         throw new ParameterException(spec.commandLine(), "--site: the study has no site \"" + site.get() + "\"");

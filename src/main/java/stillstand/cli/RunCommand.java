@@ -22,6 +22,7 @@ import stillstand.figure.Figures;
 import stillstand.files.ResultFiles;
 import stillstand.files.ResultsFolder;
 import stillstand.files.ResultsJson;
+import stillstand.files.ShippedLibrary;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.Loaded;
 import stillstand.ledger.NearestName;
@@ -30,6 +31,7 @@ import stillstand.report.TerminalReport;
 import stillstand.study.Provenance;
 import stillstand.study.Study;
 import stillstand.study.StudyResult;
+import stillstand.study.StudySettings.WeightedCurve;
 
 /** {@code stillstand run STUDY}. */
 @Command(
@@ -67,6 +69,12 @@ final class RunCommand implements Callable<Integer> {
             description = "sea-level curve in place of the study's; may be given again for several")
     private List<String> curves = new ArrayList<>();
 
+    @Option(
+            names = "--every-curve",
+            description = "every shipped curve that shows highstands, each with the independent levels and with its own"
+                    + " picks alone")
+    private boolean everyCurve;
+
     @Option(names = "--only", paramLabel = "SITE", description = "this site alone; may be given again for several")
     private List<String> only = new ArrayList<>();
 
@@ -94,8 +102,11 @@ final class RunCommand implements Callable<Integer> {
             throw new ParameterException(
                     spec.commandLine(), "--figures must be all or none but is " + InputProblem.quote(figures));
         }
+        if (everyCurve && !curves.isEmpty()) {
+            throw new ParameterException(spec.commandLine(), "--every-curve goes without --curve");
+        }
         Instant started = workshop.clock().instant();
-        Loaded<Study> loaded = workshop.reader().read(folder, new SettingsChanges(seed, draws, curves));
+        Loaded<Study> loaded = workshop.reader().read(folder, new SettingsChanges(seed, draws, namedCurves()));
         if (!loaded.problems().isEmpty() || loaded.value().isEmpty()) {
             Workshop.list(loaded.problems(), workshop.err());
             return ExitCode.PROBLEMS;
@@ -123,6 +134,12 @@ final class RunCommand implements Callable<Integer> {
                 return ExitCode.INTERRUPTED;
             }
         }
+    }
+
+    private List<WeightedCurve> namedCurves() {
+        return everyCurve
+                ? ShippedLibrary.load().everyCurve()
+                : curves.stream().map(id -> new WeightedCurve(id, 1)).toList();
     }
 
     private StudyResult run(Study study, Instant started, Interruption interruption) {

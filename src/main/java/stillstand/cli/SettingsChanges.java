@@ -13,9 +13,9 @@ import stillstand.study.StudySettings.WeightedCurve;
  *
  * @param seed in place of the study's
  * @param draws so many for each level, without an adaptive stop
- * @param curves in place of the study's, with equal weights; empty = the study's own
+ * @param curves in place of the study's; empty = the study's own
  */
-record SettingsChanges(Optional<Long> seed, Optional<Integer> draws, List<String> curves)
+record SettingsChanges(Optional<Long> seed, Optional<Integer> draws, List<WeightedCurve> curves)
         implements UnaryOperator<StudySettings> {
     @Override
     public StudySettings apply(StudySettings settings) {
@@ -34,8 +34,15 @@ record SettingsChanges(Optional<Long> seed, Optional<Integer> draws, List<String
     }
 
     private SeaLevelChoice withCurves(SeaLevelChoice own) {
+        // own picks differ from the study's only where that replaces any
+        List<WeightedCurve> different = curves.stream()
+                .filter(curve -> own.overrides().isPresent()
+                        || curve.overrides().isEmpty()
+                        || curves.stream()
+                                .noneMatch(other -> other.equals(new WeightedCurve(curve.id(), curve.weight()))))
+                .toList();
         return new SeaLevelChoice(
-                curves.stream().map(id -> new WeightedCurve(id, 1)).toList(),
+                different,
                 own.highstandTable(),
                 own.overrides(),
                 own.olderThanCurve(),

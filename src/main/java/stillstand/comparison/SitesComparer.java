@@ -11,21 +11,19 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import java.util.concurrent.ExecutorService;
+import java.util.function.BiConsumer;
 import stillstand.comparison.ComparisonRules.Pair;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.RunCancelledException;
 import stillstand.ledger.RunMonitor;
-import stillstand.shoreline.IndicativeRule;
 import stillstand.shoreline.Position;
 import stillstand.shoreline.Site;
 import stillstand.uncertainty.DrawStreams;
 import stillstand.uplift.ComparedLevels;
-import stillstand.uplift.ComparedSite;
-import stillstand.uplift.DateRules;
 import stillstand.uplift.JointRates;
-import stillstand.uplift.MatchingRules;
-import stillstand.uplift.SiteCase;
+import stillstand.uplift.Rate;
 import stillstand.uplift.SitesTogether;
+import stillstand.uplift.StandIn;
 
 /**
  * Compares the sites of a study: inside each coast or island group, and on request, never all with all. In a group of at most
@@ -45,33 +43,24 @@ public final class SitesComparer {
 
     private final List<SiteToCompare> sites;
     private final ComparisonRules rules;
-    private final Conventions conventions;
+    private final StandIn.Conventions conventions;
     private final SitesTogether.Effort effort;
     private final DrawStreams streams;
     private final ExecutorService executor;
     private final RunMonitor monitor;
 
     private final List<Optional<RateByItself>> alone = new ArrayList<>();
-    private final List<Optional<ComparedSite>> compared = new ArrayList<>();
+    private final List<Optional<StandIn>> stands = new ArrayList<>();
     private final Map<String, Integer> byName = new HashMap<>();
     private final List<SiteComparison> pairs = new ArrayList<>();
     private final Set<Set<String>> done = new HashSet<>();
     private final List<SiteGroup> groups = new ArrayList<>();
     private final List<Assumption> said = new ArrayList<>();
 
-    /**
-     * How levels and flights were worked out.
-     *
-     * @param rule what an indicative range means
-     * @param dates how far dates are believed
-     * @param matching how levels were matched
-     */
-    public record Conventions(IndicativeRule rule, DateRules dates, MatchingRules matching) {}
-
     private SitesComparer(
             List<SiteToCompare> sites,
             ComparisonRules rules,
-            Conventions conventions,
+            StandIn.Conventions conventions,
             DrawStreams streams,
             ExecutorService executor,
             RunMonitor monitor) {
@@ -100,7 +89,7 @@ public final class SitesComparer {
     public static SitesCompared compare(
             List<SiteToCompare> sites,
             ComparisonRules rules,
-            Conventions conventions,
+            StandIn.Conventions conventions,
             DrawStreams streams,
             ExecutorService executor,
             RunMonitor monitor) {
@@ -113,7 +102,7 @@ public final class SitesComparer {
             byGroup.computeIfAbsent(sites.get(s).site().coast(), coast -> new ArrayList<>())
                     .add(s);
             alone.add(Optional.empty());
-            compared.add(Optional.empty());
+            stands.add(Optional.empty());
         }
         byGroup.values().forEach(this::stand);
         boolean withDensity = byGroup.values().stream()
@@ -140,76 +129,41 @@ public final class SitesComparer {
         for (int s : group) {
             SiteToCompare site = sites.get(s);
             if (site.flight().isPresent()) {
-                compared.set(
-                        s,
-                        Optional.of(ComparedSite.byFlight(
-                                site.site(),
-                                site.flight().get(),
-                                conventions.matching(),
-                                conventions.rule())));
-                alone.set(s, site.flight().map(RateByItself::new));
+                stand(s, Optional.empty(), site.flight().get());
             } else {
                 byLevel.add(s);
             }
         }
-        List<Optional<ComparedSite>> levels = levels(byLevel);
-        for (int i = 0; i < byLevel.size(); i++) {
-            int s = byLevel.get(i);
-            compared.set(s, levels.get(i));
-            alone.set(s, levels.get(i).map(level -> alone(s, level)));
+        standByLevels(byLevel);
+    }
+
+    private void standByLevels(List<Integer> group) {
+        List<Optional<String>> levels = ComparedLevels.choose(
+                group.stream().map(s -> sites.get(s).site()).toList(), conventions.rule(), conventions.dates());
+        for (int i = 0; i < group.size(); i++) {
+            int s = group.get(i);
+            levels.get(i)
+                    .filter(level -> sites.get(s).levels().containsKey(level))
+                    .ifPresent(level ->
+                            stand(s, Optional.of(level), sites.get(s).levels().get(level)));
         }
     }
 
-    /** The levels that stand for sites; absent where none has a rate. */
-    private List<Optional<ComparedSite>> levels(List<Integer> group) {
-        List<SiteCase> cases = new ArrayList<>();
-        for (int s : group) {
-            SiteToCompare site = sites.get(s);
-            cases.add(site.site());
-        }
-        List<Optional<ComparedSite>> chosen = ComparedLevels.choose(cases, conventions.rule(), conventions.dates());
-        List<Optional<ComparedSite>> out = new ArrayList<>();
-        for (int i = 0; i < chosen.size(); i++) {
-            SiteToCompare site = sites.get(group.get(i));
-            out.add(chosen.get(i)
-                    .filter(level -> site.levels().containsKey(level.level().orElseThrow())));
-        }
-        return out;
-    }
-
-    private RateByItself alone(int s, ComparedSite level) {
-        return new RateByItself(sites.get(s).levels().get(level.level().orElseThrow()));
+    private void stand(int s, Optional<String> level, Rate rate) {
+        stands.set(s, Optional.of(new StandIn(sites.get(s).site(), level, rate)));
+        alone.set(s, Optional.of(new RateByItself(rate)));
     }
 
     private void compareGroup(String name, List<Integer> whole, boolean withDensity) {
         List<Integer> group =
-                whole.stream().filter(s -> compared.get(s).isPresent()).toList();
+                whole.stream().filter(s -> stands.get(s).isPresent()).toList();
         if (group.size() < 2) {
             return;
         }
         monitor.step("sites of " + name, 0);
         boolean flights = group.stream().anyMatch(s -> sites.get(s).flight().isPresent());
         if (group.size() <= (flights ? MOST_TOGETHER : MOST_POOLED)) {
-            JointRates joint = joint(group);
-            GroupAnswer answer = new GroupAnswer(
-                    name,
-                    group.stream().map(sites::get).toList(),
-                    group.stream().map(s -> alone.get(s).orElseThrow()).toList(),
-                    joint,
-                    rules.siteSpreadMetresPerKyr());
-            groups.add(answer.answer());
-            sayLeftOut(name, answer.withoutMean());
-            sayRough(name, joint);
-            if (group.size() <= MOST_TOGETHER) {
-                for (int a = 0; a < group.size(); a++) {
-                    for (int b = a + 1; b < group.size(); b++) {
-                        add(joint, group, a, b, withDensity);
-                    }
-                }
-                return;
-            }
-            neighbours(name, group, (one, next) ->
-                    add(joint, group, group.indexOf(one), group.indexOf(next), withDensity));
+            joint(name, group).ifPresent(joint -> compareTogether(name, group, joint, withDensity));
             return;
         }
         said.add(new Assumption(
@@ -217,14 +171,34 @@ public final class SitesComparer {
                 group.size() + " sites are more than are drawn together",
                 OURS,
                 name));
-        neighbours(name, group, (one, next) -> {
-            List<Integer> two = List.of(one, next);
-            add(joint(two), two, 0, 1, withDensity);
-        });
+        neighbours(name, group, (one, next) -> addPair(one, next, withDensity));
+    }
+
+    private void compareTogether(String name, List<Integer> group, JointRates joint, boolean withDensity) {
+        GroupAnswer answer = new GroupAnswer(
+                name,
+                group.stream().map(sites::get).toList(),
+                group.stream().map(s -> alone.get(s).orElseThrow()).toList(),
+                joint,
+                rules.siteSpreadMetresPerKyr());
+        groups.add(answer.answer());
+        sayLeftOut(name, answer.withoutMean());
+        if (group.size() <= MOST_TOGETHER) {
+            for (int a = 0; a < group.size(); a++) {
+                for (int b = a + 1; b < group.size(); b++) {
+                    add(joint, group, a, b, withDensity);
+                }
+            }
+        } else {
+            neighbours(
+                    name,
+                    group,
+                    (one, next) -> add(joint, group, group.indexOf(one), group.indexOf(next), withDensity));
+        }
     }
 
     /** Does something with each site and the next along the coast; without distances, the next in the table. */
-    private void neighbours(String name, List<Integer> group, java.util.function.BiConsumer<Integer, Integer> compare) {
+    private void neighbours(String name, List<Integer> group, BiConsumer<Integer, Integer> compare) {
         boolean distances = group.stream()
                 .allMatch(s -> site(s).distanceAlongCoastKm().isPresent());
         List<Integer> order = new ArrayList<>(group);
@@ -245,9 +219,29 @@ public final class SitesComparer {
         return sites.get(s).site().site();
     }
 
-    private JointRates joint(List<Integer> group) {
-        return SitesTogether.of(
-                group.stream().map(s -> compared.get(s).orElseThrow()).toList(), effort, streams, executor, monitor);
+    /** Joint draws of some sites; absent, and said, where no sea level fits them all. */
+    private Optional<JointRates> joint(String what, List<Integer> group) {
+        try {
+            JointRates joint = SitesTogether.of(
+                    group.stream().map(s -> stands.get(s).orElseThrow()).toList(),
+                    conventions,
+                    effort,
+                    streams,
+                    executor,
+                    monitor);
+            sayRough(what, joint);
+            return Optional.of(joint);
+        } catch (IllegalArgumentException e) {
+            said.add(new Assumption(
+                    "sites are not compared", String.valueOf(e.getMessage()), "what the sites say of the sea", what));
+            return Optional.empty();
+        }
+    }
+
+    private void addPair(int a, int b, boolean withDensity) {
+        List<Integer> two = List.of(a, b);
+        joint(sites.get(a).name() + " and " + sites.get(b).name(), two)
+                .ifPresent(joint -> add(joint, two, 0, 1, withDensity));
     }
 
     private void add(JointRates joint, List<Integer> group, int a, int b, boolean withDensity) {
@@ -269,8 +263,8 @@ public final class SitesComparer {
         if (a < 0 || b < 0 || a == b || done.contains(Set.of(pair.a(), pair.b()))) {
             return;
         }
-        if (compared.get(a).isEmpty() || compared.get(b).isEmpty()) {
-            String without = compared.get(a).isEmpty() ? pair.a() : pair.b();
+        if (stands.get(a).isEmpty() || stands.get(b).isEmpty()) {
+            String without = stands.get(a).isEmpty() ? pair.a() : pair.b();
             said.add(new Assumption(
                     "a pair is not compared", "'" + without + "' has no rate", "study.json", pair.a() + " and " + pair.b()));
             return;
@@ -278,17 +272,9 @@ public final class SitesComparer {
         List<Integer> two = List.of(a, b);
         monitor.step(pair.a() + " and " + pair.b(), 0);
         if (two.stream().allMatch(s -> sites.get(s).flight().isEmpty())) {
-            // they may have another highstand in common than their coasts do
-            List<Optional<ComparedSite>> levels = levels(two);
-            for (int i = 0; i < 2 && levels.stream().allMatch(Optional::isPresent); i++) {
-                int s = two.get(i);
-                compared.set(s, levels.get(i));
-                alone.set(s, levels.get(i).map(level -> alone(s, level)));
-            }
+            standByLevels(two); // they may have another highstand in common than their coasts do
         }
-        JointRates joint = joint(two);
-        sayRough(pair.a() + " and " + pair.b(), joint);
-        add(joint, two, 0, 1, withDensity);
+        addPair(a, b, withDensity);
     }
 
     private List<SiteMotion> motions() {
@@ -304,7 +290,7 @@ public final class SitesComparer {
                 motions.add(new SiteMotion(
                         site.name(),
                         site.coast(),
-                        compared.get(s).flatMap(ComparedSite::level),
+                        stands.get(s).flatMap(StandIn::level),
                         site.position().map(Position::latitudeDegrees),
                         site.position().map(Position::longitudeDegrees),
                         site.distanceAlongCoastKm(),

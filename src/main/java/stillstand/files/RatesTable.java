@@ -67,7 +67,8 @@ final class RatesTable {
         return table.write();
     }
 
-    private static void rate(CsvTable<Row> table, String name, Function<Row, Optional<Rate>> rate) {
+    /** The columns of a rate. */
+    static <T> void rate(CsvTable<T> table, String name, Function<T, Optional<Rate>> rate) {
         table.number(name + "_median_m_per_kyr", row -> rate.apply(row).map(Rate::median))
                 .number(name + "_mean_m_per_kyr", row -> rate.apply(row).flatMap(Rate::mean))
                 .number(name + "_sd_m_per_kyr", row -> rate.apply(row).flatMap(Rate::sd))

@@ -7,8 +7,10 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Collectors;
 import java.util.stream.Stream;
 import stillstand.ledger.Assumption;
+import stillstand.sensitivity.CurveChoice;
 import stillstand.study.Study;
 import stillstand.study.StudyResult;
 import stillstand.uplift.FlightResult;
@@ -33,6 +35,9 @@ public final class ResultFiles {
         write(folder, "rates.csv", RatesTable.text(evidence, result));
         write(folder, "pairings.csv", pairings(result));
         write(folder, "budget.csv", budget(result));
+        if (!result.curveChoice().isEmpty()) {
+            write(folder, "curve-choice.csv", curveChoice(result));
+        }
         if (!result.comparison().isEmpty()) {
             write(folder, "comparison.csv", ComparisonTable.text(result));
         }
@@ -97,6 +102,24 @@ public final class ResultFiles {
     }
 
     private record PairingRow(String site, String level, String highstand, double probability) {}
+
+    /** A row for each curve and mixture of each level and flight. */
+    static String curveChoice(StudyResult result) {
+        CsvTable<CurveChoice> table = new CsvTable<>(result.curveChoice())
+                .text("site", CurveChoice::site)
+                .text("level", row -> row.level().orElse(""))
+                .text("curve", CurveChoice::curve)
+                .number("weight", row -> Optional.of(row.weight()))
+                .number("log_evidence", CurveChoice::logEvidence);
+        RatesTable.rate(table, "rate", row -> Optional.of(row.rate()));
+        return table.text(
+                        "records",
+                        row -> row.matches().stream()
+                                .map(match ->
+                                        match.level() + " " + match.highstand().orElse("none"))
+                                .collect(Collectors.joining("; ")))
+                .write();
+    }
 
     static String ledger(StudyResult result) {
         return new CsvTable<>(result.ledger())

@@ -147,10 +147,11 @@ public final class StudyJson {
         List<Keys> items = keys.items("curves");
         for (Keys item : items) {
             String id = item.text("id").orElse("");
-            if (curves.stream().anyMatch(curve -> !id.isEmpty() && curve.id().equals(id))) {
+            WeightedCurve read = new WeightedCurve(id, item.number("weight").orElse(1.0), item.text("overrides"));
+            if (curves.stream().anyMatch(curve -> !id.isEmpty() && curve.label().equals(read.label()))) {
                 problems.add(json.problem(item.path() + ".id", "\"" + id + "\" a second time", "each curve once"));
             }
-            curves.add(new WeightedCurve(id, item.number("weight").orElse(1.0)));
+            curves.add(read);
         }
         if (items.isEmpty() && !fromTable) {
             problems.add(json.problem(

@@ -78,7 +78,11 @@ public final class StudyJsonWriter {
     private static Map<String, Object> seaLevel(SeaLevelChoice choice) {
         Map<String, Object> keys = new LinkedHashMap<>();
         List<Object> curves = new ArrayList<>();
-        choice.curves().forEach(curve -> curves.add(ordered("id", curve.id(), "weight", curve.weight())));
+        for (StudySettings.WeightedCurve curve : choice.curves()) {
+            Map<String, Object> item = ordered("id", curve.id(), "weight", curve.weight());
+            curve.overrides().ifPresent(by -> item.put("overrides", by));
+            curves.add(item);
+        }
         if (!curves.isEmpty()) {
             keys.put("curves", curves);
         }

@@ -42,6 +42,7 @@ public final class TerminalReport {
         TerminalReport report = new TerminalReport(result);
         report.opening(title);
         report.sites();
+        report.curves();
         report.together();
         report.oddities();
         report.assumptions(folder);
@@ -64,6 +65,14 @@ public final class TerminalReport {
         sites.forEach(this::site);
     }
 
+    private void curves() {
+        List<String> together = CurveChoiceReport.ofAll(result.curveEvidence());
+        if (!together.isEmpty()) {
+            lines.add("");
+            together.forEach(this::say);
+        }
+    }
+
     private void site(String name, List<LevelAnswer> levels) {
         long rates = levels.stream().filter(level -> level.rate().isPresent()).count();
         lines.add("");
@@ -78,6 +87,7 @@ public final class TerminalReport {
         }
         table(levels).lines().forEach(line -> lines.add("  " + Wording.cut(line, WIDTH - 2)));
         result.flight(name).ifPresent(this::flight);
+        CurveChoiceReport.ofSite(name, result.curveChoice()).forEach(line -> say("  " + line));
         levels.forEach(this::remarks);
         for (BetweenLevels between : result.intervals()) {
             if (between.site().equals(name)) {

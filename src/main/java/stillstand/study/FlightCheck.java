@@ -2,6 +2,7 @@ package stillstand.study;
 
 import static stillstand.ledger.InputProblem.quote;
 
+import java.util.Comparator;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
@@ -24,7 +25,7 @@ final class FlightCheck {
     static void check(
             List<SitesTable.SiteRow> sites,
             List<LevelsTable.LevelRow> levels,
-            Function<String, Optional<SeaLevelCase>> seaLevel) {
+            Function<String, List<SeaLevelCase>> seaLevel) {
         levels.forEach(FlightCheck::checkPin);
         Map<String, List<LevelsTable.LevelRow>> bySite = levels.stream()
                 .collect(Collectors.groupingBy(level -> level.key().site()));
@@ -38,10 +39,13 @@ final class FlightCheck {
             if (read && flight.stream().anyMatch(FlightCheck::isToBeMatched)) {
                 checkRange(site, flight);
                 checkHeights(site, flight);
-                seaLevel.apply(site.name()).ifPresent(sea -> {
-                    checkCount(site, flight, sea.highstands());
-                    checkOrder(flight, sea.highstands());
-                });
+                List<HighstandTable> tables = seaLevel.apply(site.name()).stream()
+                        .map(SeaLevelCase::highstands)
+                        .toList();
+                tables.stream()
+                        .max(Comparator.comparingInt(table -> table.rows().size()))
+                        .ifPresent(table -> checkCount(site, flight, table));
+                checkOrder(flight, tables);
             }
         }
     }
@@ -127,8 +131,30 @@ final class FlightCheck {
         }
     }
 
-    /** Whether the pins leave some highstand to every pinned level, higher ones older. */
-    private static void checkOrder(List<LevelsTable.LevelRow> flight, HighstandTable table) {
+    /** Whether some table has for every pinned level a highstand that the pins leave to it, higher ones older. */
+    private static void checkOrder(List<LevelsTable.LevelRow> flight, List<HighstandTable> tables) {
+        List<Optional<Crossing>> crossings =
+                tables.stream().map(table -> crossing(flight, table)).toList();
+        if (crossings.stream().allMatch(Optional::isPresent)) {
+            crossings.stream()
+                    .flatMap(Optional::stream)
+                    .findFirst()
+                    .ifPresent(crossing -> crossing.level()
+                            .reader()
+                            .problem(
+                                    HIGHSTAND,
+                                    quote(crossing.level().reader().text(HIGHSTAND)),
+                                    "a highstand older than " + quote(crossing.stage()) + ", to which level "
+                                            + quote(crossing.below())
+                                            + " below it is tied: higher shorelines are older, and each"
+                                            + " highstand left one"));
+        }
+    }
+
+    /** A level whose pin leaves it no highstand older than that of a level below it. */
+    private record Crossing(LevelsTable.LevelRow level, String stage, String below) {}
+
+    private static Optional<Crossing> crossing(List<LevelsTable.LevelRow> flight, HighstandTable table) {
         List<String> stages = table.rows().stream().map(row -> row.stage()).toList();
         int last = -1;
         String below = "";
@@ -141,18 +167,12 @@ final class FlightCheck {
                 next++;
             }
             if (next == stages.size()) {
-                level.reader()
-                        .problem(
-                                HIGHSTAND,
-                                quote(level.reader().text(HIGHSTAND)),
-                                "a highstand older than " + quote(stages.get(Math.max(0, last))) + ", to which level "
-                                        + quote(below) + " below it is tied: higher shorelines are older, and each"
-                                        + " highstand left one");
-                return;
+                return Optional.of(new Crossing(level, stages.get(Math.max(0, last)), below));
             }
             last = next;
             below = level.key().level();
         }
+        return Optional.empty();
     }
 
     /** Lowest first, by {@code order} where given, as {@link FlightSetup} has it. */

@@ -4,6 +4,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.stream.Stream;
 import stillstand.dating.DatingMethodTable;
+import stillstand.sealevel.HighstandTable;
 import stillstand.sealevel.SeaLevelCurve;
 import stillstand.sealevel.StageTable;
 import stillstand.shoreline.HabitatTable;
@@ -51,6 +52,19 @@ public record Library(
                 indicators,
                 habitats,
                 methods);
+    }
+
+    /**
+     * Every curve that shows highstands, twice: its picks replaced as the study says, and its own picks alone.
+     */
+    public List<StudySettings.WeightedCurve> everyCurve() {
+        return curves.stream()
+                .filter(curve -> HighstandTable.canComeFrom(curve, stages))
+                .flatMap(curve -> Stream.of(
+                        new StudySettings.WeightedCurve(curve.id(), 1),
+                        new StudySettings.WeightedCurve(
+                                curve.id(), 1, Optional.of(StudySettings.WeightedCurve.NO_OVERRIDES))))
+                .toList();
     }
 
     /** Ids of all curves. */

@@ -32,7 +32,7 @@ final class Plausibility {
             List<SitesTable.SiteRow> sites,
             List<LevelsTable.LevelRow> levels,
             List<SamplesTable.SampleRow> samples,
-            Function<String, Optional<SeaLevelCase>> seaLevel) {
+            Function<String, List<SeaLevelCase>> seaLevel) {
         Map<String, List<LevelsTable.LevelRow>> bySite = levels.stream()
                 .collect(Collectors.groupingBy(level -> level.key().site()));
         for (SitesTable.SiteRow site : sites) {
@@ -133,16 +133,14 @@ final class Plausibility {
 
     /** The age of a level that reads the curve at its own age must lie on the curve. */
     private static void checkSpan(
-            SamplesTable.SampleRow row,
-            DatedSample sample,
-            LevelsTable.LevelRow level,
-            Optional<SeaLevelCase> seaLevel) {
-        Optional<SeaLevelCurve> curve = seaLevel.flatMap(SeaLevelCase::curve);
-        if (level.formsAt() != FormsAt.ANY || curve.isEmpty() || sample.ageKa().isEmpty()) {
+            SamplesTable.SampleRow row, DatedSample sample, LevelsTable.LevelRow level, List<SeaLevelCase> seaLevel) {
+        List<SeaLevelCurve> curves =
+                seaLevel.stream().flatMap(sea -> sea.curve().stream()).toList();
+        if (level.formsAt() != FormsAt.ANY || curves.isEmpty() || sample.ageKa().isEmpty()) {
             return;
         }
         double age = sample.ageKa().get().quantile(0.5);
-        if (!curve.get().covers(age)) {
+        if (curves.stream().noneMatch(curve -> curve.covers(age))) {
             String header = List.of("age_ka", "age_max_ka", "age_table").stream()
                     .filter(each -> !row.reader().text(each).isEmpty())
                     .findFirst()
@@ -151,16 +149,20 @@ final class Plausibility {
                     .problem(
                             header,
                             quote(row.reader().text(header)),
-                            "an age on curve " + quote(curve.get().id()) + " ("
-                                    + text(curve.get().fromKa()) + " to "
-                                    + text(curve.get().toKa()) + " ka), at which level "
-                                    + quote(level.key().level()) + " is read");
+                            "an age on curve "
+                                    + curves.stream().map(Plausibility::span).collect(Collectors.joining(" or "))
+                                    + ", at which level " + quote(level.key().level()) + " is read");
         }
     }
 
-    private static void checkCurve(LevelsTable.LevelRow level, Optional<SeaLevelCase> seaLevel) {
+    private static String span(SeaLevelCurve curve) {
+        return quote(curve.id()) + " (" + text(curve.fromKa()) + " to " + text(curve.toKa()) + " ka)";
+    }
+
+    private static void checkCurve(LevelsTable.LevelRow level, List<SeaLevelCase> seaLevel) {
         if (level.formsAt() == FormsAt.ANY
-                && seaLevel.filter(each -> each.curve().isEmpty()).isPresent()) {
+                && !seaLevel.isEmpty()
+                && seaLevel.stream().allMatch(each -> each.curve().isEmpty())) {
             level.reader()
                     .problem(
                             "forms_at",

@@ -34,28 +34,44 @@ final class SeaLevelCheck {
         this.choice = stated.settings().seaLevel();
         this.library = library;
         this.findings = findings;
-        this.overrides = overrides();
+        this.overrides =
+                choice.overrides().map(id -> overrides(id, OVERRIDES)).orElse(Optional.of(HighstandOverrides.NONE));
     }
 
     /** The study's accounts of sea level; empty where they have problems. */
     List<SeaLevelCase> cases() {
         List<WeightedCurve> named = choice.curves();
-        if (named.size() > 1) {
-            findings.add(stated.problem(
-                    CURVES, named.size() + " curves", "one: several curves in one study are not possible yet"));
-        }
         List<SeaLevelCase> cases = new ArrayList<>();
+        List<WeightedCurve> read = new ArrayList<>();
         List<SeaLevelCurve> curves = new ArrayList<>();
         for (int i = 0; i < named.size(); i++) {
+            WeightedCurve each = named.get(i);
             String path = stated.states(CURVES) ? CURVES + "[" + i + "].id" : CURVES;
-            Optional<SeaLevelCurve> curve = curve(named.get(i).id(), path);
-            curve.ifPresent(curves::add);
+            if (named.stream().limit(i).anyMatch(before -> before.label().equals(each.label()))) {
+                findings.add(stated.problem(path, quote(each.id()) + " a second time", "each curve once"));
+                continue;
+            }
+            if (choice.highstandTable().isEmpty() && isTable(each.id())) {
+                fromTable(each.id(), each.weight(), Optional.empty(), path).ifPresent(cases::add);
+                continue;
+            }
+            Optional<SeaLevelCurve> curve = curve(each.id(), path);
+            curve.ifPresent(found -> {
+                read.add(each);
+                curves.add(found);
+            });
             if (choice.highstandTable().isEmpty()) {
-                double weight = named.get(i).weight();
-                curve.flatMap(each -> fromCurve(each, weight, path)).ifPresent(cases::add);
+                curve.flatMap(found -> fromCurve(found, each, path, named.size() > 1))
+                        .ifPresent(cases::add);
             }
         }
-        choice.highstandTable().flatMap(id -> fromTable(id, curves)).ifPresent(cases::add);
+        if (cases.isEmpty() && named.size() > 1 && curves.size() == named.size()) {
+            findings.add(stated.problem(
+                    CURVES,
+                    named.size() + " curves, none of which shows a highstand",
+                    "a curve that shows one in some stage window, or highstands from a table"));
+        }
+        choice.highstandTable().ifPresent(id -> cases.addAll(underTable(id, read, curves)));
         choice.highstandTable().ifPresent(this::tellWhatACurveLeaves);
         return cases;
     }
@@ -130,15 +146,29 @@ final class SeaLevelCheck {
         return choice.rezero() && canBeRezeroed(set) ? set.rezeroed() : set;
     }
 
-    private Optional<SeaLevelCase> fromCurve(SeaLevelCurve curve, double weight, String path) {
-        if (!HighstandTable.canComeFrom(curve, library.stages())) {
+    private Optional<SeaLevelCase> fromCurve(
+            SeaLevelCurve curve, WeightedCurve named, String path, boolean oneOfSeveral) {
+        boolean shows = HighstandTable.canComeFrom(curve, library.stages());
+        if (!shows && oneOfSeveral) {
+            String why = "it shows no highstand in any stage window";
+            findings.add(new Assumption("curve " + curve.id() + " is left out", why, "Stillstand's default", "all"));
+            findings.add(stated.warning(path, "curve " + quote(curve.id()) + " is left out: " + why));
+            return Optional.empty();
+        }
+        if (!shows) {
             findings.add(stated.problem(
                     path,
                     quote(curve.id()) + ", which shows no highstand",
                     "a curve that shows one in some stage window, or highstands from a table"));
             return Optional.empty();
         }
-        return overrides.map(each -> caseOf(curve, weight, each));
+        Optional<HighstandOverrides> replaced = named.overrides()
+                .map(id -> overrides(id, path.replaceFirst("\\.id$", ".overrides")))
+                .orElse(overrides);
+        return replaced.map(each -> {
+            SeaLevelCase made = caseOf(curve, named.weight(), each);
+            return new SeaLevelCase(named.label(), made.weight(), made.curve(), made.highstands());
+        });
     }
 
     private SeaLevelCase caseOf(SeaLevelCurve curve, double weight, HighstandOverrides replaced) {
@@ -146,16 +176,36 @@ final class SeaLevelCheck {
         return new SeaLevelCase(curve.id(), weight, Optional.of(curve), underSettings(table));
     }
 
-    private Optional<SeaLevelCase> fromTable(String id, List<SeaLevelCurve> curves) {
+    /** Whether an id among the curves is that of a highstand table: one more account of sea level, which reads no curve. */
+    private boolean isTable(String id) {
+        return library.curve(id).isEmpty() && library.highstands(id).isPresent();
+    }
+
+    /** The table's highstands, beside each curve that levels and corals may read at their own ages. */
+    private List<SeaLevelCase> underTable(String id, List<WeightedCurve> named, List<SeaLevelCurve> curves) {
+        if (curves.size() < 2) {
+            return fromTable(id, 1, curves.stream().findFirst(), TABLE).stream().toList();
+        }
+        List<SeaLevelCase> cases = new ArrayList<>();
+        for (int i = 0; i < curves.size(); i++) {
+            SeaLevelCurve curve = curves.get(i);
+            fromTable(id, named.get(i).weight(), Optional.of(curve), TABLE)
+                    .map(each -> new SeaLevelCase(curve.id(), each.weight(), each.curve(), each.highstands()))
+                    .ifPresent(cases::add);
+        }
+        return cases;
+    }
+
+    private Optional<SeaLevelCase> fromTable(String id, double weight, Optional<SeaLevelCurve> curve, String path) {
         Optional<HighstandRows> rows = library.highstands(id);
         if (rows.isEmpty()) {
             findings.add(stated.problem(
-                    TABLE, quote(id), "the id of a highstand table" + RowReader.nearest(id, library.highstandIds())));
+                    path, quote(id), "the id of a highstand table" + RowReader.nearest(id, library.highstandIds())));
         }
         return rows.map(each -> new SeaLevelCase(
                 id,
-                1,
-                curves.stream().findFirst(),
+                weight,
+                curve,
                 underSettings(HighstandTable.own(id, each.complete(), each.entries(), library.stages(), options()))));
     }
 
@@ -181,15 +231,14 @@ final class SeaLevelCheck {
     }
 
     /** What replaces a curve's own highstands; absent where it has problems. */
-    private Optional<HighstandOverrides> overrides() {
-        if (choice.overrides().isEmpty()) {
+    private Optional<HighstandOverrides> overrides(String id, String path) {
+        if (id.equals(WeightedCurve.NO_OVERRIDES)) {
             return Optional.of(HighstandOverrides.NONE);
         }
-        String id = choice.overrides().get();
         Optional<HighstandRows> rows = library.highstands(id);
         if (rows.isEmpty()) {
             findings.add(stated.problem(
-                    OVERRIDES,
+                    path,
                     quote(id),
                     "the id of a highstand table, or \"none\"" + RowReader.nearest(id, library.highstandIds())));
             return Optional.empty();
@@ -199,7 +248,7 @@ final class SeaLevelCheck {
             if (library.stages().find(entry.stage()).isEmpty()) {
                 known = false;
                 findings.add(stated.problem(
-                        OVERRIDES,
+                        path,
                         quote(id) + " with a stage " + quote(entry.stage()),
                         "only stages of the stage table"
                                 + library.stages()

@@ -20,7 +20,7 @@ final class SeaLevelSummary {
     static StudyResult.SeaLevelUsed of(Study study) {
         Map<String, SeaLevelCase> cases = new LinkedHashMap<>();
         study.seaLevel().forEach(sea -> cases.put(sea.id(), sea));
-        study.sites().forEach(site -> site.localSeaLevel().ifPresent(sea -> cases.putIfAbsent(sea.id(), sea)));
+        study.sites().forEach(site -> site.seaLevel().forEach(sea -> cases.putIfAbsent(sea.id(), sea)));
         List<StudyResult.CurveUsed> curves = new ArrayList<>();
         List<StudyResult.HighstandUsed> highstands = new ArrayList<>();
         for (SeaLevelCase sea : cases.values()) {
@@ -28,14 +28,18 @@ final class SeaLevelSummary {
                     .ifPresent(curve -> curves.add(new StudyResult.CurveUsed(curve.id(), sea.weight(), points(curve))));
             SharedErrors shared = sea.highstands().sharedErrors();
             for (Highstand row : sea.highstands().rows()) {
-                highstands.add(new StudyResult.HighstandUsed(
+                StudyResult.HighstandUsed used = new StudyResult.HighstandUsed(
                         row.stage(),
                         row.highstandClass().name().toLowerCase(Locale.ROOT),
                         row.ageKa(),
                         row.marginalAgeSigmaKa(shared),
                         row.level().mean(),
                         row.marginalLevelSigmaMetres(shared),
-                        row.source()));
+                        row.source());
+                // several curves with the same independent levels
+                if (!highstands.contains(used)) {
+                    highstands.add(used);
+                }
             }
         }
         return new StudyResult.SeaLevelUsed(curves, highstands);

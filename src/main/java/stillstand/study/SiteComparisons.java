@@ -29,11 +29,11 @@ import stillstand.uplift.LevelAnswer;
 import stillstand.uplift.MatchingRules;
 import stillstand.uplift.Quantity;
 import stillstand.uplift.Rate;
-import stillstand.uplift.SeaLevelBasis;
 import stillstand.uplift.SiteCase;
+import stillstand.uplift.StandIn;
 
 /**
- * What a run says of its sites together, once each of them is done; under the study's first account of sea level.
+ * What a run says of its sites together, once each of them is done.
  *
  * @param pairs differences between sites
  * @param motions sites that go up, are stable or go down
@@ -80,10 +80,8 @@ record SiteComparisons(
         List<SiteToCompare> sites = new ArrayList<>();
         for (SitePlan plan : study.sites()) {
             String name = plan.site().name();
-            SeaLevelCase sea = plan.seaLevel(study).get(0);
             sites.add(new SiteToCompare(
-                    new SiteCase(
-                            plan.site(), new SeaLevelBasis(sea.id(), sea.curve(), sea.highstands()), plan.prior()),
+                    new SiteCase(plan.site(), plan.ensemble(), plan.prior()),
                     Optional.ofNullable(flights.get(name)),
                     levels.getOrDefault(name, Map.of()),
                     Optional.ofNullable(study.together().areasKm2().get(name))));
@@ -91,7 +89,7 @@ record SiteComparisons(
         SitesCompared compared = SitesComparer.compare(
                 sites,
                 study.settings().comparison(),
-                new SitesComparer.Conventions(study.settings().indicativeRange(), dates, matching),
+                new StandIn.Conventions(study.settings().indicativeRange(), dates, matching),
                 streams,
                 executor,
                 monitor);

@@ -13,6 +13,7 @@ import java.util.function.UnaryOperator;
 import java.util.stream.Collectors;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputProblem;
+import stillstand.ledger.InputWarning;
 import stillstand.study.StudySettings.WeightedCurve;
 
 /**
@@ -40,8 +41,9 @@ public record StatedSettings(
             "seed",
             settings -> String.valueOf(settings.seed()),
             CURVES,
-            settings ->
-                    settings.seaLevel().curves().stream().map(WeightedCurve::id).collect(Collectors.joining(", ")));
+            settings -> settings.seaLevel().curves().stream()
+                    .map(WeightedCurve::label)
+                    .collect(Collectors.joining(", ")));
 
     public StatedSettings {
         defaults = List.copyOf(defaults);
@@ -96,5 +98,14 @@ public record StatedSettings(
         }
         Place place = places.getOrDefault(keyPath, new Place(0, 0));
         return new InputProblem(file, place.line(), place.column(), keyPath, found, expected);
+    }
+
+    /** A warning at a key, or at the whole file where the key is not stated. */
+    InputWarning warning(String keyPath, String message) {
+        if (isReplaced(CURVES) && keyPath.startsWith(CURVES)) {
+            return new InputWarning(COMMAND_LINE, 0, 0, message);
+        }
+        Place place = places.getOrDefault(keyPath, new Place(0, 0));
+        return new InputWarning(file, place.line(), place.column(), message);
     }
 }

@@ -55,28 +55,33 @@ public final class StudyCheck {
         List<SitesTable.SiteRow> sites = input.sites()
                 .map(table -> new SitesTable(library, findings).read(table))
                 .orElse(List.of());
-        Map<String, SeaLevelCase> local = new HashMap<>();
+        Map<String, List<SeaLevelCase>> local = new HashMap<>();
         for (SitesTable.SiteRow site : sites) {
             seaLevel.flatMap(check -> check.local(site.reader(), cases))
-                    .ifPresent(account -> local.put(site.name(), account));
+                    .ifPresent(account -> local.put(site.name(), List.of(account)));
         }
         Set<String> names = new LinkedHashSet<>();
         sites.forEach(site -> names.add(site.name()));
-        Function<String, Optional<SeaLevelCase>> at = site ->
-                Optional.ofNullable(local.get(site)).or(() -> cases.stream().findFirst());
+        Function<String, List<SeaLevelCase>> at = site -> local.getOrDefault(site, cases);
         List<LevelsTable.LevelRow> levels = input.levels()
                 .map(table -> new LevelsTable(library, findings)
                         .read(
                                 table,
                                 names,
-                                site -> at.apply(site)
-                                        .map(each -> new StageLabels(each.highstands(), library.stages()))))
+                                site -> Optional.of(at.apply(site))
+                                        .filter(each -> !each.isEmpty())
+                                        .map(each -> new StageLabels(
+                                                each.stream()
+                                                        .map(SeaLevelCase::highstands)
+                                                        .toList(),
+                                                library.stages()))))
                 .orElse(List.of());
         List<SamplesTable.SampleRow> samples = input.samples()
                 .map(table -> new SamplesTable(library, input.ages(), findings).read(table, names, byName(levels)))
                 .orElse(List.of());
         Plausibility.check(sites, levels, samples, at);
         FlightCheck.check(sites, levels, at);
+        Function<String, List<SeaLevelCase>> serving = ServingCurves.of(sites, levels, samples, at, findings);
         input.settings().ifPresent(settings -> ComparisonCheck.check(settings, sites, findings));
         List<SitesData.TerracePoints> terraces = input.points()
                 .map(table -> new PointsTable(findings).read(table, byName(levels)))
@@ -88,7 +93,7 @@ public final class StudyCheck {
         }
         Study study = new Study(
                 input.settings().get().settings(),
-                plans(sites, levels, samples, local),
+                plans(sites, levels, samples, serving),
                 cases,
                 warnings,
                 findings.ledger(),
@@ -130,7 +135,7 @@ public final class StudyCheck {
             List<SitesTable.SiteRow> siteRows,
             List<LevelsTable.LevelRow> levelRows,
             List<SamplesTable.SampleRow> sampleRows,
-            Map<String, SeaLevelCase> local) {
+            Function<String, List<SeaLevelCase>> seaLevel) {
         Map<LevelsTable.Key, List<DatedSample>> samples = new HashMap<>();
         for (SamplesTable.SampleRow row : sampleRows) {
             samples.computeIfAbsent(row.key(), key -> new ArrayList<>())
@@ -156,7 +161,7 @@ public final class StudyCheck {
                                     .settings()
                                     .rate()
                                     .prior()),
-                    Optional.ofNullable(local.get(row.name()))));
+                    seaLevel.apply(row.name())));
         }
         return plans;
     }

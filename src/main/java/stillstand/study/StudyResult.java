@@ -8,6 +8,8 @@ import stillstand.comparison.SiteMotion;
 import stillstand.comparison.TerraceTilt;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputWarning;
+import stillstand.sensitivity.CurveChoice;
+import stillstand.sensitivity.CurveEvidence;
 import stillstand.uplift.BetweenLevels;
 import stillstand.uplift.FlightResult;
 import stillstand.uplift.ImpliedSeaLevel;
@@ -26,6 +28,8 @@ import stillstand.uplift.LevelResidual;
  * @param intervals rates between levels of a site
  * @param impliedSeaLevel sea level that dated levels imply, given the uplift of the others
  * @param residuals measured against predicted heights of the flights
+ * @param curveChoice what each of several curves makes of each level and flight, beside their mixtures
+ * @param curveEvidence what the flights of a region together say of the curves
  * @param comparison differences between sites
  * @param siteMotion which sites go up, are stable or go down
  * @param siteGroups what the sites of a coast or island group say together
@@ -43,6 +47,8 @@ public record StudyResult(
         List<BetweenLevels> intervals,
         List<ImpliedSeaLevel> impliedSeaLevel,
         List<LevelResidual> residuals,
+        List<CurveChoice> curveChoice,
+        List<CurveEvidence> curveEvidence,
         List<SiteComparison> comparison,
         List<SiteMotion> siteMotion,
         List<SiteGroup> siteGroups,
@@ -57,6 +63,8 @@ public record StudyResult(
         intervals = List.copyOf(intervals);
         impliedSeaLevel = List.copyOf(impliedSeaLevel);
         residuals = List.copyOf(residuals);
+        curveChoice = List.copyOf(curveChoice);
+        curveEvidence = List.copyOf(curveEvidence);
         comparison = List.copyOf(comparison);
         siteMotion = List.copyOf(siteMotion);
         siteGroups = List.copyOf(siteGroups);
@@ -76,6 +84,8 @@ public record StudyResult(
             List<BetweenLevels> intervals,
             List<ImpliedSeaLevel> impliedSeaLevel,
             List<LevelResidual> residuals,
+            List<CurveChoice> curveChoice,
+            List<CurveEvidence> curveEvidence,
             List<InputWarning> warnings,
             List<Failure> failures,
             List<Assumption> ledger) {
@@ -88,6 +98,8 @@ public record StudyResult(
                 intervals,
                 impliedSeaLevel,
                 residuals,
+                curveChoice,
+                curveEvidence,
                 List.of(),
                 List.of(),
                 List.of(),
@@ -108,6 +120,8 @@ public record StudyResult(
                 intervals,
                 impliedSeaLevel,
                 residuals,
+                curveChoice,
+                curveEvidence,
                 comparison,
                 siteMotion,
                 siteGroups,

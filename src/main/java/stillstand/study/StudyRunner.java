@@ -7,9 +7,12 @@ import java.util.Locale;
 import java.util.Optional;
 import java.util.Set;
 import java.util.concurrent.ExecutorService;
+import java.util.stream.Collectors;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.RunCancelledException;
 import stillstand.ledger.RunMonitor;
+import stillstand.sensitivity.CurveChoice;
+import stillstand.sensitivity.CurveEvidence;
 import stillstand.shoreline.Level;
 import stillstand.shoreline.Site;
 import stillstand.uncertainty.DrawStreams;
@@ -25,7 +28,7 @@ import stillstand.uplift.LevelAnswers;
 import stillstand.uplift.LevelRates;
 import stillstand.uplift.LevelResidual;
 import stillstand.uplift.MatchingRules;
-import stillstand.uplift.SeaLevelBasis;
+import stillstand.uplift.SeaLevelEnsemble;
 import stillstand.uplift.SharedPriors;
 import stillstand.uplift.SiteRelations;
 
@@ -49,6 +52,7 @@ public final class StudyRunner {
     private final List<LevelResidual> residuals = new ArrayList<>();
     private final List<BetweenLevels> intervals = new ArrayList<>();
     private final List<ImpliedSeaLevel> implied = new ArrayList<>();
+    private final List<CurveChoice> curveChoice = new ArrayList<>();
     private final List<StudyResult.Failure> failures = new ArrayList<>();
     private final Set<Assumption> ledger = new LinkedHashSet<>();
 
@@ -121,6 +125,7 @@ public final class StudyRunner {
         for (SeaLevelCase sea : study.seaLevel()) {
             ledger.addAll(sea.highstands().assumptions());
         }
+        ledger.addAll(Conventions.ofCurves(study.seaLevel()));
         ledger.addAll(study.ledger());
         int allLevels = study.sites().stream()
                 .mapToInt(plan -> plan.site().levels().size())
@@ -159,6 +164,8 @@ public final class StudyRunner {
                 intervals,
                 implied,
                 residuals,
+                curveChoice,
+                CurveEvidence.pooled(curveChoice, this::coast),
                 sites.pairs(),
                 sites.motions(),
                 sites.groups(),
@@ -168,46 +175,66 @@ public final class StudyRunner {
                 JoinedLedger.of(ledger));
     }
 
+    private Optional<String> coast(String site) {
+        return study.sites().stream()
+                .filter(plan -> plan.site().name().equals(site))
+                .findFirst()
+                .flatMap(plan -> plan.site().coast());
+    }
+
     private void runSite(SitePlan plan, int allLevels) {
-        SeaLevelCase sea = plan.seaLevel(study).get(0);
-        plan.localSeaLevel().ifPresent(local -> ledger.addAll(local.highstands().assumptions()));
-        SeaLevelBasis basis = new SeaLevelBasis(sea.id(), sea.curve(), sea.highstands());
+        SeaLevelEnsemble ensemble = plan.ensemble();
+        ensemble.bases().forEach(basis -> ledger.addAll(basis.highstands().assumptions()));
         for (Level level : plan.site().levels()) {
             String what = plan.site().name() + " / " + level.name();
             monitor.step(what, (double) levels.size() / Math.max(1, allLevels));
-            LevelAnswers.Answered answered = answers.of(plan.site(), level, basis, plan.prior());
-            levels.add(answered.answer());
-            answered.whyWaiting()
-                    .ifPresent(reason ->
-                            waiting.add(new StudyResult.Waiting(plan.site().name(), level.name(), reason)));
-            ledger.addAll(answered.assumptions());
+            runLevel(plan, level, ensemble);
         }
         if (monitor.isCancelled()) {
             throw new RunCancelledException();
         }
         SiteRelations relations = SiteRelations.of(
-                plan.site(), basis, study.settings().indicativeRange(), dates, streams, this.plan, executor);
+                plan.site(), ensemble, study.settings().indicativeRange(), dates, streams, this.plan, executor);
         intervals.addAll(relations.intervals());
         implied.addAll(relations.impliedSeaLevel());
         ledger.addAll(relations.assumptions());
-        runFlight(plan, basis, (double) levels.size() / Math.max(1, allLevels));
+        runFlight(plan, ensemble, (double) levels.size() / Math.max(1, allLevels));
     }
 
-    private void runFlight(SitePlan plan, SeaLevelBasis basis, double fraction) {
+    private void runLevel(SitePlan plan, Level level, SeaLevelEnsemble ensemble) {
+        Site site = plan.site();
+        LevelAnswers.Answered answered = answers.of(site, level, ensemble, plan.prior());
+        levels.add(answered.answer());
+        answered.whyWaiting()
+                .ifPresent(reason -> waiting.add(new StudyResult.Waiting(site.name(), level.name(), reason)));
+        ledger.addAll(answered.assumptions());
+        if (ensemble.size() > 1 && answered.answer().rate().isPresent()) {
+            List<CurveChoice.OfCurve> each = new ArrayList<>();
+            for (int k = 0; k < ensemble.size(); k++) {
+                int number = k;
+                answers.rateUnder(site, level, ensemble.bases().get(k), plan.prior())
+                        .ifPresent(found -> each.add(new CurveChoice.OfCurve(number, found.rate(), found.highstand())));
+            }
+            curveChoice.addAll(CurveChoice.ofLevel(site.name(), level.name(), ensemble, each));
+        }
+    }
+
+    private void runFlight(SitePlan plan, SeaLevelEnsemble ensemble, double fraction) {
         Site site = plan.site();
         if (!FlightSetup.isNeeded(site)) {
             return;
         }
-        Optional<String> whyNot = FlightSetup.whyNot(site, basis);
+        FlightUnderCurves flight = new FlightUnderCurves(plan, ensemble);
+        Optional<String> whyNot = flight.whyNot();
         if (whyNot.isPresent()) {
             sayWaiting(site, "no flight is matched: " + whyNot.get());
             return;
         }
-        monitor.step(site.name() + " / flight", fraction);
-        Flights.Answered answered = matching.of(site, basis, plan.prior());
-        flights.add(answered.flight());
-        residuals.addAll(answered.residuals());
-        ledger.addAll(answered.assumptions());
+        FlightUnderCurves.Found found = flight.run(matching, monitor, fraction);
+        flights.add(found.flight());
+        residuals.addAll(found.residuals());
+        curveChoice.addAll(found.curveChoice());
+        ledger.addAll(found.assumptions());
         sayWaiting(
                 site, "no date of its own and no single highstand: the flight of the site says its highstand and age");
     }
@@ -228,6 +255,27 @@ public final class StudyRunner {
         private static final String ALL = "all";
 
         private Conventions() {}
+
+        static List<Assumption> ofCurves(List<SeaLevelCase> cases) {
+            if (cases.size() < 2) {
+                return List.of();
+            }
+            double total = cases.stream().mapToDouble(SeaLevelCase::weight).sum();
+            return List.of(
+                    new Assumption(
+                            "several curves: levels are mixed by weight, flights by weight times evidence",
+                            cases.stream()
+                                    .map(sea -> String.format(Locale.ROOT, "%s %.3g", sea.id(), sea.weight() / total))
+                                    .collect(Collectors.joining(", ")),
+                            "study.json or its default",
+                            ALL),
+                    new Assumption(
+                            "none of the curves is true",
+                            "their records and methods overlap, so that they are no independent witnesses; evidence rewards"
+                                    + " a curve for its error bars too",
+                            "Stillstand",
+                            ALL));
+        }
 
         static List<Assumption> of(StudySettings settings) {
             List<Assumption> said = new ArrayList<>();

@@ -73,8 +73,29 @@ public record StudySettings(
         }
     }
 
-    /** A curve of the study and its weight among them, above 0. */
-    public record WeightedCurve(String id, double weight) {
+    /**
+     * A curve of the study.
+     *
+     * @param id of the curve, or of a table of highstands
+     * @param weight among them, above 0
+     * @param overrides what replaces this curve's picks: the id of a table, or {@link #NO_OVERRIDES}; absent = as for all curves
+     */
+    public record WeightedCurve(String id, double weight, Optional<String> overrides) {
+        /** A curve's picks stand as they are. */
+        public static final String NO_OVERRIDES = "none";
+
+        /** A curve whose picks are replaced as those of all others are. */
+        public WeightedCurve(String id, double weight) {
+            this(id, weight, Optional.empty());
+        }
+
+        /** How answers name it: the id, and how its picks are replaced where this curve states that. */
+        public String label() {
+            return overrides
+                    .map(by -> id + (by.equals(NO_OVERRIDES) ? " (own picks)" : " (" + by + ")"))
+                    .orElse(id);
+        }
+
         public WeightedCurve {
             if (!(weight > 0 && weight < Double.POSITIVE_INFINITY)) {
                 throw new IllegalArgumentException("weight must be above 0 but is " + weight);

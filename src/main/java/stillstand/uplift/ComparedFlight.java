@@ -56,10 +56,12 @@ record ComparedFlight(
         rows = List.copyOf(rows);
     }
 
-    static ComparedFlight of(SiteCase site, Rate alone, MatchingRules rules, IndicativeRule rule) {
-        FlightSetup setup = FlightSetup.of(site.site(), site.basis(), rules, rule);
+    /** Under one account of sea level, for which {@link FlightSetup#whyNot} says nothing. */
+    static ComparedFlight of(
+            SiteCase site, SeaLevelBasis basis, Rate alone, MatchingRules rules, IndicativeRule rule) {
+        FlightSetup setup = FlightSetup.of(site.site(), basis, rules, rule);
         List<SharedRow> rows = new ArrayList<>();
-        for (Highstand row : site.basis().highstands().rows()) {
+        for (Highstand row : basis.highstands().rows()) {
             rows.add(SharedRow.of(row));
         }
         return new ComparedFlight(
@@ -67,7 +69,7 @@ record ComparedFlight(
                 site.coast(),
                 setup.model(),
                 setup.shared(),
-                site.basis().highstands().sharedErrors(),
+                basis.highstands().sharedErrors(),
                 site.site().datumOffsetMetres().standardDeviation(),
                 rows,
                 site.prior(),

@@ -21,15 +21,15 @@ public final class ComparedLevels {
     private ComparedLevels() {}
 
     /** A level that may stand for its site. */
-    private record Candidate(ComparedLevel level, String stage, double sigmaMetresPerKyr) {}
+    private record Candidate(String level, String stage, double sigmaMetresPerKyr) {}
 
     /**
-     * A level for each site; absent where no level of it has a rate of its own.
+     * The name of a level for each site; absent where no level of it has a rate of its own.
      *
      * @param rule what an indicative range means
      * @param dates how far dates are believed
      */
-    public static List<Optional<ComparedSite>> choose(List<SiteCase> sites, IndicativeRule rule, DateRules dates) {
+    public static List<Optional<String>> choose(List<SiteCase> sites, IndicativeRule rule, DateRules dates) {
         List<List<Candidate>> candidates = new ArrayList<>();
         Map<String, Integer> counts = new TreeMap<>();
         for (SiteCase site : sites) {
@@ -50,37 +50,52 @@ public final class ComparedLevels {
                         .min(Comparator.comparing((Candidate candidate) ->
                                         !candidate.stage().equals(common))
                                 .thenComparing(Candidate::sigmaMetresPerKyr))
-                        .map(best -> (ComparedSite) best.level()))
+                        .map(Candidate::level))
                 .toList();
     }
 
     private static List<Candidate> candidates(SiteCase site, IndicativeRule rule, DateRules dates) {
         List<Candidate> candidates = new ArrayList<>();
         for (Level level : site.site().levels()) {
-            List<SeaAtLevel> explanations = LevelExplanations.of(
-                            level, site.basis(), dates, site.site().name() + " / " + level.name())
+            List<SeaAtLevel> explanations = LevelExplanations.of(level, site.seaLevel(), dates, "")
                     .explanations();
-            if (explanations.isEmpty()) {
-                continue;
+            if (!explanations.isEmpty()) {
+                SeaAtLevel likeliest = explanations.stream()
+                        .max(Comparator.comparingDouble(SeaAtLevel::probability))
+                        .orElseThrow();
+                candidates.add(new Candidate(
+                        level.name(),
+                        likeliest instanceof SeaAtLevel.AtHighstand stand ? stand.stage() : "",
+                        FirstOrderRate.of(
+                                        FormerSeaLevel.ofLandform(site.site(), level, rule),
+                                        level.loweringMetresPerKyr(),
+                                        likeliest)
+                                .sigma()));
             }
-            JointLevels.Entry entry = new JointLevels.Entry(
-                    level.name(),
-                    FormerSeaLevel.ofLandform(site.site(), level, rule),
-                    level.loweringMetresPerKyr(),
-                    explanations);
-            SeaAtLevel likeliest = explanations.stream()
-                    .max(Comparator.comparingDouble(SeaAtLevel::probability))
-                    .orElseThrow();
-            candidates.add(new Candidate(
-                    new ComparedLevel(
-                            site.site().name(),
-                            site.coast(),
-                            entry,
-                            site.basis().highstands().sharedErrors()),
-                    likeliest instanceof SeaAtLevel.AtHighstand stand ? stand.stage() : "",
-                    FirstOrderRate.of(entry.height(), entry.loweringMetresPerKyr(), likeliest)
-                            .sigma()));
         }
         return candidates;
+    }
+
+    /** A level under one account of sea level; absent where that explains nothing of it. */
+    static Optional<ComparedSite> under(
+            SiteCase site, SeaLevelBasis basis, String name, IndicativeRule rule, DateRules dates) {
+        return site.site().levels().stream()
+                .filter(level -> level.name().equals(name))
+                .findFirst()
+                .flatMap(level -> {
+                    List<SeaAtLevel> explanations =
+                            LevelExplanations.of(level, basis, dates, "").explanations();
+                    return explanations.isEmpty()
+                            ? Optional.empty()
+                            : Optional.of(new ComparedLevel(
+                                    site.site().name(),
+                                    site.coast(),
+                                    new JointLevels.Entry(
+                                            name,
+                                            FormerSeaLevel.ofLandform(site.site(), level, rule),
+                                            level.loweringMetresPerKyr(),
+                                            explanations),
+                                    basis.highstands().sharedErrors()));
+                });
     }
 }

@@ -12,7 +12,7 @@ import stillstand.uncertainty.Interval;
 
 /** What the engine found of a flight, in the form of results: labels for numbers, intervals for densities. */
 final class FlightSummary {
-    private static final double LEAST_PROBABILITY = 1e-4;
+    static final double LEAST_PROBABILITY = 1e-4;
     /** A generic older row with less than this of standing in the surveyed range is not worth a line. */
     private static final double LEAST_INSIDE = 0.005;
 
@@ -104,7 +104,7 @@ final class FlightSummary {
     }
 
     /** Free of the last bits of a sum, which would make a sure pairing look doubtful. */
-    private static double rounded(double probability) {
+    static double rounded(double probability) {
         return Math.rint(probability * 1e12) / 1e12;
     }
 

@@ -23,7 +23,6 @@ import stillstand.uplift.FlightWhatIf.ErrorGroup;
  */
 public final class Flights {
     private static final FlightIntegration.Effort WHAT_IF_GRID = new FlightIntegration.Effort(300, 125);
-    private static final double LEAST_REGION = 0.01;
     private static final int GRID_DRAWS = 1000;
     private static final int GRID_DRAW_CELLS = 250;
 
@@ -129,10 +128,10 @@ public final class Flights {
                     rate,
                     prior.isTwoSided() ? Optional.of(posterior.probabilityUplift()) : Optional.empty(),
                     FlightSummary.bound(rate),
-                    intervals(regions68),
-                    intervals(regions95),
-                    weights(regions68),
-                    weights(regions95),
+                    RateRegion.intervals(regions68),
+                    RateRegion.intervals(regions95),
+                    RateRegion.probabilities(regions68),
+                    RateRegion.probabilities(regions95),
                     List.of(new FlightResult.Segment(0, Optional.empty(), rate)),
                     summary.pairings(),
                     summary.unmatched(),
@@ -149,31 +148,10 @@ public final class Flights {
             return new Answered(result, summary.residuals(), assumptions());
         }
 
-        /**
-         * The regions of highest density. Where the density comes of draws, its noise at the edge of a region is no correlation of
-         * its own: regions nearer to one another than half the half-width of the 68 % interval are one, and what then holds less
-         * than 0.01 is left out.
-         */
         private List<RateRegion> regions(RatePosterior posterior, double probability) {
-            List<RateRegion> regions = posterior.highestDensityRegions(probability);
-            if (onGrid) {
-                return regions;
-            }
-            double near = posterior.equalTails(Interval.PROBABILITY_68).widthMetresPerKyr() / 4;
-            List<RateRegion> joined = new ArrayList<>();
-            for (RateRegion region : regions) {
-                int last = joined.size() - 1;
-                double from = region.fromMetresPerKyr();
-                if (last >= 0 && from - joined.get(last).toMetresPerKyr() < near) {
-                    from = joined.remove(last).fromMetresPerKyr();
-                }
-                double to = region.toMetresPerKyr();
-                double held = posterior.cumulativeProbability(to) - posterior.cumulativeProbability(from);
-                joined.add(new RateRegion(from, to, held));
-            }
-            return joined.stream()
-                    .filter(region -> region.probability() >= LEAST_REGION)
-                    .toList();
+            return onGrid
+                    ? posterior.highestDensityRegions(probability)
+                    : posterior.highestDensityRegionsOfDraws(probability);
         }
 
         private List<Assumption> assumptions() {
@@ -359,16 +337,6 @@ public final class Flights {
                 Math.abs(answer.rate().mean() - rough.rate().mean()),
                 Math.abs(answer.rate().logEvidence() - rough.rate().logEvidence()),
                 pairing);
-    }
-
-    private static List<Interval> intervals(List<RateRegion> regions) {
-        return regions.stream()
-                .map(region -> new Interval(region.fromMetresPerKyr(), region.toMetresPerKyr()))
-                .toList();
-    }
-
-    private static List<Double> weights(List<RateRegion> regions) {
-        return regions.stream().map(RateRegion::probability).toList();
     }
 
     /** Threads of the executor ask whether to stop but report nothing. */

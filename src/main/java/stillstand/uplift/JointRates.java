@@ -12,13 +12,69 @@ public final class JointRates {
     private final double[][] rates;
     private final boolean[][] counts;
     private final Optional<Double> effectiveFraction;
+    private final double logEvidence;
 
     JointRates(
-            List<ComparedSite> sites, double[][] rates, boolean[][] counts, Optional<Double> effectiveFraction) {
+            List<ComparedSite> sites,
+            double[][] rates,
+            boolean[][] counts,
+            Optional<Double> effectiveFraction,
+            double logEvidence) {
         this.sites = List.copyOf(sites);
         this.rates = rates;
         this.counts = counts;
         this.effectiveFraction = effectiveFraction;
+        this.logEvidence = logEvidence;
+    }
+
+    /**
+     * Draws of the same sites under several curves, mixed by weight times evidence: of each part as many as that gives, evenly from
+     * all of its draws.
+     */
+    static JointRates mixed(List<JointRates> parts, List<Double> weights) {
+        if (parts.size() == 1) {
+            return parts.get(0);
+        }
+        double highest = parts.stream()
+                .mapToDouble(part -> part.logEvidence)
+                .max()
+                .orElseThrow();
+        double[] share = new double[parts.size()];
+        double total = 0;
+        for (int k = 0; k < share.length; k++) {
+            share[k] = weights.get(k) * Math.exp(parts.get(k).logEvidence - highest);
+            total += share[k];
+        }
+        double most = Double.POSITIVE_INFINITY;
+        for (int k = 0; k < share.length; k++) {
+            share[k] /= total;
+            most = share[k] > 0 ? Math.min(most, parts.get(k).draws() / share[k]) : most;
+        }
+        int[] taken = new int[share.length];
+        int draws = 0;
+        for (int k = 0; k < share.length; k++) {
+            taken[k] = (int) Math.min(parts.get(k).draws(), Math.round(most * share[k]));
+            draws += taken[k];
+        }
+        int sites = parts.get(0).sites.size();
+        double[][] rates = new double[sites][draws];
+        boolean[][] counts = new boolean[sites][draws];
+        Optional<Double> least = Optional.empty();
+        int at = 0;
+        for (int k = 0; k < share.length; k++) {
+            JointRates part = parts.get(k);
+            for (int i = 0; i < taken[k]; i++, at++) {
+                int from = (int) ((i + 0.5) * part.draws() / taken[k]);
+                for (int s = 0; s < sites; s++) {
+                    rates[s][at] = part.rates[s][from];
+                    counts[s][at] = part.counts[s][from];
+                }
+            }
+            if (part.effectiveFraction.isPresent() && taken[k] > 0) {
+                least = Optional.of(Math.min(least.orElse(1.0), part.effectiveFraction.get()));
+            }
+        }
+        return new JointRates(parts.get(0).sites, rates, counts, least, highest + Math.log(total));
     }
 
     /** The sites, in the order of the draws' first index. */

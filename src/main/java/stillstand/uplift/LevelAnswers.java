@@ -1,8 +1,10 @@
 package stillstand.uplift;
 
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
+import java.util.Map;
 import java.util.Optional;
 import java.util.concurrent.ExecutionException;
 import java.util.concurrent.ExecutorService;
@@ -80,14 +82,24 @@ public final class LevelAnswers {
      * @throws RunCancelledException if the monitor of the rates asks to stop
      */
     public Answered of(Site site, Level level, SeaLevelBasis basis, RatePrior prior) {
+        return of(site, level, SeaLevelEnsemble.of(basis), prior);
+    }
+
+    /**
+     * The answer of one level under several accounts of sea level: their mixture by weight.
+     *
+     * @param prior of the rate of its site
+     * @throws RunCancelledException if the monitor of the rates asks to stop
+     */
+    public Answered of(Site site, Level level, SeaLevelEnsemble ensemble, RatePrior prior) {
         String where = site.name() + " / " + level.name();
-        LevelExplanations found = LevelExplanations.of(level, basis, dates, where);
+        LevelExplanations found = LevelExplanations.of(level, ensemble, dates, where);
         List<Assumption> assumptions = new ArrayList<>(found.assumptions());
         List<LevelAnswer.SampleAnswer> samples = new ArrayList<>();
         for (DatedSample sample : level.samples()) {
-            samples.add(ofSample(site, sample, basis, prior, where));
+            samples.add(ofSample(site, sample, ensemble, prior, where));
         }
-        Optional<Rate> together = coralsTogether(site, level, basis, prior);
+        Optional<Rate> together = coralsTogether(site, level, ensemble, prior);
         Optional<LevelAnswer.Agreement> agreement = agreement(level);
         if (found.explanations().isEmpty()) {
             LevelAnswer waiting = new LevelAnswer(
@@ -111,8 +123,9 @@ public final class LevelAnswers {
         List<HeightTerm> height = FormerSeaLevel.ofLandform(site, level, rule);
         Uncertain lowering = level.loweringMetresPerKyr();
         String key = site.name() + " / " + level.name();
-        Future<Optional<LevelAnswer.Budget>> budget = executor.submit(
-                () -> new RateBudget(height, lowering, found.explanations()).shares(streams, key, scrambles()));
+        Future<Optional<LevelAnswer.Budget>> budget =
+                executor.submit(() -> new RateBudget(height, lowering, found.explanations(), choice(ensemble))
+                        .shares(streams, key, scrambles()));
         LevelRates.Outcome outcome = rates.of(key, height, lowering, found.explanations(), prior);
         assumptions.addAll(said(outcome, found, prior, where));
         LevelAnswer answer = new LevelAnswer(
@@ -137,6 +150,29 @@ public final class LevelAnswers {
         return new Answered(answer, Optional.empty(), assumptions);
     }
 
+    /** Rate of a level, as propagated, and the highstand that it most probably records. */
+    public record Found(Rate rate, Optional<String> highstand) {}
+
+    /** The rate of a level under one account of sea level; empty where that says nothing of it. */
+    public Optional<Found> rateUnder(Site site, Level level, SeaLevelBasis basis, RatePrior prior) {
+        String where = site.name() + " / " + level.name();
+        List<SeaAtLevel> explanations =
+                LevelExplanations.of(level, basis, dates, where).explanations();
+        if (explanations.isEmpty()) {
+            return Optional.empty();
+        }
+        LevelRates.Outcome outcome = rates.of(
+                where, FormerSeaLevel.ofLandform(site, level, rule), level.loweringMetresPerKyr(), explanations, prior);
+        return Optional.of(new Found(
+                outcome.rate(),
+                stages(explanations).stream().findFirst().map(LevelAnswer.StageProbability::highstand)));
+    }
+
+    /** What the choice among explanations is a question of. */
+    private static InputGroup choice(SeaLevelEnsemble ensemble) {
+        return ensemble.size() > 1 ? InputGroup.SEA_LEVEL : InputGroup.AGE;
+    }
+
     private int scrambles() {
         return Math.max(2, Math.min(SCRAMBLES_OF_A_BUDGET, plan.mostBlocks()));
     }
@@ -153,12 +189,14 @@ public final class LevelAnswers {
     }
 
     private static List<LevelAnswer.StageProbability> stages(List<SeaAtLevel> explanations) {
-        List<LevelAnswer.StageProbability> stages = new ArrayList<>();
+        Map<String, Double> byStage = new LinkedHashMap<>();
         for (SeaAtLevel sea : explanations) {
             if (sea instanceof SeaAtLevel.AtHighstand stand) {
-                stages.add(new LevelAnswer.StageProbability(stand.stage(), stand.probability()));
+                byStage.merge(stand.stage(), stand.probability(), (one, other) -> Math.min(1, one + other));
             }
         }
+        List<LevelAnswer.StageProbability> stages = new ArrayList<>();
+        byStage.forEach((stage, probability) -> stages.add(new LevelAnswer.StageProbability(stage, probability)));
         stages.sort((a, b) -> Double.compare(b.probability(), a.probability()));
         return stages;
     }
@@ -215,23 +253,51 @@ public final class LevelAnswers {
         return said;
     }
 
-    /** A coral's own age, and its rate where its height, its depth and the curve allow one. */
+    /** A coral's own age, and its rate where its height, its depth and a curve allow one. */
     private LevelAnswer.SampleAnswer ofSample(
-            Site site, DatedSample sample, SeaLevelBasis basis, RatePrior prior, String where) {
+            Site site, DatedSample sample, SeaLevelEnsemble ensemble, RatePrior prior, String where) {
         Optional<Quantity> age = sample.ageKa().map(a -> Quantity.of(Summary.of(a), "ka"));
-        Optional<String> whyNoRate = whyNoRate(sample, basis);
-        if (whyNoRate.isPresent()) {
-            return new LevelAnswer.SampleAnswer(sample.name(), age, Optional.empty(), whyNoRate);
+        List<SeaAtLevel> readings = new ArrayList<>();
+        double speaking = 0;
+        for (int k = 0; k < ensemble.size(); k++) {
+            SeaLevelBasis basis = ensemble.bases().get(k);
+            if (whyNoRate(sample, basis).isEmpty()) {
+                double weight = ensemble.weights().get(k);
+                speaking += weight;
+                readings.add(LevelExplanations.onCurve(
+                                basis.curve().orElseThrow(), sample.ageKa().orElseThrow(), basis)
+                        .withProbability(weight));
+            }
         }
+        if (readings.isEmpty()) {
+            return new LevelAnswer.SampleAnswer(
+                    sample.name(),
+                    age,
+                    Optional.empty(),
+                    whyNoRate(sample, ensemble.bases().get(0)));
+        }
+        double all = speaking;
+        readings.replaceAll(sea -> sea.withProbability(Math.min(1, sea.probability() / all)));
         List<HeightTerm> height = FormerSeaLevel.ofCoral(
                 site,
                 sample.elevationMetres().orElseThrow(),
                 sample.depthMetres().orElseThrow());
-        SeaAtLevel sea = LevelExplanations.onCurve(
-                basis.curve().orElseThrow(), sample.ageKa().orElseThrow(), basis);
         LevelRates.Outcome outcome =
-                rates.of(where + " / sample " + sample.name(), height, new Exact(0), List.of(sea), prior);
+                rates.of(where + " / sample " + sample.name(), height, new Exact(0), readings, prior);
         return new LevelAnswer.SampleAnswer(sample.name(), age, Optional.of(outcome.rate()), Optional.empty());
+    }
+
+    private static Optional<Rate> coralsTogether(Site site, Level level, SeaLevelEnsemble ensemble, RatePrior prior) {
+        List<Rate> rates = new ArrayList<>();
+        List<Double> weights = new ArrayList<>();
+        for (int k = 0; k < ensemble.size(); k++) {
+            Optional<Rate> rate = coralsTogether(site, level, ensemble.bases().get(k), prior);
+            if (rate.isPresent()) {
+                rates.add(rate.get());
+                weights.add(ensemble.weights().get(k));
+            }
+        }
+        return rates.isEmpty() ? Optional.empty() : Optional.of(RateMixture.of(rates, weights));
     }
 
     /** One rate for the corals that a curve can be read for; the datum of the site is one of the things they share. */

@@ -1,9 +1,11 @@
 package stillstand.uplift;
 
 import java.util.ArrayList;
+import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.Set;
 import stillstand.dating.CombinedAge;
 import stillstand.dating.DateLikelihood;
 import stillstand.ledger.Assumption;
@@ -24,6 +26,7 @@ import stillstand.uncertainty.Uncertain;
  * @param assumptions what the explanations rest on
  */
 record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Assumption> assumptions) {
+    private static final String OURS = "Stillstand's default";
     /** Highstands less likely than this are left out, which is said. */
     private static final double LEAST_PROBABILITY = 1e-4;
 
@@ -49,6 +52,55 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
                 none("it formed somewhere above the sea, which bounds a rate on one side only");
             case EVENT -> none("it is one earthquake's step and records no sea level");
         };
+    }
+
+    /**
+     * What may explain a level under several accounts of sea level: what each says, by its weight. An account that says nothing of
+     * the level is left out, which is said.
+     */
+    static LevelExplanations of(Level level, SeaLevelEnsemble ensemble, DateRules rules, String where) {
+        if (ensemble.size() == 1) {
+            return of(level, ensemble.bases().get(0), rules, where);
+        }
+        List<LevelExplanations> each = ensemble.bases().stream()
+                .map(basis -> of(level, basis, rules, where))
+                .toList();
+        double speaking = 0;
+        for (int k = 0; k < each.size(); k++) {
+            speaking += each.get(k).explanations().isEmpty()
+                    ? 0
+                    : ensemble.weights().get(k);
+        }
+        List<SeaAtLevel> explanations = new ArrayList<>();
+        Set<Assumption> said = new LinkedHashSet<>();
+        for (int k = 0; k < each.size(); k++) {
+            LevelExplanations one = each.get(k);
+            double weight = ensemble.weights().get(k) / speaking;
+            one.explanations()
+                    .forEach(sea -> add(sea.withProbability(Math.min(1, weight * sea.probability())), explanations));
+            said.addAll(one.assumptions());
+            if (one.explanations().isEmpty() && speaking > 0) {
+                said.add(new Assumption(
+                        "curve " + ensemble.bases().get(k).id() + " says nothing of a level",
+                        one.whyNone(),
+                        OURS,
+                        where));
+            }
+        }
+        return new LevelExplanations(
+                explanations, speaking > 0 ? "" : each.get(0).whyNone(), List.copyOf(said));
+    }
+
+    /** Adds an explanation, to its equal where one stands: independent highstands are the same under all curves. */
+    private static void add(SeaAtLevel sea, List<SeaAtLevel> explanations) {
+        for (int i = 0; i < explanations.size(); i++) {
+            SeaAtLevel other = explanations.get(i);
+            if (other.withProbability(1).equals(sea.withProbability(1))) {
+                explanations.set(i, sea.withProbability(Math.min(1, other.probability() + sea.probability())));
+                return;
+            }
+        }
+        explanations.add(sea);
     }
 
     private static LevelExplanations none(String reason) {
@@ -122,7 +174,7 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
                             explanations.size(),
                             allowed.size(),
                             1 - kept / sum),
-                    "Stillstand's default",
+                    OURS,
                     where));
         }
         return new LevelExplanations(explanations, "", assumptions);
@@ -155,7 +207,7 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
     /** A curve read at an age, with its own age error and the offset that all its readings share. */
     static SeaAtLevel.OnCurve onCurve(SeaLevelCurve curve, Uncertain ageKa, SeaLevelBasis basis) {
         return new SeaAtLevel.OnCurve(
-                curve, DatedStage.positive(ageKa), curve.facts().curveAgeSigmaKa(), offsetSigmaMetres(basis));
+                curve, DatedStage.positive(ageKa), curve.facts().curveAgeSigmaKa(), offsetSigmaMetres(basis), 1);
     }
 
     /** The offset that all readings of a curve share; a complete table has none, but the curve beside it has. */
@@ -172,7 +224,7 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
         assumptions.add(new Assumption(
                 "the only date of a level is taken to be right",
                 "probability of a wrong date 0",
-                "Stillstand's default: nothing else could hold the level by itself",
+                OURS + ": nothing else could hold the level by itself",
                 where));
         return 0;
     }

@@ -12,8 +12,8 @@ import stillstand.uncertainty.SobolIndices;
 import stillstand.uncertainty.Uncertain;
 
 /**
- * Which group of inputs the spread of one level's rate comes from. Where several highstands may explain the level, the choice
- * among them is one more input of the age group.
+ * Which group of inputs the spread of one level's rate comes from. Where several highstands or curves may explain the level, the
+ * choice among them is one more input.
  */
 final class RateBudget implements PreparedFunction {
     private final List<RateColumns> functions = new ArrayList<>();
@@ -25,8 +25,16 @@ final class RateBudget implements PreparedFunction {
 
     private final int dimensions;
 
-    /** As {@link LevelRates#of}. */
-    RateBudget(List<HeightTerm> height, Uncertain loweringMetresPerKyr, List<? extends SeaAtLevel> explanations) {
+    /**
+     * As {@link LevelRates#of}.
+     *
+     * @param choice the group that the choice among explanations belongs to
+     */
+    RateBudget(
+            List<HeightTerm> height,
+            Uncertain loweringMetresPerKyr,
+            List<? extends SeaAtLevel> explanations,
+            InputGroup choice) {
         upToProbability = new double[explanations.size()];
         double below = 0;
         for (int e = 0; e < explanations.size(); e++) {
@@ -57,7 +65,7 @@ final class RateBudget implements PreparedFunction {
             places.add(place);
         }
         if (explanations.size() > 1) {
-            columnsOf(InputGroup.AGE).add(next++);
+            columnsOf(choice).add(next++);
         }
         dimensions = next;
     }

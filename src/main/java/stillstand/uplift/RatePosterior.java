@@ -3,6 +3,7 @@ package stillstand.uplift;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import stillstand.uncertainty.Interval;
 import stillstand.uncertainty.Uncertain;
 
 /**
@@ -10,6 +11,8 @@ import stillstand.uncertainty.Uncertain;
  * Moments, quantiles and regions are exact for that density.
  */
 public final class RatePosterior {
+    private static final double LEAST_REGION = 0.01;
+
     private final double[] rates;
     private final double[] density;
     /** Probability up to each node. */
@@ -203,6 +206,26 @@ public final class RatePosterior {
             }
         }
         return regionsAbove(low);
+    }
+
+    /**
+     * The same where the density comes of draws, whose noise at the edge of a region is no correlation of its own: regions nearer
+     * to one another than half the half-width of the 68 % interval are one, and what then holds less than 0.01 is left out.
+     */
+    List<RateRegion> highestDensityRegionsOfDraws(double probability) {
+        double near = equalTails(Interval.PROBABILITY_68).widthMetresPerKyr() / 4;
+        List<RateRegion> joined = new ArrayList<>();
+        for (RateRegion region : highestDensityRegions(probability)) {
+            int last = joined.size() - 1;
+            double from = region.fromMetresPerKyr();
+            if (last >= 0 && from - joined.get(last).toMetresPerKyr() < near) {
+                from = joined.remove(last).fromMetresPerKyr();
+            }
+            joined.add(region(from, region.toMetresPerKyr()));
+        }
+        return joined.stream()
+                .filter(region -> region.probability() >= LEAST_REGION)
+                .toList();
     }
 
     private List<RateRegion> regionsAbove(double level) {

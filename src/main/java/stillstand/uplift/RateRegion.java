@@ -1,5 +1,8 @@
 package stillstand.uplift;
 
+import java.util.List;
+import stillstand.uncertainty.Interval;
+
 /**
  * A range of rates and the probability it holds.
  *
@@ -14,6 +17,18 @@ public record RateRegion(double fromMetresPerKyr, double toMetresPerKyr, double 
             throw new IllegalArgumentException(
                     "range of rates is upside down: " + fromMetresPerKyr + " to " + toMetresPerKyr);
         }
+    }
+
+    /** The ranges without their probabilities. */
+    static List<Interval> intervals(List<RateRegion> regions) {
+        return regions.stream()
+                .map(region -> new Interval(region.fromMetresPerKyr, region.toMetresPerKyr))
+                .toList();
+    }
+
+    /** The probabilities without their ranges. */
+    static List<Double> probabilities(List<RateRegion> regions) {
+        return regions.stream().map(RateRegion::probability).toList();
     }
 
     /** Upper less lower end, m/kyr. */

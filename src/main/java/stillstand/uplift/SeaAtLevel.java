@@ -13,6 +13,9 @@ public sealed interface SeaAtLevel {
     /** How probable it is among the explanations of the level; they sum to 1. */
     double probability();
 
+    /** The same explanation, more or less probable. */
+    SeaAtLevel withProbability(double other);
+
     /**
      * The level records the top of a highstand.
      *
@@ -27,6 +30,11 @@ public sealed interface SeaAtLevel {
             if (!(probability > 0 && probability <= 1)) {
                 throw new IllegalArgumentException("probability must lie in 0 to 1 but is " + probability);
             }
+        }
+
+        @Override
+        public AtHighstand withProbability(double other) {
+            return new AtHighstand(highstand, shared, other, ageKa);
         }
 
         /** Label of the highstand. */
@@ -54,12 +62,20 @@ public sealed interface SeaAtLevel {
      * @param ageKa of the level
      * @param curveAgeSigmaKa standard deviation of the curve's age scale, 0 or more
      * @param sharedSigmaMetres standard deviation of the offset shared by the whole curve, 0 or more
+     * @param probability among the explanations of the level: that of the curve among the study's curves
      */
-    record OnCurve(SeaLevelCurve curve, Uncertain ageKa, double curveAgeSigmaKa, double sharedSigmaMetres)
+    record OnCurve(
+            SeaLevelCurve curve, Uncertain ageKa, double curveAgeSigmaKa, double sharedSigmaMetres, double probability)
             implements SeaAtLevel {
+        public OnCurve {
+            if (!(probability > 0 && probability <= 1)) {
+                throw new IllegalArgumentException("probability must lie in 0 to 1 but is " + probability);
+            }
+        }
+
         @Override
-        public double probability() {
-            return 1;
+        public OnCurve withProbability(double other) {
+            return new OnCurve(curve, ageKa, curveAgeSigmaKa, sharedSigmaMetres, other);
         }
     }
 }

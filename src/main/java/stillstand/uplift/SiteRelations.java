@@ -1,9 +1,12 @@
 package stillstand.uplift;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
+import java.util.HashMap;
 import java.util.List;
 import java.util.Locale;
+import java.util.Map;
 import java.util.Optional;
 import java.util.concurrent.ExecutorService;
 import stillstand.dating.CombinedAge;
@@ -31,6 +34,7 @@ import stillstand.uncertainty.Uncertain;
 public record SiteRelations(
         List<BetweenLevels> intervals, List<ImpliedSeaLevel> impliedSeaLevel, List<Assumption> assumptions) {
     private static final int BLOCKS = 16;
+    private static final int LEAST_BLOCKS = 4;
     /** Two levels are told apart in age where so much of the draws has them in this order. */
     private static final double IN_ORDER = 0.975;
     /** No interval is shorter than this. */
@@ -53,20 +57,47 @@ public record SiteRelations(
      */
     public static SiteRelations of(
             Site site,
-            SeaLevelBasis basis,
+            SeaLevelEnsemble ensemble,
             IndicativeRule rule,
             DateRules dates,
             DrawStreams streams,
             DrawPlan plan,
             ExecutorService executor) {
-        List<Level> levels = new ArrayList<>();
+        Map<String, JointLevels.Entry> first = new HashMap<>();
+        List<Drawing> drawings = new ArrayList<>();
+        int blocks = Math.min(Math.max(LEAST_BLOCKS, BLOCKS / ensemble.size()), plan.mostBlocks());
+        for (int k = 0; k < ensemble.size(); k++) {
+            List<JointLevels.Entry> entries = entries(site, ensemble.bases().get(k), rule, dates);
+            entries.forEach(entry -> first.putIfAbsent(entry.name(), entry));
+            if (entries.size() >= 2) {
+                JointLevels joint = new JointLevels(site.name(), site.coast().orElse(site.name()), entries, streams);
+                double weight = ensemble.weights().get(k);
+                List<List<JointLevels.Drawn>> drawn = BlockTasks.inOrder(executor, 0, blocks, joint::draw);
+                for (int block = 0; block < blocks; block++) {
+                    drawings.add(Drawing.of(weight, block, entries, drawn.get(block)));
+                }
+            }
+        }
+        List<Level> levels = site.levels().stream()
+                .filter(level -> first.containsKey(level.name()))
+                .toList();
+        if (levels.size() < 2 || drawings.isEmpty()) {
+            return new SiteRelations(List.of(), List.of(), List.of());
+        }
+        List<JointLevels.Entry> entries = levels.stream()
+                .flatMap(level -> Optional.ofNullable(first.get(level.name())).stream())
+                .toList();
+        return new Relating(site, levels, entries, drawings, streams, dates).relations();
+    }
+
+    private static List<JointLevels.Entry> entries(
+            Site site, SeaLevelBasis basis, IndicativeRule rule, DateRules dates) {
         List<JointLevels.Entry> entries = new ArrayList<>();
         for (Level level : site.levels()) {
             List<SeaAtLevel> explanations = LevelExplanations.of(
                             level, basis, dates, site.name() + " / " + level.name())
                     .explanations();
             if (!explanations.isEmpty()) {
-                levels.add(level);
                 entries.add(new JointLevels.Entry(
                         level.name(),
                         FormerSeaLevel.ofLandform(site, level, rule),
@@ -74,13 +105,52 @@ public record SiteRelations(
                         explanations));
             }
         }
-        if (entries.size() < 2) {
-            return new SiteRelations(List.of(), List.of(), List.of());
+        return entries;
+    }
+
+    /**
+     * A block of joint draws under one account of sea level.
+     *
+     * @param weight of the account
+     * @param block its number under this account
+     * @param levels drawn, by name
+     */
+    private record Drawing(double weight, int block, Map<String, JointLevels.Drawn> levels) {
+        static Drawing of(double weight, int block, List<JointLevels.Entry> entries, List<JointLevels.Drawn> drawn) {
+            Map<String, JointLevels.Drawn> levels = new HashMap<>();
+            for (int i = 0; i < entries.size(); i++) {
+                levels.put(entries.get(i).name(), drawn.get(i));
+            }
+            return new Drawing(weight, block, levels);
         }
-        JointLevels joint = new JointLevels(site.name(), site.coast().orElse(site.name()), entries, streams);
-        List<List<JointLevels.Drawn>> blocks =
-                BlockTasks.inOrder(executor, 0, Math.min(BLOCKS, plan.mostBlocks()), joint::draw);
-        return new Relating(site, levels, entries, blocks, streams, dates).relations();
+
+        Optional<JointLevels.Drawn> of(JointLevels.Entry entry) {
+            return Optional.ofNullable(levels.get(entry.name()));
+        }
+    }
+
+    /** Columns of draws with their weights; the range of their histogram is that of the first block of each account. */
+    private static final class Gathered {
+        private final List<double[]> values = new ArrayList<>();
+        private final List<double[]> weights = new ArrayList<>();
+        private final List<double[]> pilots = new ArrayList<>();
+
+        void add(Drawing drawing, double[] column, double[] columnWeights) {
+            values.add(column);
+            weights.add(columnWeights);
+            if (drawing.block() == 0) {
+                pilots.add(column);
+            }
+        }
+
+        DrawHistogram histogram() {
+            DrawHistogram draws = DrawHistogram.forDrawsLike(
+                    pilots.stream().flatMapToDouble(Arrays::stream).toArray());
+            for (int b = 0; b < values.size(); b++) {
+                draws.add(values.get(b), weights.get(b));
+            }
+            return draws;
+        }
     }
 
     /** The joint draws of one site and what is read from them. */
@@ -88,7 +158,7 @@ public record SiteRelations(
             Site site,
             List<Level> levels,
             List<JointLevels.Entry> entries,
-            List<List<JointLevels.Drawn>> blocks,
+            List<Drawing> drawings,
             DrawStreams streams,
             DateRules dates) {
 
@@ -117,23 +187,30 @@ public record SiteRelations(
         }
 
         private Optional<BetweenLevels> between(int young, int old, List<Assumption> assumptions) {
-            double[][] rates = new double[blocks.size()][DrawStreams.BLOCK_DRAWS];
-            double[][] weights = new double[blocks.size()][DrawStreams.BLOCK_DRAWS];
-            long inOrder = 0;
-            long valid = 0;
-            for (int b = 0; b < rates.length; b++) {
-                JointLevels.Drawn younger = blocks.get(b).get(young);
-                JointLevels.Drawn older = blocks.get(b).get(old);
+            Gathered gathered = new Gathered();
+            double inOrder = 0;
+            double valid = 0;
+            for (Drawing drawing : drawings) {
+                Optional<JointLevels.Drawn> youngDrawn = drawing.of(entries.get(young));
+                Optional<JointLevels.Drawn> oldDrawn = drawing.of(entries.get(old));
+                if (youngDrawn.isEmpty() || oldDrawn.isEmpty()) {
+                    continue;
+                }
+                JointLevels.Drawn younger = youngDrawn.get();
+                JointLevels.Drawn older = oldDrawn.get();
+                double[] rate = new double[DrawStreams.BLOCK_DRAWS];
+                double[] weight = new double[DrawStreams.BLOCK_DRAWS];
                 for (int i = 0; i < DrawStreams.BLOCK_DRAWS; i++) {
                     double spanKa = older.ageKa[i] - younger.ageKa[i];
                     boolean counts = younger.valid[i] && older.valid[i];
-                    valid += counts ? 1 : 0;
+                    valid += counts ? drawing.weight() : 0;
                     if (counts && spanKa >= SHORTEST_KA) {
-                        inOrder++;
-                        weights[b][i] = 1;
-                        rates[b][i] = (older.upliftMetres(i) - younger.upliftMetres(i)) / spanKa;
+                        inOrder += drawing.weight();
+                        weight[i] = drawing.weight();
+                        rate[i] = (older.upliftMetres(i) - younger.upliftMetres(i)) / spanKa;
                     }
                 }
+                gathered.add(drawing, rate, weight);
             }
             if (inOrder < IN_ORDER * valid || inOrder == 0) {
                 return Optional.empty();
@@ -141,15 +218,12 @@ public record SiteRelations(
             if (inOrder < valid) {
                 assumptions.add(new Assumption(
                         "draws in which the older of two levels is the younger are left out of the rate between them",
-                        String.format(Locale.ROOT, "%.2g of the draws", 1 - (double) inOrder / valid),
+                        String.format(Locale.ROOT, "%.2g of the draws", 1 - inOrder / valid),
                         "Stillstand's default",
                         site.name() + " / " + entries.get(young).name() + " to "
                                 + entries.get(old).name()));
             }
-            DrawHistogram draws = DrawHistogram.forDrawsLike(rates[0]);
-            for (int b = 0; b < rates.length; b++) {
-                draws.add(rates[b], weights[b]);
-            }
+            DrawHistogram draws = gathered.histogram();
             return Optional.of(new BetweenLevels(
                     site.name(),
                     entries.get(young).name(),
@@ -172,25 +246,30 @@ public record SiteRelations(
         }
 
         private ImpliedSeaLevel implied(int dated, int other, Uncertain ageKa) {
-            double[][] levelsMetres = new double[blocks.size()][DrawStreams.BLOCK_DRAWS];
-            double[][] weights = new double[blocks.size()][DrawStreams.BLOCK_DRAWS];
-            for (int b = 0; b < levelsMetres.length; b++) {
+            Gathered gathered = new Gathered();
+            for (Drawing drawing : drawings) {
+                Optional<JointLevels.Drawn> ownDrawn = drawing.of(entries.get(dated));
+                Optional<JointLevels.Drawn> otherDrawn = drawing.of(entries.get(other));
+                if (ownDrawn.isEmpty() || otherDrawn.isEmpty()) {
+                    continue;
+                }
                 double[] ages = new double[DrawStreams.BLOCK_DRAWS];
-                streams.probabilities(site.name() + " / " + entries.get(dated).name() + " / dated age", b, ages);
+                streams.probabilities(
+                        site.name() + " / " + entries.get(dated).name() + " / dated age", drawing.block(), ages);
                 ageKa.toQuantiles(ages);
-                JointLevels.Drawn own = blocks.get(b).get(dated);
-                JointLevels.Drawn uplift = blocks.get(b).get(other);
+                JointLevels.Drawn own = ownDrawn.get();
+                JointLevels.Drawn uplift = otherDrawn.get();
+                double[] sea = new double[DrawStreams.BLOCK_DRAWS];
+                double[] weight = new double[DrawStreams.BLOCK_DRAWS];
                 for (int i = 0; i < DrawStreams.BLOCK_DRAWS; i++) {
                     double rate = uplift.upliftMetres(i) / uplift.ageKa[i];
                     boolean counts = uplift.valid[i] && own.ageKa[i] > 0;
-                    weights[b][i] = counts ? 1 : 0;
-                    levelsMetres[b][i] = counts ? own.heightMetres[i] - rate * ages[i] : 0;
+                    weight[i] = counts ? drawing.weight() : 0;
+                    sea[i] = counts ? own.heightMetres[i] - rate * ages[i] : 0;
                 }
+                gathered.add(drawing, sea, weight);
             }
-            DrawHistogram draws = DrawHistogram.forDrawsLike(levelsMetres[0]);
-            for (int b = 0; b < levelsMetres.length; b++) {
-                draws.add(levelsMetres[b], weights[b]);
-            }
+            DrawHistogram draws = gathered.histogram();
             return new ImpliedSeaLevel(
                     site.name(),
                     entries.get(dated).name(),

@@ -2,6 +2,7 @@ package stillstand.uplift;
 
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Comparator;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Optional;
@@ -26,6 +27,7 @@ import stillstand.uncertainty.DrawStreams;
 public final class SitesTogether {
     private static final int CHUNK = 50;
     private static final int MORE = 4;
+    private static final int LEAST_DRAWS = 400;
 
     private final List<ComparedSite> sites;
     private final Effort effort;
@@ -39,6 +41,7 @@ public final class SitesTogether {
     private final double[][] rates;
     private final boolean[][] counts;
     private double least = 1;
+    private double logEvidence;
 
     /**
      * How much to compute.
@@ -63,6 +66,7 @@ public final class SitesTogether {
     }
 
     private SitesTogether(
+            String curve,
             List<ComparedSite> sites,
             Effort effort,
             DrawStreams streams,
@@ -73,7 +77,8 @@ public final class SitesTogether {
         this.streams = streams;
         this.executor = executor;
         this.monitor = monitor;
-        key = "together / " + String.join(" / ", sites.stream().map(ComparedSite::site).toList());
+        key = "together / " + curve + " / "
+                + String.join(" / ", sites.stream().map(ComparedSite::site).toList());
         oneCoast = sharesLocalSea(sites);
         seas = new SharedSea[effort.draws()];
         rates = new double[sites.size()][effort.draws()];
@@ -86,15 +91,69 @@ public final class SitesTogether {
     }
 
     /**
-     * Draws.
+     * Draws under all curves that say something of every site, mixed by weight; where a flight takes part, by weight times evidence.
      *
+     * @param sites two or more, each once
+     * @param executor draws parts side by side, which changes no bit; not owned, and needs a thread that is not the caller's
+     * @param monitor is asked whether to stop
+     * @throws IllegalArgumentException if there are fewer than two sites or one stands twice, or under no curve a sea level is
+     *     possible for all
+     * @throws RunCancelledException if the monitor asks to stop
+     */
+    public static JointRates of(
+            List<StandIn> sites,
+            StandIn.Conventions conventions,
+            Effort effort,
+            DrawStreams streams,
+            ExecutorService executor,
+            RunMonitor monitor) {
+        SeaLevelEnsemble curves = sites.stream()
+                .map(stand -> stand.site().seaLevel())
+                .max(Comparator.comparingInt(SeaLevelEnsemble::size))
+                .orElseThrow(() -> new IllegalArgumentException("there must be sites"));
+        Effort each = new Effort(
+                Math.max(1, effort.blocks() / curves.size()),
+                Math.max(Math.min(LEAST_DRAWS, effort.draws()), effort.draws() / curves.size()),
+                effort.points(),
+                effort.cells(),
+                effort.leastFraction());
+        List<JointRates> parts = new ArrayList<>();
+        List<Double> weights = new ArrayList<>();
+        List<IllegalArgumentException> impossible = new ArrayList<>();
+        for (int k = 0; k < curves.size(); k++) {
+            String curve = curves.bases().get(k).id();
+            List<ComparedSite> under = sites.stream()
+                    .flatMap(stand -> stand.under(curve, conventions).stream())
+                    .toList();
+            if (under.size() == sites.size()) {
+                try {
+                    parts.add(of(curve, under, each, streams, executor, monitor));
+                    weights.add(curves.weights().get(k));
+                } catch (IllegalArgumentException e) {
+                    impossible.add(e);
+                }
+            }
+        }
+        if (parts.isEmpty()) {
+            throw impossible.isEmpty()
+                    ? new IllegalArgumentException("no curve says something of each of these sites")
+                    : impossible.get(0);
+        }
+        return JointRates.mixed(parts, weights);
+    }
+
+    /**
+     * Draws under one curve.
+     *
+     * @param curve its id
      * @param sites two or more, each once
      * @param executor draws parts side by side, which changes no bit; not owned, and needs a thread that is not the caller's
      * @param monitor is asked whether to stop
      * @throws IllegalArgumentException if there are fewer than two sites or one stands twice, or no sea level is possible for all
      * @throws RunCancelledException if the monitor asks to stop
      */
-    public static JointRates of(
+    static JointRates of(
+            String curve,
             List<ComparedSite> sites,
             Effort effort,
             DrawStreams streams,
@@ -109,13 +168,13 @@ public final class SitesTogether {
         if (sites.stream().allMatch(ComparedLevel.class::isInstance)) {
             return ofLevels(sites, effort, streams, executor, monitor);
         }
-        JointRates joint = new SitesTogether(sites, effort, streams, executor, monitor).conditioned();
+        JointRates joint = new SitesTogether(curve, sites, effort, streams, executor, monitor).conditioned();
         if (joint.effectiveFraction().orElseThrow() >= effort.leastFraction()) {
             return joint;
         }
         Effort more =
                 new Effort(effort.blocks(), MORE * effort.draws(), effort.points(), effort.cells(), 0);
-        return new SitesTogether(sites, more, streams, executor, monitor).conditioned();
+        return new SitesTogether(curve, sites, more, streams, executor, monitor).conditioned();
     }
 
     private static JointRates ofLevels(
@@ -142,7 +201,7 @@ public final class SitesTogether {
             }
             return task;
         });
-        return new JointRates(sites, rates, counts, Optional.empty());
+        return new JointRates(sites, rates, counts, Optional.empty(), 0);
     }
 
     private JointRates conditioned() {
@@ -153,7 +212,7 @@ public final class SitesTogether {
             double[] weights = step(s, last);
             resample(s, weights);
         }
-        return new JointRates(sites, rates, counts, Optional.of(least));
+        return new JointRates(sites, rates, counts, Optional.of(least), logEvidence);
     }
 
     private void drawSeas() {
@@ -218,7 +277,9 @@ public final class SitesTogether {
             throw new IllegalArgumentException("no sea level is possible for '" + site.site()
                     + "' and the sites compared with it");
         }
-        return Arrays.stream(logs).map(log -> Math.exp(log - highest)).toArray();
+        double[] weights = Arrays.stream(logs).map(log -> Math.exp(log - highest)).toArray();
+        logEvidence += highest + Math.log(Arrays.stream(weights).average().orElseThrow());
+        return weights;
     }
 
     /** Systematic resampling of all draws up to site {@code upTo}. */

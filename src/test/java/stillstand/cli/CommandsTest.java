@@ -114,6 +114,7 @@ class CommandsTest {
                 List.of(
                         "budget.csv",
                         "comparison.csv",
+                        "curve-choice.csv",
                         "ledger.csv",
                         "pairings.csv",
                         "rates.csv",

@@ -135,6 +135,8 @@ class FiguresTest {
                 List.of(),
                 List.of(),
                 List.of(),
+                List.of(),
+                List.of(),
                 List.of());
         assertEquals(List.of(), names(empty));
         assertEquals(2, Figures.of(empty).absences().size());

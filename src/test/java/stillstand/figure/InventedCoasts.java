@@ -192,6 +192,8 @@ final class InventedCoasts {
                 residuals,
                 List.of(),
                 List.of(),
+                List.of(),
+                List.of(),
                 List.of());
     }
 

@@ -32,8 +32,8 @@ class ResultsJsonTest {
     void keysAreThoseOfTheFormat() {
         JsonNode tree = new JsonMapper().readTree(TEXT);
         assertEquals(
-                "provenance sea_level levels waiting flights intervals implied_sea_level residuals comparison site_motion"
-                        + " site_groups terrace_tilts warnings failures ledger",
+                "provenance sea_level levels waiting flights intervals implied_sea_level residuals curve_choice curve_evidence"
+                        + " comparison site_motion site_groups terrace_tilts warnings failures ledger",
                 keys(tree));
         assertEquals(
                 "site model rate probability_uplift regions68 regions95 weights68 weights95 segments pairings unmatched"
@@ -134,6 +134,8 @@ class ResultsJsonTest {
                 good.intervals(),
                 good.impliedSeaLevel(),
                 good.residuals(),
+                good.curveChoice(),
+                good.curveEvidence(),
                 good.warnings(),
                 good.failures(),
                 good.ledger());

@@ -207,14 +207,23 @@ class StudyFolderTest {
     }
 
     @Test
-    void severalCurvesAreNotPossibleYet() throws IOException {
+    void aCurveNamedTwiceIsAProblem() throws IOException {
         write(
                 "study.json",
-                "{\"title\": \"x\", \"sea_level\": {\"curves\": [{\"id\": \"spratt-lisiecki-2016\"}, {\"id\": \"waelbroeck-2002\"}]}}");
+                "{\"title\": \"x\", \"sea_level\": {\"curves\": [{\"id\": \"waelbroeck-2002\"}, {\"id\": \"waelbroeck-2002\"}]}}");
         assertEquals(
                 List.of(
-                        "study.json:1:40: sea_level.curves: found 2 curves, expected one: several curves in one study are not possible yet"),
+                        "study.json:1:75: sea_level.curves[1].id: found \"waelbroeck-2002\" a second time, expected each curve once"),
                 problems());
+    }
+
+    @Test
+    void aWeightOfZeroIsAProblem() throws IOException {
+        write(
+                "study.json",
+                "{\"title\": \"x\", \"sea_level\": {\"curves\": [{\"id\": \"waelbroeck-2002\", \"weight\": 0}]}}");
+        assertEquals(
+                List.of("study.json:1:77: sea_level.curves[0].weight: found 0, expected a number above 0"), problems());
     }
 
     @Test

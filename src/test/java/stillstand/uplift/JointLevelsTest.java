@@ -135,7 +135,7 @@ class JointLevelsTest {
                 "test");
         SeaAtLevel stand = new SeaAtLevel.AtHighstand(row, shared, 1, new Normal(82, 3));
         SeaLevelCurve curve = TestRates.linear(new double[] {0, 60, 200}, new double[] {0, -60, -20}, 6);
-        SeaAtLevel read = new SeaAtLevel.OnCurve(curve, new Normal(50, 1), 2, 3);
+        SeaAtLevel read = new SeaAtLevel.OnCurve(curve, new Normal(50, 1), 2, 3, 1);
         List<List<JointLevels.Drawn>> blocks =
                 draw(entry("A", new Normal(40, 1), stand), entry("B", new Normal(10, 2), read));
         List<SeaAtLevel> seas = List.of(stand, read);

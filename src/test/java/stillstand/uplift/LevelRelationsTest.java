@@ -51,7 +51,7 @@ class LevelRelationsTest {
                             new HeightTerm(Source.DATUM, -1, new Normal(0.3 * metres, 0.2 * metres)),
                             TestRates.depth(new LogNormal(0, 3 * metres, 0.6))),
                     TestRates.NO_LOWERING,
-                    new SeaAtLevel.OnCurve(curve(80, 120), new Normal(98 * ka, 1.4 * ka), 1.5 * ka, 3 * metres));
+                    new SeaAtLevel.OnCurve(curve(80, 120), new Normal(98 * ka, 1.4 * ka), 1.5 * ka, 3 * metres, 1));
         }
 
         LevelRates.Outcome terrace() {
@@ -274,7 +274,8 @@ class LevelRelationsTest {
         LevelAnswer.Budget budget = new RateBudget(
                         List.of(TestRates.survey(elevation), TestRates.depth(depth)),
                         lowering,
-                        List.of(TestRates.highstand(new Exact(ageKa), sea)))
+                        List.of(TestRates.highstand(new Exact(ageKa), sea)),
+                        InputGroup.AGE)
                 .shares(new DrawStreams(4), "sum", 8)
                 .orElseThrow();
         assertShare(ofElevation, all, budget.elevation());
@@ -313,7 +314,7 @@ class LevelRelationsTest {
             List<SeaAtLevel> sea = anySea(dice);
             String what = height + ", " + lowering + ", " + sea;
             double[] sums = IntStream.range(0, streams)
-                    .mapToDouble(seed -> sumOfShares(new RateBudget(height, lowering, sea)
+                    .mapToDouble(seed -> sumOfShares(new RateBudget(height, lowering, sea, InputGroup.AGE)
                             .shares(new DrawStreams(seed), "case", 2)
                             .orElseThrow()))
                     .toArray();
@@ -365,7 +366,7 @@ class LevelRelationsTest {
     private static List<SeaAtLevel> anySea(SplittableRandom dice) {
         Uncertain ageKa = anyNumber(dice, 90, 6);
         return switch (dice.nextInt(3)) {
-            case 0 -> List.of(new SeaAtLevel.OnCurve(Scale.PLAIN.curve(1, 300), ageKa, 1.5, 3));
+            case 0 -> List.of(new SeaAtLevel.OnCurve(Scale.PLAIN.curve(1, 300), ageKa, 1.5, 3, 1));
             case 1 -> List.of(TestRates.highstand(ageKa, anyNumber(dice, -10, 8)));
             default -> List.of(explanation("a", 0.3, 82, dice), explanation("b", 0.7, 103, dice));
         };

@@ -200,7 +200,7 @@ record SimulatedLevel(
                                         new LogNormal(0, depthMedianMetres, depthSigmaLog))),
                         new Exact(0),
                         List.of(new SeaAtLevel.OnCurve(
-                                sea.curve, ageKa, setting.curveAgeSigmaKa, setting.sharedSigmaMetres)));
+                                sea.curve, ageKa, setting.curveAgeSigmaKa, setting.sharedSigmaMetres, 1)));
             }
         }
     }

@@ -226,7 +226,7 @@ class SingleSampleReferenceTest {
     }
 
     private static void assertShares(List<Double> expected, List<HeightTerm> height, SeaAtLevel sea) {
-        LevelAnswer.Budget budget = new RateBudget(height, TestRates.NO_LOWERING, List.of(sea))
+        LevelAnswer.Budget budget = new RateBudget(height, TestRates.NO_LOWERING, List.of(sea), InputGroup.AGE)
                 .shares(new DrawStreams(7), "test", 8)
                 .orElseThrow();
         List<Optional<LevelAnswer.Share>> shares =

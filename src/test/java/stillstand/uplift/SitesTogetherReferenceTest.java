@@ -132,6 +132,7 @@ class SitesTogetherReferenceTest {
     @Test
     void twoSitesWithKnownPairs() {
         JointRates joint = SitesTogether.of(
+                "curve",
                 List.of(
                         flight("A", "coast", new double[] {26, 79.5, 140}, 0.45, 0.80),
                         flight("B", "coast", new double[] {6.5, 51, 82.5}, 0.25, 0.55)),
@@ -153,6 +154,7 @@ class SitesTogetherReferenceTest {
     @Test
     void theOrderOfTheSitesDoesNotMatter() {
         JointRates joint = SitesTogether.of(
+                "curve",
                 List.of(
                         flight("B", "coast", new double[] {6.5, 51, 82.5}, 0.25, 0.55),
                         flight("A", "coast", new double[] {26, 79.5, 140}, 0.45, 0.80)),
@@ -195,6 +197,7 @@ class SitesTogetherReferenceTest {
     @Test
     void twoSingleLevels() {
         Moments found = Moments.of(SitesTogether.of(
+                "curve",
                 List.of(level("A", 61), level("B", 35)),
                 EFFORT,
                 new DrawStreams(5),
@@ -212,6 +215,7 @@ class SitesTogetherReferenceTest {
     @Test
     void levelsBesideAFlightOfOtherHighstands() {
         JointRates joint = SitesTogether.of(
+                "curve",
                 List.of(
                         flight("C", "coast", new double[] {26, 79.5, 140}, 0.45, 0.80),
                         level("A", 61),

@@ -127,6 +127,7 @@ class SitesTogetherStatisticalTest {
 
     private static Outcome outcome(Pair pair, long seed) {
         JointRates joint = SitesTogether.of(
+                "curve",
                 List.of(compared("A", pair.a, pair.aAlone, pair.prior),
                         compared("B", pair.b, pair.bAlone, pair.prior)),
                 EFFORT,
@@ -256,6 +257,7 @@ class SitesTogetherStatisticalTest {
      */
     private static RanksOfTruth levels(boolean oneCoast, boolean toldOneCoast) {
         JointRates joint = SitesTogether.of(
+                "curve",
                 List.of(level("A", "north", 60), level("B", toldOneCoast ? "north" : "south", 25)),
                 new SitesTogether.Effort(2, 100, 2, 10, 0),
                 new DrawStreams(SEED),

@@ -84,7 +84,7 @@ final class TestRates {
     }
 
     static SeaAtLevel onCurve(SeaLevelCurve curve, Uncertain ageKa) {
-        return new SeaAtLevel.OnCurve(curve, ageKa, 0, 0);
+        return new SeaAtLevel.OnCurve(curve, ageKa, 0, 0, 1);
     }
 
     static final Uncertain NO_LOWERING = new Exact(0);
