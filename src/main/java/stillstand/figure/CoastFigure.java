@@ -6,6 +6,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.stream.Collectors;
+import java.util.stream.IntStream;
 import java.util.stream.Stream;
 import org.jfree.chart.plot.XYPlot;
 import stillstand.comparison.SiteMotion;
@@ -147,15 +148,19 @@ final class CoastFigure {
         }
     }
 
+    /** Numbers of the sites; where all have no room, of every second or third. */
     private static void numbers(Pen pen, List<Station> stations) {
-        double[] wanted = stations.stream()
-                .mapToDouble(station -> pen.x(station.km()))
+        int step = (int) Math.ceil(stations.size() * NUMBER_GAP / (pen.right() - pen.left() - NUMBER_GAP));
+        List<Integer> numbered =
+                IntStream.range(0, stations.size()).filter(i -> i % step == 0).boxed().toList();
+        double[] wanted = numbered.stream()
+                .mapToDouble(i -> pen.x(stations.get(i).km()))
                 .toArray();
         double[] places = LabelColumn.places(wanted, NUMBER_GAP, pen.left() + 5, pen.right() - 5);
         for (int i = 0; i < places.length; i++) {
             pen.line(wanted[i], pen.top() + 12, places[i], pen.top() + 8, Style.MUTED, Style.line(0.4));
             pen.text(
-                    String.valueOf(i + 1),
+                    String.valueOf(numbered.get(i) + 1),
                     places[i],
                     pen.top() + 4,
                     Pen.Anchor.MIDDLE,
