@@ -66,7 +66,12 @@ final class SampleComparison {
 
     static List<SiteGroup> groups() {
         Tilt.Line line = new Tilt.Line(
-                new Estimate(0.43, 0.03, "m/kyr"), new Estimate(-0.013, 0.001, PER_KM), -2e-5, 1.25, 1, Optional.of(0.25));
+                new Estimate(0.43, 0.03, "m/kyr"),
+                new Estimate(-0.013, 0.001, PER_KM),
+                -2e-5,
+                1.25,
+                1,
+                Optional.of(0.25));
         PlanarTilt.Plane plane = new PlanarTilt.Plane(
                 new Estimate(0.2, 0.03, "m/kyr"),
                 new Estimate(0.01, 0.001, PER_KM),
@@ -118,14 +123,6 @@ final class SampleComparison {
         Interval inner = new Interval(median - sd, median + sd);
         Interval outer = new Interval(median - 2 * sd, median + 2 * sd);
         return new Rate(
-                median,
-                Optional.of(median),
-                Optional.of(sd),
-                inner,
-                outer,
-                inner,
-                outer,
-                Optional.empty(),
-                Rate.UNIT);
+                median, Optional.of(median), Optional.of(sd), inner, outer, inner, outer, Optional.empty(), Rate.UNIT);
     }
 }

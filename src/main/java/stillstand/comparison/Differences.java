@@ -56,7 +56,8 @@ final class Differences {
         if (n == 0) {
             return Optional.empty();
         }
-        boolean hasMean = aAlone.rate().mean().isPresent() && bAlone.rate().mean().isPresent();
+        boolean hasMean =
+                aAlone.rate().mean().isPresent() && bAlone.rate().mean().isPresent();
         return Optional.of(new SiteComparison(
                 joint.sites().get(a).site(),
                 joint.sites().get(b).site(),
@@ -73,9 +74,7 @@ final class Differences {
     private static Optional<Double> correlation(double[] sums, int n) {
         double covariance = sums[4] / n - sums[0] / n * sums[1] / n;
         double product = (sums[2] / n - sums[0] / n * sums[0] / n) * (sums[3] / n - sums[1] / n * sums[1] / n);
-        return product > 0
-                ? Optional.of(Math.max(-1, Math.min(1, covariance / Math.sqrt(product))))
-                : Optional.empty();
+        return product > 0 ? Optional.of(Math.max(-1, Math.min(1, covariance / Math.sqrt(product)))) : Optional.empty();
     }
 
     private Rate rate(double[] differences, boolean hasMean) {

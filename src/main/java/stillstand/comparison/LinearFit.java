@@ -54,8 +54,7 @@ public final class LinearFit {
         RealMatrix whiteDesign = new Array2DRowRealMatrix(design);
         RealVector whiteValues = new ArrayRealVector(values);
         try {
-            RealMatrix factor =
-                    new CholeskyDecomposition(new Array2DRowRealMatrix(errors), 1e-10, 1e-300).getL();
+            RealMatrix factor = new CholeskyDecomposition(new Array2DRowRealMatrix(errors), 1e-10, 1e-300).getL();
             MatrixUtils.solveLowerTriangularSystem(factor, whiteValues);
             for (int column = 0; column < columns; column++) {
                 RealVector one = whiteDesign.getColumnVector(column);
@@ -104,8 +103,7 @@ public final class LinearFit {
             }
         }
         RealVector left = values.subtract(scaled.operate(solution));
-        return Optional.of(
-                new LinearFit(coefficients, out, left.dotProduct(left), values.getDimension() - columns));
+        return Optional.of(new LinearFit(coefficients, out, left.dotProduct(left), values.getDimension() - columns));
     }
 
     /** A coefficient. */

@@ -43,8 +43,9 @@ public record PooledRates(Quantity mean, Quantity spread, double spreadScale, Li
      */
     public static PooledRates of(List<String> names, double[] rates, double[][] errors, double spreadScale) {
         if (!(names.size() >= 2 && rates.length == names.size() && errors.length == names.size())) {
-            throw new IllegalArgumentException("sites to be pooled must be two or more, with as many rates and errors, but are "
-                    + names.size() + ", " + rates.length + " and " + errors.length);
+            throw new IllegalArgumentException(
+                    "sites to be pooled must be two or more, with as many rates and errors, but are " + names.size()
+                            + ", " + rates.length + " and " + errors.length);
         }
         if (!(spreadScale > 0 && spreadScale < Double.POSITIVE_INFINITY)) {
             throw new IllegalArgumentException("spreadScale must be above 0 but is " + spreadScale);

@@ -33,8 +33,7 @@ final class RateByItself {
 
     /** Without shape. */
     Quantity quantity() {
-        return new Quantity(
-                rate.median(), rate.mean(), rate.sd(), rate.interval68(), rate.interval95(), rate.unit());
+        return new Quantity(rate.median(), rate.mean(), rate.sd(), rate.interval68(), rate.interval95(), rate.unit());
     }
 
     double cumulativeProbability(double value) {

@@ -13,8 +13,7 @@ import stillstand.uplift.SiteCase;
  * @param levels rates of its levels by their names
  * @param areaKm2 that it stands for, above 0
  */
-public record SiteToCompare(
-        SiteCase site, Optional<Rate> flight, Map<String, Rate> levels, Optional<Double> areaKm2) {
+public record SiteToCompare(SiteCase site, Optional<Rate> flight, Map<String, Rate> levels, Optional<Double> areaKm2) {
     public SiteToCompare {
         levels = Map.copyOf(levels);
         if (areaKm2.isPresent() && !(areaKm2.get() > 0 && areaKm2.get() < Double.POSITIVE_INFINITY)) {

@@ -142,10 +142,9 @@ public final class SitesComparer {
                 group.stream().map(s -> sites.get(s).site()).toList(), conventions.rule(), conventions.dates());
         for (int i = 0; i < group.size(); i++) {
             int s = group.get(i);
-            levels.get(i)
-                    .filter(level -> sites.get(s).levels().containsKey(level))
-                    .ifPresent(level ->
-                            stand(s, Optional.of(level), sites.get(s).levels().get(level)));
+            Optional<String> level = levels.get(i);
+            level.flatMap(name -> Optional.ofNullable(sites.get(s).levels().get(name)))
+                    .ifPresent(rate -> stand(s, level, rate));
         }
     }
 
@@ -160,7 +159,7 @@ public final class SitesComparer {
         if (group.size() < 2) {
             return;
         }
-        monitor.step("sites of " + name, 0);
+        monitor.step("sites of " + name, 1);
         boolean flights = group.stream().anyMatch(s -> sites.get(s).flight().isPresent());
         if (group.size() <= (flights ? MOST_TOGETHER : MOST_POOLED)) {
             joint(name, group).ifPresent(joint -> compareTogether(name, group, joint, withDensity));
@@ -199,8 +198,8 @@ public final class SitesComparer {
 
     /** Does something with each site and the next along the coast; without distances, the next in the table. */
     private void neighbours(String name, List<Integer> group, BiConsumer<Integer, Integer> compare) {
-        boolean distances = group.stream()
-                .allMatch(s -> site(s).distanceAlongCoastKm().isPresent());
+        boolean distances =
+                group.stream().allMatch(s -> site(s).distanceAlongCoastKm().isPresent());
         List<Integer> order = new ArrayList<>(group);
         if (distances) {
             order.sort(Comparator.comparing(s -> site(s).distanceAlongCoastKm().orElseThrow()));
@@ -252,7 +251,8 @@ public final class SitesComparer {
         int other = group.get(b);
         if (done.add(Set.of(sites.get(one).name(), sites.get(other).name()))) {
             new Differences(joint, withDensity)
-                    .between(a, b, alone.get(one).orElseThrow(), alone.get(other).orElseThrow())
+                    .between(
+                            a, b, alone.get(one).orElseThrow(), alone.get(other).orElseThrow())
                     .ifPresent(pairs::add);
         }
     }
@@ -266,11 +266,14 @@ public final class SitesComparer {
         if (stands.get(a).isEmpty() || stands.get(b).isEmpty()) {
             String without = stands.get(a).isEmpty() ? pair.a() : pair.b();
             said.add(new Assumption(
-                    "a pair is not compared", "'" + without + "' has no rate", "study.json", pair.a() + " and " + pair.b()));
+                    "a pair is not compared",
+                    "'" + without + "' has no rate",
+                    "study.json",
+                    pair.a() + " and " + pair.b()));
             return;
         }
         List<Integer> two = List.of(a, b);
-        monitor.step(pair.a() + " and " + pair.b(), 0);
+        monitor.step(pair.a() + " and " + pair.b(), 1);
         if (two.stream().allMatch(s -> sites.get(s).flight().isEmpty())) {
             standByLevels(two); // they may have another highstand in common than their coasts do
         }
@@ -349,7 +352,8 @@ public final class SitesComparer {
                 "all"));
         said.add(new Assumption(
                 "errors shared between sites",
-                "global sea level between all; local sea level inside one coast; survey and datum of each site are its own",
+                "global sea level between all; local sea level inside one coast; survey and datum of each site are its own;"
+                        + " flights of one coast tell each other of its sea",
                 OURS,
                 "all"));
         if (!groups.isEmpty()) {

@@ -55,26 +55,30 @@ public record TerraceTilt(
         double[] heights = points.stream().mapToDouble(Point::heightMetres).toArray();
         double[] own = points.stream().mapToDouble(Point::sigmaMetres).toArray();
         double[][] errors = Covariance.withOneShared(own, sharedSigmaMetres);
-        Optional<Tilt> along = points.stream().allMatch(point -> point.distanceKm().isPresent())
-                ? Tilt.of(
-                        points.stream()
-                                .mapToDouble(point -> point.distanceKm().orElseThrow())
-                                .toArray(),
-                        heights,
-                        errors,
-                        METRES)
-                : Optional.empty();
-        Optional<PlanarTilt> plane = points.stream().allMatch(point -> point.position().isPresent())
-                ? PlanarTilt.of(
-                        points.stream().map(point -> point.position().orElseThrow()).toArray(Position[]::new),
-                        heights,
-                        errors,
-                        METRES)
-                : Optional.empty();
+        Optional<Tilt> along =
+                points.stream().allMatch(point -> point.distanceKm().isPresent())
+                        ? Tilt.of(
+                                points.stream()
+                                        .mapToDouble(point -> point.distanceKm().orElseThrow())
+                                        .toArray(),
+                                heights,
+                                errors,
+                                METRES)
+                        : Optional.empty();
+        Optional<PlanarTilt> plane =
+                points.stream().allMatch(point -> point.position().isPresent())
+                        ? PlanarTilt.of(
+                                points.stream()
+                                        .map(point -> point.position().orElseThrow())
+                                        .toArray(Position[]::new),
+                                heights,
+                                errors,
+                                METRES)
+                        : Optional.empty();
         Optional<Estimate> slope = along.map(tilt -> tilt.sharedErrors().slope())
                 .or(() -> plane.map(tilt -> tilt.sharedErrors().steepest()));
-        return slope.map(found -> new TerraceTilt(
-                site, level, points.size(), along, plane, ageKa.flatMap(age -> overAge(found, age))));
+        return slope.map(found ->
+                new TerraceTilt(site, level, points.size(), along, plane, ageKa.flatMap(age -> overAge(found, age))));
     }
 
     /** To first order; absent where the age has no mean. */

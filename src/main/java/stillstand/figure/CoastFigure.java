@@ -29,7 +29,8 @@ final class CoastFigure {
     /** Coasts with two sites or more that state a distance, by name. */
     static List<String> coasts(StudyResult result) {
         Map<String, Long> counts = result.siteMotion().stream()
-                .filter(site -> site.distanceAlongCoastKm().isPresent() && site.coast().isPresent())
+                .filter(site ->
+                        site.distanceAlongCoastKm().isPresent() && site.coast().isPresent())
                 .collect(Collectors.groupingBy(
                         site -> site.coast().orElseThrow(), LinkedHashMap::new, Collectors.counting()));
         return counts.entrySet().stream()
@@ -65,7 +66,10 @@ final class CoastFigure {
         double lowest = heights.get(0);
         double highest = heights.get(heights.size() - 1);
         XYPlot plot = Style.plot(
-                Rows.around(Style::axis, "Distance along the coast (km)", stations.stream().map(Station::km)),
+                Rows.around(
+                        Style::axis,
+                        "Distance along the coast (km)",
+                        stations.stream().map(Station::km)),
                 Rows.around(
                         Style::upright,
                         "Height above present mean sea level (m)",
@@ -81,8 +85,7 @@ final class CoastFigure {
                                 "level", (pen, x, y) -> pen.dot(x + Page.KeyEntry.SWATCH / 2, y, 2.1, Style.INK)),
                         new Page.KeyEntry(
                                 "same highstand at both sites, the surer the darker",
-                                (pen, x, y) -> pen.line(
-                                        x, y, x + Page.KeyEntry.SWATCH, y, Style.LINK, Style.line(1)))),
+                                (pen, x, y) -> pen.line(x, y, x + Page.KeyEntry.SWATCH, y, Style.LINK, Style.line(1)))),
                 Style.chart(plot),
                 note(stations),
                 widthPoints,
@@ -151,11 +154,12 @@ final class CoastFigure {
     /** Numbers of the sites; where all have no room, of every second or third. */
     private static void numbers(Pen pen, List<Station> stations) {
         int step = (int) Math.ceil(stations.size() * NUMBER_GAP / (pen.right() - pen.left() - NUMBER_GAP));
-        List<Integer> numbered =
-                IntStream.range(0, stations.size()).filter(i -> i % step == 0).boxed().toList();
-        double[] wanted = numbered.stream()
-                .mapToDouble(i -> pen.x(stations.get(i).km()))
-                .toArray();
+        List<Integer> numbered = IntStream.range(0, stations.size())
+                .filter(i -> i % step == 0)
+                .boxed()
+                .toList();
+        double[] wanted =
+                numbered.stream().mapToDouble(i -> pen.x(stations.get(i).km())).toArray();
         double[] places = LabelColumn.places(wanted, NUMBER_GAP, pen.left() + 5, pen.right() - 5);
         for (int i = 0; i < places.length; i++) {
             pen.line(wanted[i], pen.top() + 12, places[i], pen.top() + 8, Style.MUTED, Style.line(0.4));

@@ -34,13 +34,18 @@ final class DifferencesFigure {
                                         0.0,
                                         pair.difference().shortest95().low(),
                                         pair.difference().shortest95().high(),
-                                        pair.independent().difference().interval95().low(),
-                                        pair.independent().difference().interval95().high())
+                                        pair.independent()
+                                                .difference()
+                                                .interval95()
+                                                .low(),
+                                        pair.independent()
+                                                .difference()
+                                                .interval95()
+                                                .high())
                                         .stream())),
                 pairs.stream().map(pair -> pair.a() + " less " + pair.b()).toList(),
                 pairs.stream()
-                        .map(pair -> Numbers.rate(pair.difference()) + ", "
-                                + percent(pair.probabilityAFaster()) + " %")
+                        .map(pair -> Numbers.rate(pair.difference()) + ", " + percent(pair.probabilityAFaster()) + " %")
                         .toList(),
                 widthPoints);
         Rows.grid(plot);
@@ -76,8 +81,8 @@ final class DifferencesFigure {
                                 }),
                         new Page.KeyEntry(
                                 "taken for independent (wrong)",
-                                (pen, x, y) -> pen.line(
-                                        x, y, x + Page.KeyEntry.SWATCH, y, Style.SEA_68, Style.line(3)))),
+                                (pen, x, y) ->
+                                        pen.line(x, y, x + Page.KeyEntry.SWATCH, y, Style.SEA_68, Style.line(3)))),
                 Style.chart(plot),
                 "To the right: median and shortest 95 % interval, m/kyr, and the probability that the first is faster."
                         + (left > 0 ? " " + left + " more pairs stand in comparison.csv." : ""),

@@ -100,8 +100,7 @@ final class MapFigure {
         for (int i = 0; i < sites.size(); i++) {
             SiteMotion site = sites.get(i);
             if (namesPoints > 0) {
-                pen.line(
-                        pen.x(x[i]), wanted[i], edge + LEADER - 2, places[i], Style.HAIR, Style.line(0.5));
+                pen.line(pen.x(x[i]), wanted[i], edge + LEADER - 2, places[i], Style.HAIR, Style.line(0.5));
                 String text = text(site);
                 pen.text(
                         Face.fitted(text, Face.REGULAR.at(Style.TEXT, List.of(text)), namesPoints - LEADER),
@@ -120,15 +119,16 @@ final class MapFigure {
 
     static String text(SiteMotion site) {
         double sigma = site.rate().sd().orElse(site.rate().interval68().width() / 2);
-        return String.format(Locale.ROOT, "%s %s", site.site(), Numbers.plusMinus(site.rate().median(), sigma));
+        return String.format(
+                Locale.ROOT, "%s %s", site.site(), Numbers.plusMinus(site.rate().median(), sigma));
     }
 
     private static double widestName(List<SiteMotion> sites) {
         return sites.stream()
-                .map(MapFigure::text)
-                .mapToDouble(text -> Face.width(text, Face.REGULAR.at(Style.TEXT, List.of(text))))
-                .max()
-                .orElse(0)
+                        .map(MapFigure::text)
+                        .mapToDouble(text -> Face.width(text, Face.REGULAR.at(Style.TEXT, List.of(text))))
+                        .max()
+                        .orElse(0)
                 + 2;
     }
 

@@ -14,7 +14,9 @@ final class ComparisonTable {
                 .text("b", SiteComparison::b)
                 .text("a_level", pair -> pair.aLevel().orElse(""))
                 .text("b_level", pair -> pair.bLevel().orElse(""))
-                .number("difference_median_m_per_kyr", pair -> Optional.of(pair.difference().median()))
+                .number(
+                        "difference_median_m_per_kyr",
+                        pair -> Optional.of(pair.difference().median()))
                 .number("difference_mean_m_per_kyr", pair -> pair.difference().mean())
                 .number("difference_sd_m_per_kyr", pair -> pair.difference().sd())
                 .number(

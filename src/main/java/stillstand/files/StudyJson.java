@@ -240,13 +240,12 @@ public final class StudyJson {
         ComparisonRules defaults = ComparisonRules.DEFAULT;
         List<Pair> pairs = new ArrayList<>();
         for (JsonNode pair : keys.node().path("pairs")) {
-            pairs.add(new Pair(
-                    pair.path(0).stringValue(""), pair.path(1).stringValue("")));
+            pairs.add(new Pair(pair.path(0).stringValue(""), pair.path(1).stringValue("")));
         }
         return new ComparisonRules(
                 keys.number("stable_within_m_per_kyr")
-                        .orElseGet(() -> assumed(
-                                "comparison.stable_within_m_per_kyr", defaults.stableWithinMetresPerKyr())),
+                        .orElseGet(() ->
+                                assumed("comparison.stable_within_m_per_kyr", defaults.stableWithinMetresPerKyr())),
                 keys.number("site_spread_m_per_kyr")
                         .orElseGet(
                                 () -> assumed("comparison.site_spread_m_per_kyr", defaults.siteSpreadMetresPerKyr())),

@@ -96,15 +96,15 @@ final class ComparisonReport {
                     .ifPresent(mean -> lines.add(
                             "  " + group.group() + ", mean over areas: " + Wording.quantity(mean) + " m/kyr."));
             group.tilt().ifPresent(tilt -> lines.add("  " + group.group() + ", tilt along the coast: " + along(tilt)));
-            group.plane()
-                    .ifPresent(plane -> lines.add("  " + group.group() + ", tilt over the map: " + plane(plane)));
+            group.plane().ifPresent(plane -> lines.add("  " + group.group() + ", tilt over the map: " + plane(plane)));
         }
         more(lines, groups.size() - GROUPS_SHOWN, "groups", "results.json");
     }
 
     private static String along(Tilt tilt) {
-        return estimate(tilt.sharedErrors().slope()) + " (" + plusMinus(tilt.independent().slope())
-                + " were the errors not shared)." + straight(tilt.sharedErrors().p(), "line");
+        return estimate(tilt.sharedErrors().slope()) + " ("
+                + plusMinus(tilt.independent().slope()) + " were the errors not shared)."
+                + straight(tilt.sharedErrors().p(), "line");
     }
 
     private static String plane(PlanarTilt tilt) {
@@ -121,7 +121,9 @@ final class ComparisonReport {
                 .or(() -> tilt.plane().map(ComparisonReport::plane))
                 .orElse("");
         return tilt.site() + " / " + tilt.level() + ", tilt by " + tilt.points() + " points: " + slope
-                + tilt.rate().map(rate -> " Over its age: " + estimate(rate) + ".").orElse("");
+                + tilt.rate()
+                        .map(rate -> " Over its age: " + estimate(rate) + ".")
+                        .orElse("");
     }
 
     private static String straight(Optional<Double> p, String shape) {

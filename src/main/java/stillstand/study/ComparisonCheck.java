@@ -51,14 +51,14 @@ final class ComparisonCheck {
     private static void known(
             StatedSettings settings, String path, String name, List<String> names, Findings findings) {
         if (!names.contains(name)) {
-            findings.add(settings.problem(
-                    path, quote(name), "the name of a site" + RowReader.nearest(name, names)));
+            findings.add(settings.problem(path, quote(name), "the name of a site" + RowReader.nearest(name, names)));
         }
     }
 
     /** A study without any place has been told so as a whole. */
     private static void places(List<SitesTable.SiteRow> sites) {
-        boolean any = sites.stream().anyMatch(site -> !site.reader().text(LATITUDE).isEmpty());
+        boolean any =
+                sites.stream().anyMatch(site -> !site.reader().text(LATITUDE).isEmpty());
         for (SitesTable.SiteRow site : sites) {
             if (any && site.reader().text(LATITUDE).isEmpty()) {
                 site.reader()

@@ -43,16 +43,12 @@ final class PointsTable {
         for (RowReader row : RowReader.rowsOf(table, COLUMNS, findings)) {
             String site = row.requiredText("site", "the name of a site");
             String level = row.requiredText("level", "the name of a level");
-            if (!site.isEmpty() && !levels.containsKey(site)) {
+            Set<String> ofSite = levels.getOrDefault(site, Set.of());
+            if (!site.isEmpty() && ofSite.isEmpty()) {
                 row.problem(
-                        "site",
-                        quote(site),
-                        "a site that has levels" + RowReader.nearest(site, levels.keySet()));
-            } else if (!level.isEmpty() && !site.isEmpty() && !levels.get(site).contains(level)) {
-                row.problem(
-                        "level",
-                        quote(level),
-                        "a level of " + quote(site) + RowReader.nearest(level, levels.get(site)));
+                        "site", quote(site), "a site that has levels" + RowReader.nearest(site, levels.keySet()));
+            } else if (!level.isEmpty() && !site.isEmpty() && !ofSite.contains(level)) {
+                row.problem("level", quote(level), "a level of " + quote(site) + RowReader.nearest(level, ofSite));
             }
             rows.computeIfAbsent(new LevelsTable.Key(site, level), key -> new ArrayList<>())
                     .add(new Row(row, point(row, site + " / " + level)));
@@ -73,8 +69,8 @@ final class PointsTable {
             row.problem("distance_km", "nothing", "a distance along the coast, or a latitude and longitude");
         }
         return row.isGood()
-                ? elevation.map(height -> new TerraceTilt.Point(
-                        height.mean(), height.standardDeviation(), distance, position))
+                ? elevation.map(
+                        height -> new TerraceTilt.Point(height.mean(), height.standardDeviation(), distance, position))
                 : Optional.empty();
     }
 
@@ -92,7 +88,8 @@ final class PointsTable {
                     FEWEST + " or more, since fewer make neither a line nor a plane with an error");
             return Optional.empty();
         }
-        boolean half = halfFilled(rows, "distance_km", point -> point.distanceKm().isPresent());
+        boolean half =
+                halfFilled(rows, "distance_km", point -> point.distanceKm().isPresent());
         half |= halfFilled(rows, "latitude", point -> point.position().isPresent());
         if (half) {
             return Optional.empty();
@@ -109,9 +106,8 @@ final class PointsTable {
     /** Whether a cell is filled at some points of a terrace and blank at others, which becomes a problem. */
     private static boolean halfFilled(
             List<Row> rows, String header, java.util.function.Predicate<TerraceTilt.Point> has) {
-        long filled = rows.stream()
-                .filter(row -> has.test(row.point().orElseThrow()))
-                .count();
+        long filled =
+                rows.stream().filter(row -> has.test(row.point().orElseThrow())).count();
         if (filled == 0 || filled == rows.size()) {
             return false;
         }
@@ -122,7 +118,8 @@ final class PointsTable {
                         .problem(
                                 header,
                                 "nothing",
-                                "a value, since other points of " + quote(row.reader().text("level")) + " have one"));
+                                "a value, since other points of "
+                                        + quote(row.reader().text("level")) + " have one"));
         return true;
     }
 }

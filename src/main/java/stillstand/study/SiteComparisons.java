@@ -48,6 +48,10 @@ record SiteComparisons(
         List<TerraceTilt> tilts,
         Set<Assumption> ledger) {
 
+    /** Nothing compared. */
+    static final SiteComparisons NONE =
+            new SiteComparisons(List.of(), List.of(), List.of(), List.of(), Set.of());
+
     /** What the sites have given so far. */
     record Found(List<LevelAnswer> levels, List<FlightResult> flights) {}
 
@@ -107,7 +111,8 @@ record SiteComparisons(
         for (SitesData.TerracePoints terrace : study.together().terraces()) {
             for (SitePlan plan : study.sites()) {
                 for (Level level : plan.site().levels()) {
-                    if (plan.site().name().equals(terrace.site()) && level.name().equals(terrace.level())) {
+                    if (plan.site().name().equals(terrace.site())
+                            && level.name().equals(terrace.level())) {
                         String where = key(terrace.site(), terrace.level());
                         double shared = sharedSigmaMetres(study, plan, level);
                         TerraceTilt.of(

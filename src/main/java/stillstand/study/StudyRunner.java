@@ -139,14 +139,7 @@ public final class StudyRunner {
                 failures.add(new StudyResult.Failure(site.site().name(), String.valueOf(e.getMessage())));
             }
         }
-        SiteComparisons sites = SiteComparisons.of(
-                study,
-                new SiteComparisons.Found(levels, flights),
-                dates,
-                rules(study.settings().matching()),
-                streams,
-                executor,
-                monitor);
+        SiteComparisons sites = sitesTogether();
         ledger.addAll(sites.ledger());
         monitor.step("done", 1);
         return new StudyResult(
@@ -180,6 +173,22 @@ public final class StudyRunner {
                 .filter(plan -> plan.site().name().equals(site))
                 .findFirst()
                 .flatMap(plan -> plan.site().coast());
+    }
+
+    private SiteComparisons sitesTogether() {
+        try {
+            return SiteComparisons.of(
+                    study,
+                    new SiteComparisons.Found(levels, flights),
+                    dates,
+                    rules(study.settings().matching()),
+                    streams,
+                    executor,
+                    monitor);
+        } catch (IllegalArgumentException | IllegalStateException e) {
+            failures.add(new StudyResult.Failure("sites together", String.valueOf(e.getMessage())));
+            return SiteComparisons.NONE;
+        }
     }
 
     private void runSite(SitePlan plan, int allLevels) {

@@ -42,17 +42,7 @@ public record StudySettings(
             Matching matching,
             IndicativeRule indicativeRange,
             Screening screening) {
-        this(
-                title,
-                note,
-                seed,
-                draws,
-                seaLevel,
-                rate,
-                matching,
-                indicativeRange,
-                screening,
-                ComparisonRules.DEFAULT);
+        this(title, note, seed, draws, seaLevel, rate, matching, indicativeRange, screening, ComparisonRules.DEFAULT);
     }
 
     /**

@@ -57,8 +57,7 @@ record ComparedFlight(
     }
 
     /** Under one account of sea level, for which {@link FlightSetup#whyNot} says nothing. */
-    static ComparedFlight of(
-            SiteCase site, SeaLevelBasis basis, Rate alone, MatchingRules rules, IndicativeRule rule) {
+    static ComparedFlight of(SiteCase site, SeaLevelBasis basis, Rate alone, MatchingRules rules, IndicativeRule rule) {
         FlightSetup setup = FlightSetup.of(site.site(), basis, rules, rule);
         List<SharedRow> rows = new ArrayList<>();
         for (Highstand row : basis.highstands().rows()) {

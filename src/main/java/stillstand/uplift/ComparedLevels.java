@@ -57,8 +57,8 @@ public final class ComparedLevels {
     private static List<Candidate> candidates(SiteCase site, IndicativeRule rule, DateRules dates) {
         List<Candidate> candidates = new ArrayList<>();
         for (Level level : site.site().levels()) {
-            List<SeaAtLevel> explanations = LevelExplanations.of(level, site.seaLevel(), dates, "")
-                    .explanations();
+            List<SeaAtLevel> explanations =
+                    LevelExplanations.of(level, site.seaLevel(), dates, "").explanations();
             if (!explanations.isEmpty()) {
                 SeaAtLevel likeliest = explanations.stream()
                         .max(Comparator.comparingDouble(SeaAtLevel::probability))

@@ -92,7 +92,7 @@ final class FlightUnderSea {
     double weigh(SharedSea under) {
         sea = under;
         boolean taught = flight.rows().stream().anyMatch(row -> sea.knows(row.key()));
-        filter = taught ? new ShorelineFilter(flight.model().withRows(rows()), ready.cells) : ready.untaught;
+        filter = taught ? ready.untaught.withRows(rows()) : ready.untaught;
         int points = ready.points;
         int[] recorded = SitesTogether.shuffled(points, random);
         int[] strays = SitesTogether.shuffled(points, random);
@@ -164,8 +164,7 @@ final class FlightUnderSea {
                 - (row.takesInterstadial() ? shared.interstadialMetres() : 0)
                 - rate * ageKa;
         double sigma = height.standardDeviation();
-        SharedSea.Departure after =
-                departure(j).given(residual, rate, sigma * sigma + privateVariance(j));
+        SharedSea.Departure after = departure(j).given(residual, rate, sigma * sigma + privateVariance(j));
         if (!filter.isDated(i)) {
             return after;
         }

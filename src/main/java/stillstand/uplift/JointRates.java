@@ -35,10 +35,8 @@ public final class JointRates {
         if (parts.size() == 1) {
             return parts.get(0);
         }
-        double highest = parts.stream()
-                .mapToDouble(part -> part.logEvidence)
-                .max()
-                .orElseThrow();
+        double highest =
+                parts.stream().mapToDouble(part -> part.logEvidence).max().orElseThrow();
         double[] share = new double[parts.size()];
         double total = 0;
         for (int k = 0; k < share.length; k++) {

@@ -55,8 +55,8 @@ final class LevelUnderSea {
                     + (oneCoast ? 0 : row.localOffsetSigmaMetres() * normal())
                     + (row.takesOffset() ? sea.offsetMetres(stand.shared()) : 0)
                     + (row.takesInterstadialFactor() ? sea.interstadialMetres(stand.shared()) : 0);
-            double allAgeKa = Math.hypot(
-                    row.takesCurveAgeError() ? stand.shared().sharedAgeSigmaKa() : 0, ownAgeKa);
+            double allAgeKa =
+                    Math.hypot(row.takesCurveAgeError() ? stand.shared().sharedAgeSigmaKa() : 0, ownAgeKa);
             ageKa = value(stand.ageKa(), allAgeKa == 0 ? 0 : (sharedAgeKa + ageDeparture) / allAgeKa);
         } else {
             SeaAtLevel.OnCurve read = (SeaAtLevel.OnCurve) explanation;

@@ -48,8 +48,7 @@ final class RateProposal {
         for (int bin = 0; bin < count; bin++) {
             boolean inside = bin >= low && bin < low + values.size();
             double value = inside ? values.get(bin - low) : 0;
-            share[bin] =
-                    (1 - ROOT - FLAT) * value / whole + ROOT * Math.sqrt(value) / root + FLAT / count;
+            share[bin] = (1 - ROOT - FLAT) * value / whole + ROOT * Math.sqrt(value) / root + FLAT / count;
         }
         return new RateProposal(bins.from() - low * width, width, share);
     }

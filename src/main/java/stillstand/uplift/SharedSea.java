@@ -18,8 +18,7 @@ final class SharedSea {
      * @param covariance m ka
      * @param ageVariance ka^2
      */
-    record Departure(
-            double levelMetres, double ageKa, double levelVariance, double covariance, double ageVariance) {
+    record Departure(double levelMetres, double ageKa, double levelVariance, double covariance, double ageVariance) {
         static Departure prior(double levelVariance, double ageVariance) {
             return new Departure(0, 0, levelVariance, 0, ageVariance);
         }

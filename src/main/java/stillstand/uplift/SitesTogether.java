@@ -53,8 +53,8 @@ public final class SitesTogether {
      * @param leastFraction below which the draws are made again, four times as many
      */
     public record Effort(int blocks, int draws, int points, int cells, double leastFraction) {
-        /** 4 blocks of common draws; 1500 draws with 24 rates each, at most 160 cells; again below 0.05. */
-        public static final Effort FULL = new Effort(4, 1500, 24, 160, 0.05);
+        /** 4 blocks of common draws; 1000 draws with 24 rates each, at most 120 cells; again below 0.05. */
+        public static final Effort FULL = new Effort(4, 1000, 24, 120, 0.05);
 
         /** @throws IllegalArgumentException if a number is too small */
         public Effort {
@@ -172,8 +172,7 @@ public final class SitesTogether {
         if (joint.effectiveFraction().orElseThrow() >= effort.leastFraction()) {
             return joint;
         }
-        Effort more =
-                new Effort(effort.blocks(), MORE * effort.draws(), effort.points(), effort.cells(), 0);
+        Effort more = new Effort(effort.blocks(), MORE * effort.draws(), effort.points(), effort.cells(), 0);
         return new SitesTogether(curve, sites, more, streams, executor, monitor).conditioned();
     }
 
@@ -207,7 +206,7 @@ public final class SitesTogether {
     private JointRates conditioned() {
         drawSeas();
         for (int s = 0; s < sites.size(); s++) {
-            monitor.step("sites together / " + sites.get(s).site(), (double) s / sites.size());
+            monitor.step("sites together / " + sites.get(s).site(), 1);
             boolean last = s == sites.size() - 1;
             double[] weights = step(s, last);
             resample(s, weights);
@@ -274,10 +273,11 @@ public final class SitesTogether {
         });
         double highest = Arrays.stream(logs).max().orElseThrow();
         if (!(highest > Double.NEGATIVE_INFINITY)) {
-            throw new IllegalArgumentException("no sea level is possible for '" + site.site()
-                    + "' and the sites compared with it");
+            throw new IllegalArgumentException(
+                    "no sea level is possible for '" + site.site() + "' and the sites compared with it");
         }
-        double[] weights = Arrays.stream(logs).map(log -> Math.exp(log - highest)).toArray();
+        double[] weights =
+                Arrays.stream(logs).map(log -> Math.exp(log - highest)).toArray();
         logEvidence += highest + Math.log(Arrays.stream(weights).average().orElseThrow());
         return weights;
     }

@@ -24,8 +24,7 @@ public record StandIn(SiteCase site, Optional<String> level, Rate alone) {
     Optional<ComparedSite> under(String curve, Conventions conventions) {
         return site.under(curve)
                 .flatMap(basis -> level.isPresent()
-                        ? ComparedLevels.under(
-                                site, basis, level.get(), conventions.rule(), conventions.dates())
+                        ? ComparedLevels.under(site, basis, level.get(), conventions.rule(), conventions.dates())
                         : FlightSetup.whyNot(site.site(), basis).isPresent()
                                 ? Optional.empty()
                                 : Optional.of(ComparedFlight.of(

@@ -107,7 +107,11 @@ class DemoTest {
         for (SiteComparison pair : result.comparison()) {
             assertTrue(
                     pair.difference().interval95().width()
-                            < 1.05 * pair.independent().difference().interval95().width(),
+                            < 1.05
+                                    * pair.independent()
+                                            .difference()
+                                            .interval95()
+                                            .width(),
                     pair.a() + " less " + pair.b());
         }
         assertEquals(

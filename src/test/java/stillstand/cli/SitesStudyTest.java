@@ -60,7 +60,8 @@ class SitesStudyTest {
         assertEquals(SiteComparison.ONE_COAST, oneCoast.sharedErrors());
         assertEquals(SiteComparison.TWO_COASTS, twoCoasts.sharedErrors());
         assertTrue(oneCoast.independent().difference().sd().orElseThrow() > 2 * sd(oneCoast));
-        assertTrue(oneCoast.correlation().orElseThrow() > twoCoasts.correlation().orElseThrow());
+        assertTrue(
+                oneCoast.correlation().orElseThrow() > twoCoasts.correlation().orElseThrow());
     }
 
     @Test
@@ -118,7 +119,9 @@ class SitesStudyTest {
         assertEquals("m/kyr per km", shared.slope().unit());
         // the ends' heights and the age alone tilt it: sqrt 2 x 0.5 / 122.5 over 20 km
         assertEquals(
-                Math.hypot(Math.sqrt(2) * 0.5 / AGE_KA / 20, 0.01 * 3.3 / AGE_KA), shared.slope().sd(), 3e-5);
+                Math.hypot(Math.sqrt(2) * 0.5 / AGE_KA / 20, 0.01 * 3.3 / AGE_KA),
+                shared.slope().sd(),
+                3e-5);
         assertTrue(independent.slope().sd() > 3 * shared.slope().sd());
         assertTrue(group.plane().isEmpty(), "three sites on the equator make no plane");
         assertEquals(0.325, group.areaMean().orElseThrow().median(), 0.002);
@@ -135,12 +138,27 @@ class SitesStudyTest {
                         "B,10,-179.95,lee",
                         "C,10.1,179.95,lee",
                         "D,10.1,180.05,lee")
-                .with("levels.csv", LEVELS, "A,T1,32,0.5,5e", "B,T1,32,0.5,5e", "C,T1,44.25,0.5,5e", "D,T1,44.25,0.5,5e")
+                .with(
+                        "levels.csv",
+                        LEVELS,
+                        "A,T1,32,0.5,5e",
+                        "B,T1,32,0.5,5e",
+                        "C,T1,44.25,0.5,5e",
+                        "D,T1,44.25,0.5,5e")
                 .run();
         // 0.1 m/kyr in 0.1 degrees to the north, across the date line
         assertEquals(
-                0.1 / 11.12, result.siteGroups().get(0).plane().orElseThrow().sharedErrors().north().value(), 1e-4);
-        double to = result.siteGroups().get(0).plane().orElseThrow().sharedErrors().steepestToDegrees();
+                0.1 / 11.12,
+                result.siteGroups()
+                        .get(0)
+                        .plane()
+                        .orElseThrow()
+                        .sharedErrors()
+                        .north()
+                        .value(),
+                1e-4);
+        double to =
+                result.siteGroups().get(0).plane().orElseThrow().sharedErrors().steepestToDegrees();
         assertTrue(to < 8 || to > 352, "toward " + to);
     }
 
@@ -165,7 +183,10 @@ class SitesStudyTest {
         assertEquals(0.2 / Math.sqrt(5), shared.slope().sd(), 1e-9);
         assertEquals(60, shared.atOrigin().value(), 1e-9);
         // the datum moves all: 2 m beside sqrt(1/4 + 1.5^2 / 5) x 0.2
-        assertEquals(Math.hypot(2, 0.2 * Math.sqrt(0.25 + 2.25 / 5)), shared.atOrigin().sd(), 1e-9);
+        assertEquals(
+                Math.hypot(2, 0.2 * Math.sqrt(0.25 + 2.25 / 5)),
+                shared.atOrigin().sd(),
+                1e-9);
         assertEquals(0.5 / AGE_KA, tilt.rate().orElseThrow().value(), 1e-5);
     }
 
@@ -185,7 +206,8 @@ class SitesStudyTest {
         assertEquals("S10", result.comparison().get(0).b(), "10 x 7 is 1 more than a multiple of 23");
         assertTrue(result.siteGroups().get(0).tilt().isPresent());
         assertTrue(result.ledger().stream()
-                .anyMatch(line -> line.assumption().equals("sites of a large group are compared with their neighbours only")));
+                .anyMatch(line ->
+                        line.assumption().equals("sites of a large group are compared with their neighbours only")));
     }
 
     /** A flight beside a site of one level, whatever the number of threads. */
@@ -219,7 +241,8 @@ class SitesStudyTest {
     /** Under two curves a difference is the mixture of what each makes of it; sea level cancels at one highstand under both. */
     @Test
     void severalCurves() throws IOException {
-        String curves = "{\"title\": \"Sites\", \"sea_level\": {\"curves\": [%s], \"highstands\": {\"overrides\": \"none\"}}}";
+        String curves =
+                "{\"title\": \"Sites\", \"sea_level\": {\"curves\": [%s], \"highstands\": {\"overrides\": \"none\"}}}";
         String one = "{\"id\": \"spratt-lisiecki-2016\", \"weight\": 3}";
         String other = "{\"id\": \"waelbroeck-2002\", \"weight\": 1}";
         double[] medians = new double[3];

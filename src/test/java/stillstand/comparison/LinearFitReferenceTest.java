@@ -152,7 +152,8 @@ class LinearFitReferenceTest {
 
     @Test
     void tiltWithASharedError() {
-        LinearFit fit = LinearFit.of(line(), RATES, errors(SHARED_SD * SHARED_SD)).orElseThrow();
+        LinearFit fit =
+                LinearFit.of(line(), RATES, errors(SHARED_SD * SHARED_SD)).orElseThrow();
         assertEquals(0.31519962, fit.coefficient(0), 1e-8);
         assertEquals(0.0032865154, fit.coefficient(1), 1e-10);
         assertEquals(0.031805384, fit.sd(0), 1e-8);

@@ -129,9 +129,11 @@ class SitesFiguresTest {
         StudyResult result = coast(4, true);
         assertEquals("coast-lee", figure(result, FigureKind.COAST).name());
         assertTrue(texts(result, FigureKind.MAP, PageWidth.TWO).words().contains("Invented cape 1 0.27 ± 0.02"));
-        String coast = String.join(" ", texts(result, FigureKind.COAST, PageWidth.TWO).words());
+        String coast =
+                String.join(" ", texts(result, FigureKind.COAST, PageWidth.TWO).words());
         assertTrue(coast.contains("2 Invented cape 1 0.27 ± 0.02"), coast);
-        List<String> differences = texts(result, FigureKind.DIFFERENCES, PageWidth.TWO).words();
+        List<String> differences =
+                texts(result, FigureKind.DIFFERENCES, PageWidth.TWO).words();
         assertTrue(differences.contains("0.06 (0.04 to 0.08), >99 %"), "" + differences);
         assertTrue(differences.contains("Invented cape 0 less Invented cape 2"), "" + differences);
     }

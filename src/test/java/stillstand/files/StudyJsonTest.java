@@ -9,6 +9,7 @@ import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
+import stillstand.comparison.ComparisonRules;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.Loaded;
@@ -83,6 +84,15 @@ class StudyJsonTest {
 
     static List<Case> cases() {
         return List.of(
+                bad(
+                        "{\"title\": \"x\", \"comparison\": {\"stable_within_m_per_kyr\": 0}}",
+                        "study.json:1:58: comparison.stable_within_m_per_kyr: found 0, expected a number above 0"),
+                bad(
+                        "{\"title\": \"x\", \"comparison\": {\"pairs\": [[\"North\"]]}}",
+                        "study.json:1:41: comparison.pairs[0]: found a list [ … ], expected a pair of sites such as [\"North\", \"South\"]"),
+                bad(
+                        "{\"title\": \"x\", \"comparison\": {\"pair\": []}}",
+                        "study.json:1:31: comparison.pair: found an unknown key, expected \"pairs\""),
                 bad("", "study.json: found an empty file, expected a json object"),
                 bad(
                         "{\"title\": \"x\",\n \"seed\": 1,}",
@@ -191,7 +201,8 @@ class StudyJsonTest {
                         + "\"stray_age_maximum_ka\": 500, \"wrong_date_probability\": 0.1, \"trace_probability\": 0.9},"
                         + "\"indicative_range\": \"uniform\","
                         + "\"screening\": {\"calcite_maximum_percent\": 2, \"initial_d234u_permil\": [140, 152], \"th232_maximum_ppb\": 1,"
-                        + "\"th230_th232_minimum\": 20, \"replicates\": \"mean\", \"stratigraphic_order\": true}}";
+                        + "\"th230_th232_minimum\": 20, \"replicates\": \"mean\", \"stratigraphic_order\": true},"
+                        + "\"comparison\": {\"stable_within_m_per_kyr\": 0.02, \"site_spread_m_per_kyr\": 0.5, \"pairs\": [[\"North\", \"South\"]]}}";
         StudySettings expected = new StudySettings(
                 "A",
                 "b",
@@ -223,7 +234,8 @@ class StudyJsonTest {
                         Optional.of(1.0),
                         Optional.of(20.0),
                         Optional.of("mean"),
-                        Optional.of(true)));
+                        Optional.of(true)),
+                new ComparisonRules(0.02, 0.5, List.of(new ComparisonRules.Pair("North", "South"))));
         StudySettings read = parse(json).value().orElseThrow().settings();
         assertEquals(expected, read);
         assertEquals(

@@ -68,8 +68,8 @@ class SitesTogetherReferenceTest {
         List<FlightRow> rows = new ArrayList<>();
         List<FlightLevel> levels = new ArrayList<>();
         for (int j = 0; j < STAGES.length; j++) {
-            rows.add(FlightRow.plain(
-                    STAGES[j], AGES_KA[j], AGE_SIGMAS_KA[j], LEVELS_METRES[j], LEVEL_SIGMAS_METRES[j]));
+            rows.add(
+                    FlightRow.plain(STAGES[j], AGES_KA[j], AGE_SIGMAS_KA[j], LEVELS_METRES[j], LEVEL_SIGMAS_METRES[j]));
             levels.add(FlightLevel.undated("level " + j, new Normal(heightsMetres[j], 2))
                     .onlyRows(Set.of(j))
                     .neverStray());
@@ -103,7 +103,8 @@ class SitesTogetherReferenceTest {
     }
 
     /** Mean and standard deviation of each of two sites and of their difference, and the correlation. */
-    private record Moments(double meanA, double sdA, double meanB, double sdB, double sdDifference, double correlation) {
+    private record Moments(
+            double meanA, double sdA, double meanB, double sdB, double sdDifference, double correlation) {
         static Moments of(JointRates joint) {
             int n = joint.draws();
             double[] sums = new double[5];
@@ -216,10 +217,7 @@ class SitesTogetherReferenceTest {
     void levelsBesideAFlightOfOtherHighstands() {
         JointRates joint = SitesTogether.of(
                 "curve",
-                List.of(
-                        flight("C", "coast", new double[] {26, 79.5, 140}, 0.45, 0.80),
-                        level("A", 61),
-                        level("B", 35)),
+                List.of(flight("C", "coast", new double[] {26, 79.5, 140}, 0.45, 0.80), level("A", 61), level("B", 35)),
                 new SitesTogether.Effort(4, 40_000, 4, 50, 0),
                 new DrawStreams(6),
                 executor,
@@ -231,7 +229,8 @@ class SitesTogetherReferenceTest {
             sum += difference / joint.draws();
             squares += difference * difference / joint.draws();
         }
-        // the row of these levels is not the flight's: their own survey errors alone differ (sqrt 2 sigma_z / t and the age term)
+        // the row of these levels is not the flight's: their own survey errors alone differ (sqrt 2 sigma_z / t and the
+        // age term)
         assertEquals(0.2131, sum, 3e-3);
         assertTrue(Math.sqrt(squares - sum * sum) > 0.0119);
         assertEquals(Optional.of("5e"), joint.sites().get(1).level());

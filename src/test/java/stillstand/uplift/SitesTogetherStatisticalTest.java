@@ -94,8 +94,8 @@ class SitesTogetherStatisticalTest {
                         row.levelMetres() + row.levelSigmaMetres() * dice.nextGaussian(),
                         0));
             }
-            FlightSimulator sea =
-                    new FlightSimulator(truth, NOTHING_SHARED, new Survey(2, 250, false, 2, 0.02, 1, 0), Untrue.NOTHING);
+            FlightSimulator sea = new FlightSimulator(
+                    truth, NOTHING_SHARED, new Survey(2, 250, false, 2, 0.02, 1, 0), Untrue.NOTHING);
             Flight a = sea.anyFlight(rate(prior, dice), dice);
             Flight b = sea.anyFlight(rate(prior, dice), dice);
             if (a.levels().size() >= 3 && b.levels().size() >= 3) {
@@ -110,8 +110,8 @@ class SitesTogetherStatisticalTest {
 
     private static ComparedFlight compared(String site, Flight flight, Rate alone, RatePrior prior) {
         List<ComparedFlight.SharedRow> rows = ROWS.stream()
-                .map(row -> new ComparedFlight.SharedRow(
-                        row.stage(), row.levelSigmaMetres() * row.levelSigmaMetres(), 0))
+                .map(row ->
+                        new ComparedFlight.SharedRow(row.stage(), row.levelSigmaMetres() * row.levelSigmaMetres(), 0))
                 .toList();
         return new ComparedFlight(
                 site,
@@ -128,8 +128,7 @@ class SitesTogetherStatisticalTest {
     private static Outcome outcome(Pair pair, long seed) {
         JointRates joint = SitesTogether.of(
                 "curve",
-                List.of(compared("A", pair.a, pair.aAlone, pair.prior),
-                        compared("B", pair.b, pair.bAlone, pair.prior)),
+                List.of(compared("A", pair.a, pair.aAlone, pair.prior), compared("B", pair.b, pair.bAlone, pair.prior)),
                 EFFORT,
                 new DrawStreams(seed),
                 executor,
@@ -196,8 +195,7 @@ class SitesTogetherStatisticalTest {
     @ParameterizedTest
     @CsvSource({"0.1, 2, 0.9", "0.4, 0.8, 0.5"})
     @Tag("slow")
-    void differencesOfFlightsHoldTheTruthAsOftenAsTheySay(
-            double fromRate, double toRate, double mostWidthShare) {
+    void differencesOfFlightsHoldTheTruthAsOftenAsTheySay(double fromRate, double toRate, double mostWidthShare) {
         SplittableRandom seeds = new SplittableRandom(SEED);
         List<Outcome> outcomes = new ArrayList<>();
         for (int k = 0; k < PAIRS; k++) {
@@ -226,23 +224,12 @@ class SitesTogetherStatisticalTest {
 
     private static Highstand row() {
         return new Highstand(
-                "5c",
-                HighstandClass.INTERSTADIAL,
-                100,
-                2,
-                new Normal(-15, 4),
-                0,
-                1,
-                true,
-                true,
-                true,
-                5,
-                "invented");
+                "5c", HighstandClass.INTERSTADIAL, 100, 2, new Normal(-15, 4), 0, 1, true, true, true, 5, "invented");
     }
 
     private static ComparedLevel level(String site, String coast, double heightMetres) {
-        SeaAtLevel.AtHighstand stand = new SeaAtLevel.AtHighstand(
-                row(), ERRORS, 1, new Normal(100, row().marginalAgeSigmaKa(ERRORS)));
+        SeaAtLevel.AtHighstand stand =
+                new SeaAtLevel.AtHighstand(row(), ERRORS, 1, new Normal(100, row().marginalAgeSigmaKa(ERRORS)));
         return new ComparedLevel(
                 site,
                 coast,
