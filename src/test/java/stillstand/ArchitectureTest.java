@@ -94,6 +94,7 @@ class ArchitectureTest {
                         "stillstand.shoreline..",
                         "stillstand.uplift..",
                         "stillstand.comparison..",
+                        "stillstand.sensitivity..",
                         "stillstand.study..")
                 .should()
                 .dependOnClassesThat()

@@ -45,6 +45,7 @@ public final class ResultFiles {
             write(folder, "sites.geojson", SitesGeoJson.text(result));
         }
         write(folder, "ledger.csv", ledger(result));
+        LeverageTables.write(folder, result.leverage());
     }
 
     private static void write(Path folder, String name, String text) throws IOException {

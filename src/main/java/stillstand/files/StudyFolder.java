@@ -30,7 +30,6 @@ import stillstand.uncertainty.Uncertain;
 
 /** A study on disk: {@code study.json}, its tables, its own curves and calibrated ages. */
 public final class StudyFolder {
-    private static final List<String> LATER = List.of("gia.csv");
     private static final String CURVES = "curves";
     private static final String AGES = "ages";
 
@@ -71,19 +70,16 @@ public final class StudyFolder {
         Optional<Table> sites = table("sites.csv");
         Optional<Table> levels = table("levels.csv");
         Optional<Table> samples = Files.exists(folder.resolve("samples.csv")) ? table("samples.csv") : Optional.empty();
+        Optional<Table> gia = Files.exists(folder.resolve("gia.csv")) ? table("gia.csv") : Optional.empty();
         Optional<Table> points = Files.exists(folder.resolve("points.csv")) ? table("points.csv") : Optional.empty();
         Map<String, Uncertain> ages = ages();
-        for (String name : LATER) {
-            if (Files.exists(folder.resolve(name))) {
-                warnings.add(new InputWarning(name, 0, 0, "this file is not used yet"));
-            }
-        }
         inputs.sort(Comparator.comparing(InputFile::file));
         StudyInput input = new StudyInput(
                 settings.map(stated -> stated.with(changes)),
                 sites,
                 levels,
                 samples,
+                gia,
                 points,
                 ages,
                 problems,

@@ -11,6 +11,7 @@ import stillstand.comparison.ComparisonRules.Pair;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.Loaded;
+import stillstand.sensitivity.MeasurementPlan;
 import stillstand.shoreline.IndicativeRule;
 import stillstand.study.StatedSettings;
 import stillstand.study.StudySettings;
@@ -91,7 +92,15 @@ public final class StudyJson {
                 matching(root.inside("matching")),
                 indicativeRange(),
                 screening(root.inside("screening")),
+                root.has("leverage") ? Optional.of(leverage(root.inside("leverage"))) : Optional.empty(),
                 comparison(root.inside("comparison")));
+    }
+
+    private static MeasurementPlan leverage(Keys keys) {
+        MeasurementPlan usual = MeasurementPlan.DEFAULT;
+        return new MeasurementPlan(
+                keys.number("date_1sigma_ka").orElse(usual.dateSigmaKa()),
+                keys.number("survey_1sigma_m").orElse(usual.surveySigmaMetres()));
     }
 
     private SeaLevelChoice seaLevel(Keys keys) {

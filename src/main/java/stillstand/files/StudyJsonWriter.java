@@ -60,6 +60,10 @@ public final class StudyJsonWriter {
             root.put("screening", screening);
         }
         root.put("comparison", comparison(settings.comparison()));
+        settings.leverage()
+                .ifPresent(plan -> root.put(
+                        "leverage",
+                        ordered("date_1sigma_ka", plan.dateSigmaKa(), "survey_1sigma_m", plan.surveySigmaMetres())));
         return text(root);
     }
 

@@ -3,6 +3,7 @@ package stillstand.study;
 import java.util.List;
 import java.util.Optional;
 import stillstand.comparison.ComparisonRules;
+import stillstand.sensitivity.MeasurementPlan;
 import stillstand.shoreline.IndicativeRule;
 import stillstand.uplift.RatePrior;
 
@@ -18,6 +19,8 @@ import stillstand.uplift.RatePrior;
  * @param matching how levels are matched to highstands
  * @param indicativeRange what an indicative range means
  * @param screening limits on samples; each absent limit is off
+ * @param leverage how good the measurements are supposed to be of which the run says what they would do; absent = what the
+ *     answers hang on is not asked for
  * @param comparison how sites are compared
  */
 public record StudySettings(
@@ -30,6 +33,7 @@ public record StudySettings(
         Matching matching,
         IndicativeRule indicativeRange,
         Screening screening,
+        Optional<MeasurementPlan> leverage,
         ComparisonRules comparison) {
     /** Settings that say nothing of how sites are compared. */
     public StudySettings(
@@ -41,8 +45,20 @@ public record StudySettings(
             RateChoice rate,
             Matching matching,
             IndicativeRule indicativeRange,
-            Screening screening) {
-        this(title, note, seed, draws, seaLevel, rate, matching, indicativeRange, screening, ComparisonRules.DEFAULT);
+            Screening screening,
+            Optional<MeasurementPlan> leverage) {
+        this(
+                title,
+                note,
+                seed,
+                draws,
+                seaLevel,
+                rate,
+                matching,
+                indicativeRange,
+                screening,
+                leverage,
+                ComparisonRules.DEFAULT);
     }
 
     /**

@@ -56,7 +56,7 @@ public record Rate(
     }
 
     /** The rate of a flight's posterior. */
-    static Rate of(RatePosterior posterior) {
+    public static Rate of(RatePosterior posterior) {
         return new Rate(
                 posterior.quantile(0.5),
                 Optional.of(posterior.mean()),

@@ -112,15 +112,20 @@ class CommandsTest {
         assertEquals("", err());
         assertEquals(
                 List.of(
+                        "assumption-switches.csv",
                         "budget.csv",
                         "comparison.csv",
                         "curve-choice.csv",
+                        "curves-left-out.csv",
                         "ledger.csv",
+                        "next-measurements.csv",
                         "pairings.csv",
                         "rates.csv",
                         "results.json",
+                        "samples-left-out.csv",
                         "sites.geojson",
-                        "table1.csv"),
+                        "table1.csv",
+                        "tornado.csv"),
                 names(folder.resolve("results")));
         assertEquals(List.of("results"), names(folder));
         assertEquals(Optional.of("2026-12-01T12:00:00Z"), written().provenance().started());

@@ -39,6 +39,7 @@ class ComparisonCheckTest {
                         plain.matching(),
                         plain.indicativeRange(),
                         plain.screening(),
+                        plain.leverage(),
                         new ComparisonRules(0.05, 0.1, List.of(pairs))),
                 List.of(),
                 Map.of(
