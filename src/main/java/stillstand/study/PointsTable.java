@@ -45,8 +45,7 @@ final class PointsTable {
             String level = row.requiredText("level", "the name of a level");
             Set<String> ofSite = levels.getOrDefault(site, Set.of());
             if (!site.isEmpty() && ofSite.isEmpty()) {
-                row.problem(
-                        "site", quote(site), "a site that has levels" + RowReader.nearest(site, levels.keySet()));
+                row.problem("site", quote(site), "a site that has levels" + RowReader.nearest(site, levels.keySet()));
             } else if (!level.isEmpty() && !site.isEmpty() && !ofSite.contains(level)) {
                 row.problem("level", quote(level), "a level of " + quote(site) + RowReader.nearest(level, ofSite));
             }

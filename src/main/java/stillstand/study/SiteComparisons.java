@@ -49,8 +49,7 @@ record SiteComparisons(
         Set<Assumption> ledger) {
 
     /** Nothing compared. */
-    static final SiteComparisons NONE =
-            new SiteComparisons(List.of(), List.of(), List.of(), List.of(), Set.of());
+    static final SiteComparisons NONE = new SiteComparisons(List.of(), List.of(), List.of(), List.of(), Set.of());
 
     /** What the sites have given so far. */
     record Found(List<LevelAnswer> levels, List<FlightResult> flights) {}

@@ -90,6 +90,7 @@ class SitesFiguresTest {
                 plain.flights(),
                 plain.intervals(),
                 plain.impliedSeaLevel(),
+                plain.leverage(),
                 plain.residuals(),
                 plain.curveChoice(),
                 plain.curveEvidence(),
