@@ -232,7 +232,8 @@ final class HistoryMonteCarlo {
                 logEvidence = Double.NEGATIVE_INFINITY;
                 return;
             }
-            double alive = Arrays.stream(log).filter(v -> v > Double.NEGATIVE_INFINITY).count();
+            double alive =
+                    Arrays.stream(log).filter(v -> v > Double.NEGATIVE_INFINITY).count();
             alive = Math.min(alive, effort.points());
             double step = 1 - power;
             if (effective(step, highest) < STAYING * alive) {

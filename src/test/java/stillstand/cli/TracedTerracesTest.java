@@ -57,7 +57,8 @@ class TracedTerracesTest {
         double widthBefore = before.rate().interval95().width();
         double widthAfter = after.rate().interval95().width();
         assertTrue(widthAfter < 0.8 * widthBefore, widthBefore + " to " + widthAfter);
-        assertTrue(traced.ledger().stream().anyMatch(line -> line.assumption().equals("terraces traced to other sites")));
+        assertTrue(
+                traced.ledger().stream().anyMatch(line -> line.assumption().equals("terraces traced to other sites")));
         for (FlightResult.Fate fate : after.missing()) {
             assertEquals(
                     1,

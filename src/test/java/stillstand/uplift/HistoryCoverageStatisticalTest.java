@@ -81,7 +81,8 @@ class HistoryCoverageStatisticalTest {
 
     private static List<Answer> answers(TruthDrawn truths, long seed) {
         SplittableRandom seeds = new SplittableRandom(seed);
-        List<SplittableRandom> dice = Stream.generate(seeds::split).limit(FLIGHTS).toList();
+        List<SplittableRandom> dice =
+                Stream.generate(seeds::split).limit(FLIGHTS).toList();
         return dice.parallelStream()
                 .map(each -> {
                     Flight flight = simulator(3).flight(truths, each);
@@ -128,8 +129,7 @@ class HistoryCoverageStatisticalTest {
 
     @Test
     void aSteadyRateIsSeldomTakenForAChange() {
-        List<Answer> answers = answers(
-                dice -> Truth.constant(FlightSimulator.logUniform(dice, 0.2, 0.8)), 20261204);
+        List<Answer> answers = answers(dice -> Truth.constant(FlightSimulator.logUniform(dice, 0.2, 0.8)), 20261204);
         String report = report("steady", answers);
         System.out.println(report);
         assertTrue(share(answers, a -> a.log10BayesFactor > 0.5) < 0.12, report);
@@ -189,7 +189,8 @@ class HistoryCoverageStatisticalTest {
         double[] rates = two.draws().stream()
                 .mapToDouble(draw -> draw.history().rateMetresPerKyrAt(0))
                 .toArray();
-        double[] plain = two.draws().stream().mapToDouble(HistoryDraws.Draw::weight).toArray();
+        double[] plain =
+                two.draws().stream().mapToDouble(HistoryDraws.Draw::weight).toArray();
         double[] weights = IntStream.range(0, rates.length)
                 .mapToDouble(k -> plain[k]
                         * under.getOrDefault(List.of(second.get(k)), 0.0)
@@ -204,7 +205,8 @@ class HistoryCoverageStatisticalTest {
     }
 
     private static double width(double[] rates, double[] weights) {
-        double[] ends = new WeightedRates(rates, weights, new int[rates.length]).quantiles(new double[] {0.025, 0.975}, -1);
+        double[] ends =
+                new WeightedRates(rates, weights, new int[rates.length]).quantiles(new double[] {0.025, 0.975}, -1);
         return ends[1] - ends[0];
     }
 
@@ -234,10 +236,13 @@ class HistoryCoverageStatisticalTest {
     void aTraceNarrowsAndAWrongOneInTenBreaksNothing() {
         SplittableRandom seeds = new SplittableRandom(20261206);
         List<SplittableRandom> dice = Stream.generate(seeds::split).limit(PAIRS).toList();
-        List<Pair> pairs = dice.parallelStream().map(HistoryCoverageStatisticalTest::pair).toList();
+        List<Pair> pairs =
+                dice.parallelStream().map(HistoryCoverageStatisticalTest::pair).toList();
         RanksOfTruth ranks = RanksOfTruth.of(pairs.stream().mapToDouble(Pair::below));
-        double[] ratios =
-                pairs.stream().mapToDouble(p -> p.widthTraced / p.widthAlone).sorted().toArray();
+        double[] ratios = pairs.stream()
+                .mapToDouble(p -> p.widthTraced / p.widthAlone)
+                .sorted()
+                .toArray();
         double mean = Arrays.stream(ratios).average().orElseThrow();
         System.out.printf(
                 Locale.ROOT,
@@ -248,7 +253,9 @@ class HistoryCoverageStatisticalTest {
                 ratios[ratios.length / 2],
                 mean);
         // the binomial error of 95 % in 150 is 1.8 %: four of them
-        assertTrue(ranks.in95() >= (0.95 - 4 * Math.sqrt(0.95 * 0.05 / ranks.answers())) * ranks.answers(), ranks::toString);
+        assertTrue(
+                ranks.in95() >= (0.95 - 4 * Math.sqrt(0.95 * 0.05 / ranks.answers())) * ranks.answers(),
+                ranks::toString);
         assertTrue(mean < 0.9, "width " + mean);
     }
 }

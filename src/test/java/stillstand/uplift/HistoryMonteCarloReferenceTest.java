@@ -66,8 +66,7 @@ class HistoryMonteCarloReferenceTest {
                 SharedNodes.fixed(SharedNumbers.plain(0.7, 0.2)),
                 FlightIntegration.Effort.FULL,
                 RunMonitor.SILENT);
-        RatePosterior drawn =
-                draws.of(HistoryMonteCarloReferenceTest::recent).posterior(0);
+        RatePosterior drawn = draws.of(HistoryMonteCarloReferenceTest::recent).posterior(0);
         assertEquals(0.43829378, drawn.mean(), SHARE * exact.standardDeviation());
     }
 
@@ -76,14 +75,14 @@ class HistoryMonteCarloReferenceTest {
         HistoryDraws draws = draws(new HistoryPrior.Stepped(RATE, 1, 150, 150));
         assertTrue(draws.logEvidenceError() < 0.1, "error " + draws.logEvidenceError());
         assertEquals(-38.592885, draws.logEvidence(), 4 * Math.hypot(draws.logEvidenceError(), 0.005));
-        RatePosterior recent =
-                draws.of(HistoryMonteCarloReferenceTest::recent).posterior(0);
+        RatePosterior recent = draws.of(HistoryMonteCarloReferenceTest::recent).posterior(0);
         RatePosterior older = draws.of(HistoryMonteCarloReferenceTest::older).posterior(0);
         assertEquals(0.26431639, recent.mean(), SHARE * 0.0234);
         assertEquals(0.023411462, recent.standardDeviation(), SHARE * 0.0234);
         assertEquals(0.82633185, older.mean(), SHARE * 0.0669);
         assertEquals(0.066923864, older.standardDeviation(), SHARE * 0.0669);
-        RatePosterior ratio = draws.of(history -> recent(history) / older(history)).posterior(0);
+        RatePosterior ratio =
+                draws.of(history -> recent(history) / older(history)).posterior(0);
         assertEquals(0.32345096, ratio.mean(), SHARE * ratio.standardDeviation());
         assertTrue(ratio.cumulativeProbability(1) > 0.999);
     }
