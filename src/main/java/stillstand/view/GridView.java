@@ -175,22 +175,21 @@ final class GridView extends BorderPane {
         boolean isCommand = event.isShortcutDown();
         int page = Math.max(1, (int) (table.getHeight() / ROW_HEIGHT) - 2);
         CellRange at = model.chosen();
-        Optional<Runnable> action =
-                switch (event.getCode()) {
-                    case UP -> Optional.of(() -> model.move(isCommand ? -at.row() : -1, 0, isShift));
-                    case DOWN -> Optional.of(() -> model.move(isCommand ? model.rowCount() : 1, 0, isShift));
-                    case LEFT -> Optional.of(() -> model.move(0, isCommand ? -at.column() : -1, isShift));
-                    case RIGHT -> Optional.of(() -> model.move(0, isCommand ? shownColumns : 1, isShift));
-                    case PAGE_UP -> Optional.of(() -> model.move(-page, 0, isShift));
-                    case PAGE_DOWN -> Optional.of(() -> model.move(page, 0, isShift));
-                    case HOME -> Optional.of(() -> model.move(isCommand ? -at.row() : 0, -at.column(), isShift));
-                    case END -> Optional.of(() -> model.move(isCommand ? model.rowCount() : 0, shownColumns, isShift));
-                    case DELETE, BACK_SPACE -> Optional.of(model::clear);
-                    case F2, ENTER -> isCommand ? Optional.empty() : Optional.of(() -> edit(Optional.empty()));
-                    case A -> isCommand ? Optional.of(model::chooseAll) : Optional.empty();
-                    case SPACE -> isShift ? Optional.of(() -> model.chooseRow(at.row())) : Optional.empty();
-                    default -> Optional.empty();
-                };
+        Optional<Runnable> action = switch (event.getCode()) {
+            case UP -> Optional.of(() -> model.move(isCommand ? -at.row() : -1, 0, isShift));
+            case DOWN -> Optional.of(() -> model.move(isCommand ? model.rowCount() : 1, 0, isShift));
+            case LEFT -> Optional.of(() -> model.move(0, isCommand ? -at.column() : -1, isShift));
+            case RIGHT -> Optional.of(() -> model.move(0, isCommand ? shownColumns : 1, isShift));
+            case PAGE_UP -> Optional.of(() -> model.move(-page, 0, isShift));
+            case PAGE_DOWN -> Optional.of(() -> model.move(page, 0, isShift));
+            case HOME -> Optional.of(() -> model.move(isCommand ? -at.row() : 0, -at.column(), isShift));
+            case END -> Optional.of(() -> model.move(isCommand ? model.rowCount() : 0, shownColumns, isShift));
+            case DELETE, BACK_SPACE -> Optional.of(model::clear);
+            case F2, ENTER -> isCommand ? Optional.empty() : Optional.of(() -> edit(Optional.empty()));
+            case A -> isCommand ? Optional.of(model::chooseAll) : Optional.empty();
+            case SPACE -> isShift ? Optional.of(() -> model.chooseRow(at.row())) : Optional.empty();
+            default -> Optional.empty();
+        };
         if (action.isPresent() && !event.isAltDown()) {
             event.consume();
             action.get().run();
