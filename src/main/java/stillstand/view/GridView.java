@@ -11,6 +11,7 @@ import javafx.scene.control.MenuItem;
 import javafx.scene.control.TableCell;
 import javafx.scene.control.TableColumn;
 import javafx.scene.control.TableView;
+import javafx.scene.control.TextField;
 import javafx.scene.control.TextInputDialog;
 import javafx.scene.control.Tooltip;
 import javafx.scene.control.skin.VirtualFlow;
@@ -169,6 +170,7 @@ final class GridView extends BorderPane {
 
     private void pressed(KeyEvent event) {
         if (isEditing()) {
+            early(event).ifPresent(cell -> cell.key(event));
             return;
         }
         boolean isShift = event.isShiftDown();
@@ -199,15 +201,28 @@ final class GridView extends BorderPane {
     private void keyTyped(KeyEvent event) {
         String character = event.getCharacter();
         boolean isCommand = (event.isControlDown() || event.isMetaDown()) && !event.isAltDown();
-        if (isEditing()
-                || isCommand
-                || character.isEmpty()
-                || character.charAt(0) < ' '
-                || character.charAt(0) == 0x7F) {
+        if (isCommand || character.isEmpty() || character.charAt(0) < ' ' || character.charAt(0) == 0x7F) {
             return;
         }
-        event.consume();
-        edit(Optional.of(character));
+        if (!isEditing()) {
+            event.consume();
+            edit(Optional.of(character));
+        } else {
+            early(event).ifPresent(cell -> {
+                event.consume();
+                cell.append(character);
+            });
+        }
+    }
+
+    /**
+     * The cell that is edited, where a key came before its editor could hear it, which is when it has the focus and, from the
+     * next frame on, a skin: a quick hand loses no letter.
+     */
+    private Optional<GridCell> early(KeyEvent event) {
+        return event.getTarget() instanceof TextField field && field.getSkin() != null
+                ? Optional.empty()
+                : cells.stream().filter(GridCell::hasEditor).findFirst();
     }
 
     private boolean isEditing() {

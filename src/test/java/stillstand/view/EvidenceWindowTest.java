@@ -9,11 +9,13 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Optional;
+import javafx.event.Event;
 import javafx.scene.Node;
 import javafx.scene.control.CheckBox;
 import javafx.scene.control.ListView;
 import javafx.scene.control.TextInputControl;
 import javafx.scene.input.KeyCode;
+import javafx.scene.input.KeyEvent;
 import javafx.stage.Stage;
 import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.Test;
@@ -139,6 +141,24 @@ class EvidenceWindowTest {
         assertEquals("A", grid.cell(1, 0));
         robot.command(KeyCode.MINUS);
         assertEquals(2, grid.sheet().rowCount());
+    }
+
+    @Test
+    void quickHandLosesNoLetter() throws IOException {
+        robot.open(study("site,level,elevation_m,elevation_1sigma_m\nA,one,5,1\n"));
+        robot.choose("levels.csv", 0, 2);
+        robot.interact(() -> {
+            for (String letter : List.of("9", "1", ".", "5")) {
+                send(new KeyEvent(KeyEvent.KEY_TYPED, letter, "", KeyCode.UNDEFINED, false, false, false, false));
+            }
+            send(new KeyEvent(KeyEvent.KEY_PRESSED, "", "", KeyCode.ENTER, false, false, false, false));
+        });
+        assertEquals("91.5", robot.grid("levels.csv").cell(0, 2));
+    }
+
+    /** To whatever has the focus, as the toolkit does, without waiting for anything. */
+    private void send(KeyEvent event) {
+        Event.fireEvent(robot.stage().getScene().getFocusOwner(), event);
     }
 
     @Test
