@@ -93,6 +93,7 @@ class ArchitectureTest {
                         "stillstand.dating..",
                         "stillstand.shoreline..",
                         "stillstand.uplift..",
+                        "stillstand.sensitivity..",
                         "stillstand.study..")
                 .should()
                 .dependOnClassesThat()

@@ -80,6 +80,7 @@ public final class SampleStudy {
                 List.of(SampleFlight.result()),
                 List.of(new BetweenLevels("North cliff", "T1", "T4", rate(0.4, 0.05))),
                 List.of(new ImpliedSeaLevel("North cliff", "T4", age(), height(-8, 5), "T1", false)),
+                SampleLeverage.result(),
                 List.of(new LevelResidual("North cliff", "T4", 60.8, 60.9, 3.5)),
                 List.of(
                         choice("made-up-curve", Optional.of(-12.5), 0.75),
@@ -117,6 +118,7 @@ public final class SampleStudy {
                 all.flights(),
                 all.intervals(),
                 all.impliedSeaLevel(),
+                all.leverage(),
                 all.residuals(),
                 all.curveChoice(),
                 all.curveEvidence(),
@@ -299,7 +301,8 @@ public final class SampleStudy {
                         Optional.empty(),
                         Optional.empty(),
                         Optional.empty(),
-                        Optional.empty()));
+                        Optional.empty()),
+                Optional.empty());
     }
 
     private static Site site(String name, double datumOffsetMetres, List<Level> levels, Map<String, String> own) {

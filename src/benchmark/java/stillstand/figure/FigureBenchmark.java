@@ -62,6 +62,7 @@ public class FigureBenchmark {
                 all.flights(),
                 all.intervals(),
                 all.impliedSeaLevel(),
+                all.leverage(),
                 all.residuals(),
                 all.curveChoice(),
                 all.curveEvidence(),

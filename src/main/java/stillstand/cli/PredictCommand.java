@@ -77,7 +77,8 @@ final class PredictCommand implements Callable<Integer> {
                                 Optional.empty(),
                                 curves.stream()
                                         .map(id -> new WeightedCurve(id, 1))
-                                        .toList()));
+                                        .toList(),
+                                false));
         if (!loaded.problems().isEmpty() || loaded.value().isEmpty()) {
             Workshop.list(loaded.problems(), workshop.err());
             return ExitCode.PROBLEMS;

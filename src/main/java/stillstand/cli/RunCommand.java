@@ -84,6 +84,11 @@ final class RunCommand implements Callable<Integer> {
     @Option(names = "--figures", paramLabel = "WHICH", description = "all (default) or none")
     private String figures = ALL_FIGURES;
 
+    @Option(
+            names = "--leverage",
+            description = "say also what to measure next, and what other assumptions and each sample do")
+    private boolean leverage;
+
     @Option(names = "--json", description = "print results.json in place of the summary")
     private boolean json;
 
@@ -106,7 +111,8 @@ final class RunCommand implements Callable<Integer> {
             throw new ParameterException(spec.commandLine(), "--every-curve goes without --curve");
         }
         Instant started = workshop.clock().instant();
-        Loaded<Study> loaded = workshop.reader().read(folder, new SettingsChanges(seed, draws, namedCurves()));
+        Loaded<Study> loaded =
+                workshop.reader().read(folder, new SettingsChanges(seed, draws, namedCurves(), leverage));
         if (!loaded.problems().isEmpty() || loaded.value().isEmpty()) {
             Workshop.list(loaded.problems(), workshop.err());
             return ExitCode.PROBLEMS;

@@ -3,6 +3,7 @@ package stillstand.cli;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.UnaryOperator;
+import stillstand.sensitivity.MeasurementPlan;
 import stillstand.study.StudySettings;
 import stillstand.study.StudySettings.Draws;
 import stillstand.study.StudySettings.SeaLevelChoice;
@@ -14,8 +15,9 @@ import stillstand.study.StudySettings.WeightedCurve;
  * @param seed in place of the study's
  * @param draws so many for each level, without an adaptive stop
  * @param curves in place of the study's; empty = the study's own
+ * @param leverage whether to say what the answers hang on, even where the study does not ask for it
  */
-record SettingsChanges(Optional<Long> seed, Optional<Integer> draws, List<WeightedCurve> curves)
+record SettingsChanges(Optional<Long> seed, Optional<Integer> draws, List<WeightedCurve> curves, boolean leverage)
         implements UnaryOperator<StudySettings> {
     @Override
     public StudySettings apply(StudySettings settings) {
@@ -29,7 +31,8 @@ record SettingsChanges(Optional<Long> seed, Optional<Integer> draws, List<Weight
                 settings.rate(),
                 settings.matching(),
                 settings.indicativeRange(),
-                settings.screening());
+                settings.screening(),
+                leverage ? settings.leverage().or(() -> Optional.of(MeasurementPlan.DEFAULT)) : settings.leverage());
     }
 
     private SeaLevelChoice withCurves(SeaLevelChoice own) {

@@ -16,6 +16,8 @@ public enum FigureKind {
     HISTORY("history"),
     /** Which input the spread of each rate comes from. */
     BUDGET("budget"),
+    /** What each input by itself does to the rate of each level. */
+    TORNADO("tornado"),
     /** Sea-level curves and the highstands in use. */
     CURVES("curves"),
     /** All rates of all sites on one axis. */

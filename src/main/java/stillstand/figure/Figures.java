@@ -6,6 +6,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.Set;
+import stillstand.sensitivity.LevelTornado;
 import stillstand.study.StudyResult;
 import stillstand.uplift.FlightResult;
 
@@ -81,6 +82,15 @@ public record Figures(List<Figure> figures, List<Absence> absences) {
                     SharesFigure.hasBudget(site),
                     "no rate has a budget of its spread",
                     (name, width) -> SharesFigure.budget(name, site, width));
+            List<LevelTornado> tornados = result.leverage().tornado().stream()
+                    .filter(tornado -> tornado.site().equals(site.site()))
+                    .toList();
+            site(
+                    FigureKind.TORNADO,
+                    site,
+                    TornadoFigure.has(tornados),
+                    "no level has a rate with an uncertain input",
+                    (name, width) -> TornadoFigure.page(name, site, tornados, width));
             flight(site);
         }
 

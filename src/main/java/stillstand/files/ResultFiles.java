@@ -42,6 +42,7 @@ public final class ResultFiles {
             write(folder, "curve-choice.csv", curveChoice(result));
         }
         write(folder, "ledger.csv", ledger(result));
+        LeverageTables.write(folder, result.leverage());
     }
 
     /**

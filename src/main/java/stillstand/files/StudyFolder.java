@@ -30,7 +30,7 @@ import stillstand.uncertainty.Uncertain;
 
 /** A study on disk: {@code study.json}, its tables, its own curves and calibrated ages. */
 public final class StudyFolder {
-    private static final List<String> LATER = List.of("points.csv", "gia.csv");
+    private static final List<String> LATER = List.of("points.csv");
     private static final String CURVES = "curves";
     private static final String AGES = "ages";
 
@@ -71,6 +71,7 @@ public final class StudyFolder {
         Optional<Table> sites = table("sites.csv");
         Optional<Table> levels = table("levels.csv");
         Optional<Table> samples = Files.exists(folder.resolve("samples.csv")) ? table("samples.csv") : Optional.empty();
+        Optional<Table> gia = Files.exists(folder.resolve("gia.csv")) ? table("gia.csv") : Optional.empty();
         Map<String, Uncertain> ages = ages();
         for (String name : LATER) {
             if (Files.exists(folder.resolve(name))) {
@@ -83,6 +84,7 @@ public final class StudyFolder {
                 sites,
                 levels,
                 samples,
+                gia,
                 ages,
                 problems,
                 warnings,

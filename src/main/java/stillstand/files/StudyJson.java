@@ -9,6 +9,7 @@ import java.util.Set;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.Loaded;
+import stillstand.sensitivity.MeasurementPlan;
 import stillstand.shoreline.IndicativeRule;
 import stillstand.study.StatedSettings;
 import stillstand.study.StudySettings;
@@ -87,7 +88,15 @@ public final class StudyJson {
                 new RateChoice(prior(), changes()),
                 matching(root.inside("matching")),
                 indicativeRange(),
-                screening(root.inside("screening")));
+                screening(root.inside("screening")),
+                root.has("leverage") ? Optional.of(leverage(root.inside("leverage"))) : Optional.empty());
+    }
+
+    private static MeasurementPlan leverage(Keys keys) {
+        MeasurementPlan usual = MeasurementPlan.DEFAULT;
+        return new MeasurementPlan(
+                keys.number("date_1sigma_ka").orElse(usual.dateSigmaKa()),
+                keys.number("survey_1sigma_m").orElse(usual.surveySigmaMetres()));
     }
 
     private SeaLevelChoice seaLevel(Keys keys) {

@@ -58,6 +58,10 @@ public final class StudyJsonWriter {
         if (!screening.isEmpty()) {
             root.put("screening", screening);
         }
+        settings.leverage()
+                .ifPresent(plan -> root.put(
+                        "leverage",
+                        ordered("date_1sigma_ka", plan.dateSigmaKa(), "survey_1sigma_m", plan.surveySigmaMetres())));
         return text(root);
     }
 

@@ -94,6 +94,7 @@ public final class TerminalReport {
                         + Wording.rate(between.rate()) + " m/kyr, 95 % " + Wording.interval95(between.rate()) + ".");
             }
         }
+        new LeverageReport(name, result.leverage()).lines().forEach(line -> say("  " + line));
     }
 
     private void flight(FlightResult flight) {
@@ -146,7 +147,9 @@ public final class TerminalReport {
         level.agreement()
                 .filter(agreement -> agreement.p() < DATES_DISAGREE_BELOW)
                 .ifPresent(agreement -> say("  The dates of " + level.level() + " disagree: so large a scatter comes by"
-                        + " chance with probability below " + DATES_DISAGREE_BELOW + "."));
+                        + " chance with probability below " + DATES_DISAGREE_BELOW
+                        + ". If the older ones are inherited or reworked, mark them in samples.csv (dates = maximum): the"
+                        + " youngest then dates the last occupation."));
         if (level.monteCarlo().isPresent() && !level.monteCarlo().get().converged()) {
             say("  " + level.level() + ": "
                     + level.monteCarlo().map(MonteCarlo::draws).orElse(0)

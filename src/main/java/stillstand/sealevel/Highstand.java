@@ -132,6 +132,23 @@ public record Highstand(
                 entry.source());
     }
 
+    /** The row where local sea level departs from global by an estimate. */
+    Highstand withLocal(LocalDeparture.Estimate estimate) {
+        return new Highstand(
+                stage,
+                highstandClass,
+                ageKa,
+                ageSigmaKa,
+                level.plus(estimate.offsetMetres()),
+                durationKa,
+                existsProbability,
+                takesOffset,
+                takesInterstadialFactor,
+                takesCurveAgeError,
+                estimate.sigmaMetres(),
+                source);
+    }
+
     static void requireDuration(double durationKa) {
         if (!(durationKa >= 0 && durationKa < Double.POSITIVE_INFINITY)) {
             throw new IllegalArgumentException("durationKa must be 0 or more but is " + durationKa);

@@ -148,6 +148,44 @@ public record HighstandTable(
         return new HighstandTable(id, complete, rows, other, ledger);
     }
 
+    /**
+     * The same table on a coast whose departure from global sea level is known, wholly or at some highstands; the others keep their
+     * default.
+     *
+     * @param where the site or coast, for the ledger
+     * @param source who says so
+     */
+    public HighstandTable at(LocalDeparture departure, String where, String source) {
+        List<Highstand> local = new ArrayList<>();
+        List<Assumption> ledger = new ArrayList<>(assumptions);
+        List<String> without = new ArrayList<>();
+        for (Highstand row : rows) {
+            Optional<LocalDeparture.Estimate> estimate = row.isOlder() ? Optional.empty() : departure.at(row);
+            local.add(estimate.map(row::withLocal).orElse(row));
+            if (estimate.isPresent()) {
+                ledger.add(new Assumption(
+                        "local minus global sea level at highstand " + row.stage(),
+                        String.format(
+                                Locale.ROOT,
+                                "%+.1f ± %.1f m (1 sigma)",
+                                estimate.get().offsetMetres(),
+                                estimate.get().sigmaMetres()),
+                        source,
+                        where));
+            } else if (!row.isOlder() && row.localOffsetSigmaMetres() > 0) {
+                without.add(row.stage());
+            }
+        }
+        if (!without.isEmpty()) {
+            ledger.add(new Assumption(
+                    "local minus global sea level has no row and gets the default",
+                    String.join(", ", without),
+                    OURS,
+                    where));
+        }
+        return new HighstandTable(id, complete, local, sharedErrors, ledger);
+    }
+
     private static List<Assumption> sharedLines(SharedErrors shared, String source) {
         return List.of(
                 new Assumption(

@@ -320,6 +320,45 @@ public final class SeaLevelCurve {
         return new SeaLevelCurve(id, movedFacts, moved, sigmasLowMetres, sigmasHighMetres, more);
     }
 
+    /**
+     * The same curve on a coast whose departure from it is known at ages: the line is moved, and the band widened by the spread
+     * of the departure. Without ages the curve stays as it is.
+     *
+     * @param where the site or coast, for the ledger
+     * @param source who says so
+     */
+    public SeaLevelCurve at(LocalDeparture departure, String where, String source) {
+        if (departure.atAges().isEmpty()) {
+            return this;
+        }
+        List<CurveKnot> moved = knots.stream()
+                .map(knot -> {
+                    LocalDeparture.Estimate here = departure.atAge(knot.ageKa()).orElseThrow();
+                    return new CurveKnot(
+                            knot.ageKa(),
+                            knot.levelMetres() + here.offsetMetres(),
+                            Math.hypot(knot.sigmaLowMetres(), here.sigmaMetres()),
+                            Math.hypot(knot.sigmaHighMetres(), here.sigmaMetres()));
+                })
+                .toList();
+        double[] lows = sigmasLowMetres.clone();
+        double[] highs = sigmasHighMetres.clone();
+        for (int i = 0; i < lows.length; i++) {
+            double sigma =
+                    departure.atAge(fromKa + i / cellsPerKa).orElseThrow().sigmaMetres();
+            lows[i] = Math.hypot(lows[i], sigma);
+            highs[i] = Math.hypot(highs[i], sigma);
+        }
+        List<Assumption> more = new ArrayList<>(assumptions);
+        more.add(new Assumption(
+                "curve " + id + " is read at local sea level",
+                "moved by the departures at " + departure.atAges().size()
+                        + " ages, linear between them and as at the nearest beyond them",
+                source,
+                where));
+        return new SeaLevelCurve(id, facts, moved, lows, highs, more);
+    }
+
     private double read(double[] column, double ageKa) {
         requireCovered(ageKa);
         double place = (ageKa - fromKa) * cellsPerKa;

@@ -167,13 +167,17 @@ final class SeaLevelCheck {
                 .orElse(overrides);
         return replaced.map(each -> {
             SeaLevelCase made = caseOf(curve, named.weight(), each);
-            return new SeaLevelCase(named.label(), made.weight(), made.curve(), made.highstands());
+            return new SeaLevelCase(
+                    named.label(), made.weight(), made.curve(), made.highstands(), made.withoutOverrides());
         });
     }
 
     private SeaLevelCase caseOf(SeaLevelCurve curve, double weight, HighstandOverrides replaced) {
         HighstandTable table = HighstandTable.fromCurve(curve, library.stages(), replaced, options());
-        return new SeaLevelCase(curve.id(), weight, Optional.of(curve), underSettings(table));
+        Optional<HighstandTable> own = Optional.of(HighstandOverrides.NONE)
+                .filter(none -> !none.equals(replaced))
+                .map(none -> underSettings(HighstandTable.fromCurve(curve, library.stages(), none, options())));
+        return new SeaLevelCase(curve.id(), weight, Optional.of(curve), underSettings(table), own);
     }
 
     /** Whether an id among the curves is that of a highstand table: one more account of sea level, which reads no curve. */

@@ -40,6 +40,11 @@ public record StatedSettings(
     private static final Map<String, Function<StudySettings, String>> REPLACEABLE = Map.of(
             "seed",
             settings -> String.valueOf(settings.seed()),
+            "leverage",
+            settings -> settings.leverage()
+                    .map(plan -> "a date to " + plan.dateSigmaKa() + " ka, a survey to " + plan.surveySigmaMetres()
+                            + " m (1 sigma)")
+                    .orElse("not asked for"),
             CURVES,
             settings -> settings.seaLevel().curves().stream()
                     .map(WeightedCurve::label)

@@ -13,6 +13,7 @@ import java.util.Set;
 import java.util.function.Function;
 import stillstand.ledger.InputWarning;
 import stillstand.ledger.Loaded;
+import stillstand.sealevel.LocalDeparture;
 import stillstand.shoreline.DatedSample;
 import stillstand.shoreline.Level;
 import stillstand.shoreline.Site;
@@ -63,18 +64,9 @@ public final class StudyCheck {
         Set<String> names = new LinkedHashSet<>();
         sites.forEach(site -> names.add(site.name()));
         Function<String, List<SeaLevelCase>> at = site -> local.getOrDefault(site, cases);
+        Function<String, Optional<StageLabels>> labels = site -> labels(at.apply(site));
         List<LevelsTable.LevelRow> levels = input.levels()
-                .map(table -> new LevelsTable(library, findings)
-                        .read(
-                                table,
-                                names,
-                                site -> Optional.of(at.apply(site))
-                                        .filter(each -> !each.isEmpty())
-                                        .map(each -> new StageLabels(
-                                                each.stream()
-                                                        .map(SeaLevelCase::highstands)
-                                                        .toList(),
-                                                library.stages()))))
+                .map(table -> new LevelsTable(library, findings).read(table, names, labels))
                 .orElse(List.of());
         List<SamplesTable.SampleRow> samples = input.samples()
                 .map(table -> new SamplesTable(library, input.ages(), findings).read(table, names, byName(levels)))
@@ -82,6 +74,9 @@ public final class StudyCheck {
         Plausibility.check(sites, levels, samples, at);
         FlightCheck.check(sites, levels, at);
         Function<String, List<SeaLevelCase>> serving = ServingCurves.of(sites, levels, samples, at, findings);
+        Map<String, LocalDeparture> departures = input.gia()
+                .map(table -> new GiaTable(findings).read(table, sites, labels))
+                .orElse(Map.of());
 
         List<InputWarning> warnings = sorted(findings.warnings());
         if (findings.problemCount() > 0 || input.settings().isEmpty()) {
@@ -89,12 +84,27 @@ public final class StudyCheck {
         }
         Study study = new Study(
                 input.settings().get().settings(),
-                plans(sites, levels, samples, serving),
+                plans(sites, levels, samples, site -> onItsCoast(site, serving.apply(site), departures)),
                 cases,
                 warnings,
                 findings.ledger(),
                 input.inputs());
         return new Loaded<>(Optional.of(study), List.of(), warnings);
+    }
+
+    private Optional<StageLabels> labels(List<SeaLevelCase> cases) {
+        return Optional.of(cases.stream().map(SeaLevelCase::highstands).toList())
+                .filter(tables -> !tables.isEmpty())
+                .map(tables -> new StageLabels(tables, library.stages()));
+    }
+
+    private static List<SeaLevelCase> onItsCoast(
+            String site, List<SeaLevelCase> cases, Map<String, LocalDeparture> departures) {
+        return Optional.ofNullable(departures.get(site))
+                .map(departure -> cases.stream()
+                        .map(sea -> sea.at(departure, site, GiaTable.NAME))
+                        .toList())
+                .orElse(cases);
     }
 
     private void checkSettings(StatedSettings stated) {

@@ -16,6 +16,7 @@ import stillstand.uncertainty.Uncertain;
  * @param sites table of sites
  * @param levels table of levels
  * @param samples table of dated samples; absent where a study has none
+ * @param gia table of local minus global sea level; absent where a study has none
  * @param ages calibrated ages by name, ka before 1950
  * @param problems met in reading
  * @param warnings met in reading
@@ -27,6 +28,7 @@ public record StudyInput(
         Optional<Table> sites,
         Optional<Table> levels,
         Optional<Table> samples,
+        Optional<Table> gia,
         Map<String, Uncertain> ages,
         List<InputProblem> problems,
         List<InputWarning> warnings,
@@ -40,6 +42,12 @@ public record StudyInput(
         inputs = List.copyOf(inputs);
     }
 
+    /** The same input with a table of local minus global sea level. */
+    public StudyInput withGia(Table table) {
+        return new StudyInput(
+                settings, sites, levels, samples, Optional.of(table), ages, problems, warnings, ledger, inputs);
+    }
+
     /** Input made in memory, with no file behind it and nothing wrong so far. */
     public static StudyInput of(StatedSettings settings, Table sites, Table levels, Optional<Table> samples) {
         return new StudyInput(
@@ -47,6 +55,7 @@ public record StudyInput(
                 Optional.of(sites),
                 Optional.of(levels),
                 samples,
+                Optional.empty(),
                 Map.of(),
                 List.of(),
                 List.of(),

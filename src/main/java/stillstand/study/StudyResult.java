@@ -6,6 +6,7 @@ import stillstand.ledger.Assumption;
 import stillstand.ledger.InputWarning;
 import stillstand.sensitivity.CurveChoice;
 import stillstand.sensitivity.CurveEvidence;
+import stillstand.sensitivity.Leverage;
 import stillstand.uplift.BetweenLevels;
 import stillstand.uplift.FlightResult;
 import stillstand.uplift.ImpliedSeaLevel;
@@ -23,6 +24,7 @@ import stillstand.uplift.LevelResidual;
  * @param flights one for each site with a level to be matched
  * @param intervals rates between levels of a site
  * @param impliedSeaLevel sea level that dated levels imply, given the uplift of the others
+ * @param leverage what the answers hang on
  * @param residuals measured against predicted heights of the flights
  * @param curveChoice what each of several curves makes of each level and flight, beside their mixtures
  * @param curveEvidence what the flights of a region together say of the curves
@@ -38,6 +40,7 @@ public record StudyResult(
         List<FlightResult> flights,
         List<BetweenLevels> intervals,
         List<ImpliedSeaLevel> impliedSeaLevel,
+        Leverage leverage,
         List<LevelResidual> residuals,
         List<CurveChoice> curveChoice,
         List<CurveEvidence> curveEvidence,
@@ -68,6 +71,7 @@ public record StudyResult(
                 flights,
                 intervals,
                 impliedSeaLevel,
+                leverage,
                 residuals,
                 curveChoice,
                 curveEvidence,

@@ -45,6 +45,7 @@ public final class StudyRunner {
     private final DateRules dates;
     private final LevelAnswers answers;
     private final Flights matching;
+    private final SiteHinges hinges;
 
     private final List<LevelAnswer> levels = new ArrayList<>();
     private final List<StudyResult.Waiting> waiting = new ArrayList<>();
@@ -76,7 +77,9 @@ public final class StudyRunner {
                 executor,
                 settings.indicativeRange(),
                 dates);
-        matching = new Flights(streams, executor, monitor, rules(settings.matching()), settings.indicativeRange());
+        MatchingRules rules = rules(settings.matching());
+        matching = new Flights(streams, executor, monitor, rules, settings.indicativeRange());
+        hinges = new SiteHinges(settings, rules, dates, streams, executor, monitor);
     }
 
     /** Settings of matching as the engine takes them: what is not stated stays its own default. */
@@ -154,6 +157,7 @@ public final class StudyRunner {
                 flights,
                 intervals,
                 implied,
+                hinges.leverage(),
                 residuals,
                 curveChoice,
                 CurveEvidence.pooled(curveChoice, this::coast),
@@ -186,6 +190,8 @@ public final class StudyRunner {
         implied.addAll(relations.impliedSeaLevel());
         ledger.addAll(relations.assumptions());
         runFlight(plan, ensemble, (double) levels.size() / Math.max(1, allLevels));
+        monitor.step(plan.site().name() + " / what it hangs on", (double) levels.size() / Math.max(1, allLevels));
+        ledger.addAll(hinges.add(plan, curveChoice));
     }
 
     private void runLevel(SitePlan plan, Level level, SeaLevelEnsemble ensemble) {

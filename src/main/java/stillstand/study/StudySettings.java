@@ -2,6 +2,7 @@ package stillstand.study;
 
 import java.util.List;
 import java.util.Optional;
+import stillstand.sensitivity.MeasurementPlan;
 import stillstand.shoreline.IndicativeRule;
 import stillstand.uplift.RatePrior;
 
@@ -17,6 +18,8 @@ import stillstand.uplift.RatePrior;
  * @param matching how levels are matched to highstands
  * @param indicativeRange what an indicative range means
  * @param screening limits on samples; each absent limit is off
+ * @param leverage how good the measurements are supposed to be of which the run says what they would do; absent = what the
+ *     answers hang on is not asked for
  */
 public record StudySettings(
         String title,
@@ -27,7 +30,8 @@ public record StudySettings(
         RateChoice rate,
         Matching matching,
         IndicativeRule indicativeRange,
-        Screening screening) {
+        Screening screening,
+        Optional<MeasurementPlan> leverage) {
 
     /**
      * How many draws a level gets.

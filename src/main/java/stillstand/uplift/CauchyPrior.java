@@ -37,9 +37,11 @@ public record CauchyPrior(double location, double scale, double fromMetresPerKyr
             double distance = (rate - location) * perScale;
             weights[i] *= peak / (1 + distance * distance);
         }
+        double from = fromMetresPerKyr;
+        double to = toMetresPerKyr;
         for (int i = 0; i < weights.length; i++) {
             double rate = ratesMetresPerKyr[i];
-            if (!(rate >= fromMetresPerKyr && rate <= toMetresPerKyr)) {
+            if (!(rate >= from && rate <= to)) {
                 weights[i] = 0;
             }
         }

@@ -301,7 +301,7 @@ public final class LevelAnswers {
     }
 
     /** One rate for the corals that a curve can be read for; the datum of the site is one of the things they share. */
-    private static Optional<Rate> coralsTogether(Site site, Level level, SeaLevelBasis basis, RatePrior prior) {
+    public static Optional<Rate> coralsTogether(Site site, Level level, SeaLevelBasis basis, RatePrior prior) {
         List<CoralsTogether.Coral> corals = new ArrayList<>();
         for (DatedSample sample : level.samples()) {
             if (whyNoRate(sample, basis).isEmpty()) {
@@ -335,7 +335,8 @@ public final class LevelAnswers {
                 prior)));
     }
 
-    private static Optional<String> whyNoRate(DatedSample sample, SeaLevelBasis basis) {
+    /** Why a sample has no rate of its own, as a coral read on the curve at its own age; empty where it has one. */
+    public static Optional<String> whyNoRate(DatedSample sample, SeaLevelBasis basis) {
         if (!sample.used()) {
             return Optional.of(sample.reason().isEmpty() ? "set aside" : "set aside: " + sample.reason());
         }

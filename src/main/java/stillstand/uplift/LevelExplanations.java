@@ -25,12 +25,12 @@ import stillstand.uncertainty.Uncertain;
  * @param whyNone the reason, as a sentence; "" where there are explanations
  * @param assumptions what the explanations rest on
  */
-record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Assumption> assumptions) {
+public record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Assumption> assumptions) {
     private static final String OURS = "Stillstand's default";
     /** Highstands less likely than this are left out, which is said. */
     private static final double LEAST_PROBABILITY = 1e-4;
 
-    LevelExplanations {
+    public LevelExplanations {
         explanations = List.copyOf(explanations);
         assumptions = List.copyOf(assumptions);
     }
@@ -40,7 +40,7 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
      *
      * @param where "site / level", for the ledger
      */
-    static LevelExplanations of(Level level, SeaLevelBasis basis, DateRules rules, String where) {
+    public static LevelExplanations of(Level level, SeaLevelBasis basis, DateRules rules, String where) {
         return switch (level.formsAt()) {
             case HIGHSTAND -> atHighstand(level, basis, rules, where);
             case ANY -> atItsAge(level, basis, rules, where);
@@ -205,7 +205,7 @@ record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, List<Ass
     }
 
     /** A curve read at an age, with its own age error and the offset that all its readings share. */
-    static SeaAtLevel.OnCurve onCurve(SeaLevelCurve curve, Uncertain ageKa, SeaLevelBasis basis) {
+    public static SeaAtLevel.OnCurve onCurve(SeaLevelCurve curve, Uncertain ageKa, SeaLevelBasis basis) {
         return new SeaAtLevel.OnCurve(
                 curve, DatedStage.positive(ageKa), curve.facts().curveAgeSigmaKa(), offsetSigmaMetres(basis), 1);
     }

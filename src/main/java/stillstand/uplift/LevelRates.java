@@ -14,8 +14,10 @@ import stillstand.uncertainty.BlockEstimates;
 import stillstand.uncertainty.DrawDistribution;
 import stillstand.uncertainty.DrawHistogram;
 import stillstand.uncertainty.DrawStreams;
+import stillstand.uncertainty.Exact;
 import stillstand.uncertainty.Interval;
 import stillstand.uncertainty.MonteCarloError;
+import stillstand.uncertainty.Normal;
 import stillstand.uncertainty.SobolPoints;
 import stillstand.uncertainty.SortedDraws;
 import stillstand.uncertainty.Summary;
@@ -189,6 +191,9 @@ public final class LevelRates {
         private final List<? extends SeaAtLevel> explanations;
         private final List<RateColumns> functions = new ArrayList<>();
         private final RatePrior prior;
+        /** Height of the former sea where its distribution is known without a draw. */
+        private final Optional<Uncertain> knownHeight;
+
         private final boolean hasMean;
         /** Everything so far; its ranges are set by the pilot. */
         private Gathered all = new Gathered(NONE, NONE, NONE, NONE);
@@ -206,10 +211,31 @@ public final class LevelRates {
             this.key = key;
             this.explanations = explanations;
             this.prior = prior;
+            knownHeight = knownHeight(height, lowering);
             for (SeaAtLevel sea : explanations) {
-                functions.add(new RateColumns(height, lowering, sea));
+                functions.add(
+                        knownHeight.isPresent()
+                                ? RateColumns.joined(height, lowering, sea)
+                                : new RateColumns(height, lowering, sea));
             }
             hasMean = explanations.stream().allMatch(sea -> keepsAwayFromZero(sea.ageKa()));
+        }
+
+        /** A sum of normal terms, to which no lowering by age is added, is normal. */
+        private static Optional<Uncertain> knownHeight(List<HeightTerm> height, Uncertain lowering) {
+            if (!lowering.isExact() || lowering.mean() != 0) {
+                return Optional.empty();
+            }
+            double meanMetres = 0;
+            double variance = 0;
+            for (HeightTerm term : height) {
+                if (!(term.metres().isExact() || term.metres() instanceof Normal)) {
+                    return Optional.empty();
+                }
+                meanMetres += term.meanMetres();
+                variance += Math.pow(term.metres().standardDeviation(), 2);
+            }
+            return Optional.of(variance > 0 ? new Normal(meanMetres, Math.sqrt(variance)) : new Exact(meanMetres));
         }
 
         /** Sets the ranges of all histograms, and draws the first block. */
@@ -273,7 +299,9 @@ public final class LevelRates {
                 beyond += weigh(explanations.get(e).probability(), w);
                 if (explanations.size() == 1 && drawn.allValid) {
                     into.rate().add(drawn.rateMetresPerKyr);
-                    into.height().add(drawn.heightMetres);
+                    if (knownHeight.isEmpty()) {
+                        into.height().add(drawn.heightMetres);
+                    }
                 } else {
                     into.rate().add(drawn.rateMetresPerKyr, w.weights);
                     into.height().add(drawn.heightMetres, w.weights);
@@ -341,7 +369,11 @@ public final class LevelRates {
                     posterior.map(p -> Rate.of(p, true)),
                     prior.isTwoSided() ? posterior.map(p -> 1 - p.cumulativeProbability(0)) : Optional.empty(),
                     Quantity.of(ages, "ka"),
-                    Quantity.of(all.height().distribution().summary(), "m"),
+                    Quantity.of(
+                            knownHeight.map(Summary::of).orElseGet(() -> all.height()
+                                    .distribution()
+                                    .summary()),
+                            "m"),
                     settled((int) draws, converged),
                     (double) beyondCurve / (draws * explanations.size()));
         }

@@ -33,7 +33,18 @@ public record MatchingRules(
         decaysKa = decaysKa.map(List::copyOf);
     }
 
-    List<Double> decaysKa(boolean complete) {
+    /** The same rules with another prior of the recording probability. */
+    public MatchingRules with(SharedPriors.Recording other) {
+        return new MatchingRules(other, decaysKa, strays, strayAgeMaximumKa, wrongDateProbability);
+    }
+
+    /** The same rules with these decays of recording, ka, equally likely. */
+    public MatchingRules withDecays(List<Double> otherKa) {
+        return new MatchingRules(recording, Optional.of(otherKa), strays, strayAgeMaximumKa, wrongDateProbability);
+    }
+
+    /** Decays of recording in force, ka; infinite = none. */
+    public List<Double> decaysKa(boolean complete) {
         return decaysKa.orElse(complete ? List.of(Double.POSITIVE_INFINITY) : SharedPriors.DEFAULT_DECAYS_KA);
     }
 

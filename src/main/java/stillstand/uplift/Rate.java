@@ -42,7 +42,7 @@ public record Rate(
      * @param draws rates, m/kyr
      * @param hasMean whether mean and standard deviation exist
      */
-    static Rate of(DrawDistribution draws, boolean hasMean) {
+    public static Rate of(DrawDistribution draws, boolean hasMean) {
         return new Rate(
                 draws.quantile(0.5),
                 hasMean ? Optional.of(draws.mean()) : Optional.empty(),
@@ -56,7 +56,7 @@ public record Rate(
     }
 
     /** The rate of a flight's posterior. */
-    static Rate of(RatePosterior posterior) {
+    public static Rate of(RatePosterior posterior) {
         return new Rate(
                 posterior.quantile(0.5),
                 Optional.of(posterior.mean()),

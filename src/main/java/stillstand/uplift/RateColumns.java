@@ -74,6 +74,39 @@ final class RateColumns {
         }
     }
 
+    /**
+     * The same rate from fewer columns, for whom only rate and age matter: normal terms of height and sea level are joined into
+     * one number, the uplift since. The columns of heights and sea levels then mean nothing by themselves, and no input belongs to
+     * one group.
+     */
+    static RateColumns joined(List<HeightTerm> height, Uncertain loweringMetresPerKyr, SeaAtLevel sea) {
+        RateColumns columns = new RateColumns(height, loweringMetresPerKyr, sea);
+        columns.joinNormals();
+        return columns;
+    }
+
+    private void joinNormals() {
+        double meanMetres = 0;
+        double variance = 0;
+        List<Input> others = new ArrayList<>();
+        for (Input input : inputs) {
+            boolean isUplift = input.role() == Role.HEIGHT || input.role() == Role.SEA_LEVEL;
+            if (isUplift && input.value() instanceof Normal normal) {
+                int sign = input.role() == Role.SEA_LEVEL ? -1 : input.sign();
+                meanMetres += sign * normal.mean();
+                variance += normal.sigma() * normal.sigma();
+            } else {
+                others.add(input);
+            }
+        }
+        if (variance > 0) {
+            inputs.clear();
+            inputs.add(new Input(
+                    InputGroup.ELEVATION, Role.HEIGHT, 1, new Normal(meanMetres, Math.sqrt(variance))));
+            inputs.addAll(others);
+        }
+    }
+
     private void addHeight(List<HeightTerm> height) {
         double normalMeanMetres = 0;
         double normalVariance = 0;
@@ -212,8 +245,11 @@ final class RateColumns {
 
     private static void divide(Columns out) {
         double[] rate = out.rateMetresPerKyr;
+        double[] height = out.heightMetres;
+        double[] sea = out.seaLevelMetres;
+        double[] age = out.ageKa;
         for (int i = 0; i < rate.length; i++) {
-            rate[i] = (out.heightMetres[i] - out.seaLevelMetres[i]) / out.ageKa[i];
+            rate[i] = (height[i] - sea[i]) / age[i];
         }
     }
 

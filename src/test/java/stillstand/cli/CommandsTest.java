@@ -112,13 +112,18 @@ class CommandsTest {
         assertEquals("", err());
         assertEquals(
                 List.of(
+                        "assumption-switches.csv",
                         "budget.csv",
                         "curve-choice.csv",
+                        "curves-left-out.csv",
                         "ledger.csv",
+                        "next-measurements.csv",
                         "pairings.csv",
                         "rates.csv",
                         "results.json",
-                        "table1.csv"),
+                        "samples-left-out.csv",
+                        "table1.csv",
+                        "tornado.csv"),
                 names(folder.resolve("results")));
         assertEquals(List.of("results"), names(folder));
         assertEquals(Optional.of("2026-12-01T12:00:00Z"), written().provenance().started());

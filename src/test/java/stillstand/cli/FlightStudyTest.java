@@ -147,7 +147,7 @@ class FlightStudyTest {
         Study study = StudyFolder.read(
                         folder,
                         ShippedLibrary.load(),
-                        new SettingsChanges(Optional.empty(), Optional.of(16384), List.of()))
+                        new SettingsChanges(Optional.empty(), Optional.of(16384), List.of(), false))
                 .value()
                 .orElseThrow();
         AtomicBoolean asked = new AtomicBoolean();

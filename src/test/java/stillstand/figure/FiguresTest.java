@@ -10,6 +10,7 @@ import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import stillstand.SampleStudy;
 import stillstand.figure.Figures.Absence;
+import stillstand.sensitivity.Leverage;
 import stillstand.study.StudyResult;
 import stillstand.uncertainty.Digits;
 import stillstand.uplift.FlightResult;
@@ -51,6 +52,7 @@ class FiguresTest {
                         "stair-heron-stair",
                         "rates-heron-stair",
                         "budget-heron-stair",
+                        "tornado-heron-stair",
                         "pairings-heron-stair",
                         "fates-heron-stair",
                         "residuals-heron-stair",
@@ -63,7 +65,14 @@ class FiguresTest {
     void whatASiteWithoutFlightLacksIsSaid() throws IOException {
         StudyResult slow = InventedCoasts.slow();
         assertEquals(
-                List.of("curves", "forest", "stair-still-bay", "rates-still-bay", "budget-still-bay"), names(slow));
+                List.of(
+                        "curves",
+                        "forest",
+                        "stair-still-bay",
+                        "rates-still-bay",
+                        "budget-still-bay",
+                        "tornado-still-bay"),
+                names(slow));
         Absence first = Figures.of(slow).absences().get(0);
         assertEquals(new Absence(FigureKind.PAIRINGS, Optional.of("Still Bay"), "no flight was matched there"), first);
         assertTrue(String.join(" ", words(slow, FigureKind.STAIR)).contains("No flight was matched here"));
@@ -132,6 +141,7 @@ class FiguresTest {
                 List.of(),
                 List.of(),
                 List.of(),
+                Leverage.NONE,
                 List.of(),
                 List.of(),
                 List.of(),
@@ -165,5 +175,13 @@ class FiguresTest {
                 List.of());
         assertTrue(names(two).containsAll(List.of("stair-north-1", "stair-north-1-2", "stair-site")), "" + names(two));
         assertEquals("þórshöfn-東", Figures.stem("Þórshöfn: 東"));
+    }
+
+    @Test
+    void aTornadoNamesEachInputAndItsRange() throws IOException {
+        List<String> words = words(InventedCoasts.slow(), FigureKind.TORNADO);
+        assertTrue(words.contains("S1 at 5e"), words.toString());
+        assertTrue(words.contains("– shared offset"), words.toString());
+        assertTrue(words.contains("58 to 64 m"), words.toString()); // 61.4 with 1.5 on both sides, twice
     }
 }

@@ -5,7 +5,10 @@ import java.util.List;
 import java.util.Optional;
 import java.util.stream.IntStream;
 import stillstand.SampleFlight;
+import stillstand.SampleLeverage;
 import stillstand.SampleStudy;
+import stillstand.sensitivity.LevelTornado;
+import stillstand.sensitivity.Leverage;
 import stillstand.study.StudyResult;
 import stillstand.study.StudyResult.CurvePoint;
 import stillstand.study.StudyResult.CurveUsed;
@@ -189,12 +192,27 @@ final class InventedCoasts {
                 flights,
                 List.of(),
                 List.of(),
+                tornados(levels),
                 residuals,
                 List.of(),
                 List.of(),
                 List.of(),
                 List.of(),
                 List.of());
+    }
+
+    private static List<LevelTornado> tornadosOf(List<LevelAnswer> levels) {
+        return levels.stream()
+                .flatMap(
+                        level -> level
+                                .rate()
+                                .map(rate -> SampleLeverage.tornado(level.site(), level.level(), rate.median()))
+                                .stream())
+                .toList();
+    }
+
+    private static Leverage tornados(List<LevelAnswer> levels) {
+        return new Leverage(tornadosOf(levels), List.of(), List.of(), List.of(), List.of());
     }
 
     /** High at the highstands, low half-way between them, straight in between. */

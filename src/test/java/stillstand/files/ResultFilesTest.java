@@ -3,10 +3,16 @@ package stillstand.files;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.Arrays;
 import java.util.List;
+import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
 import stillstand.SampleStudy;
+import stillstand.sensitivity.Leverage;
 
 class ResultFilesTest {
     private static final Evidence EVIDENCE = new Evidence(SampleStudy.sites());
@@ -90,5 +96,49 @@ class ResultFilesTest {
                 CsvCells.table(List.of("a", "b"), List.of(List.of("x,y", "say \"no\""), List.of("", "2")))
                         .lines()
                         .toList());
+    }
+
+    @Test
+    void tablesOfLeverageHaveARowForEachThing() {
+        Leverage leverage = SampleStudy.result().leverage();
+        String tornado = LeverageTables.tornado(leverage);
+        assertEquals(4, tornado.lines().count());
+        assertEquals("shared offset", cell(tornado, 1, "input"));
+        assertEquals("-6.0", cell(tornado, 1, "input_low95"));
+        assertEquals("5e", cell(tornado, 3, "highstand"));
+        String next = LeverageTables.nextMeasurements(leverage);
+        assertEquals("-38.5", cell(next, 1, "width95_change_percent"));
+        assertEquals("0.9375", cell(next, 1, "expected_pairing_certainty"));
+        assertEquals("", cell(next, 2, "expected_pairing_certainty"));
+        assertEquals("C-1", cell(next, 2, "sample"));
+        String switches = LeverageTables.switches(leverage);
+        assertEquals("0.43", cell(switches, 1, "rate_would_be_median_m_per_kyr"));
+        assertEquals("", cell(switches, 2, "rate_would_be_median_m_per_kyr"));
+        String samples = LeverageTables.samples(leverage);
+        assertEquals("0.41", cell(samples, 1, "flight_rate_without_median_m_per_kyr"));
+        assertEquals("", cell(samples, 1, "level_rate_without_median_m_per_kyr"));
+        String curves = LeverageTables.curves(leverage);
+        assertEquals("made-up-curve", cell(curves, 1, "curve"));
+        assertEquals("0.75", cell(curves, 1, "weight"));
+    }
+
+    /** An empty table would look like an answer; and what is left of an older run is not the new run's. */
+    @Test
+    void onlyTablesWithRowsAreWritten(@TempDir Path folder) throws IOException {
+        LeverageTables.write(folder, Leverage.NONE);
+        try (Stream<Path> files = Files.list(folder)) {
+            assertEquals(0, files.count());
+        }
+        LeverageTables.write(folder, SampleStudy.result().leverage());
+        try (Stream<Path> files = Files.list(folder)) {
+            assertEquals(
+                    List.of(
+                            "assumption-switches.csv",
+                            "curves-left-out.csv",
+                            "next-measurements.csv",
+                            "samples-left-out.csv",
+                            "tornado.csv"),
+                    files.map(file -> file.getFileName().toString()).sorted().toList());
+        }
     }
 }

@@ -32,7 +32,7 @@ class ResultsJsonTest {
     void keysAreThoseOfTheFormat() {
         JsonNode tree = new JsonMapper().readTree(TEXT);
         assertEquals(
-                "provenance sea_level levels waiting flights intervals implied_sea_level residuals curve_choice curve_evidence warnings failures ledger",
+                "provenance sea_level levels waiting flights intervals implied_sea_level leverage residuals curve_choice curve_evidence warnings failures ledger",
                 keys(tree));
         assertEquals(
                 "site model rate probability_uplift regions68 regions95 weights68 weights95 segments pairings unmatched"
@@ -50,6 +50,27 @@ class ResultsJsonTest {
         assertEquals("error width95_change_percent", keys(tree.at("/flights/0/halving/0")));
         assertEquals("criterion rate rms_m r_squared probability_as_far", keys(tree.at("/flights/0/sliding_fits/0")));
         assertEquals("model log_evidence log10_bayes_factor", keys(tree.at("/flights/0/model_choice/0")));
+        assertEquals(
+                "tornado next_measurements assumption_switches samples_left_out curves_left_out",
+                keys(tree.at("/leverage")));
+        assertEquals("site level stage rate bars other_stages", keys(tree.at("/leverage/tornado/0")));
+        assertEquals(
+                "input unit input68 input95 rate_at_low68 rate_at_high68 rate_at_low95 rate_at_high95",
+                keys(tree.at("/leverage/tornado/0/bars/0")));
+        assertEquals("stage probability rate", keys(tree.at("/leverage/tornado/0/other_stages/0")));
+        assertEquals(
+                "site rate_of level measurement sigma unit width95 expected_width95 width95_change_percent"
+                        + " width95_change_percent_error probability_wider pairing effective_draws",
+                keys(tree.at("/leverage/next_measurements/0")));
+        assertEquals("certainty expected_certainty error", keys(tree.at("/leverage/next_measurements/0/pairing")));
+        assertEquals(
+                "site rate_of assumption was would_be rate rate_would_be",
+                keys(tree.at("/leverage/assumption_switches/0")));
+        assertEquals("median interval95", keys(tree.at("/leverage/assumption_switches/0/rate")));
+        assertEquals(
+                "site level sample level_rate flight_rate flight_rate_without",
+                keys(tree.at("/leverage/samples_left_out/0")));
+        assertEquals("site rate_of curve weight rate rate_without", keys(tree.at("/leverage/curves_left_out/0")));
         assertEquals("site level predicted_m measured_m sigma_m", keys(tree.at("/residuals/0")));
         assertEquals("version seed generator inputs started seconds", keys(tree.at("/provenance")));
         assertEquals("file sha256", keys(tree.at("/provenance/inputs/0")));
@@ -115,6 +136,7 @@ class ResultsJsonTest {
                 good.flights(),
                 good.intervals(),
                 good.impliedSeaLevel(),
+                good.leverage(),
                 good.residuals(),
                 good.curveChoice(),
                 good.curveEvidence(),

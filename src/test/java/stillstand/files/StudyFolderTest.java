@@ -154,9 +154,9 @@ class StudyFolderTest {
 
     @Test
     void filesOfLaterWorkAreNamed() throws IOException {
-        write("gia.csv", "site,offset_m\n");
+        write("points.csv", "site,offset_m\n");
         assertEquals(
-                List.of("gia.csv: this file is not used yet"),
+                List.of("points.csv: this file is not used yet"),
                 read().warnings().stream().map(InputWarning::placed).toList());
     }
 

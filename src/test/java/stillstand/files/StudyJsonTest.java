@@ -12,6 +12,7 @@ import org.junit.jupiter.params.provider.MethodSource;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.Loaded;
+import stillstand.sensitivity.MeasurementPlan;
 import stillstand.shoreline.IndicativeRule;
 import stillstand.study.StatedSettings;
 import stillstand.study.StatedSettings.Place;
@@ -62,7 +63,8 @@ class StudyJsonTest {
                     Optional.empty(),
                     Optional.empty(),
                     Optional.empty(),
-                    Optional.empty()));
+                    Optional.empty()),
+            Optional.empty());
 
     private record Case(String json, List<String> messages) {
         @Override
@@ -95,11 +97,20 @@ class StudyJsonTest {
                 bad("{\"title\": \"\"}", "study.json:1:11: title: found \"\", expected a title in words"),
                 bad("{\"title\": 3}", "study.json:1:11: title: found 3, expected a title in words"),
                 bad(
+                        "{\"title\": \"A\", \"leverage\": {\"date_1sigma_ka\": 0}}",
+                        "study.json:1:47: leverage.date_1sigma_ka: found 0, expected a number above 0"),
+                bad(
+                        "{\"title\": \"A\", \"leverage\": {\"survey_2sigma_m\": 1}}",
+                        "study.json:1:29: leverage.survey_2sigma_m: found an unknown key, expected \"survey_1sigma_m\""),
+                bad(
+                        "{\"title\": \"A\", \"leverage\": true}",
+                        "study.json:1:28: leverage: found true, expected an object { … }"),
+                bad(
                         "{\"title\": \"x\",\n  \"sede\": 1}",
                         "study.json:2:3: sede: found an unknown key, expected \"seed\""),
                 bad(
                         "{\"title\": \"x\", \"qqqqqqqqq\": 1}",
-                        "study.json:1:16: qqqqqqqqq: found an unknown key, expected one of title, note, seed, draws, sea_level, rate, matching, indicative_range, screening"),
+                        "study.json:1:16: qqqqqqqqq: found an unknown key, expected one of title, note, seed, draws, sea_level, rate, matching, indicative_range, screening, leverage"),
                 bad(
                         "{\"title\": \"x\", \"title\": \"y\"}",
                         "study.json:1:16: title: found this key a second time, expected it once"),
@@ -191,7 +202,8 @@ class StudyJsonTest {
                         + "\"stray_age_maximum_ka\": 500, \"wrong_date_probability\": 0.1, \"trace_probability\": 0.9},"
                         + "\"indicative_range\": \"uniform\","
                         + "\"screening\": {\"calcite_maximum_percent\": 2, \"initial_d234u_permil\": [140, 152], \"th232_maximum_ppb\": 1,"
-                        + "\"th230_th232_minimum\": 20, \"replicates\": \"mean\", \"stratigraphic_order\": true}}";
+                        + "\"th230_th232_minimum\": 20, \"replicates\": \"mean\", \"stratigraphic_order\": true},"
+                        + "\"leverage\": {\"date_1sigma_ka\": 2}}";
         StudySettings expected = new StudySettings(
                 "A",
                 "b",
@@ -223,7 +235,8 @@ class StudyJsonTest {
                         Optional.of(1.0),
                         Optional.of(20.0),
                         Optional.of("mean"),
-                        Optional.of(true)));
+                        Optional.of(true)),
+                Optional.of(new MeasurementPlan(2, 0.3)));
         StudySettings read = parse(json).value().orElseThrow().settings();
         assertEquals(expected, read);
         assertEquals(

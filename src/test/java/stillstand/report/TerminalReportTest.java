@@ -43,6 +43,18 @@ class TerminalReportTest {
                   T4, C-2: the curve is too steep at this age to give a rate.
                   T2 waits: it is tied to no single highstand.
                   Between T1 and T4: 0.40 ± 0.05 m/kyr, 95 % 0.30 to 0.50.
+                  What to measure next: mean change of the width of the 95 % interval (what it costs is for you to
+                  say).
+                  Flight: a date of T1 to 3 ka −39 ± 2 %.
+                  T4: the taxon of C-1 −5.0 ± 0.3 %.
+                  Pairings: a date of T1 to 3 ka would raise their mean certainty from 0.88 to 0.94.
+                  If otherwise: an indicative range means, uniform in place of quadrature: T4 would have no rate of
+                  its own, not 0.44 (0.40 to 0.48).
+                  If otherwise: recording falls with age, no in place of yes: the flight would be 0.43 (0.39 to
+                  0.47), not 0.44 (0.40 to 0.48).
+                  Without sample C-1 T4 would have no rate of its own, not 0.44 (0.40 to 0.48); the flight would be
+                  0.41 (0.37 to 0.45), not 0.44 (0.40 to 0.48).
+                  Without curve made-up-curve the flight would be 0.45 (0.41 to 0.49), not 0.44 (0.40 to 0.48).
 
                 Old shore: 1 level, 1 with a rate
                   S1 moves slower than 0.024 m/kyr up and 0.032 m/kyr down, at 95 %.

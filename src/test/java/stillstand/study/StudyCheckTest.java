@@ -329,6 +329,7 @@ class StudyCheckTest {
                 plain.sites(),
                 plain.levels(),
                 plain.samples(),
+                plain.gia(),
                 Map.of("wood-1", new Uniform(9, 10)),
                 List.of(),
                 List.of(),
