@@ -28,15 +28,18 @@ class WindowModelTest {
         window.open(study());
         assertEquals(Optional.empty(), window.shownProperty().get().result());
         window.startRun();
-        assertEquals(State.DONE, window.run().state(), window.run().outcomeProperty().get());
+        assertEquals(
+                State.DONE, window.run().state(), window.run().outcomeProperty().get());
         assertFalse(window.shownProperty().get().stale());
         StudyDocument document = window.document().orElseThrow();
-        document.edit("elevation", draft -> draft.with(
-                draft.sheet("levels.csv").orElseThrow().withCells(0, 2, List.of(List.of("31")))));
+        document.edit(
+                "elevation",
+                draft -> draft.with(draft.sheet("levels.csv").orElseThrow().withCells(0, 2, List.of(List.of("31")))));
         assertTrue(window.shownProperty().get().stale());
         assertTrue(window.shownProperty().get().result().isPresent());
-        document.edit("mistake", draft -> draft.with(
-                draft.sheet("levels.csv").orElseThrow().withCells(0, 2, List.of(List.of("x")))));
+        document.edit(
+                "mistake",
+                draft -> draft.with(draft.sheet("levels.csv").orElseThrow().withCells(0, 2, List.of(List.of("x")))));
         assertTrue(window.shownProperty().get().stale());
         assertTrue(window.shownProperty().get().study().isPresent(), "the last good one");
         assertFalse(window.canRun());

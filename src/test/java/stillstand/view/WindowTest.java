@@ -111,8 +111,7 @@ class WindowTest {
         holds = true;
         robot.push("#run");
         held.await();
-        robot.interact(() -> robot.stage().fireEvent(
-                new WindowEvent(robot.stage(), WindowEvent.WINDOW_CLOSE_REQUEST)));
+        robot.interact(() -> robot.stage().fireEvent(new WindowEvent(robot.stage(), WindowEvent.WINDOW_CLOSE_REQUEST)));
         robot.waitFor(() -> !robot.stage().isShowing());
         assertFalse(robot.model().run().state().isBusy());
         assertFalse(Files.exists(folder.resolve("study/results")));
@@ -121,8 +120,7 @@ class WindowTest {
     @Test
     void keysReachEveryAreaLightAndDark() throws IOException {
         robot.open(study());
-        List<KeyCode> keys =
-                List.of(KeyCode.DIGIT1, KeyCode.DIGIT2, KeyCode.DIGIT3, KeyCode.DIGIT4, KeyCode.DIGIT5);
+        List<KeyCode> keys = List.of(KeyCode.DIGIT1, KeyCode.DIGIT2, KeyCode.DIGIT3, KeyCode.DIGIT4, KeyCode.DIGIT5);
         for (Area area : Area.values()) {
             robot.command(keys.get(area.number() - 1));
             assertEquals(area, robot.model().areaProperty().get());
@@ -179,8 +177,10 @@ class WindowTest {
 
     @Test
     void fullDiskIsSaidAndNothingIsLost() throws IOException {
-        try (FileSystem small = Jimfs.newFileSystem(
-                Configuration.unix().toBuilder().setBlockSize(512).setMaxSize(24 * 512).build())) {
+        try (FileSystem small = Jimfs.newFileSystem(Configuration.unix().toBuilder()
+                .setBlockSize(512)
+                .setMaxSize(24 * 512)
+                .build())) {
             Path study = OpenStudies.template(small.getPath("/work"));
             StudyDocument document = robot.open(study);
             String before = Files.readString(study.resolve("study.json"));
