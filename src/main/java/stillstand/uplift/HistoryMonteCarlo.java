@@ -33,6 +33,9 @@ final class HistoryMonteCarlo {
     private static final int PILOT_CELLS = 32;
     private static final double JUMP_BETWEEN_MODES = 0.1;
     private static final double NOISE = 2e-3;
+    /** Copies made by drawing anew part only by moves: so many more of them at the end. */
+    private static final int LAST = 3;
+
     private static final int BISECTIONS = 40;
 
     private final FlightModel model;
@@ -53,11 +56,11 @@ final class HistoryMonteCarlo {
      * @param islands independent populations, 4 or more
      * @param points in each, a power of two, 64 or more
      * @param cells cells of height, 10 or more; the last evaluation is at twice as many too
-     * @param sweeps moves of every point after each power, 1 or more
+     * @param sweeps moves of every point after each power, 1 or more; three times as many after the last
      */
     record Effort(int islands, int points, int cells, int sweeps) {
-        /** 8 islands of 512 points, 80 cells, 4 sweeps. */
-        static final Effort FULL = new Effort(8, 512, 80, 4);
+        /** 8 islands of 512 points, 80 cells, 3 sweeps. */
+        static final Effort FULL = new Effort(8, 512, 80, 3);
 
         Effort {
             if (!(islands >= 4 && points >= 64 && Integer.bitCount(points) == 1 && cells >= 10 && sweeps >= 1)) {
@@ -180,7 +183,8 @@ final class HistoryMonteCarlo {
                 for (int k = 0; k < log.length && first && logEvidence > Double.NEGATIVE_INFINITY; k++) {
                     log[k] = logLikelihood(at[k]); // of a hopeless point the few cells said it
                 }
-                for (int sweep = 0; sweep < effort.sweeps() && logEvidence > Double.NEGATIVE_INFINITY; sweep++) {
+                int sweeps = power == 1 ? LAST * effort.sweeps() : effort.sweeps();
+                for (int sweep = 0; sweep < sweeps && logEvidence > Double.NEGATIVE_INFINITY; sweep++) {
                     sweep();
                 }
                 if (number == 0) {
