@@ -234,7 +234,9 @@ class TracedFlightsTest {
         double other = (0.4 * 0.7 + 0.4 * 0.3 + 0.6 * 0.3) * 0.1;
         assertEquals(same + other, found.factor(), 1e-15);
         assertEquals(
-                (same + 0.6 * 0.3 * 0.1) / (same + other), found.shares().get(0).getOrDefault(List.of("B"), -1.0), 1e-15);
+                (same + 0.6 * 0.3 * 0.1) / (same + other),
+                found.shares().get(0).getOrDefault(List.of("B"), -1.0),
+                1e-15);
         assertEquals(
                 (0.4 + 0.6) * 0.3 * 0.1 / (same + other),
                 found.shares().get(1).getOrDefault(List.of(TracedShares.NO_SHORELINE), -1.0),
