@@ -17,11 +17,9 @@ final class ForestFigure {
     private ForestFigure() {}
 
     /** A row: a heading, a flight, a flight under one curve, or a level. */
-    private record Row(
-            String name, Optional<Rate> rate, List<Interval> inner, List<Interval> outer, Color colour) {
+    private record Row(String name, Optional<Rate> rate, List<Interval> inner, List<Interval> outer, Color colour) {
         static Row of(String name, Rate rate, Color colour) {
-            return new Row(
-                    name, Optional.of(rate), List.of(rate.shortest68()), List.of(rate.shortest95()), colour);
+            return new Row(name, Optional.of(rate), List.of(rate.shortest68()), List.of(rate.shortest95()), colour);
         }
     }
 
@@ -48,9 +46,8 @@ final class ForestFigure {
                     .forEach(choice -> below.add(Row.of(
                             choice.mixesCurves() ? "all curves alike" : choice.curve(), choice.rate(), Style.MUTED)));
             site.levels()
-                    .forEach(level -> level.answer()
-                            .rate()
-                            .ifPresent(rate -> below.add(Row.of(level.name(), rate, Style.SEA))));
+                    .forEach(level ->
+                            level.answer().rate().ifPresent(rate -> below.add(Row.of(level.name(), rate, Style.SEA))));
             if (!below.isEmpty()) {
                 rows.add(new Row("", Optional.empty(), List.of(), List.of(), Style.INK));
                 rows.addAll(below);
