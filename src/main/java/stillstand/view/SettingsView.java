@@ -44,6 +44,7 @@ final class SettingsView extends BorderPane {
                 column(
                         group("Curves and their weights", curves()),
                         form(SettingsModel.SEA_LEVEL),
+                        form(SettingsModel.SITES),
                         form(SettingsModel.LEVERAGE)));
         groups.getStyleClass().add("settings-groups");
         ScrollPane scroll = new ScrollPane(groups);

@@ -124,6 +124,7 @@ class PublishedStepsReferenceTest {
      * youngest dates the last occupation, 5a.
      */
     @Test
+    @Tag("slow")
     void threeAgesOnOneStepAreNeverAveraged() throws IOException {
         StudyOnDisk study = study().with("sites.csv", SITES, "Cape Laundi,-9.5,120.2,1,60")
                 .with("levels.csv", LEVELS, "Cape Laundi,I-1,3,1")

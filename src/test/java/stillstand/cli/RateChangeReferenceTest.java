@@ -63,6 +63,7 @@ class RateChangeReferenceTest {
     }
 
     @Test
+    @Tag("slow")
     void changeOfKnownAge() throws IOException {
         FlightResult flight = flight(study("one", "[150, 150]").run("--draws", "16384"));
         assertEquals("one change", flight.model());

@@ -9,6 +9,7 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import stillstand.comparison.SiteComparison;
@@ -212,6 +213,7 @@ class SitesStudyTest {
 
     /** A flight beside a site of one level, whatever the number of threads. */
     @Test
+    @Tag("slow")
     void aFlightBesideALevel() throws IOException {
         StudyOnDisk study = study(
                         "site,coast,surveyed_from_m,surveyed_to_m", "Stair,lee,2,120", "Step,lee,,", "Low,lee,2,60")

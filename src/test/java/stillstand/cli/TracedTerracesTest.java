@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
 import java.nio.file.Path;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import stillstand.study.StudyResult;
@@ -44,6 +45,7 @@ class TracedTerracesTest {
     }
 
     @Test
+    @Tag("slow")
     void aCoralOnTheNextHeadlandDatesTheTerrace() throws IOException {
         StudyResult alone = run("", "5e");
         StudyResult traced = run("Main", "5e");

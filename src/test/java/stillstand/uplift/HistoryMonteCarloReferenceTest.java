@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.List;
 import java.util.concurrent.atomic.AtomicInteger;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 import stillstand.ledger.RunCancelledException;
 import stillstand.ledger.RunMonitor;
@@ -56,6 +57,7 @@ class HistoryMonteCarloReferenceTest {
     }
 
     @Test
+    @Tag("slow")
     void noChange() {
         HistoryDraws draws = draws(new HistoryPrior.Steady(RATE));
         assertTrue(draws.logEvidenceError() < 0.1, "error " + draws.logEvidenceError());
@@ -71,6 +73,7 @@ class HistoryMonteCarloReferenceTest {
     }
 
     @Test
+    @Tag("slow")
     void changeOfKnownAge() {
         HistoryDraws draws = draws(new HistoryPrior.Stepped(RATE, 1, 150, 150));
         assertTrue(draws.logEvidenceError() < 0.1, "error " + draws.logEvidenceError());
