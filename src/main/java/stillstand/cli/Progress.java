@@ -13,6 +13,7 @@ final class Progress implements RunMonitor {
     private final boolean quiet;
     private final BooleanSupplier cancelled;
     private Instant lastTold;
+    private double lastFraction;
 
     Progress(Workshop workshop, boolean quiet, BooleanSupplier cancelled) {
         this.workshop = workshop;
@@ -23,11 +24,17 @@ final class Progress implements RunMonitor {
 
     @Override
     public synchronized void step(String what, double fraction) {
+        lastFraction = fraction;
         Instant now = workshop.clock().instant();
         if (!quiet && Duration.between(lastTold, now).compareTo(SILENCE) >= 0) {
             lastTold = now;
             workshop.err().println(Math.round(100 * fraction) + " % " + what);
         }
+    }
+
+    @Override
+    public synchronized void within(String what) {
+        step(what, lastFraction);
     }
 
     @Override

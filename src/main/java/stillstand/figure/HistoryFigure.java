@@ -8,6 +8,7 @@ import stillstand.uplift.FlightResult;
 import stillstand.uplift.FlightResult.Fate;
 import stillstand.uplift.FlightResult.Segment;
 import stillstand.uplift.Rate;
+import stillstand.uplift.RateHistory;
 
 /** The rate through time where it changes: a step for each stretch, with its intervals. */
 final class HistoryFigure {
@@ -16,7 +17,8 @@ final class HistoryFigure {
     private HistoryFigure() {}
 
     static Page page(String name, SiteView site, FlightResult flight, double widthPoints) {
-        List<Segment> segments = flight.segments();
+        List<Segment> segments =
+                flight.history().map(RateHistory::bins).orElse(flight.segments());
         double oldest = oldest(flight);
         NumberAxis ages = Style.axis("Age (ka)", 0, oldest);
         ages.setInverted(true);

@@ -23,6 +23,7 @@ import stillstand.study.StudySettings.Screening;
 import stillstand.study.StudySettings.SeaLevelChoice;
 import stillstand.study.StudySettings.Strays;
 import stillstand.study.StudySettings.WeightedCurve;
+import stillstand.uncertainty.Interval;
 import stillstand.uplift.RatePrior;
 
 /**
@@ -90,7 +91,7 @@ public final class StudyJson {
                                 .orElseGet(() -> assumed("draws.significant_digits", 2)),
                         Optional.empty()),
                 seaLevel(root.inside("sea_level")),
-                new RateChoice(prior(), changes()),
+                rate(),
                 matching(root.inside("matching")),
                 indicativeRange(),
                 screening(root.inside("screening")),
@@ -178,6 +179,31 @@ public final class StudyJson {
             assumed("rate.prior", prior.describe());
         }
         return prior;
+    }
+
+    private RateChoice rate() {
+        RatePrior prior = prior();
+        Changes changes = changes();
+        List<Double> between = root.inside("rate").numbers("change_between_ka");
+        if (between.size() != 2) {
+            return new RateChoice(prior, changes);
+        }
+        if (!(between.get(0) <= between.get(1))) {
+            problems.add(json.problem(
+                    "rate.change_between_ka",
+                    "ages " + between.get(0) + " and " + between.get(1),
+                    "two ages in ka [young, old], the young one first"));
+            return new RateChoice(prior, changes);
+        }
+        boolean severalAtOneAge = changes == Changes.UP_TO_TWO || changes == Changes.CHOOSE;
+        if (severalAtOneAge && between.get(0).equals(between.get(1))) {
+            problems.add(json.problem(
+                    "rate.change_between_ka",
+                    "one age, " + between.get(0) + ", beside two changes",
+                    "two ages in ka [young, old], or \"changes\": \"one\""));
+            return new RateChoice(prior, changes);
+        }
+        return new RateChoice(prior, changes, new Interval(between.get(0), between.get(1)));
     }
 
     private Changes changes() {

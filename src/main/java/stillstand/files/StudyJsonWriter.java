@@ -51,7 +51,11 @@ public final class StudyJsonWriter {
                         "prior",
                         prior(settings.rate().prior()),
                         "changes",
-                        word(settings.rate().changes())));
+                        word(settings.rate().changes()),
+                        "change_between_ka",
+                        List.of(
+                                settings.rate().changeBetweenKa().low(),
+                                settings.rate().changeBetweenKa().high())));
         root.put("matching", matching(settings.matching()));
         root.put("indicative_range", settings.indicativeRange().id());
         Map<String, Object> screening = screening(settings.screening());

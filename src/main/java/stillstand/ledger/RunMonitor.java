@@ -21,6 +21,13 @@ public interface RunMonitor {
      */
     void step(String what, double fraction);
 
+    /**
+     * Tells of a piece within the last step; how far the whole has come stays as it was.
+     *
+     * @param what the piece of work just begun or done
+     */
+    default void within(String what) {}
+
     /** Whether the work should stop; asked often enough that it stops within 0.2 s. */
     boolean isCancelled();
 }

@@ -41,7 +41,9 @@ public final class FlightReport {
                 .ifPresent(
                         bound -> lines.add("The flight as a whole moves " + Wording.bound(bound, flight.rate()) + "."));
         lines.add("Flight of " + Wording.counted(flight.unmatched().size(), "level") + ": "
-                + Wording.rate(flight.rate()) + " m/kyr, 95 % " + Wording.interval95(flight.rate()) + ".");
+                + Wording.rate(flight.rate()) + " m/kyr" + (flight.history().isPresent() ? " today" : "") + ", 95 % "
+                + Wording.interval95(flight.rate()) + ".");
+        flight.history().ifPresent(history -> lines.addAll(new HistoryReport(flight, history).lines()));
         if (flight.regions95().size() > 1) {
             lines.add(flight.regions95().size() + " correlations remain possible: "
                     + IntStream.range(0, flight.regions95().size())
@@ -120,7 +122,7 @@ public final class FlightReport {
         if (missed.isEmpty()) {
             return;
         }
-        lines.add("Highstands without a terrace (recorded / unseen / re-occupied / outside the survey / absent):");
+        lines.add("Stands of the sea without a level (recorded / unseen / re-occupied / outside the survey / absent):");
         missed.stream()
                 .limit(FATES_SHOWN)
                 .forEach(fate -> lines.add("  "
@@ -169,7 +171,7 @@ public final class FlightReport {
     }
 
     /** {@code 0.86}; never 0 or 1 where it is neither. */
-    private static String probability(double probability) {
+    static String probability(double probability) {
         if (probability < 0.005) {
             return probability > 0 ? "<0.01" : "0";
         }

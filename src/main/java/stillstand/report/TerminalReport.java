@@ -10,6 +10,7 @@ import stillstand.study.StudyResult;
 import stillstand.uplift.BetweenLevels;
 import stillstand.uplift.FlightResult;
 import stillstand.uplift.LevelAnswer;
+import stillstand.uplift.LevelAnswers;
 import stillstand.uplift.LevelAnswer.MonteCarlo;
 import stillstand.uplift.LevelAnswer.SampleAnswer;
 
@@ -136,7 +137,10 @@ public final class TerminalReport {
     /** What the table cannot say of a level. */
     private void remarks(LevelAnswer level) {
         result.whyWaiting(level.site(), level.level())
-                .ifPresent(reason -> say("  " + level.level() + " waits: " + reason + "."));
+                .ifPresent(reason -> say("  " + level.level()
+                        + (reason.equals(LevelAnswers.ONE_EARTHQUAKE)
+                                ? " is one earthquake's step: it records no sea level, and stays out of rates and matching."
+                                : " waits: " + reason + ".")));
         for (SampleAnswer sample : level.samples()) {
             sample.whyNoRate()
                     .ifPresent(reason -> say("  " + level.level() + ", " + sample.sample() + ": " + reason + "."));

@@ -44,6 +44,18 @@ public final class TurningPoints {
                 .min(Comparator.comparingDouble(TurningPoint::levelMetres).thenComparing(TurningPoint::ageKa));
     }
 
+    /**
+     * The lowest trough that a curve shows strictly between two ages, ka; of equal ones the youngest.
+     *
+     * @return empty where it shows none at an age the curve may be used at
+     */
+    static Optional<TurningPoint> lowestBetween(SeaLevelCurve curve, double youngerKa, double olderKa) {
+        return peaks(curve, -1).stream()
+                .filter(trough -> trough.ageKa() > youngerKa && trough.ageKa() < olderKa)
+                .filter(trough -> curve.isUsableAt(trough.ageKa()))
+                .min(Comparator.comparingDouble(TurningPoint::levelMetres).thenComparing(TurningPoint::ageKa));
+    }
+
     /** All peaks (sign 1) or troughs (sign -1) that stand out enough, young to old. The interpolant turns at rows only. */
     private static List<TurningPoint> peaks(SeaLevelCurve curve, int sign) {
         List<CurveKnot> knots = curve.knots();

@@ -159,7 +159,8 @@ final class FlightCheck {
         int last = -1;
         String below = "";
         for (LevelsTable.LevelRow level : flight) {
-            if (level.highstand().only().isEmpty() || level.doubtful()) {
+            boolean drowned = level.formsAt() == FormsAt.DROWNING; // there deeper is older
+            if (level.highstand().only().isEmpty() || level.doubtful() || drowned) {
                 continue;
             }
             int next = last + 1;

@@ -42,7 +42,7 @@ final class LevelsTable {
                     Column.plain("cover_up_to_m"),
                     LOWERING,
                     Column.plain("highstand"),
-                    Column.plain("terrace").notUsedYet(),
+                    Column.plain("terrace"),
                     Column.plain("certainty"),
                     Column.plain("order"),
                     Column.plain("coseismic_step_m"),

@@ -18,7 +18,6 @@ import stillstand.shoreline.DatedSample;
 import stillstand.shoreline.Level;
 import stillstand.shoreline.Site;
 import stillstand.study.StatedSettings.Place;
-import stillstand.study.StudySettings.Changes;
 
 /**
  * Every check of a study, on tables: all problems at once, in reading order, before anything is computed. Terminal and
@@ -73,6 +72,10 @@ public final class StudyCheck {
                 .orElse(List.of());
         Plausibility.check(sites, levels, samples, at);
         FlightCheck.check(sites, levels, at);
+        DrownedCheck.check(sites, levels, at);
+        input.settings().ifPresent(stated -> TraceCheck.check(stated.settings(), levels, at));
+        input.settings()
+                .ifPresent(stated -> ChangesCheck.check(stated.settings().rate(), sites, levels, samples));
         Function<String, List<SeaLevelCase>> serving = ServingCurves.of(sites, levels, samples, at, findings);
         Map<String, LocalDeparture> departures = input.gia()
                 .map(table -> new GiaTable(findings).read(table, sites, labels))
@@ -109,9 +112,7 @@ public final class StudyCheck {
 
     private void checkSettings(StatedSettings stated) {
         stated.defaults().forEach(findings::add);
-        warnUnused(stated, "matching.trace_probability", stated.states("matching.trace_probability"));
         warnUnused(stated, "screening", stated.states("screening"));
-        warnUnused(stated, "rate.changes", stated.settings().rate().changes() != Changes.NONE);
     }
 
     private void warnUnused(StatedSettings stated, String keyPath, boolean isStated) {

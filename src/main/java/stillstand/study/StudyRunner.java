@@ -28,9 +28,11 @@ import stillstand.uplift.LevelAnswers;
 import stillstand.uplift.LevelRates;
 import stillstand.uplift.LevelResidual;
 import stillstand.uplift.MatchingRules;
+import stillstand.uplift.RateChanges;
 import stillstand.uplift.SeaLevelEnsemble;
 import stillstand.uplift.SharedPriors;
 import stillstand.uplift.SiteRelations;
+import stillstand.uplift.TracedFlights;
 
 /**
  * Runs a study site by site. What comes out is a function of the study alone: threads and the order in which they work change
@@ -78,8 +80,16 @@ public final class StudyRunner {
                 settings.indicativeRange(),
                 dates);
         MatchingRules rules = rules(settings.matching());
-        matching = new Flights(streams, executor, monitor, rules, settings.indicativeRange());
+        matching = new Flights(
+                streams, executor, monitor, rules, settings.indicativeRange(), changes(settings.rate()));
         hinges = new SiteHinges(settings, rules, dates, streams, executor, monitor);
+    }
+
+    private static RateChanges changes(StudySettings.RateChoice rate) {
+        return new RateChanges(
+                RateChanges.Models.valueOf(rate.changes().name()),
+                rate.changeBetweenKa().low(),
+                rate.changeBetweenKa().high());
     }
 
     /** Settings of matching as the engine takes them: what is not stated stays its own default. */
@@ -142,6 +152,7 @@ public final class StudyRunner {
                 failures.add(new StudyResult.Failure(site.site().name(), String.valueOf(e.getMessage())));
             }
         }
+        runTraces();
         monitor.step("done", 1);
         return new StudyResult(
                 new Provenance(
@@ -164,6 +175,29 @@ public final class StudyRunner {
                 study.warnings(),
                 failures,
                 JoinedLedger.of(ledger));
+    }
+
+    /** Flights whose terraces were traced to other sites take the place of those of the sites alone. */
+    private void runTraces() {
+        try {
+            StudySettings settings = study.settings();
+            TracedFlights tracing = new TracedFlights(
+                    streams,
+                    executor,
+                    monitor,
+                    rules(settings.matching()),
+                    settings.indicativeRange(),
+                    settings.matching().traceProbability());
+            for (Flights.Answered answered : TracedSites.flights(study, flights, tracing)) {
+                String site = answered.flight().site();
+                flights.replaceAll(flight -> flight.site().equals(site) ? answered.flight() : flight);
+                residuals.removeIf(residual -> residual.site().equals(site));
+                residuals.addAll(answered.residuals());
+                ledger.addAll(answered.assumptions());
+            }
+        } catch (IllegalArgumentException e) {
+            failures.add(new StudyResult.Failure("traced terraces", String.valueOf(e.getMessage())));
+        }
     }
 
     private Optional<String> coast(String site) {

@@ -4,6 +4,8 @@ import java.util.List;
 import java.util.Optional;
 import stillstand.sensitivity.MeasurementPlan;
 import stillstand.shoreline.IndicativeRule;
+import stillstand.uncertainty.Interval;
+import stillstand.uplift.RateChanges;
 import stillstand.uplift.RatePrior;
 
 /**
@@ -112,8 +114,19 @@ public record StudySettings(
     /** A number and whether the user wrote it (true) or it is the default (false). */
     public record Setting(double value, boolean stated) {}
 
-    /** Prior of the rate, and whether it may change with time. */
-    public record RateChoice(RatePrior prior, Changes changes) {}
+    /**
+     * Prior of the rate, and whether it may change with time.
+     *
+     * @param prior of each rate
+     * @param changes which models are weighed
+     * @param changeBetweenKa lowest and highest age of a change, ka, above 0; the same where the age of one change is known
+     */
+    public record RateChoice(RatePrior prior, Changes changes, Interval changeBetweenKa) {
+        /** A choice with the default ages of a change. */
+        public RateChoice(RatePrior prior, Changes changes) {
+            this(prior, changes, new Interval(RateChanges.DEFAULT_FROM_KA, RateChanges.DEFAULT_TO_KA));
+        }
+    }
 
     /** How the rate may change with time. */
     public enum Changes {

@@ -4,13 +4,13 @@ import java.util.List;
 import java.util.Optional;
 
 /**
- * One joint draw: a rate, a whole correlation, and for each level that is a shoreline its height, age and former sea level.
+ * One joint draw: a history of uplift, a whole correlation, and for each level that is a shoreline its height, age and former sea level.
  *
- * @param rateMetresPerKyr the rate, m/kyr
+ * @param history how the coast has moved
  * @param shared the shared numbers
  * @param matches by level; absent where the level is a stray
  */
-public record FlightDraw(double rateMetresPerKyr, SharedNumbers shared, List<Optional<Match>> matches) {
+public record FlightDraw(UpliftHistory history, SharedNumbers shared, List<Optional<Match>> matches) {
     /**
      * A level's shoreline.
      *
@@ -23,6 +23,16 @@ public record FlightDraw(double rateMetresPerKyr, SharedNumbers shared, List<Opt
 
     public FlightDraw {
         matches = List.copyOf(matches);
+    }
+
+    /** A draw with one rate for all time, m/kyr. */
+    public FlightDraw(double rateMetresPerKyr, SharedNumbers shared, List<Optional<Match>> matches) {
+        this(new UpliftHistory.ConstantRate(rateMetresPerKyr), shared, matches);
+    }
+
+    /** The rate today, m/kyr: the only one where it has not changed. */
+    public double rateMetresPerKyr() {
+        return history.rateMetresPerKyrAt(0);
     }
 
     /** By level, the row it records, or -1 where it is a stray. */

@@ -141,7 +141,46 @@ public final class FlightMixture {
                 leftOut(main),
                 halving(main),
                 main.slidingFits(),
-                modelChoice(main));
+                modelChoice(main),
+                main.history().map(this::history));
+    }
+
+    /** Bin by bin, and change by change where all accounts have as many; else those of the heaviest. */
+    private RateHistory history(RateHistory own) {
+        List<RateHistory> all = flights.stream()
+                .flatMap(flight -> flight.history().stream())
+                .toList();
+        boolean alike = all.size() == flights.size()
+                && all.stream().allMatch(other -> other.bins().size() == own.bins().size()
+                        && other.changes().size() == own.changes().size());
+        if (!alike) {
+            return own;
+        }
+        List<FlightResult.Segment> bins = new ArrayList<>();
+        for (int i = 0; i < own.bins().size(); i++) {
+            int number = i;
+            bins.add(new FlightResult.Segment(
+                    own.bins().get(i).fromKa(),
+                    own.bins().get(i).toKa(),
+                    RateMixture.of(
+                            all.stream()
+                                    .map(each -> each.bins().get(number).rate())
+                                    .toList(),
+                            weights)));
+        }
+        List<RateHistory.Change> changes = new ArrayList<>();
+        for (int i = 0; i < own.changes().size(); i++) {
+            int number = i;
+            List<RateHistory.Change> each =
+                    all.stream().map(other -> other.changes().get(number)).toList();
+            changes.add(new RateHistory.Change(
+                    own.changes().get(i).model(),
+                    QuantityMixture.of(each.stream().map(RateHistory.Change::age).toList(), weights),
+                    mean(each, weights, RateHistory.Change::probabilityFasterBefore),
+                    own.changes().get(i).datedYounger(),
+                    own.changes().get(i).datedOlder()));
+        }
+        return new RateHistory(changes, bins);
     }
 
     private double mean(ToDoubleFunction<FlightResult> value) {
@@ -297,6 +336,14 @@ public final class FlightMixture {
                 .toList();
     }
 
+    private static double weight(FlightResult flight, String model) {
+        return flight.modelChoice().stream()
+                .filter(each -> each.model().equals(model))
+                .flatMap(each -> each.weight().stream())
+                .findFirst()
+                .orElse(0.0);
+    }
+
     /** Evidence of each model of the rate through time, summed over the accounts. */
     private List<FlightResult.ModelEvidence> modelChoice(FlightResult main) {
         List<FlightResult.ModelEvidence> mixed = new ArrayList<>();
@@ -314,7 +361,13 @@ public final class FlightMixture {
             }
             double log = logEvidence + Math.log(sum);
             constant = mixed.isEmpty() ? log : constant;
-            mixed.add(new FlightResult.ModelEvidence(model.model(), log, (log - constant) / Math.log(10)));
+            mixed.add(new FlightResult.ModelEvidence(
+                    model.model(),
+                    log,
+                    (log - constant) / Math.log(10),
+                    model.numericalError(),
+                    model.weight().map(own -> mean(flight -> weight(flight, model.model()))),
+                    model.prior()));
         }
         return mixed;
     }

@@ -4,8 +4,6 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
-import org.apache.commons.rng.UniformRandomProvider;
 import stillstand.ledger.RunCancelledException;
 import stillstand.ledger.RunMonitor;
 import stillstand.uncertainty.DrawStreams;
@@ -25,8 +23,11 @@ public final class FlightMonteCarlo {
     private static final int PILOT_RATES = 300;
     private static final double FLAT = 0.2;
     private static final double ROOT = 0.3;
-    private static final double HOPELESS = 25;
-    private static final double NEGLIGIBLE = 1e-6;
+    /** A point this far below the best, in log evidence, weighs too little for its finer pass to matter. */
+    private static final double HOPELESS = 12;
+    /** Scrambles are added until no error of median or 68 % ends is above this part of half the 68 % interval. */
+    private static final double TOLERANCE = 0.02;
+
     private static final double[] PROBABILITIES = {0.025, 0.15865, 0.5, 0.84135, 0.975};
 
     private final FlightModel model;
@@ -50,18 +51,28 @@ public final class FlightMonteCarlo {
     /**
      * How much to compute.
      *
-     * @param scrambles independent scrambles, 4 or more
+     * @param scrambles independent scrambles to begin with, 4 or more
+     * @param mostScrambles as many at most, where the error is still too large
      * @param points in each, a power of two
      * @param cells cells of height in the coarser of the two passes, 10 or more
      * @param draws joint draws, from which the pairings are averaged, 100 or more
      */
-    public record Effort(int scrambles, int points, int cells, int draws) {
-        /** 16 scrambles of 512 points, 100 and 200 cells, 1000 draws. */
-        public static final Effort FULL = new Effort(16, 512, 100, 1000);
+    public record Effort(int scrambles, int mostScrambles, int points, int cells, int draws) {
+        /** 16 to 64 scrambles of 512 points, 100 and 200 cells, 1000 draws. */
+        public static final Effort FULL = new Effort(16, 64, 512, 100, 1000);
+
+        /** An effort that never grows. */
+        public Effort(int scrambles, int points, int cells, int draws) {
+            this(scrambles, scrambles, points, cells, draws);
+        }
 
         /** @throws IllegalArgumentException if a number is too small or {@code points} no power of two */
         public Effort {
-            if (!(scrambles >= 4 && cells >= 10 && draws >= 100 && Integer.bitCount(points) == 1)) {
+            if (!(scrambles >= 4
+                    && mostScrambles >= scrambles
+                    && cells >= 10
+                    && draws >= 100
+                    && Integer.bitCount(points) == 1)) {
                 throw new IllegalArgumentException("effort is too small: " + scrambles + " scrambles, " + points
                         + " points, " + cells + " cells, " + draws + " draws");
             }
@@ -87,7 +98,7 @@ public final class FlightMonteCarlo {
         this.workers = workers;
         coarse = new ShorelineFilter(model, effort.cells());
         fine = new ShorelineFilter(model, 2 * effort.cells());
-        int count = effort.scrambles() * effort.points();
+        int count = effort.mostScrambles() * effort.points();
         rates = new double[count];
         numbers = new SharedNumbers[count];
         logCoarse = new double[count];
@@ -129,37 +140,80 @@ public final class FlightMonteCarlo {
 
     private SampledFlightAnswer answer() {
         RatePosterior proposal = proposal();
-        evaluate(proposal);
+        int scrambles = effort.scrambles();
+        evaluate(proposal, 0, scrambles);
+        double highest = highest(scrambles);
+        WeightedRates weighted = weighted(scrambles, highest);
+        while (scrambles < effort.mostScrambles() && !isSettled(weighted, scrambles)) {
+            int more = Math.min(2 * scrambles, effort.mostScrambles());
+            evaluate(proposal, scrambles, more);
+            scrambles = more;
+            highest = highest(scrambles);
+            weighted = weighted(scrambles, highest);
+        }
+        return answer(weighted, scrambles, highest);
+    }
+
+    private double highest(int scrambles) {
         double highest = Double.NEGATIVE_INFINITY;
-        for (int k = 0; k < rates.length; k++) {
+        for (int k = 0; k < scrambles * effort.points(); k++) {
             highest = Math.max(highest, Math.max(logCoarse[k], logFine[k]));
         }
-        double[] weights = new double[rates.length];
-        for (int k = 0; k < rates.length; k++) {
-            double one = Math.exp(logCoarse[k] - highest);
-            double two = Math.exp(logFine[k] - highest);
-            weights[k] = Math.max(0, two + (two - one) / 3);
+        return highest;
+    }
+
+    private WeightedRates weighted(int scrambles, double highest) {
+        int count = scrambles * effort.points();
+        double[] weights = new double[count];
+        for (int k = 0; k < count; k++) {
+            weights[k] = weight(k, highest);
         }
-        WeightedRates weighted = new WeightedRates(rates, weights, blocks);
-        double logEvidence = highest + Math.log(weighted.total(-1) / rates.length);
+        return new WeightedRates(Arrays.copyOf(rates, count), weights, Arrays.copyOf(blocks, count));
+    }
+
+    /** Evidence of a point at vanishing cells, relative to the best. */
+    private double weight(int point, double highest) {
+        double one = Math.exp(logCoarse[point] - highest);
+        double two = Math.exp(logFine[point] - highest);
+        return Math.max(0, two + (two - one) / 3);
+    }
+
+    private static boolean isSettled(WeightedRates weighted, int scrambles) {
+        double[] ends = {PROBABILITIES[1], PROBABILITIES[2], PROBABILITIES[3]};
+        double[][] without = new double[ends.length][scrambles];
+        for (int block = 0; block < scrambles; block++) {
+            double[] quantiles = weighted.quantiles(ends, block);
+            for (int i = 0; i < ends.length; i++) {
+                without[i][block] = quantiles[i];
+            }
+        }
+        double[] all = weighted.quantiles(ends, -1);
+        double largest = Arrays.stream(without)
+                .mapToDouble(FlightMonteCarlo::jackknife)
+                .max()
+                .orElseThrow();
+        return largest <= TOLERANCE * (all[2] - all[0]) / 2;
+    }
+
+    private SampledFlightAnswer answer(WeightedRates weighted, int scrambles, double highest) {
+        double logEvidence = highest + Math.log(weighted.total(-1) / (scrambles * effort.points()));
         RatePosterior posterior = weighted.posterior(logEvidence);
-        int[] chosen = weighted.chosen(effort.draws());
-        PairingSums[] parts = new PairingSums[effort.scrambles()];
-        PairingSums[] sums = new PairingSums[2];
-        JointDraws[] joint = new JointDraws[1];
-        double top = highest;
-        workers.run(List.of(
-                () -> sums[0] = sums(coarse, chosen, weights, logCoarse, top, parts),
-                () -> sums[1] = sums(fine, chosen, weights, logFine, top, new PairingSums[effort.scrambles()]),
-                () -> joint[0] = draws(chosen)));
-        PairingSums coarseSums = sums[0];
-        PairingSums fineSums = sums[1];
-        PairingTable table = coarseSums.extrapolatedWith(fineSums);
-        double stray = Math.exp(logAllStray(highest) - Math.log(weighted.total(-1)));
+        List<ChosenDraws.Chosen> draws = new ArrayList<>();
+        for (int k : weighted.chosen(effort.draws())) {
+            draws.add(new ChosenDraws.Chosen(
+                    new UpliftHistory.ConstantRate(rates[k]),
+                    numbers[k],
+                    Math.exp(logCoarse[k] - highest) / weight(k, highest),
+                    Math.exp(logFine[k] - highest) / weight(k, highest),
+                    blocks[k]));
+        }
+        ChosenDraws.Found found = new ChosenDraws(coarse, fine, draws, scrambles, monitor).found(streams, key, workers);
+        double stray = Math.exp(logAllStray(scrambles, highest) - Math.log(weighted.total(-1)));
         double probabilityAllStray = model.countsAllStray() ? Math.min(1, stray) : stray / (1 + stray);
         FlightAnswer answer =
-                new FlightAnswer(posterior, table, ages(table, fineSums), positions(chosen), probabilityAllStray);
-        return new SampledFlightAnswer(answer, error(weighted, coarseSums, parts), joint[0], weighted.effectiveDraws());
+                new FlightAnswer(posterior, found.table(), found.ages(), found.positions(), probabilityAllStray);
+        return new SampledFlightAnswer(
+                answer, error(weighted, scrambles, found.pairingError()), found.joint(), weighted.effectiveDraws());
     }
 
     /** The density that rates are drawn from. */
@@ -233,12 +287,14 @@ public final class FlightMonteCarlo {
         }
     }
 
-    /** The first scramble says what is hopeless; the others may be worked out in any order. */
-    private void evaluate(RatePosterior proposal) {
-        evaluate(proposal, 0, Double.NEGATIVE_INFINITY);
+    /** The first scramble of all says what is hopeless; the others may be worked out in any order. */
+    private void evaluate(RatePosterior proposal, int from, int to) {
+        if (from == 0) {
+            evaluate(proposal, 0, Double.NEGATIVE_INFINITY);
+        }
         double highest = Arrays.stream(logCoarse, 0, effort.points()).max().orElseThrow();
         List<Runnable> others = new ArrayList<>();
-        for (int block = 1; block < effort.scrambles(); block++) {
+        for (int block = Math.max(1, from); block < to; block++) {
             int number = block;
             others.add(() -> evaluate(proposal, number, highest));
         }
@@ -274,91 +330,17 @@ public final class FlightMonteCarlo {
         }
     }
 
-    private PairingSums sums(
-            ShorelineFilter filter,
-            int[] chosen,
-            double[] weights,
-            double[] logs,
-            double highest,
-            PairingSums[] parts) {
-        FilterWorkspace workspace = filter.workspace(true);
-        BackwardPass pass = new BackwardPass(filter, workspace);
-        PairingSums all = new PairingSums(model.levels().size(), model.rows().size());
-        for (int block = 0; block < parts.length; block++) {
-            parts[block] = new PairingSums(model.levels().size(), model.rows().size());
-        }
-        int before = -1;
-        for (int k : chosen) {
-            if (k != before) {
-                stopIfCancelled();
-                pass.run(new UpliftHistory.ConstantRate(rates[k]), numbers[k]);
-                before = k;
-            }
-            double share = Math.exp(logs[k] - highest) / weights[k];
-            all.add(workspace, share);
-            parts[blocks[k]].add(workspace, share);
-        }
-        return all;
-    }
-
-    private List<Optional<LevelAge>> ages(PairingTable table, PairingSums sums) {
-        List<Optional<LevelAge>> ages = new ArrayList<>();
-        for (int i = 0; i < table.levels(); i++) {
-            List<LevelAge.Part> parts = new ArrayList<>();
-            for (int j = 0; j < table.rows(); j++) {
-                if (table.probability(i, j) > NEGLIGIBLE) {
-                    parts.add(sums.agePart(i, j, table.probability(i, j)));
-                }
-            }
-            ages.add(parts.isEmpty() ? Optional.empty() : Optional.of(new LevelAge(parts)));
-        }
-        return ages;
-    }
-
-    private List<RowPosition> positions(int[] chosen) {
-        RowCells cells = new RowCells(coarse.cells.count());
-        List<RowPosition> positions = new ArrayList<>();
-        for (FlightRow row : model.rows()) {
-            double first = 0;
-            double second = 0;
-            for (int k : chosen) {
-                cells.moments(row, new UpliftHistory.ConstantRate(rates[k]), numbers[k]);
-                first += cells.meanMetres / chosen.length;
-                second += (cells.varianceMetres2 + cells.meanMetres * cells.meanMetres) / chosen.length;
-            }
-            positions.add(new RowPosition(first, Math.sqrt(Math.max(0, second - first * first))));
-        }
-        return positions;
-    }
-
     /** All strays, summed over points as the weights are: no draw of the expected strays is needed. */
-    private double logAllStray(double highest) {
+    private double logAllStray(int scrambles, double highest) {
         double log = shared.strays().logMeanOfAllStray(model.levels().size()) + coarse.logStrayDensities();
         double sum = 0;
-        for (double nothing : logNothing) {
-            sum += Math.exp(nothing + log - highest);
+        for (int k = 0; k < scrambles * effort.points(); k++) {
+            sum += Math.exp(logNothing[k] + log - highest);
         }
         return Math.log(sum);
     }
 
-    private JointDraws draws(int[] chosen) {
-        CorrelationSampler sampler = new CorrelationSampler(coarse);
-        UniformRandomProvider random = streams.stream(key + " correlations", 0);
-        List<FlightDraw> draws = new ArrayList<>();
-        int before = -1;
-        for (int k : chosen) {
-            if (k != before) {
-                stopIfCancelled();
-                sampler.prepare(new UpliftHistory.ConstantRate(rates[k]), numbers[k]);
-                before = k;
-            }
-            draws.add(new FlightDraw(rates[k], numbers[k], sampler.draw(random)));
-        }
-        return new JointDraws(draws);
-    }
-
-    private SampledFlightAnswer.NumericalError error(WeightedRates weighted, PairingSums all, PairingSums[] parts) {
-        int count = effort.scrambles();
+    private SampledFlightAnswer.NumericalError error(WeightedRates weighted, int count, double pairingError) {
         double[][] without = new double[2 + PROBABILITIES.length][count];
         for (int block = 0; block < count; block++) {
             without[0][block] = Math.log(weighted.total(block));
@@ -376,7 +358,7 @@ public final class FlightMonteCarlo {
                 jackknife(without[5]),
                 jackknife(without[2]),
                 jackknife(without[6]),
-                all.largestError(parts));
+                pairingError);
     }
 
     /** Standard error of an estimate from its values without one block each. */

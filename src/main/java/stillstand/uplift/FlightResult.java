@@ -9,8 +9,8 @@ import stillstand.uncertainty.Interval;
  * what the answer hangs on. Rates in m/kyr, ages in ka, heights in m above present mean sea level.
  *
  * @param site its name
- * @param model {@code constant} or {@code one change}
- * @param rate the rate; under one change the recent one
+ * @param model of the rate through time, such as {@code constant} or {@code one change}
+ * @param rate the rate; where it changes, that of today
  * @param probabilityUplift that the coast rises; absent under a one-signed prior
  * @param bound how fast the coast can move at most, where the 95 % interval holds 0
  * @param regions68 the rates of highest density that together hold 0.6827: one region for each correlation still possible
@@ -30,6 +30,7 @@ import stillstand.uncertainty.Interval;
  * @param halving what halving one kind of error would do
  * @param slidingFits what sliding the rate by hand would have given; for comparison only
  * @param modelChoice evidence of each model of the rate through time
+ * @param history the rate through time; absent where it does not change
  */
 public record FlightResult(
         String site,
@@ -53,11 +54,20 @@ public record FlightResult(
         List<LeftOut> leaveOneOut,
         List<Halving> halving,
         List<HandFit> slidingFits,
-        List<ModelEvidence> modelChoice) {
+        List<ModelEvidence> modelChoice,
+        Optional<RateHistory> history) {
     /** Name of the model without a change of rate. */
     public static final String CONSTANT = "constant";
     /** Name of the model with one change of rate. */
     public static final String ONE_CHANGE = "one change";
+    /** Name of the model with two changes of rate. */
+    public static final String TWO_CHANGES = "two changes";
+    /** Name of the answer weighted over none, one and two changes. */
+    public static final String UP_TO_TWO_CHANGES = "up to two changes";
+    /** Name of the model whose rate wanders. */
+    public static final String GRADUAL = "gradual";
+    /** Name of the answer weighted over all models by their evidence. */
+    public static final String WEIGHTED = "weighted";
 
     public FlightResult {
         regions68 = List.copyOf(regions68);
@@ -73,6 +83,56 @@ public record FlightResult(
         halving = List.copyOf(halving);
         slidingFits = List.copyOf(slidingFits);
         modelChoice = List.copyOf(modelChoice);
+    }
+
+    /** A flight whose rate does not change. */
+    public FlightResult(
+            String site,
+            String model,
+            Rate rate,
+            Optional<Double> probabilityUplift,
+            Optional<LevelAnswer.Bound> bound,
+            List<Interval> regions68,
+            List<Interval> regions95,
+            List<Double> weights68,
+            List<Double> weights95,
+            List<Segment> segments,
+            List<Pairing> pairings,
+            List<Unmatched> unmatched,
+            double probabilityAllStray,
+            Correlation mostProbable,
+            List<PredictedAge> predictedAges,
+            double logEvidence,
+            NumericalError numericalError,
+            List<Fate> missing,
+            List<LeftOut> leaveOneOut,
+            List<Halving> halving,
+            List<HandFit> slidingFits,
+            List<ModelEvidence> modelChoice) {
+        this(
+                site,
+                model,
+                rate,
+                probabilityUplift,
+                bound,
+                regions68,
+                regions95,
+                weights68,
+                weights95,
+                segments,
+                pairings,
+                unmatched,
+                probabilityAllStray,
+                mostProbable,
+                predictedAges,
+                logEvidence,
+                numericalError,
+                missing,
+                leaveOneOut,
+                halving,
+                slidingFits,
+                modelChoice,
+                Optional.empty());
     }
 
     /** Probability that a level is no shoreline; empty where the level takes no part. */
@@ -189,6 +249,20 @@ public record FlightResult(
      * @param model its name
      * @param logEvidence natural logarithm
      * @param log10BayesFactor decimal logarithm of its evidence over that of the constant rate
+     * @param numericalError standard error of the natural logarithm; absent where the rate may not change
+     * @param weight its share of the answer; absent where the rate may not change
+     * @param prior what it holds beforehand, in words: its evidence depends on these ranges
      */
-    public record ModelEvidence(String model, double logEvidence, double log10BayesFactor) {}
+    public record ModelEvidence(
+            String model,
+            double logEvidence,
+            double log10BayesFactor,
+            Optional<Double> numericalError,
+            Optional<Double> weight,
+            Optional<String> prior) {
+        /** The evidence alone. */
+        public ModelEvidence(String model, double logEvidence, double log10BayesFactor) {
+            this(model, logEvidence, log10BayesFactor, Optional.empty(), Optional.empty(), Optional.empty());
+        }
+    }
 }

@@ -64,6 +64,22 @@ public record FlightRow(
         return withSigmas(ageSigmaKa, Math.hypot(levelSigmaMetres, addedSigmaMetres));
     }
 
+    /** The same row upside down: a lowstand for a highstand. */
+    FlightRow mirrored() {
+        return new FlightRow(
+                stage,
+                ageKa,
+                ageSigmaKa,
+                -levelMetres,
+                levelSigmaMetres,
+                -levelAgeCovarianceMetresKa,
+                durationKa,
+                existence,
+                takesOffset,
+                takesInterstadial,
+                takesCurveAge);
+    }
+
     /** The same row with these standard deviations. */
     public FlightRow withSigmas(double otherAgeSigmaKa, double otherLevelSigmaMetres) {
         return new FlightRow(

@@ -1,6 +1,7 @@
 package stillstand.uplift;
 
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.Comparator;
 import java.util.HashSet;
 import java.util.List;
@@ -31,16 +32,17 @@ import stillstand.uncertainty.Tabulated;
 import stillstand.uncertainty.Uncertain;
 
 /**
- * The flight of a site as the engine takes it: which levels take part and in which order, what their heights and dates say, the
+ * The flight of a site as the engine takes it: in a mirror where its levels are reefs that drowned ({@link FlightMirror}); which levels take part and in which order, what their heights and dates say, the
  * rows of the highstand table, and the priors of what they share. A complete table is taken as it stands; every other gets the
  * default model.
  *
  * @param model levels, rows and fixed rules
  * @param shared priors of the shared numbers
  * @param complete whether the table is taken as it stands
+ * @param mirrored whether heights, rows and rates are those of a mirror: for reefs that drowned
  * @param assumptions what was supposed on the way
  */
-public record FlightSetup(FlightModel model, SharedPriors shared, boolean complete, List<Assumption> assumptions) {
+public record FlightSetup(FlightModel model, SharedPriors shared, boolean complete, boolean mirrored, List<Assumption> assumptions) {
     private static final String OURS = "Stillstand's default";
     /** A date without a spread gets this one, ka: nothing is dated better. */
     private static final double LEAST_DATE_SIGMA_KA = 0.01;
@@ -53,12 +55,17 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
 
     /** Whether a level takes part in the matching of its site. */
     public static boolean takesPart(FormsAt formsAt) {
-        return formsAt == FormsAt.HIGHSTAND;
+        return formsAt == FormsAt.HIGHSTAND || formsAt == FormsAt.DROWNING;
     }
 
     /** Whether matching has to say which highstand made a level. */
     public static boolean isToBeMatched(FormsAt formsAt, StageChoice highstand) {
         return takesPart(formsAt) && highstand.pinned().isEmpty();
+    }
+
+    /** Whether the levels of a site are reefs that drowned on a sinking coast. */
+    static boolean isDrowned(Site site) {
+        return site.levels().stream().anyMatch(level -> level.formsAt() == FormsAt.DROWNING);
     }
 
     /** Whether the site has a level to be matched. */
@@ -72,6 +79,11 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
             return Optional.of("no surveyed range is given");
         }
         Interval surveyed = site.surveyedMetres().get();
+        if (isDrowned(site)) {
+            return !basis.highstands().complete() && !(surveyed.low() < 0)
+                    ? Optional.of("the surveyed range lies wholly above today's sea, where no reef has drowned")
+                    : Optional.empty();
+        }
         if (!basis.highstands().complete() && !(surveyed.high() > 0)) {
             return Optional.of("the surveyed range lies wholly below today's sea, where shorelines are not matched");
         }
@@ -119,12 +131,14 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
         private final MatchingRules rules;
         private final IndicativeRule rule;
         private final boolean complete;
+        private final boolean mirrored;
         private final double datumSigmaMetres;
         private final List<Assumption> said = new ArrayList<>();
 
         Builder(Site site, SeaLevelBasis basis, MatchingRules rules, IndicativeRule rule) {
             this.site = site;
-            this.basis = basis;
+            mirrored = isDrowned(site);
+            this.basis = mirrored ? basis.ofDrownedReefs() : basis;
             this.rules = rules;
             this.rule = rule;
             complete = basis.highstands().complete();
@@ -132,15 +146,20 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
         }
 
         FlightSetup setup() {
-            Interval surveyed = site.surveyedMetres().orElseThrow();
+            Interval asked = site.surveyedMetres().orElseThrow();
+            Interval surveyed = mirrored ? new Interval(-asked.high(), -asked.low()) : asked;
             List<FlightLevel> levels = new ArrayList<>();
             List<LimitingPoint> limiting = new ArrayList<>();
-            for (Level level : inOrder(
+            List<Level> lowestFirst = new ArrayList<>(inOrder(
                     site.levels(),
                     Level::order,
-                    level -> level.elevationMetres().mean())) {
+                    level -> level.elevationMetres().mean()));
+            if (mirrored) {
+                Collections.reverse(lowestFirst);
+            }
+            for (Level level : lowestFirst) {
                 switch (level.formsAt()) {
-                    case HIGHSTAND -> levels.add(level(level));
+                    case HIGHSTAND, DROWNING -> levels.add(level(level));
                     case MARINE_LIMITING ->
                         limiting(level, LimitingPoint.Side.BELOW_SEA).ifPresent(limiting::add);
                     case TERRESTRIAL_LIMITING ->
@@ -163,8 +182,11 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
                     complete,
                     limiting);
             SharedPriors shared = shared(levels.size());
-            sayRules(surveyed, shared, model);
-            return new FlightSetup(model, shared, complete, said);
+            if (mirrored) {
+                said.addAll(this.basis.highstands().assumptions());
+            }
+            sayRules(asked, shared, model);
+            return new FlightSetup(model, shared, complete, mirrored, said);
         }
 
         private SharedPriors shared(int levels) {
@@ -194,7 +216,8 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
                     stand.takesCurveAgeError());
             // an error of the datum moves all levels of the site alike: it rides on the common offset, which stage 1
             // lacks
-            return stand.takesOffset() ? row : row.withAddedLevelSigma(datumSigmaMetres);
+            FlightRow own = stand.takesOffset() ? row : row.withAddedLevelSigma(datumSigmaMetres);
+            return mirrored ? own.mirrored() : own;
         }
 
         private FlightLevel level(Level level) {
@@ -218,15 +241,16 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
 
         /** Present height of the shoreline, without the spread of the datum, which is shared. */
         private Uncertain height(Level level) {
+            int sign = mirrored ? -1 : 1;
             List<HeightTerm> terms = new ArrayList<>();
             for (HeightTerm term : FormerSeaLevel.ofLandform(site, level, rule)) {
                 terms.add(
                         term.source() == Source.DATUM
                                 ? new HeightTerm(
                                         Source.DATUM,
-                                        term.sign(),
+                                        sign * term.sign(),
                                         new Exact(term.metres().mean()))
-                                : term);
+                                : new HeightTerm(term.source(), sign * term.sign(), term.metres()));
             }
             double lowering = level.loweringMetresPerKyr().mean();
             Optional<Tabulated> ageKa = CombinedAge.of(LevelExplanations.ownDates(level, dateRules()));
@@ -236,7 +260,7 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
                         level.loweringMetresPerKyr().standardDeviation()
                                 * ageKa.get().mean(),
                         lowering * ageKa.get().standardDeviation());
-                terms.add(new HeightTerm(Source.SURVEY, 1, sigma > 0 ? new Normal(metres, sigma) : new Exact(metres)));
+                terms.add(new HeightTerm(Source.SURVEY, sign, sigma > 0 ? new Normal(metres, sigma) : new Exact(metres)));
                 say("surface lowering in the flight", metres(metres) + " at the level's own dates", level);
             } else if (lowering > 0) {
                 say("surface lowering is left out of the flight", "the level has no date to reckon it by", level);
@@ -292,22 +316,23 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
             double after = Math.min(curve.get().toKa(), age + BOUND_STEP_KA);
             double slope = (curve.get().levelMetresAt(after) - curve.get().levelMetresAt(before)) / (after - before);
             Uncertain height = height(level);
-            return Optional.of(new LimitingPoint(
+            LimitingPoint point = new LimitingPoint(
                     level.name(),
                     side,
-                    height.mean(),
+                    mirrored ? -height.mean() : height.mean(),
                     height.standardDeviation(),
                     age,
                     Math.hypot(ageKa.get().standardDeviation(), curveAge),
                     curve.get().levelMetresAt(age),
                     curve.get().readAt(age).standardDeviation(),
                     slope,
-                    true));
+                    true);
+            return Optional.of(mirrored ? point.mirrored() : point);
         }
 
         private void sayRules(Interval surveyed, SharedPriors shared, FlightModel model) {
             say(
-                    "a flight is matched to highstands",
+                    mirrored ? "drowned reefs are matched to lowstands, in a mirror" : "a flight is matched to highstands",
                     complete ? "of a table taken as it stands" : "by the default model");
             say(
                     "heights in which a terrace would have been seen",
@@ -334,7 +359,7 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
             if (!complete) {
                 say(
                         "the answer supposes that at least one level is a shoreline",
-                        "and that shorelines stand above today's sea");
+                        mirrored ? "and that reefs stand below today's sea" : "and that shorelines stand above today's sea");
             }
             if (datumSigmaMetres > 0) {
                 say("error of the datum", metres(datumSigmaMetres) + " (1 sigma), shared by all levels of the flight");

@@ -48,7 +48,7 @@ final class FlightSummary {
         double high = Double.NEGATIVE_INFINITY;
         for (int k = 0; k < means.length; k++) {
             FlightDraw draw = draws.draws().get(k);
-            moments.moments(row, new UpliftHistory.ConstantRate(draw.rateMetresPerKyr()), draw.shared());
+            moments.moments(row, draw.history(), draw.shared());
             means[k] = moments.meanMetres;
             sigmas[k] = Math.max(Math.sqrt(moments.varianceMetres2), 1e-9);
             low = Math.min(low, means[k] - 9 * sigmas[k]);

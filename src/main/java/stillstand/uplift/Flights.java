@@ -31,6 +31,7 @@ public final class Flights {
     private final RunMonitor monitor;
     private final MatchingRules rules;
     private final IndicativeRule rule;
+    private final RateChanges changes;
 
     /**
      * @param streams all randomness
@@ -38,18 +39,21 @@ public final class Flights {
      * @param monitor is asked whether to stop
      * @param rules how levels are matched
      * @param rule what an indicative range means
+     * @param changes how the rate may change
      */
     public Flights(
             DrawStreams streams,
             ExecutorService executor,
             RunMonitor monitor,
             MatchingRules rules,
-            IndicativeRule rule) {
+            IndicativeRule rule,
+            RateChanges changes) {
         this.streams = streams;
         this.executor = executor;
         this.monitor = monitor;
         this.rules = rules;
         this.rule = rule;
+        this.changes = changes;
     }
 
     /** A flight's answer, its residuals, and what it rests on. */
@@ -68,7 +72,12 @@ public final class Flights {
      */
     public Answered of(Site site, SeaLevelBasis basis, RatePrior prior) {
         FlightSetup setup = FlightSetup.of(site, basis, rules, rule);
-        return new Question(site.name(), setup, prior).answer();
+        RatePrior held = FlightMirror.of(prior, setup.mirrored());
+        Answered constant = new Question(site.name(), setup, held).answer();
+        Answered answered = changes.isAsked()
+                ? new ChangingFlights(streams, executor, monitor, changes).of(site.name(), setup, held, constant)
+                : constant;
+        return setup.mirrored() ? FlightMirror.of(answered) : answered;
     }
 
     /** What the engine found, whichever way it went. */
@@ -164,8 +173,9 @@ public final class Flights {
                             ? "on a grid of rates, at 250 and 500 cells of height"
                             : String.format(
                                     Locale.ROOT,
-                                    "by %d scrambles of %d randomised Sobol' points, at %d and %d cells of height",
+                                    "by %d to %d scrambles of %d randomised Sobol' points, at %d and %d cells of height",
                                     FlightMonteCarlo.Effort.FULL.scrambles(),
+                                    FlightMonteCarlo.Effort.FULL.mostScrambles(),
                                     FlightMonteCarlo.Effort.FULL.points(),
                                     FlightMonteCarlo.Effort.FULL.cells(),
                                     2 * FlightMonteCarlo.Effort.FULL.cells()),

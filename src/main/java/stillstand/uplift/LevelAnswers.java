@@ -27,6 +27,9 @@ import stillstand.uncertainty.Uncertain;
 
 /** The answer of each level by itself, with the rates of its corals beside it. */
 public final class LevelAnswers {
+    /** Why a level that is one earthquake's step never has a rate. */
+    public static final String ONE_EARTHQUAKE = "it is one earthquake's step and records no sea level";
+
     private static final int SCRAMBLES_OF_A_BUDGET = 8;
     private static final double SUPPOSED_CUT = 1e-3;
     /** A height known exactly still needs some spread in a covariance. */

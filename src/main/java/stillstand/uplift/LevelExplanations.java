@@ -44,13 +44,11 @@ public record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, L
         return switch (level.formsAt()) {
             case HIGHSTAND -> atHighstand(level, basis, rules, where);
             case ANY -> atItsAge(level, basis, rules, where);
-            case DROWNING ->
-                none(
-                        "a reef that drowned records a lowstand, and a rate of its own needs its dated age (forms_at any)");
+            case DROWNING -> atHighstand(level, basis.ofDrownedReefs(), rules, where);
             case MARINE_LIMITING -> none("it formed somewhere below the sea, which bounds a rate on one side only");
             case TERRESTRIAL_LIMITING ->
                 none("it formed somewhere above the sea, which bounds a rate on one side only");
-            case EVENT -> none("it is one earthquake's step and records no sea level");
+            case EVENT -> none(LevelAnswers.ONE_EARTHQUAKE);
         };
     }
 
@@ -118,7 +116,10 @@ public record LevelExplanations(List<SeaAtLevel> explanations, String whyNone, L
         if (!pinned && datesOf(level, DatedSample.Role.LEVEL).isEmpty()) {
             return none(
                     level.highstand().only().isEmpty()
-                            ? "no date and no highstand given: which highstand made it is a question of the whole flight"
+                            ? (level.formsAt() == FormsAt.DROWNING
+                                    ? "no date: which lowstand drowned it is a question of the whole flight"
+                                    : "no date and no highstand given: which highstand made it is a question of the whole"
+                                            + " flight")
                             : "tied to several highstands ("
                                     + String.join(", ", level.highstand().only())
                                     + ") and no date to choose between them");

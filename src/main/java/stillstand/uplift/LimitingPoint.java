@@ -54,6 +54,21 @@ public record LimitingPoint(
         }
     }
 
+    /** The same point upside down. */
+    LimitingPoint mirrored() {
+        return new LimitingPoint(
+                name,
+                side == Side.BELOW_SEA ? Side.ABOVE_SEA : Side.BELOW_SEA,
+                -heightMetres,
+                heightSigmaMetres,
+                ageKa,
+                ageSigmaKa,
+                -seaLevelMetres,
+                seaLevelSigmaMetres,
+                -slopeMetresPerKa,
+                takesOffset);
+    }
+
     /** Natural logarithm of the factor by which it multiplies the evidence of a history. */
     public double logFactor(UpliftHistory history, SharedNumbers shared) {
         double sea = seaLevelMetres + (takesOffset ? shared.offsetMetres() : 0) + history.upliftMetresSince(ageKa);

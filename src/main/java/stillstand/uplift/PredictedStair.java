@@ -63,6 +63,34 @@ public record PredictedStair(List<Step> steps) {
         return new PredictedStair(steps);
     }
 
+    /**
+     * The staircase of drowned reefs, one for each lowstand: a reef keeps its height where no younger lowstand went as low or lower, and
+     * it stands below today's sea.
+     *
+     * @param basis whose lowstands are meant: those of its curve, or the rows of a table of the user's own
+     */
+    public static PredictedStair ofDrownedReefs(SeaLevelBasis basis, UpliftHistory history) {
+        HighstandTable table = basis.ofDrownedReefs().highstands();
+        SharedErrors shared = table.sharedErrors();
+        List<Step> steps = new ArrayList<>();
+        for (Highstand row : table.rows()) {
+            double height = row.level().mean() + history.upliftMetresSince(row.ageKa());
+            double byAge = history.rateMetresPerKyrAt(row.ageKa()) * row.marginalAgeSigmaKa(shared);
+            Optional<String> overrun = Optional.empty();
+            for (Step step : steps) {
+                overrun = step.heightMetres <= height ? Optional.of(step.stage) : overrun;
+            }
+            steps.add(new Step(
+                    row.stage(),
+                    row.ageKa(),
+                    row.level().mean(),
+                    height,
+                    Math.hypot(row.marginalLevelSigmaMetres(shared), byAge),
+                    overrun.isEmpty() && !table.complete() && height >= 0 ? Optional.of(TODAY) : overrun));
+        }
+        return new PredictedStair(steps);
+    }
+
     private static Optional<String> overrunBy(double heightMetres, List<Step> younger, boolean floor) {
         Optional<String> found = Optional.empty();
         for (Step step : younger) {

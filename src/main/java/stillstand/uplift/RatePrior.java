@@ -4,7 +4,7 @@ package stillstand.uplift;
  * What is held of a rate before the evidence is seen: always a proper density, normalised on its own range. Rates are in
  * m/kyr (which is mm/yr), uplift positive.
  */
-public sealed interface RatePrior permits CauchyPrior, HalfCauchyPrior, LogUniformPrior, NormalPrior {
+public sealed interface RatePrior permits CauchyPrior, HalfCauchyPrior, LogUniformPrior, MirroredPrior, NormalPrior {
     /** Density at a rate, per m/kyr; 0 outside the range. */
     double density(double rateMetresPerKyr);
 

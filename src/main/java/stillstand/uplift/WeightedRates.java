@@ -2,7 +2,9 @@ package stillstand.uplift;
 
 import java.util.Arrays;
 import java.util.Comparator;
+import java.util.Optional;
 import java.util.stream.IntStream;
+import stillstand.uncertainty.Interval;
 
 /** Weighted draws of a rate in blocks: their quantiles, and a smooth posterior through them. */
 final class WeightedRates {
@@ -68,6 +70,25 @@ final class WeightedRates {
         }
         Arrays.fill(out, at, out.length, beforeRate);
         return out;
+    }
+
+    /** The draws as a quantity of another unit, such as the age of a change. */
+    Quantity quantity(String unit) {
+        double low68 = (1 - Interval.PROBABILITY_68) / 2;
+        double low95 = (1 - Interval.PROBABILITY_95) / 2;
+        double[] at = quantiles(new double[] {low95, low68, 0.5, 1 - low68, 1 - low95}, -1);
+        double mean = mean(-1);
+        double squares = 0;
+        for (int k = 0; k < rates.length; k++) {
+            squares += weights[k] * (rates[k] - mean) * (rates[k] - mean);
+        }
+        return new Quantity(
+                at[2],
+                Optional.of(mean),
+                Optional.of(Math.sqrt(squares / total(-1))),
+                new Interval(at[1], at[3]),
+                new Interval(at[0], at[4]),
+                unit);
     }
 
     /** Effective number of draws: square of the sum over the sum of squares of the weights. */

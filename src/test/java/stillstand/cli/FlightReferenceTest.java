@@ -17,7 +17,7 @@ import stillstand.uplift.FlightResult;
  * own prior is normalised from 0 where ours begins at 0.005 m/kyr.
  */
 class FlightReferenceTest {
-    private static final String[] TABLE = {
+    static final String[] TABLE = {
         "H1,6,0.5,1,1",
         "H3,52,2,-60,10",
         "H5a,81,1.5,-22,6",

@@ -132,6 +132,9 @@ class FlightStudyTest {
         assertTrue(paper.lines().anyMatch(line -> line.startsWith("Stair,T2,") && line.contains(",5c,0.")), paper);
         assertTrue(study.out().contains("Flight of 3 levels: 0.3"), study.out());
         assertTrue(study.out().contains("Sliding the rate by hand would have given"), study.out());
+        assertTrue(
+                study.out().contains("E1 is one earthquake's step: it records no sea level, and stays out of rates and"),
+                study.out());
         for (FlightResult.Fate fate : flight.missing()) {
             assertEquals(
                     1,

@@ -28,6 +28,7 @@ import stillstand.study.StudySettings.SeaLevelChoice;
 import stillstand.study.StudySettings.Setting;
 import stillstand.study.StudySettings.Strays;
 import stillstand.study.StudySettings.WeightedCurve;
+import stillstand.uncertainty.Interval;
 import stillstand.uplift.CauchyPrior;
 import stillstand.uplift.HalfCauchyPrior;
 
@@ -86,6 +87,14 @@ class StudyJsonTest {
     static List<Case> cases() {
         return List.of(
                 bad("", "study.json: found an empty file, expected a json object"),
+                bad(
+                        "{\"title\": \"x\", \"rate\": {\"change_between_ka\": [300, 30]}}",
+                        "study.json:1:46: rate.change_between_ka: found ages 300.0 and 30.0, expected two ages in ka [young, old],"
+                                + " the young one first"),
+                bad(
+                        "{\"title\": \"x\", \"rate\": {\"changes\": \"choose\", \"change_between_ka\": [150, 150]}}",
+                        "study.json:1:67: rate.change_between_ka: found one age, 150.0, beside two changes, expected two ages in ka"
+                                + " [young, old], or \"changes\": \"one\""),
                 bad(
                         "{\"title\": \"x\",\n \"seed\": 1,}",
                         "study.json:2:12: found text that is not json here, expected json"),
@@ -197,7 +206,7 @@ class StudyJsonTest {
                         + "\"sea_level\": {\"curves\": [{\"id\": \"own\", \"weight\": 2}], \"highstands\": {\"from\": \"table\", \"table\": \"mine\","
                         + "\"older_than_curve\": false}, \"correlation_time_ka\": 4, \"shared_level_1sigma_m\": 0,"
                         + "\"interstadial_1sigma_m\": 8, \"curve_age_1sigma_ka\": 2, \"rezero\": true},"
-                        + "\"rate\": {\"prior\": {\"kind\": \"half-cauchy\", \"scale\": 1, \"from\": 0.005, \"to\": 5}, \"changes\": \"up-to-two\"},"
+                        + "\"rate\": {\"prior\": {\"kind\": \"half-cauchy\", \"scale\": 1, \"from\": 0.005, \"to\": 5}, \"changes\": \"up-to-two\",\"change_between_ka\": [30, 300]},"
                         + "\"matching\": {\"recording_probability\": 0.7, \"recording_decay_ka\": 400, \"expected_strays\": {\"gamma_mean\": 0.8},"
                         + "\"stray_age_maximum_ka\": 500, \"wrong_date_probability\": 0.1, \"trace_probability\": 0.9},"
                         + "\"indicative_range\": \"uniform\","
@@ -219,7 +228,7 @@ class StudyJsonTest {
                         new Setting(8, true),
                         Optional.of(2.0),
                         true),
-                new RateChoice(new HalfCauchyPrior(1, 0.005, 5), Changes.UP_TO_TWO),
+                new RateChoice(new HalfCauchyPrior(1, 0.005, 5), Changes.UP_TO_TWO, new Interval(30, 300)),
                 new Matching(
                         new Recording.Fixed(0.7),
                         Optional.of(new Decay.Fixed(400)),

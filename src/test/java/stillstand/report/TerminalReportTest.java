@@ -31,7 +31,7 @@ class TerminalReportTest {
                   Level  No shoreline  Age (ka)     Records
                   T1     5 %           82.0 ± 4.0   5a 80 %, 5c 15 %
                   T4     2 %           122.0 ± 3.0  5e 98 %
-                  Highstands without a terrace (recorded / unseen / re-occupied / outside the survey / absent):
+                  Stands of the sea without a level (recorded / unseen / re-occupied / outside the survey / absent):
                   5c at 33 ± 6 m: 0.16 / 0.60 / 0.15 / 0.10 / 0
                   The rate hangs most on: without T4 it would be 0.41 ± 0.06.
                   Halving one kind of error would change the width of the 95 % interval by: highstand levels −40 %,

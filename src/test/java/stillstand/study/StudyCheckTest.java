@@ -542,11 +542,11 @@ class StudyCheckTest {
 
     @Test
     void columnsOfLaterWorkAreNamed() {
-        List<String> expected = List.of("levels.csv:1:5: terrace is not used yet");
+        List<String> expected = List.of("sites.csv:1:6: berm_m is not used yet");
         Loaded<Study> loaded = check(input(
                 settings(),
-                Grid.table("sites.csv", SITES, "North,5,5,0,100"),
-                Grid.table("levels.csv", LEVELS + ",terrace,certainty", "North,T1,10,1,Main,doubtful"),
+                Grid.table("sites.csv", SITES + ",berm_m", "North,5,5,0,100,2"),
+                Grid.table("levels.csv", LEVELS + ",certainty", "North,T1,10,1,doubtful"),
                 Optional.empty()));
         assertEquals(expected, warnings(loaded));
         assertTrue(loaded.value()

@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.List;
 import java.util.SplittableRandom;
+import java.util.function.Predicate;
 import java.util.function.ToDoubleBiFunction;
 import java.util.stream.IntStream;
 import java.util.stream.Stream;
@@ -83,7 +84,7 @@ class FlightCalibrationStatisticalTest {
     /** Ranks of the recent rate, the older rate and the age of the change. */
     static List<RanksOfTruth> change(int count) {
         RatePrior rates = new LogUniformPrior(0.05, 3);
-        RateChangePrior prior = new RateChangePrior(rates, rates, 50, 350);
+        HistoryPrior prior = new HistoryPrior.Stepped(rates, 1, 50, 350);
         TruthDrawn truths = dice -> new Truth(
                 FlightSimulator.logUniform(dice, 0.05, 3),
                 50 + 300 * dice.nextDouble(),
@@ -145,22 +146,30 @@ class FlightCalibrationStatisticalTest {
     }
 
     /** Of the recent rate, the older rate and the age of the change. */
-    private static List<Double> belowOfChange(Flight flight, RateChangePrior prior, long seed) {
-        RateChangeAnswer answer = RateChangeIntegration.answer(
+    private static List<Double> belowOfChange(Flight flight, HistoryPrior prior, long seed) {
+        HistoryDraws draws = HistoryMonteCarlo.draws(
                 model(flight),
                 prior,
-                SharedNumbers.plain(RECORDED, STRAYS),
-                256,
-                80,
+                new SharedPriors(
+                        0,
+                        0,
+                        0,
+                        new SharedPriors.Recording.Known(RECORDED),
+                        List.of(Double.POSITIVE_INFINITY),
+                        new SharedPriors.Strays.Known(STRAYS)),
+                new HistoryMonteCarlo.Effort(4, 128, 60, 5),
                 new DrawStreams(seed),
                 "flight",
-                RunMonitor.SILENT);
-        double changeKa = flight.truth().changeKa();
-        long younger =
-                answer.changesKa().stream().filter(each -> each < changeKa).count();
+                RunMonitor.SILENT,
+                Workers.NONE);
         return List.of(
-                answer.recent().cumulativeProbability(flight.truth().recentRate()),
-                answer.older().cumulativeProbability(flight.truth().olderRate()),
-                (double) younger / answer.changesKa().size());
+                below(draws, history -> history.rateMetresPerKyrAt(0) < flight.truth().recentRate()),
+                below(draws, history -> history.rateMetresPerKyrAt(900) < flight.truth().olderRate()),
+                below(draws, history -> ((UpliftHistory.SteppedRate) history).changesKa().get(0)
+                        < flight.truth().changeKa()));
+    }
+
+    private static double below(HistoryDraws draws, Predicate<UpliftHistory> isBelow) {
+        return draws.of(history -> isBelow.test(history) ? 1 : 0).mean(-1);
     }
 }
