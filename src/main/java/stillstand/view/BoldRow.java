@@ -1,0 +1,23 @@
+package stillstand.view;
+
+import atlantafx.base.theme.Styles;
+import java.util.function.Predicate;
+import javafx.scene.control.TableRow;
+
+/** A row that stands out where something is true of it. */
+final class BoldRow<T> extends TableRow<T> {
+    private final Predicate<T> stands;
+
+    BoldRow(Predicate<T> stands) {
+        this.stands = stands;
+    }
+
+    @Override
+    protected void updateItem(T row, boolean empty) {
+        super.updateItem(row, empty);
+        getStyleClass().remove(Styles.TEXT_BOLD);
+        if (!empty && row != null && stands.test(row)) {
+            getStyleClass().add(Styles.TEXT_BOLD);
+        }
+    }
+}
