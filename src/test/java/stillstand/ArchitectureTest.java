@@ -31,6 +31,7 @@ class ArchitectureTest {
             Map.entry("dating", Set.of("ledger", "uncertainty")),
             Map.entry("shoreline", Set.of("ledger", "uncertainty", "dating")),
             Map.entry("uplift", Set.of("ledger", "uncertainty", "sealevel", "dating", "shoreline")),
+            Map.entry("comparison", Set.of("ledger", "uncertainty", "sealevel", "dating", "shoreline", "uplift")),
             Map.entry("sensitivity", Set.of("ledger", "uncertainty", "sealevel", "dating", "shoreline", "uplift")),
             Map.entry("study", ENGINE),
             Map.entry("files", with(ENGINE, "study", "figure")),
@@ -93,6 +94,7 @@ class ArchitectureTest {
                         "stillstand.dating..",
                         "stillstand.shoreline..",
                         "stillstand.uplift..",
+                        "stillstand.comparison..",
                         "stillstand.sensitivity..",
                         "stillstand.study..")
                 .should()

@@ -89,6 +89,10 @@ public final class SampleStudy {
                         choice(CurveChoice.EQUAL_WEIGHTED, Optional.empty(), 1)),
                 List.of(new CurveEvidence(
                         "all sites", List.of("North cliff", "South cliff"), "made-up-curve", -25, 0.875)),
+                SampleComparison.pairs(),
+                SampleComparison.motions(),
+                SampleComparison.groups(),
+                SampleComparison.tilts(),
                 List.of(new InputWarning("levels.csv", 3, 4, "elevation_m: 1200 looks like feet")),
                 List.of(new Failure("East bay", "its curve ends at 20 ka")),
                 List.of(
@@ -122,6 +126,10 @@ public final class SampleStudy {
                 all.residuals(),
                 all.curveChoice(),
                 all.curveEvidence(),
+                all.comparison(),
+                all.siteMotion(),
+                all.siteGroups(),
+                all.terraceTilts(),
                 all.warnings(),
                 List.of(),
                 all.ledger());

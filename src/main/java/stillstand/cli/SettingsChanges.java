@@ -32,7 +32,8 @@ record SettingsChanges(Optional<Long> seed, Optional<Integer> draws, List<Weight
                 settings.matching(),
                 settings.indicativeRange(),
                 settings.screening(),
-                leverage ? settings.leverage().or(() -> Optional.of(MeasurementPlan.DEFAULT)) : settings.leverage());
+                leverage ? settings.leverage().or(() -> Optional.of(MeasurementPlan.DEFAULT)) : settings.leverage(),
+                settings.comparison());
     }
 
     private SeaLevelChoice withCurves(SeaLevelChoice own) {

@@ -21,7 +21,13 @@ public enum FigureKind {
     /** Sea-level curves and the highstands in use. */
     CURVES("curves"),
     /** All rates of all sites on one axis. */
-    FOREST("forest");
+    FOREST("forest"),
+    /** Sites where they lie, and whether they go up or down. */
+    MAP("map"),
+    /** Levels of all sites of a coast, by distance along it. */
+    COAST("coast"),
+    /** Differences between the rates of sites. */
+    DIFFERENCES("differences");
 
     private final String id;
 
@@ -36,7 +42,10 @@ public enum FigureKind {
 
     /** Whether the whole study has one, and not each site. */
     public boolean isOfStudy() {
-        return this == CURVES || this == FOREST;
+        return switch (this) {
+            case CURVES, FOREST, MAP, COAST, DIFFERENCES -> true;
+            default -> false;
+        };
     }
 
     @Override

@@ -60,6 +60,39 @@ public record Figures(List<Figure> figures, List<Absence> absences) {
             } else {
                 absences.add(new Absence(FigureKind.FOREST, Optional.empty(), "no level has a rate"));
             }
+            if (result.siteMotion().size() > 1) {
+                sites(result);
+            }
+        }
+
+        /** What only a study of several sites has. */
+        private void sites(StudyResult result) {
+            if (MapFigure.has(result)) {
+                add(FigureKind.MAP, (name, width) -> MapFigure.page(name, result, width));
+            } else {
+                lacking(FigureKind.MAP, "fewer than two sites have a latitude and longitude");
+            }
+            List<String> coasts = CoastFigure.coasts(result);
+            for (String coast : coasts) {
+                String name = unique(FigureKind.COAST.id() + "-" + stem(coast));
+                figures.add(new Figure(
+                        FigureKind.COAST,
+                        Optional.empty(),
+                        name,
+                        width -> CoastFigure.page(name, result, coast, width)));
+            }
+            if (coasts.isEmpty()) {
+                lacking(FigureKind.COAST, "no coast has two sites with distances along it");
+            }
+            if (DifferencesFigure.has(result)) {
+                add(FigureKind.DIFFERENCES, (name, width) -> DifferencesFigure.page(name, result, width));
+            } else {
+                lacking(FigureKind.DIFFERENCES, "no two sites are compared");
+            }
+        }
+
+        private void lacking(FigureKind kind, String reason) {
+            absences.add(new Absence(kind, Optional.empty(), reason));
         }
 
         private void site(StudyResult result, SiteView site) {

@@ -41,6 +41,12 @@ public final class ResultFiles {
         if (!result.curveChoice().isEmpty()) {
             write(folder, "curve-choice.csv", curveChoice(result));
         }
+        if (!result.comparison().isEmpty()) {
+            write(folder, "comparison.csv", ComparisonTable.text(result));
+        }
+        if (SitesGeoJson.has(result)) {
+            write(folder, "sites.geojson", SitesGeoJson.text(result));
+        }
         write(folder, "ledger.csv", ledger(result));
         LeverageTables.write(folder, result.leverage());
     }

@@ -31,7 +31,6 @@ import stillstand.uncertainty.Uncertain;
 
 /** A study on disk: {@code study.json}, its tables, its own curves and calibrated ages. */
 public final class StudyFolder {
-    private static final List<String> LATER = List.of("points.csv");
     private static final String CURVES = "curves";
     private static final String AGES = "ages";
 
@@ -89,12 +88,8 @@ public final class StudyFolder {
         Optional<Table> levels = table("levels.csv");
         Optional<Table> samples = exists("samples.csv") ? table("samples.csv") : Optional.empty();
         Optional<Table> gia = exists("gia.csv") ? table("gia.csv") : Optional.empty();
+        Optional<Table> points = exists("points.csv") ? table("points.csv") : Optional.empty();
         Map<String, Uncertain> ages = ages();
-        for (String name : LATER) {
-            if (exists(name)) {
-                warnings.add(new InputWarning(name, 0, 0, "this file is not used yet"));
-            }
-        }
         inputs.sort(Comparator.comparing(InputFile::file));
         StudyInput input = new StudyInput(
                 settings.map(stated -> stated.with(changes)),
@@ -102,6 +97,7 @@ public final class StudyFolder {
                 levels,
                 samples,
                 gia,
+                points,
                 ages,
                 problems,
                 warnings,

@@ -6,6 +6,8 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import stillstand.comparison.ComparisonRules;
+import stillstand.comparison.ComparisonRules.Pair;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.Loaded;
@@ -25,6 +27,7 @@ import stillstand.study.StudySettings.Strays;
 import stillstand.study.StudySettings.WeightedCurve;
 import stillstand.uncertainty.Interval;
 import stillstand.uplift.RatePrior;
+import tools.jackson.databind.JsonNode;
 
 /**
  * Reads {@code study.json}. Every key but {@code title} has a default, which becomes a line of the ledger; all problems come
@@ -95,7 +98,8 @@ public final class StudyJson {
                 matching(root.inside("matching")),
                 indicativeRange(),
                 screening(root.inside("screening")),
-                root.has("leverage") ? Optional.of(leverage(root.inside("leverage"))) : Optional.empty());
+                root.has("leverage") ? Optional.of(leverage(root.inside("leverage"))) : Optional.empty(),
+                comparison(root.inside("comparison")));
     }
 
     private static MeasurementPlan leverage(Keys keys) {
@@ -270,6 +274,22 @@ public final class StudyJson {
                 keys.number("th230_th232_minimum"),
                 keys.text("replicates"),
                 keys.flag("stratigraphic_order"));
+    }
+
+    private ComparisonRules comparison(Keys keys) {
+        ComparisonRules defaults = ComparisonRules.DEFAULT;
+        List<Pair> pairs = new ArrayList<>();
+        for (JsonNode pair : keys.node().path("pairs")) {
+            pairs.add(new Pair(pair.path(0).stringValue(""), pair.path(1).stringValue("")));
+        }
+        return new ComparisonRules(
+                keys.number("stable_within_m_per_kyr")
+                        .orElseGet(() ->
+                                assumed("comparison.stable_within_m_per_kyr", defaults.stableWithinMetresPerKyr())),
+                keys.number("site_spread_m_per_kyr")
+                        .orElseGet(
+                                () -> assumed("comparison.site_spread_m_per_kyr", defaults.siteSpreadMetresPerKyr())),
+                pairs);
     }
 
     private <T> T assumed(String keyPath, T value) {

@@ -5,6 +5,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
+import stillstand.comparison.ComparisonRules;
 import stillstand.study.StudySettings;
 import stillstand.study.StudySettings.Changes;
 import stillstand.study.StudySettings.Decay;
@@ -62,6 +63,7 @@ public final class StudyJsonWriter {
         if (!screening.isEmpty()) {
             root.put("screening", screening);
         }
+        root.put("comparison", comparison(settings.comparison()));
         settings.leverage()
                 .ifPresent(plan -> root.put(
                         "leverage",
@@ -166,6 +168,22 @@ public final class StudyJsonWriter {
         screening.th230Th232Minimum().ifPresent(value -> keys.put("th230_th232_minimum", value));
         screening.replicates().ifPresent(value -> keys.put("replicates", value));
         screening.stratigraphicOrder().ifPresent(value -> keys.put("stratigraphic_order", value));
+        return keys;
+    }
+
+    private static Map<String, Object> comparison(ComparisonRules rules) {
+        Map<String, Object> keys = ordered(
+                "stable_within_m_per_kyr",
+                rules.stableWithinMetresPerKyr(),
+                "site_spread_m_per_kyr",
+                rules.siteSpreadMetresPerKyr());
+        if (!rules.pairs().isEmpty()) {
+            keys.put(
+                    "pairs",
+                    rules.pairs().stream()
+                            .map(pair -> List.of(pair.a(), pair.b()))
+                            .toList());
+        }
         return keys;
     }
 

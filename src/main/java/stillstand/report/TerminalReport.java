@@ -44,6 +44,7 @@ public final class TerminalReport {
         report.opening(title);
         report.sites();
         report.curves();
+        report.together();
         report.oddities();
         report.assumptions(folder);
         report.closing(folder);
@@ -158,6 +159,14 @@ public final class TerminalReport {
             say("  " + level.level() + ": "
                     + level.monteCarlo().map(MonteCarlo::draws).orElse(0)
                     + " draws did not settle the digits asked for; its last digit may move with the seed.");
+        }
+    }
+
+    private void together() {
+        List<String> all = new ComparisonReport(result).lines();
+        if (!all.isEmpty()) {
+            lines.add("");
+            all.forEach(this::say);
         }
     }
 

@@ -28,8 +28,9 @@ final class SitesTable {
                     Column.plain("site"),
                     Column.plain("latitude"),
                     Column.plain("longitude"),
-                    Column.plain("coast").notUsedYet(),
-                    Column.plain("distance_along_coast_km").notUsedYet(),
+                    Column.plain("coast"),
+                    Column.plain("distance_along_coast_km"),
+                    Column.plain("area_km2"),
                     DATUM_OFFSET,
                     Column.measured("geoid_height", "m").notUsedYet(),
                     Column.measured("great_diurnal_range", "m").notUsedYet(),
@@ -61,6 +62,7 @@ final class SitesTable {
      * @param prior of its own
      * @param surveyedMetres heights that were surveyed
      * @param datumOffsetMetres height of mean sea level in its datum
+     * @param areaKm2 that it stands for in a mean over areas
      * @param toSite makes the site of its levels and of the samples without a level; absent where the row has problems
      */
     record SiteRow(
@@ -69,6 +71,7 @@ final class SitesTable {
             Optional<RatePrior> prior,
             Optional<Interval> surveyedMetres,
             Uncertain datumOffsetMetres,
+            Optional<Double> areaKm2,
             Optional<BiFunction<List<Level>, List<DatedSample>, Site>> toSite) {}
 
     List<SiteRow> read(Table table) {
@@ -109,6 +112,12 @@ final class SitesTable {
         if (prior.isEmpty() && !row.text("rate_prior").isEmpty()) {
             row.problem("rate_prior", quote(row.text("rate_prior")), RatePriorText.EXPECTED);
         }
+        Optional<Double> area = row.number("area_km2").filter(km2 -> {
+            if (!(km2 > 0)) {
+                row.problem("area_km2", quote(row.text("area_km2")), "an area above 0");
+            }
+            return km2 > 0;
+        });
         Uncertain offset = datum.orElse(new Exact(0));
         if (row.text(DATUM_OFFSET.header()).isEmpty()) {
             row.assume("datum_offset_m is blank", "0 m, exact", "Stillstand's default", name);
@@ -126,10 +135,10 @@ final class SitesTable {
                 row.text("note"),
                 row.own());
         return new SiteRow(
-                name, row, prior, surveyed, offset, Optional.of(toSite).filter(make -> row.isGood()));
+                name, row, prior, surveyed, offset, area, Optional.of(toSite).filter(make -> row.isGood()));
     }
 
-    private Optional<Position> position(RowReader row) {
+    static Optional<Position> position(RowReader row) {
         Optional<Double> latitude = row.number("latitude", -90, 90, "degrees from -90 to 90");
         Optional<Double> longitude = row.number("longitude", -180, 360, "degrees from -180 to 360");
         requireBoth(row, "latitude", "longitude");

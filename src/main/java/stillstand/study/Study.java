@@ -14,6 +14,7 @@ import stillstand.ledger.InputWarning;
  * @param warnings what is odd in the input, in reading order
  * @param ledger the defaults, exact values and dropped values the input brought with it
  * @param inputs the files it was read from, in the order of their names
+ * @param together what is known for comparing sites alone
  */
 public record Study(
         StudySettings settings,
@@ -21,7 +22,8 @@ public record Study(
         List<SeaLevelCase> seaLevel,
         List<InputWarning> warnings,
         List<Assumption> ledger,
-        List<InputFile> inputs) {
+        List<InputFile> inputs,
+        SitesData together) {
     public Study {
         sites = List.copyOf(sites);
         seaLevel = List.copyOf(seaLevel);
@@ -33,11 +35,22 @@ public record Study(
         }
     }
 
+    /** A study that knows nothing of areas or points of terraces. */
+    public Study(
+            StudySettings settings,
+            List<SitePlan> sites,
+            List<SeaLevelCase> seaLevel,
+            List<InputWarning> warnings,
+            List<Assumption> ledger,
+            List<InputFile> inputs) {
+        this(settings, sites, seaLevel, warnings, ledger, inputs, SitesData.NONE);
+    }
+
     /** The same study with only the sites of these names, in its own order; unknown names are passed over. */
     public Study only(Collection<String> names) {
         List<SitePlan> kept = sites.stream()
                 .filter(plan -> names.contains(plan.site().name()))
                 .toList();
-        return new Study(settings, kept, seaLevel, warnings, ledger, inputs);
+        return new Study(settings, kept, seaLevel, warnings, ledger, inputs, together);
     }
 }

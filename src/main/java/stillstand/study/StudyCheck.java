@@ -80,6 +80,10 @@ public final class StudyCheck {
         Map<String, LocalDeparture> departures = input.gia()
                 .map(table -> new GiaTable(findings).read(table, sites, labels))
                 .orElse(Map.of());
+        input.settings().ifPresent(settings -> ComparisonCheck.check(settings, sites, findings));
+        List<SitesData.TerracePoints> terraces = input.points()
+                .map(table -> new PointsTable(findings).read(table, byName(levels)))
+                .orElse(List.of());
 
         List<InputWarning> warnings = sorted(findings.warnings());
         if (findings.problemCount() > 0 || input.settings().isEmpty()) {
@@ -91,7 +95,8 @@ public final class StudyCheck {
                 cases,
                 warnings,
                 findings.ledger(),
-                input.inputs());
+                input.inputs(),
+                new SitesData(areas(sites), terraces));
         return new Loaded<>(Optional.of(study), List.of(), warnings);
     }
 
@@ -120,6 +125,12 @@ public final class StudyCheck {
             Place place = stated.places().getOrDefault(keyPath, new Place(0, 0));
             findings.add(new InputWarning(stated.file(), place.line(), place.column(), keyPath + " is not used yet"));
         }
+    }
+
+    private static Map<String, Double> areas(List<SitesTable.SiteRow> sites) {
+        Map<String, Double> areas = new HashMap<>();
+        sites.forEach(site -> site.areaKm2().ifPresent(km2 -> areas.put(site.name(), km2)));
+        return areas;
     }
 
     private static Map<String, Set<String>> byName(List<LevelsTable.LevelRow> levels) {

@@ -17,6 +17,7 @@ import stillstand.uncertainty.Uncertain;
  * @param levels table of levels
  * @param samples table of dated samples; absent where a study has none
  * @param gia table of local minus global sea level; absent where a study has none
+ * @param points table of points measured on terraces; absent where a study has none
  * @param ages calibrated ages by name, ka before 1950
  * @param problems met in reading
  * @param warnings met in reading
@@ -29,6 +30,7 @@ public record StudyInput(
         Optional<Table> levels,
         Optional<Table> samples,
         Optional<Table> gia,
+        Optional<Table> points,
         Map<String, Uncertain> ages,
         List<InputProblem> problems,
         List<InputWarning> warnings,
@@ -42,10 +44,31 @@ public record StudyInput(
         inputs = List.copyOf(inputs);
     }
 
+    /** Input without points of terraces. */
+    public StudyInput(
+            Optional<StatedSettings> settings,
+            Optional<Table> sites,
+            Optional<Table> levels,
+            Optional<Table> samples,
+            Optional<Table> gia,
+            Map<String, Uncertain> ages,
+            List<InputProblem> problems,
+            List<InputWarning> warnings,
+            List<Assumption> ledger,
+            List<InputFile> inputs) {
+        this(settings, sites, levels, samples, gia, Optional.empty(), ages, problems, warnings, ledger, inputs);
+    }
+
+    /** The same input with a table of points of terraces. */
+    public StudyInput withPoints(Table table) {
+        return new StudyInput(
+                settings, sites, levels, samples, gia, Optional.of(table), ages, problems, warnings, ledger, inputs);
+    }
+
     /** The same input with a table of local minus global sea level. */
     public StudyInput withGia(Table table) {
         return new StudyInput(
-                settings, sites, levels, samples, Optional.of(table), ages, problems, warnings, ledger, inputs);
+                settings, sites, levels, samples, Optional.of(table), points, ages, problems, warnings, ledger, inputs);
     }
 
     /** Input made in memory, with no file behind it and nothing wrong so far. */

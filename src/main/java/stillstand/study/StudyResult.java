@@ -2,6 +2,10 @@ package stillstand.study;
 
 import java.util.List;
 import java.util.Optional;
+import stillstand.comparison.SiteComparison;
+import stillstand.comparison.SiteGroup;
+import stillstand.comparison.SiteMotion;
+import stillstand.comparison.TerraceTilt;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputWarning;
 import stillstand.sensitivity.CurveChoice;
@@ -28,6 +32,10 @@ import stillstand.uplift.LevelResidual;
  * @param residuals measured against predicted heights of the flights
  * @param curveChoice what each of several curves makes of each level and flight, beside their mixtures
  * @param curveEvidence what the flights of a region together say of the curves
+ * @param comparison differences between sites
+ * @param siteMotion which sites go up, are stable or go down
+ * @param siteGroups what the sites of a coast or island group say together
+ * @param terraceTilts tilts of terraces from many points on each
  * @param warnings what was odd in the input
  * @param failures sites that could not be done
  * @param ledger what it rests on
@@ -44,6 +52,10 @@ public record StudyResult(
         List<LevelResidual> residuals,
         List<CurveChoice> curveChoice,
         List<CurveEvidence> curveEvidence,
+        List<SiteComparison> comparison,
+        List<SiteMotion> siteMotion,
+        List<SiteGroup> siteGroups,
+        List<TerraceTilt> terraceTilts,
         List<InputWarning> warnings,
         List<Failure> failures,
         List<Assumption> ledger) {
@@ -56,9 +68,50 @@ public record StudyResult(
         residuals = List.copyOf(residuals);
         curveChoice = List.copyOf(curveChoice);
         curveEvidence = List.copyOf(curveEvidence);
+        comparison = List.copyOf(comparison);
+        siteMotion = List.copyOf(siteMotion);
+        siteGroups = List.copyOf(siteGroups);
+        terraceTilts = List.copyOf(terraceTilts);
         warnings = List.copyOf(warnings);
         failures = List.copyOf(failures);
         ledger = List.copyOf(ledger);
+    }
+
+    /** A result that compares no sites. */
+    public StudyResult(
+            Provenance provenance,
+            SeaLevelUsed seaLevel,
+            List<LevelAnswer> levels,
+            List<Waiting> waiting,
+            List<FlightResult> flights,
+            List<BetweenLevels> intervals,
+            List<ImpliedSeaLevel> impliedSeaLevel,
+            Leverage leverage,
+            List<LevelResidual> residuals,
+            List<CurveChoice> curveChoice,
+            List<CurveEvidence> curveEvidence,
+            List<InputWarning> warnings,
+            List<Failure> failures,
+            List<Assumption> ledger) {
+        this(
+                provenance,
+                seaLevel,
+                levels,
+                waiting,
+                flights,
+                intervals,
+                impliedSeaLevel,
+                leverage,
+                residuals,
+                curveChoice,
+                curveEvidence,
+                List.of(),
+                List.of(),
+                List.of(),
+                List.of(),
+                warnings,
+                failures,
+                ledger);
     }
 
     /** The same result with another provenance. */
@@ -75,6 +128,10 @@ public record StudyResult(
                 residuals,
                 curveChoice,
                 curveEvidence,
+                comparison,
+                siteMotion,
+                siteGroups,
+                terraceTilts,
                 warnings,
                 failures,
                 ledger);

@@ -153,6 +153,8 @@ public final class StudyRunner {
             }
         }
         runTraces();
+        SiteComparisons sites = sitesTogether();
+        ledger.addAll(sites.ledger());
         monitor.step("done", 1);
         return new StudyResult(
                 new Provenance(
@@ -172,6 +174,10 @@ public final class StudyRunner {
                 residuals,
                 curveChoice,
                 CurveEvidence.pooled(curveChoice, this::coast),
+                sites.pairs(),
+                sites.motions(),
+                sites.groups(),
+                sites.tilts(),
                 study.warnings(),
                 failures,
                 JoinedLedger.of(ledger));
@@ -205,6 +211,22 @@ public final class StudyRunner {
                 .filter(plan -> plan.site().name().equals(site))
                 .findFirst()
                 .flatMap(plan -> plan.site().coast());
+    }
+
+    private SiteComparisons sitesTogether() {
+        try {
+            return SiteComparisons.of(
+                    study,
+                    new SiteComparisons.Found(levels, flights),
+                    dates,
+                    rules(study.settings().matching()),
+                    streams,
+                    executor,
+                    monitor);
+        } catch (IllegalArgumentException | IllegalStateException e) {
+            failures.add(new StudyResult.Failure("sites together", String.valueOf(e.getMessage())));
+            return SiteComparisons.NONE;
+        }
     }
 
     private void runSite(SitePlan plan, int allLevels) {

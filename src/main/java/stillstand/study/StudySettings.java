@@ -2,6 +2,7 @@ package stillstand.study;
 
 import java.util.List;
 import java.util.Optional;
+import stillstand.comparison.ComparisonRules;
 import stillstand.sensitivity.MeasurementPlan;
 import stillstand.shoreline.IndicativeRule;
 import stillstand.uncertainty.Interval;
@@ -22,6 +23,7 @@ import stillstand.uplift.RatePrior;
  * @param screening limits on samples; each absent limit is off
  * @param leverage how good the measurements are supposed to be of which the run says what they would do; absent = what the
  *     answers hang on is not asked for
+ * @param comparison how sites are compared
  */
 public record StudySettings(
         String title,
@@ -33,7 +35,33 @@ public record StudySettings(
         Matching matching,
         IndicativeRule indicativeRange,
         Screening screening,
-        Optional<MeasurementPlan> leverage) {
+        Optional<MeasurementPlan> leverage,
+        ComparisonRules comparison) {
+    /** Settings that say nothing of how sites are compared. */
+    public StudySettings(
+            String title,
+            String note,
+            long seed,
+            Draws draws,
+            SeaLevelChoice seaLevel,
+            RateChoice rate,
+            Matching matching,
+            IndicativeRule indicativeRange,
+            Screening screening,
+            Optional<MeasurementPlan> leverage) {
+        this(
+                title,
+                note,
+                seed,
+                draws,
+                seaLevel,
+                rate,
+                matching,
+                indicativeRange,
+                screening,
+                leverage,
+                ComparisonRules.DEFAULT);
+    }
 
     /**
      * How many draws a level gets.

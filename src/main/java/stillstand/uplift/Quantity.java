@@ -22,7 +22,7 @@ public record Quantity(
         Interval interval95,
         String unit) {
     /** A summary with its unit. */
-    static Quantity of(Summary summary, String unit) {
+    public static Quantity of(Summary summary, String unit) {
         return new Quantity(
                 summary.median(), summary.mean(), summary.sd(), summary.interval68(), summary.interval95(), unit);
     }

@@ -1,6 +1,7 @@
 package stillstand.uplift;
 
 import java.util.Arrays;
+import java.util.List;
 import java.util.Optional;
 
 /**
@@ -71,6 +72,25 @@ final class ShorelineFilter {
             }
         }
         logStrayDensities = logs;
+    }
+
+    private ShorelineFilter(ShorelineFilter other, FlightModel model) {
+        this.model = model;
+        cells = other.cells;
+        kernel = other.kernel;
+        kernelFrom = other.kernelFrom;
+        kernelTo = other.kernelTo;
+        allowed = other.allowed;
+        dates = other.dates;
+        logStrayDensities = other.logStrayDensities;
+    }
+
+    /**
+     * The same levels in the same cells over rows whose ages and levels alone are others: no likelihood of a level has to be worked
+     * out again.
+     */
+    ShorelineFilter withRows(List<FlightRow> otherRows) {
+        return new ShorelineFilter(this, model.withRows(otherRows));
     }
 
     private void placeKernel(int i, FlightLevel level, double strayDensity) {

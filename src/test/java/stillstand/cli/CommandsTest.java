@@ -114,6 +114,7 @@ class CommandsTest {
                 List.of(
                         "assumption-switches.csv",
                         "budget.csv",
+                        "comparison.csv",
                         "curve-choice.csv",
                         "curves-left-out.csv",
                         "ledger.csv",
@@ -122,6 +123,7 @@ class CommandsTest {
                         "rates.csv",
                         "results.json",
                         "samples-left-out.csv",
+                        "sites.geojson",
                         "table1.csv",
                         "tornado.csv"),
                 names(folder.resolve("results")));

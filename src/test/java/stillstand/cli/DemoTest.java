@@ -12,6 +12,8 @@ import java.util.Locale;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
+import stillstand.comparison.SiteComparison;
+import stillstand.comparison.SiteMotion;
 import stillstand.study.StudyResult;
 import stillstand.uplift.LevelAnswer;
 import stillstand.uplift.Rate;
@@ -77,6 +79,7 @@ class DemoTest {
                 "one reworked coral of three decides nothing");
         assertTrue(level(result, "G4").agreement().orElseThrow().p() < 1e-6, "but the disagreement is shown");
         assertWaiting(result, demo.out());
+        assertCompared(result, demo.out());
     }
 
     private static void assertWaiting(StudyResult result, String terminal) {
@@ -90,6 +93,35 @@ class DemoTest {
         assertTrue(terminal.contains("S2 moves slower than"), terminal);
     }
 
+    /** The north against the south, and what sites share: their difference is known better than were it not shared. */
+    private static void assertCompared(StudyResult result, String terminal) {
+        assertEquals(
+                List.of(
+                        "Gannet Steps less Lantern Bay",
+                        "Quay Shoals less Still Cove",
+                        "Gannet Steps less Still Cove",
+                        "Lantern Bay less Still Cove"),
+                result.comparison().stream()
+                        .map(pair -> pair.a() + " less " + pair.b())
+                        .toList());
+        for (SiteComparison pair : result.comparison()) {
+            assertTrue(
+                    pair.difference().interval95().width()
+                            < 1.05
+                                    * pair.independent()
+                                            .difference()
+                                            .interval95()
+                                            .width(),
+                    pair.a() + " less " + pair.b());
+        }
+        assertEquals(
+                List.of("up", "up", "down", "stable"),
+                result.siteMotion().stream().map(SiteMotion::motion).toList());
+        assertEquals(1, result.terraceTilts().size());
+        assertTrue(terminal.contains("Gannet Steps less Still Cove"), terminal);
+        assertTrue(terminal.contains("Lantern Bay / L2, tilt by 6 points: −0."), terminal);
+    }
+
     private static String whyNoRate(StudyResult result, String level, String sample) {
         return level(result, level).samples().stream()
                 .filter(answer -> answer.sample().equals(sample))
@@ -100,7 +132,7 @@ class DemoTest {
 
     @Test
     void demoSaysThatItIsInvented() throws IOException {
-        for (String file : List.of("README.md", "study.json", "sites.csv", "levels.csv", "samples.csv")) {
+        for (String file : List.of("README.md", "study.json", "sites.csv", "levels.csv", "samples.csv", "points.csv")) {
             assertTrue(
                     Files.readString(DEMO.resolve(file))
                             .toLowerCase(Locale.ROOT)

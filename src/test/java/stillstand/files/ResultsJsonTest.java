@@ -32,7 +32,8 @@ class ResultsJsonTest {
     void keysAreThoseOfTheFormat() {
         JsonNode tree = new JsonMapper().readTree(TEXT);
         assertEquals(
-                "provenance sea_level levels waiting flights intervals implied_sea_level leverage residuals curve_choice curve_evidence warnings failures ledger",
+                "provenance sea_level levels waiting flights intervals implied_sea_level leverage residuals curve_choice"
+                        + " curve_evidence comparison site_motion site_groups terrace_tilts warnings failures ledger",
                 keys(tree));
         assertEquals(
                 "site model rate probability_uplift regions68 regions95 weights68 weights95 segments pairings unmatched"
@@ -72,6 +73,23 @@ class ResultsJsonTest {
                 keys(tree.at("/leverage/samples_left_out/0")));
         assertEquals("site rate_of curve weight rate rate_without", keys(tree.at("/leverage/curves_left_out/0")));
         assertEquals("site level predicted_m measured_m sigma_m", keys(tree.at("/residuals/0")));
+        assertEquals(
+                "a b a_level b_level difference probability_a_faster correlation independent shared_errors",
+                keys(tree.at("/comparison/0")));
+        assertEquals("difference probability_a_faster", keys(tree.at("/comparison/0/independent")));
+        assertEquals(
+                "site coast level latitude longitude distance_along_coast_km area_km2 rate up stable down motion",
+                keys(tree.at("/site_motion/0")));
+        assertEquals("group sites pooled tilt plane area_mean", keys(tree.at("/site_groups/0")));
+        assertEquals("mean spread spread_scale sites", keys(tree.at("/site_groups/0/pooled")));
+        assertEquals("site rate", keys(tree.at("/site_groups/0/pooled/sites/0")));
+        assertEquals(
+                "at_origin slope covariance chi_squared degrees p", keys(tree.at("/site_groups/0/tilt/shared_errors")));
+        assertEquals("value sd unit", keys(tree.at("/site_groups/0/tilt/independent/slope")));
+        assertEquals(
+                "at_centre east north steepest steepest_to_degrees chi_squared degrees p",
+                keys(tree.at("/site_groups/0/plane/shared_errors")));
+        assertEquals("site level points along rate", keys(tree.at("/terrace_tilts/0")));
         assertEquals("version seed generator inputs started seconds", keys(tree.at("/provenance")));
         assertEquals("file sha256", keys(tree.at("/provenance/inputs/0")));
         assertEquals("id weight points", keys(tree.at("/sea_level/curves/0")));

@@ -18,7 +18,6 @@ import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputProblem;
-import stillstand.ledger.InputWarning;
 import stillstand.ledger.Loaded;
 import stillstand.sealevel.HighstandTable;
 import stillstand.study.InputFile;
@@ -153,11 +152,12 @@ class StudyFolderTest {
     }
 
     @Test
-    void filesOfLaterWorkAreNamed() throws IOException {
-        write("points.csv", "site,offset_m\n");
-        assertEquals(
-                List.of("points.csv: this file is not used yet"),
-                read().warnings().stream().map(InputWarning::placed).toList());
+    void pointsOfTerracesAreRead() throws IOException {
+        write(
+                "points.csv",
+                "site,level,distance_km,elevation_m,elevation_1sigma_m\nNorth,T1,0,61,0.5\nNorth,T1,1,62,0.5\nNorth,T1,2,63,0.5\n");
+        assertEquals(3, whole().together().terraces().get(0).points().size());
+        assertTrue(whole().inputs().stream().anyMatch(input -> input.file().equals("points.csv")));
     }
 
     @Test

@@ -9,6 +9,7 @@ import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
+import stillstand.comparison.ComparisonRules;
 import stillstand.ledger.Assumption;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.Loaded;
@@ -86,6 +87,15 @@ class StudyJsonTest {
 
     static List<Case> cases() {
         return List.of(
+                bad(
+                        "{\"title\": \"x\", \"comparison\": {\"stable_within_m_per_kyr\": 0}}",
+                        "study.json:1:58: comparison.stable_within_m_per_kyr: found 0, expected a number above 0"),
+                bad(
+                        "{\"title\": \"x\", \"comparison\": {\"pairs\": [[\"North\"]]}}",
+                        "study.json:1:41: comparison.pairs[0]: found a list [ … ], expected a pair of sites such as [\"North\", \"South\"]"),
+                bad(
+                        "{\"title\": \"x\", \"comparison\": {\"pair\": []}}",
+                        "study.json:1:31: comparison.pair: found an unknown key, expected \"pairs\""),
                 bad("", "study.json: found an empty file, expected a json object"),
                 bad(
                         "{\"title\": \"x\", \"rate\": {\"change_between_ka\": [300, 30]}}",
@@ -119,7 +129,7 @@ class StudyJsonTest {
                         "study.json:2:3: sede: found an unknown key, expected \"seed\""),
                 bad(
                         "{\"title\": \"x\", \"qqqqqqqqq\": 1}",
-                        "study.json:1:16: qqqqqqqqq: found an unknown key, expected one of title, note, seed, draws, sea_level, rate, matching, indicative_range, screening, leverage"),
+                        "study.json:1:16: qqqqqqqqq: found an unknown key, expected one of title, note, seed, draws, sea_level, rate, matching, indicative_range, screening, leverage, comparison"),
                 bad(
                         "{\"title\": \"x\", \"title\": \"y\"}",
                         "study.json:1:16: title: found this key a second time, expected it once"),
@@ -212,7 +222,8 @@ class StudyJsonTest {
                         + "\"indicative_range\": \"uniform\","
                         + "\"screening\": {\"calcite_maximum_percent\": 2, \"initial_d234u_permil\": [140, 152], \"th232_maximum_ppb\": 1,"
                         + "\"th230_th232_minimum\": 20, \"replicates\": \"mean\", \"stratigraphic_order\": true},"
-                        + "\"leverage\": {\"date_1sigma_ka\": 2}}";
+                        + "\"leverage\": {\"date_1sigma_ka\": 2},"
+                        + "\"comparison\": {\"stable_within_m_per_kyr\": 0.02, \"site_spread_m_per_kyr\": 0.5, \"pairs\": [[\"North\", \"South\"]]}}";
         StudySettings expected = new StudySettings(
                 "A",
                 "b",
@@ -245,7 +256,8 @@ class StudyJsonTest {
                         Optional.of(20.0),
                         Optional.of("mean"),
                         Optional.of(true)),
-                Optional.of(new MeasurementPlan(2, 0.3)));
+                Optional.of(new MeasurementPlan(2, 0.3)),
+                new ComparisonRules(0.02, 0.5, List.of(new ComparisonRules.Pair("North", "South"))));
         StudySettings read = parse(json).value().orElseThrow().settings();
         assertEquals(expected, read);
         assertEquals(

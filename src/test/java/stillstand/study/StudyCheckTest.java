@@ -484,7 +484,7 @@ class StudyCheckTest {
                         "levels.csv:4:3: heights at \"South\" look like feet (up to 2350): they are read as metres",
                         "samples.csv:2:7: sample \"S1\" stands 15 m above its level \"T1\", more than three sigma of both heights (6.7 m)",
                         "sites.csv: no site has a latitude and longitude: none can be shown on a map",
-                        "sites.csv:1:4: coast is not used yet",
+                        "sites.csv:2:4: coast \"east\" has one site: it is compared only where study.json asks for the pair",
                         "sites.csv:4:3: the surveyed range of \"East\" ends within 5 % of its highest level (100 m above mean sea level)"),
                 warnings(loaded));
         assertEquals(loaded.warnings(), loaded.value().orElseThrow().warnings());

@@ -121,7 +121,8 @@ record FlightSimulator(List<FlightRow> rows, SharedPriors shared, Survey survey,
         }
     }
 
-    private Flight anyFlight(Truth truth, SplittableRandom dice) {
+    /** One flight, however many levels it has. */
+    Flight anyFlight(Truth truth, SplittableRandom dice) {
         SharedNumbers numbers = drawShared(dice);
         List<Shore> shores = recorded(truth, numbers, dice);
         for (double e = dice.nextExponential(); e < numbers.expectedStrays(); e += dice.nextExponential()) {
