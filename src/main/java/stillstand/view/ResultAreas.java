@@ -28,6 +28,7 @@ final class ResultAreas {
         StairModel stair = new StairModel(background, foreground, model::pair);
         RatesModel rates = new RatesModel();
         LeverageModel leverage = new LeverageModel(model::askLeverage);
+        SitesModel sites = new SitesModel();
         RecordModel record = new RecordModel(background, foreground);
         views.put(Area.SEA_LEVEL, new SeaLevelView(seaLevel));
         views.put(Area.STAIR, new StairView(stair));
@@ -36,8 +37,9 @@ final class ResultAreas {
                 Area.LEVERAGE,
                 new LeverageView(leverage, new LeverageView.Ways(
                         model::askLeverageAndRun, () -> model.areaProperty().set(Area.SEA_LEVEL), cannotAsk(model))));
+        views.put(Area.SITES, new SitesView(sites));
         views.put(Area.RECORD, new RecordView(record, questions::folderToWrite));
-        models = List.of(seaLevel::show, stair::show, rates::show, leverage::show, record::show);
+        models = List.of(seaLevel::show, stair::show, rates::show, leverage::show, sites::show, record::show);
     }
 
     /** Nothing can be asked of a study that is read only, has problems, or is under way. */

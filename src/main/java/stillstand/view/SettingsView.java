@@ -44,7 +44,8 @@ final class SettingsView extends BorderPane {
                         form(SettingsModel.STUDY),
                         form(SettingsModel.PRIOR),
                         form(SettingsModel.MATCHING)),
-                column(group("Curves and their weights", curves()), form(SettingsModel.SEA_LEVEL), form(SettingsModel.LEVERAGE)));
+                column(group("Curves and their weights", curves()), form(SettingsModel.SEA_LEVEL), form(SettingsModel.LEVERAGE),
+                        form(SettingsModel.SITES)));
         groups.getStyleClass().add("settings-groups");
         ScrollPane scroll = new ScrollPane(groups);
         scroll.setFitToWidth(true);

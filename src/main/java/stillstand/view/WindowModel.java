@@ -65,7 +65,8 @@ final class WindowModel {
         STAIR(3, "Stair"),
         RATES(4, "Rates"),
         LEVERAGE(5, "Leverage"),
-        RECORD(6, "Record");
+        SITES(6, "Sites"),
+        RECORD(7, "Record");
 
         private final int number;
         private final String title;
