@@ -115,7 +115,7 @@ public final class FlightReport {
                     + flight.halving().stream()
                             .sorted(Comparator.comparingDouble(FlightResult.Halving::width95ChangePercent))
                             .map(half -> half.error() + " "
-                                    + Wording.number(String.format(Locale.ROOT, "%.0f", half.width95ChangePercent()))
+                                    + Wording.number(Digits.text(half.width95ChangePercent(), 0))
                                     + " %")
                             .collect(Collectors.joining(", "))
                     + ".");

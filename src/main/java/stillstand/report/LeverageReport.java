@@ -115,9 +115,9 @@ public final class LeverageReport {
 
     /** {@code −38.5 ± 0.4 %}: the mean change of the width of the 95 % interval, and one standard error of its calculation. */
     public static String change(NextMeasurement each) {
-        String form = each.width95ChangePercentError() < 0.95 ? "%.1f ± %.1f %%" : "%.0f ± %.0f %%";
-        return Wording.number(
-                String.format(Locale.ROOT, form, each.width95ChangePercent(), each.width95ChangePercentError()));
+        int decimals = each.width95ChangePercentError() < 0.95 ? 1 : 0;
+        return Wording.number(Digits.text(each.width95ChangePercent(), decimals)) + " ± "
+                + Digits.text(each.width95ChangePercentError(), decimals) + " %";
     }
 
     private static Optional<String> surest(List<NextMeasurement> own) {

@@ -1,11 +1,12 @@
 package stillstand.view;
 
-import atlantafx.base.theme.Styles;
 import java.util.function.Predicate;
 import javafx.scene.control.TableRow;
 
 /** A row that stands out where something is true of it. */
 final class BoldRow<T> extends TableRow<T> {
+    private static final String STANDS_OUT = "stands-out";
+
     private final Predicate<T> stands;
 
     BoldRow(Predicate<T> stands) {
@@ -15,9 +16,9 @@ final class BoldRow<T> extends TableRow<T> {
     @Override
     protected void updateItem(T row, boolean empty) {
         super.updateItem(row, empty);
-        getStyleClass().remove(Styles.TEXT_BOLD);
+        getStyleClass().remove(STANDS_OUT);
         if (!empty && row != null && stands.test(row)) {
-            getStyleClass().add(Styles.TEXT_BOLD);
+            getStyleClass().add(STANDS_OUT);
         }
     }
 }

@@ -146,6 +146,9 @@ public final class LeverageModel {
      * @param halving what halving one kind of error would do to the flight
      * @param inputAxis change of the rate, m/kyr, that all bars share
      * @param rateAxis of the curves, m/kyr
+     * @param asks whether the study asks every run what to measure next
+     * @param wasAsked whether the last run was
+     * @param stale whether all this is older than the study
      */
     public record Picture(
             List<Words> words,
@@ -157,8 +160,15 @@ public final class LeverageModel {
             Interval inputAxis,
             List<NextMeasurement> next,
             List<AssumptionSwitch> assumptions,
-            List<LeftOutRow> leftOut) {
-        static final Picture NOTHING = new Picture(
+            List<LeftOutRow> leftOut,
+            boolean asks,
+            boolean wasAsked,
+            boolean stale) {
+        static final Picture NOTHING = empty(false);
+        static final Picture ASKED = empty(true);
+
+        private static Picture empty(boolean asks) {
+            return new Picture(
                 List.of(),
                 List.of(),
                 new Interval(-1, 1),
@@ -168,7 +178,11 @@ public final class LeverageModel {
                 new Interval(-1, 1),
                 List.of(),
                 List.of(),
-                List.of());
+                List.of(),
+                asks,
+                false,
+                false);
+        }
 
         public Picture {
             words = List.copyOf(words);
@@ -206,7 +220,7 @@ public final class LeverageModel {
     public void choose(String name, String rate) {
         site = name;
         rateOf = ratesOf().contains(rate) ? rate : EVERY;
-        picture.set(shown.result().map(this::picture).orElse(Picture.NOTHING));
+        picture.set(picture(shown.result()));
     }
 
     /** Sites of the last run. */
@@ -245,11 +259,16 @@ public final class LeverageModel {
         return picture.getReadOnlyProperty();
     }
 
-    private Picture picture(StudyResult result) {
+    private Picture picture(Optional<StudyResult> found) {
+        if (found.isEmpty()) {
+            return asks() ? Picture.ASKED : Picture.NOTHING;
+        }
+        StudyResult result = found.get();
         Leverage leverage = result.leverage();
         Optional<FlightResult> flight = result.flight(site);
         List<CurveRow> curves = here(
                 result.curveChoice().stream()
+                        .sorted(Comparator.comparing(choice -> choice.level().isPresent())) // the flight first
                         .map(choice -> new CurveRow(
                                 LeverageReport.name(choice.level().orElse(NextMeasurement.FLIGHT)), choice))
                         .toList(),
@@ -283,7 +302,10 @@ public final class LeverageModel {
                         .sorted(Comparator.comparingDouble(
                                 of -> -LeverageReport.move(of.rate(), of.rateWouldBe())))
                         .toList(),
-                leftOut(leverage, flight));
+                leftOut(leverage, flight),
+                asks(),
+                wasAsked(),
+                shown.stale());
     }
 
     private <T> List<T> here(List<T> all, Function<T, String> siteOf, Function<T, String> rate) {
@@ -292,8 +314,9 @@ public final class LeverageModel {
                 .toList();
     }
 
+    /** Whether the rate of a level, or of the flight under either of its names, is looked at. */
     private boolean isShown(String rate) {
-        return rateOf.equals(EVERY) || rateOf.equals(LeverageReport.name(rate));
+        return rateOf.equals(EVERY) || rateOf.equals(rate) || rateOf.equals(LeverageReport.name(rate));
     }
 
     private List<Words> words(StudyResult result, Optional<FlightResult> flight) {
@@ -406,6 +429,14 @@ public final class LeverageModel {
         return new Interval(all[0] - spare, all[all.length - 1] + spare);
     }
 
+    /** The sentences of the terminal to one question; none before a run. */
+    public List<String> words(Part part) {
+        return picture.get().words().stream()
+                .filter(of -> of.part() == part)
+                .flatMap(of -> of.sentences().stream())
+                .toList();
+    }
+
     /** Why a part shows nothing; empty where it shows something. */
     public Optional<Missing> missing(Part part) {
         Picture now = picture.get();
@@ -427,13 +458,13 @@ public final class LeverageModel {
                     case CURVES -> whyNoCurves();
                     case INPUTS -> new Missing(
                             "No input can be moved by itself here: this rate waits for a highstand.", Optional.empty());
-                    case NEXT, ASSUMPTIONS -> wasAsked()
+                    case NEXT, ASSUMPTIONS -> now.wasAsked()
                             ? new Missing("The run was asked, and found nothing here to tell.", Optional.empty())
                             : new Missing(
                                     "The last run was not asked for this, since it takes longer than the rates"
                                             + " themselves.",
                                     Optional.of(Way.ASK_AND_RUN));
-                    case LEFT_OUT -> wasAsked()
+                    case LEFT_OUT -> now.wasAsked()
                             ? new Missing("Nothing can be left out here.", Optional.empty())
                             : new Missing(
                                     "Levels are left out of a flight, curves where there are several, samples where"
@@ -455,18 +486,17 @@ public final class LeverageModel {
     public String note(Part part) {
         return switch (part) {
             case CURVES -> "No curve is true, and they share cores and methods. Read the mixtures beside the curves, never alone.";
-            case INPUTS -> "Each input from the low to the high end of its own range, all others at their medians. Bars do not"
-                    + " add up to the spread.";
+            case INPUTS -> "Each input from the low end of its own range (brown) to the high end (blue), all others at their"
+                    + " medians: thick 68 %, thin 95 %. Bars do not add up to the spread.";
             case NEXT -> "Mean change of the width of the 95 % interval, ± one standard error of its calculation. What it costs is"
                     + " for you to say.";
             case ASSUMPTIONS -> "Both rates with the same draws, median and 95 %: compare them with each other.";
             case LEFT_OUT -> "Median and 95 %, with and without."
-                    + (wasAsked() ? "" : " Samples only where the run is asked for it.");
+                    + (picture.get().wasAsked() ? "" : " Samples only where the run is asked for it.");
         };
     }
 
-    /** Whether the last run was asked what to measure next. */
-    public boolean wasAsked() {
+    private boolean wasAsked() {
         boolean found = shown.result().map(StudyResult::leverage).stream()
                 .anyMatch(of -> !of.nextMeasurements().isEmpty()
                         || !of.assumptionSwitches().isEmpty()
@@ -474,8 +504,7 @@ public final class LeverageModel {
         return found || (asks() && shown.result().isPresent() && !shown.stale());
     }
 
-    /** Whether the study asks every run what to measure next. */
-    public boolean asks() {
+    private boolean asks() {
         return shown.study()
                 .filter(study -> study.settings().leverage().isPresent())
                 .isPresent();
@@ -486,11 +515,6 @@ public final class LeverageModel {
         if (every != asks()) {
             ask.accept(every);
         }
-    }
-
-    /** Whether what is shown is older than the study. */
-    public boolean isStale() {
-        return shown.stale();
     }
 
     /** Whether a measurement would narrow an interval by more than can be told, in a word. */

@@ -43,7 +43,6 @@ import stillstand.view.LeverageModel.LeftOutRow;
 import stillstand.view.LeverageModel.Missing;
 import stillstand.view.LeverageModel.Part;
 import stillstand.view.LeverageModel.Picture;
-import stillstand.view.LeverageModel.Words;
 import stillstand.view.ResultTable.Scale;
 
 /** What the answers hang on: the sentences of the terminal on one side, one question at a time in numbers on the other. */
@@ -108,7 +107,7 @@ public final class LeverageView extends BorderPane {
         VBox.setVgrow(inputs, Priority.ALWAYS);
         setTop(bar());
         SplitPane split = new SplitPane(inWords(), inNumbers());
-        split.setDividerPositions(0.3);
+        split.setDividerPositions(0.29);
         setCenter(split);
         model.pictureProperty().addListener((property, before, now) -> follow(now));
         follow(model.pictureProperty().get());
@@ -117,8 +116,10 @@ public final class LeverageView extends BorderPane {
     private Region bar() {
         site.setId("leverage-site");
         site.setAccessibleText("Site");
+        site.setMinWidth(190);
         rateOf.setId("leverage-rate-of");
         rateOf.setAccessibleText("Rate of");
+        rateOf.setMinWidth(140);
         site.valueProperty().addListener((property, before, now) -> {
             if (now != null && !following) {
                 model.choose(now, model.rateOf());
@@ -195,10 +196,10 @@ public final class LeverageView extends BorderPane {
         rateOf.setValue(model.rateOf());
         site.setDisable(model.sites().isEmpty());
         rateOf.setDisable(model.sites().isEmpty());
-        ask.setSelected(model.asks());
+        ask.setSelected(now.asks());
         following = false;
-        staleMark.setVisible(model.isStale());
-        staleMark.setManaged(model.isStale());
+        staleMark.setVisible(now.stale());
+        staleMark.setManaged(now.stale());
         rateAxis.set(now.rateAxis());
         inputAxis.set(now.inputAxis());
         halvingAxis.set(now.halvingAxis());
@@ -210,7 +211,6 @@ public final class LeverageView extends BorderPane {
         next.getItems().setAll(now.next());
         assumptions.getItems().setAll(now.assumptions());
         leftOut.getItems().setAll(now.leftOut());
-        say(now.words());
         showPart();
     }
 
@@ -219,21 +219,12 @@ public final class LeverageView extends BorderPane {
         node.setManaged(is);
     }
 
-    private void say(List<Words> all) {
-        words.getChildren().setAll(head("In words", Styles.TITLE_4));
-        if (all.isEmpty()) {
-            words.getChildren().add(sentence("Nothing to say yet: run the study."));
-        }
-        for (Words of : all) {
-            words.getChildren().add(head(of.part().title(), "group-title"));
-            of.sentences().forEach(line -> words.getChildren().add(sentence(line)));
-        }
-    }
-
-    private static Label head(String text, String style) {
-        Label head = new Label(text);
-        head.getStyleClass().add(style);
-        return head;
+    private void say(List<String> sentences) {
+        Label head = new Label("In words");
+        head.getStyleClass().add(Styles.TITLE_4);
+        words.getChildren().setAll(head);
+        (sentences.isEmpty() ? List.of("Nothing to say.") : sentences)
+                .forEach(line -> words.getChildren().add(sentence(line)));
     }
 
     private static Label sentence(String text) {
@@ -244,6 +235,7 @@ public final class LeverageView extends BorderPane {
     }
 
     private void showPart() {
+        say(model.words(part));
         note.setText(model.note(part));
         place.getChildren()
                 .setAll(model.missing(part).map(this::absent).orElseGet(() -> tables.getOrDefault(part, curves)));
@@ -271,19 +263,19 @@ public final class LeverageView extends BorderPane {
     }
 
     private void curveColumns() {
-        curves.words("Rate of", CurveRow::rateOf, 92);
-        curves.words("Curve", CurveRow::curve, 210);
-        curves.number("Weight", CurveRow::weight, row -> row.choice().weight(), 70);
+        curves.words("Rate of", CurveRow::rateOf, 80);
+        curves.words("Curve", CurveRow::curve, 186);
+        curves.number("Weight", CurveRow::weight, row -> row.choice().weight(), 64);
         curves.number(
                 "Rate (m/kyr)",
                 row -> Wording.rate(row.choice().rate()),
                 row -> row.choice().rate().median(),
-                110);
+                104);
         curves.number(
                 "95 %",
                 row -> Wording.interval95(row.choice().rate()),
                 row -> row.choice().rate().shortest95().low(),
-                110);
+                104);
         curves.strip(
                 "Density, metres per thousand years",
                 LEAST_STRIP,
@@ -292,7 +284,7 @@ public final class LeverageView extends BorderPane {
                 row -> Wording.rate(row.choice().rate()) + ", 95 % "
                         + Wording.interval95(row.choice().rate()),
                 (g, row, scale, palette) -> RateStroke.paint(g, row.choice().rate(), scale, palette));
-        curves.wrapped("Records", CurveRow::records, 150);
+        curves.wrapped("Records", CurveRow::records, 140);
         curves.setRowFactory(made -> new BoldRow<>(row -> row.choice().mixesCurves()));
     }
 
@@ -300,7 +292,7 @@ public final class LeverageView extends BorderPane {
         halving.words("Error of the flight, halved", Halving::error, 190);
         halving.number(
                 "95 % width",
-                row -> Wording.number(String.format(Locale.ROOT, "%.0f %%", row.width95ChangePercent())),
+                row -> Wording.number(Digits.text(row.width95ChangePercent(), 0)) + " %",
                 Halving::width95ChangePercent,
                 100);
         halving.strip(
@@ -308,7 +300,7 @@ public final class LeverageView extends BorderPane {
                 LEAST_STRIP,
                 halvingAxis,
                 Halving::width95ChangePercent,
-                row -> Wording.number(String.format(Locale.ROOT, "%.0f percent", row.width95ChangePercent())),
+                row -> Wording.number(Digits.text(row.width95ChangePercent(), 0)) + " percent",
                 (g, row, scale, palette) -> {
                     g.setFill(palette.sea());
                     box(g, scale, 0, row.width95ChangePercent(), 8, 0);
@@ -360,27 +352,27 @@ public final class LeverageView extends BorderPane {
     }
 
     private void nextColumns() {
-        next.words("Rate of", row -> LeverageReport.name(row.rateOf()), 90);
-        next.words("Measurement", LeverageReport::named, 200);
-        next.number("95 % width", LeverageReport::change, NextMeasurement::width95ChangePercent, 130);
-        next.words("", LeverageModel::tells, 170);
+        next.words("Rate of", row -> LeverageReport.name(row.rateOf()), 70);
+        next.words("Measurement", LeverageReport::named, 232);
+        next.number("Changes 95 % by", LeverageReport::change, NextMeasurement::width95ChangePercent, 118);
         next.number(
                 "Width (m/kyr)",
                 row -> width(row.width95(), row) + " to " + width(row.expectedWidth95(), row),
                 NextMeasurement::expectedWidth95,
-                130);
+                112);
         next.number(
                 "May widen",
                 row -> Digits.text(row.probabilityWider(), 2),
                 NextMeasurement::probabilityWider,
-                90);
+                80);
         next.number(
                 "Certainty of pairings",
                 LeverageModel::certainty,
                 row -> row.pairing()
                         .map(gain -> gain.certainty() - gain.expectedCertainty())
                         .orElse(1.0),
-                180);
+                148);
+        next.wrapped("But", LeverageModel::tells, 112);
     }
 
     private static String width(double width, NextMeasurement of) {
@@ -388,53 +380,53 @@ public final class LeverageView extends BorderPane {
     }
 
     private void assumptionColumns() {
-        assumptions.words("Rate of", row -> LeverageReport.name(row.rateOf()), 90);
-        assumptions.wrapped("Assumption", AssumptionSwitch::assumption, 180);
-        assumptions.wrapped("Is", AssumptionSwitch::was, 150);
-        assumptions.wrapped("Would be", AssumptionSwitch::wouldBe, 150);
+        assumptions.words("Rate of", row -> LeverageReport.name(row.rateOf()), 70);
+        assumptions.wrapped("Assumption", AssumptionSwitch::assumption, 156);
+        assumptions.wrapped("Is", AssumptionSwitch::was, 124);
+        assumptions.wrapped("Would be", AssumptionSwitch::wouldBe, 124);
         assumptions.number(
                 "Rate (m/kyr)",
                 row -> LeverageReport.rate(row.rate(), row.rate()),
                 row -> row.rate().median(),
-                160);
+                148);
         assumptions.number(
                 "Would be (m/kyr)",
                 row -> row.rateWouldBe()
                         .map(rate -> LeverageReport.rate(rate, row.rate()))
                         .orElse("no rate"),
                 row -> row.rateWouldBe().map(ShortRate::median).orElse(Double.POSITIVE_INFINITY),
-                160);
+                148);
         moves(assumptions, row -> LeverageReport.move(row.rate(), row.rateWouldBe()));
     }
 
     private void leftOutColumns() {
         leftOut.words("Without", LeftOutRow::what, 76);
-        leftOut.words("Name", LeftOutRow::name, 170);
-        leftOut.words("Rate of", row -> LeverageReport.name(row.rateOf()), 90);
+        leftOut.words("Name", LeftOutRow::name, 150);
+        leftOut.words("Rate of", row -> LeverageReport.name(row.rateOf()), 76);
         leftOut.number(
                 "Rate (m/kyr)",
                 row -> LeverageReport.rate(row.rate(), row.rate()),
                 row -> row.rate().median(),
-                160);
+                148);
         leftOut.number(
                 "Without (m/kyr)",
                 row -> row.without()
                         .map(rate -> LeverageReport.rate(rate, row.rate()))
                         .orElse("no rate"),
                 row -> row.without().map(ShortRate::median).orElse(Double.POSITIVE_INFINITY),
-                160);
+                148);
         moves(leftOut, LeftOutRow::move);
-        leftOut.wrapped("Also", LeftOutRow::also, 200);
+        leftOut.wrapped("Also", LeftOutRow::also, 150);
     }
 
-    /** How far a rate moves, in percent of half its 95 % interval. */
+    /** How far a rate moves, in half widths of its 95 % interval. */
     private static <T> void moves(ResultTable<T> table, Function<T, Double> move) {
         table.number(
                 "Moves by",
                 row -> move.apply(row) == Double.MAX_VALUE
                         ? ""
-                        : Math.round(100 * move.apply(row)) + " % of ±",
+                        : Digits.text(move.apply(row), 2) + " half widths",
                 move::apply,
-                100);
+                116);
     }
 }

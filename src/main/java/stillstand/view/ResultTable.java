@@ -37,6 +37,8 @@ final class ResultTable<T> extends TableView<T> {
     private static final double BESIDE_STRIP = 18;
     private static final double SCROLL_BAR = 18;
     private static final double ROW = 26;
+    /** Numbers so near to an end of the axis are set inside it. */
+    private static final double END = 15;
 
     private final List<Words<T>> copied = new ArrayList<>();
     private Function<List<T>, String> copies = this::cells;
@@ -199,6 +201,7 @@ final class ResultTable<T> extends TableView<T> {
             head.setGraphic(canvas);
             head.setContentDisplay(ContentDisplay.GRAPHIC_ONLY);
             head.setAccessibleText(says);
+            head.setStyle("-fx-padding: 0;"); // so that ticks stand over what they measure
             paint();
         }
 
@@ -221,15 +224,18 @@ final class ResultTable<T> extends TableView<T> {
             g.clearRect(0, 0, scale.width(), 16);
             g.setFill(palette().muted());
             g.setStroke(palette().muted());
-            g.setTextAlign(TextAlignment.CENTER);
             g.setFont(Font.font(10.5));
             Interval range = scale.range();
             for (double tick : StairScale.ticks(range.low(), range.high(), scale.width(), 52)) {
                 double x = scale.x(tick);
                 g.strokeLine(x, 13, x, 16);
-                if (x > 12 && x < scale.width() - 12) { // half a number at an end says nothing
-                    g.fillText(Wording.number(Digits.text(Math.rint(tick * 1e6) / 1e6)), x, 10);
-                }
+                boolean isLeft = x < END;
+                boolean isRight = x > scale.width() - END;
+                g.setTextAlign(isLeft ? TextAlignment.LEFT : isRight ? TextAlignment.RIGHT : TextAlignment.CENTER);
+                g.fillText(
+                        Wording.number(Digits.text(Math.rint(tick * 1e6) / 1e6)),
+                        isLeft ? 0 : isRight ? scale.width() : x,
+                        10);
             }
         }
     }

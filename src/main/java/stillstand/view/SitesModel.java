@@ -24,6 +24,8 @@ import stillstand.uplift.Quantity;
 
 /** How sites compare: where they lie, how they differ, and what a coast says as a whole. Rates in m/kyr. */
 public final class SitesModel {
+    private static final String UNSHARED = "were errors not shared: ";
+
     private final ReadOnlyObjectWrapper<Content> content = new ReadOnlyObjectWrapper<>(Content.NOTHING);
     private final ReadOnlyObjectWrapper<SitesPicture> picture = new ReadOnlyObjectWrapper<>(SitesPicture.EMPTY);
     private Shown shown = Shown.NOTHING;
@@ -56,24 +58,28 @@ public final class SitesModel {
      * @param of the coast or terrace
      * @param what is said
      * @param answer with what is shared kept shared
-     * @param independent what would come out were the errors independent; blank where nothing else would
+     * @param beside what would come out were the errors not shared, or of a site by itself; blank where there is no such thing
      * @param warning where the answer is rough or nothing fits
      */
-    public record TogetherRow(String of, String what, String answer, String independent, String warning) {}
+    public record TogetherRow(String of, String what, String answer, String beside, String warning) {}
 
     /**
      * All that is shown beside the map.
      *
      * @param differenceAxis m/kyr
+     * @param stableWithin what counts as stable, in words
+     * @param stale whether all this is older than the study
      */
     public record Content(
             List<String> words,
             List<SiteComparison> differences,
             Interval differenceAxis,
             List<SiteMotion> motions,
-            List<TogetherRow> together) {
-        static final Content NOTHING =
-                new Content(List.of(), List.of(), new Interval(-1, 1), List.of(), List.of());
+            List<TogetherRow> together,
+            String stableWithin,
+            boolean stale) {
+        static final Content NOTHING = new Content(
+                List.of(), List.of(), new Interval(-1, 1), List.of(), List.of(), "a threshold", false);
 
         public Content {
             words = List.copyOf(words);
@@ -86,8 +92,8 @@ public final class SitesModel {
     /** Shows a result, or nothing. */
     public void show(Shown now) {
         shown = now;
-        content.set(now.result().map(SitesModel::content).orElse(Content.NOTHING));
         views = now.result().map(SitesPicture::all).orElse(List.of());
+        content.set(now.result().map(this::content).orElse(Content.NOTHING));
         choose(picture.get().name());
     }
 
@@ -115,7 +121,7 @@ public final class SitesModel {
         return picture.getReadOnlyProperty();
     }
 
-    private static Content content(StudyResult result) {
+    private Content content(StudyResult result) {
         List<String> words = new ComparisonReport(result)
                 .lines().stream()
                         .filter(line -> line.startsWith("  ")) // the others are headings
@@ -132,7 +138,7 @@ public final class SitesModel {
         Interval axis = ends.length == 0
                 ? new Interval(-1, 1)
                 : new Interval(Math.min(0, ends[0]) - spare, Math.max(0, ends[ends.length - 1]) + spare);
-        return new Content(words, result.comparison(), axis, result.siteMotion(), together(result));
+        return new Content(words, result.comparison(), axis, result.siteMotion(), together(result), stableWithin(), shown.stale());
     }
 
     private static List<TogetherRow> together(StudyResult result) {
@@ -166,7 +172,7 @@ public final class SitesModel {
                             group.group(),
                             "tilt over the map",
                             ComparisonReport.steepest(plane.sharedErrors()),
-                            ComparisonReport.steepest(plane.independent()),
+                            UNSHARED + ComparisonReport.steepest(plane.independent()),
                             ComparisonReport.straight(plane.sharedErrors().p(), "plane")
                                     .strip())));
         }
@@ -178,7 +184,7 @@ public final class SitesModel {
         return result.siteMotion().stream()
                 .filter(each -> each.site().equals(site))
                 .findFirst()
-                .map(each -> "by itself " + quantity(each.rate()))
+                .map(each -> "by itself: " + quantity(each.rate()))
                 .orElse("");
     }
 
@@ -191,7 +197,7 @@ public final class SitesModel {
                 of,
                 what,
                 ComparisonReport.estimate(tilt.sharedErrors().slope()),
-                ComparisonReport.estimate(tilt.independent().slope()),
+                UNSHARED + ComparisonReport.estimate(tilt.independent().slope()),
                 ComparisonReport.straight(tilt.sharedErrors().p(), "line").strip());
     }
 
@@ -204,7 +210,7 @@ public final class SitesModel {
                         of,
                         "tilt over the map" + points,
                         ComparisonReport.steepest(plane.sharedErrors()),
-                        ComparisonReport.steepest(plane.independent()),
+                        UNSHARED + ComparisonReport.steepest(plane.independent()),
                         ComparisonReport.straight(plane.sharedErrors().p(), "plane").strip())));
         tilt.rate()
                 .ifPresent(rate ->
@@ -252,8 +258,9 @@ public final class SitesModel {
         return switch (part) {
             case DIFFERENCES -> "Brick: errors of sea level that two sites share are kept shared. Blue below: the wrong answer,"
                     + " as if they were independent.";
-            case MOTION -> "A site counts as stable where its rate is within " + stableWithin() + " of 0.";
-            case TOGETHER -> "Beside each tilt what would come out were the errors independent, which is wrong.";
+            case MOTION -> "A site counts as stable where its rate is within " + content.get().stableWithin() + " of 0.";
+            case TOGETHER -> "Sites of a coast share errors of sea level, which is not mistaken for agreement. Beside each answer what would"
+                    + " come out otherwise.";
         };
     }
 
@@ -284,10 +291,5 @@ public final class SitesModel {
                         ? ""
                         : ": " + level.claims().get(0).highstand() + " "
                                 + ComparisonReport.percent(level.claims().get(0).probability()));
-    }
-
-    /** Whether what is shown is older than the study. */
-    public boolean isStale() {
-        return shown.stale();
     }
 }

@@ -34,6 +34,8 @@ final class SitesPaper extends Region {
     private static final double DOT = 5;
     private static final double LINE = 17;
     private static final double SMALL = 11.5;
+    /** At more sites the levels of a coast are not named. */
+    private static final int MOST_NAMED = 8;
 
     private final SitesModel model;
     private final Canvas canvas = new Canvas();
@@ -302,7 +304,28 @@ final class SitesPaper extends Region {
                 g.strokeLine(x - 7, y(SitesPicture.metres(level)), x + 7, y(SitesPicture.metres(level)));
             }
         }
+        if (spots.size() <= MOST_NAMED) {
+            for (int i = 0; i < spots.size(); i++) {
+                levelNames(g, spots.get(i), i == spots.size() - 1);
+            }
+        }
         names(g, spots);
+    }
+
+    /** Beside their marks, away from the lines that lead to the next site. */
+    private void levelNames(GraphicsContext g, Spot spot, boolean isLast) {
+        double side = isLast ? 10 : -10;
+        double[] wanted = spot.levels().stream()
+                .mapToDouble(level -> -y(SitesPicture.metres(level)))
+                .toArray(); // lowest first, upwards
+        double[] places = apart(wanted, SMALL, -(TOP + height() - 4), -(TOP + 44));
+        g.setFill(palette.muted());
+        g.setFont(Font.font(10.5));
+        g.setTextAlign(isLast ? TextAlignment.LEFT : TextAlignment.RIGHT);
+        g.setTextBaseline(VPos.CENTER);
+        for (int i = 0; i < places.length; i++) {
+            g.fillText(spot.levels().get(i).name(), x(spot.x()) + side, -places[i]);
+        }
     }
 
     /** Above the coast; where all have no room, of every second or third. */

@@ -29,7 +29,8 @@ record SitesPicture(String name, Kind kind, List<Spot> spots, List<Join> joins) 
     static final String MAP = "Map";
     static final SitesPicture EMPTY = new SitesPicture("", Kind.MAP, List.of(), List.of());
     private static final double LEAST_DEGREES = 0.02;
-    private static final double SPARE = 0.12;
+    private static final double SPARE = 0.1;
+    private static final double NAMES = 0.14;
 
     SitesPicture {
         spots = List.copyOf(spots);
@@ -141,11 +142,12 @@ record SitesPicture(String name, Kind kind, List<Spot> spots, List<Join> joins) 
         return around(spots.stream().mapToDouble(Spot::x), kind == Kind.MAP ? LEAST_DEGREES : 1e-3);
     }
 
-    /** What the upright axis must hold. */
+    /** What the upright axis must hold; above the levels of a coast stand the names of the sites. */
     Interval upright() {
-        return kind == Kind.MAP
-                ? around(spots.stream().mapToDouble(Spot::y), LEAST_DEGREES)
-                : around(
+        if (kind == Kind.MAP) {
+            return around(spots.stream().mapToDouble(Spot::y), LEAST_DEGREES);
+        }
+        Interval levels = around(
                         DoubleStream.concat(
                                 DoubleStream.of(0),
                                 spots.stream()
@@ -153,6 +155,7 @@ record SitesPicture(String name, Kind kind, List<Spot> spots, List<Join> joins) 
                                         .map(level -> level.height().orElseThrow().interval95())
                                         .flatMapToDouble(of -> DoubleStream.of(of.low(), of.high()))),
                         1e-3);
+        return new Interval(levels.low(), levels.high() + NAMES * levels.width());
     }
 
     private static Interval around(DoubleStream values, double least) {

@@ -38,6 +38,7 @@ import stillstand.view.SitesModel.TogetherRow;
 /** How sites compare: a map or a coast on one side and what the terminal says of it, one question at a time on the other. */
 public final class SitesView extends BorderPane {
     private static final double LEAST_STRIP = 150;
+    private static final double LEAST_SHARES = 84;
 
     private final SitesModel model;
     private final SitesPaper paper;
@@ -74,19 +75,19 @@ public final class SitesView extends BorderPane {
         left.setOrientation(Orientation.VERTICAL);
         left.setDividerPositions(0.64);
         SplitPane split = new SplitPane(left, inNumbers());
-        split.setDividerPositions(0.42);
+        split.setDividerPositions(0.38);
         setCenter(split);
         reading.textFillProperty()
                 .addListener((property, before, now) -> paper.use(Palette.under(reading.getTextFill())));
         model.contentProperty().addListener((property, before, now) -> follow(now));
         model.pictureProperty().addListener((property, before, now) -> followPicture());
         follow(model.contentProperty().get());
-        followPicture();
     }
 
     private Region picture() {
         view.setId("sites-view");
         view.setAccessibleText("Map or coast");
+        view.setMinWidth(180);
         view.valueProperty().addListener((property, before, now) -> {
             if (now != null && !following) {
                 model.choose(now);
@@ -150,8 +151,8 @@ public final class SitesView extends BorderPane {
         differences.getItems().setAll(now.differences());
         motions.getItems().setAll(now.motions());
         together.getItems().setAll(now.together());
-        staleMark.setVisible(model.isStale());
-        staleMark.setManaged(model.isStale());
+        staleMark.setVisible(now.stale());
+        staleMark.setManaged(now.stale());
         Label head = new Label("In words");
         head.getStyleClass().add(Styles.TITLE_4);
         words.getChildren().setAll(head);
@@ -162,6 +163,7 @@ public final class SitesView extends BorderPane {
             line.setMinHeight(USE_PREF_SIZE);
             words.getChildren().add(line);
         }
+        followPicture();
         showPart();
     }
 
@@ -194,22 +196,22 @@ public final class SitesView extends BorderPane {
     }
 
     private void differenceColumns() {
-        differences.wrapped("Sites", pair -> pair.a() + " less " + pair.b(), 150);
+        differences.wrapped("Sites", pair -> pair.a() + " less " + pair.b(), 128);
         differences.number(
-                "Difference (m/kyr)",
+                "Rate (m/kyr)",
                 pair -> Wording.rate(pair.difference()),
                 pair -> pair.difference().median(),
-                130);
+                104);
         differences.number(
                 "95 %",
                 pair -> Wording.interval95(pair.difference()),
                 pair -> pair.difference().shortest95().low(),
                 110);
         differences.number(
-                "First is faster",
+                "First faster",
                 pair -> ComparisonReport.percent(pair.probabilityAFaster()),
                 SiteComparison::probabilityAFaster,
-                100);
+                86);
         differences.strip(
                 "Difference, metres per thousand years",
                 LEAST_STRIP,
@@ -218,11 +220,11 @@ public final class SitesView extends BorderPane {
                 pair -> Wording.rate(pair.difference()) + ", 95 % " + Wording.interval95(pair.difference()),
                 SitesView::paint);
         differences.number(
-                "If independent (wrong)",
+                "Wrong, unshared",
                 pair -> ComparisonReport.interval(pair.independent().difference()) + ", "
                         + ComparisonReport.percent(pair.independent().probabilityAFaster()),
                 pair -> pair.independent().probabilityAFaster(),
-                160);
+                150);
         differences.number(
                 "Correlation",
                 pair -> pair.correlation()
@@ -240,44 +242,40 @@ public final class SitesView extends BorderPane {
     private static void paint(GraphicsContext g, SiteComparison pair, Scale scale, Palette palette) {
         double middle = scale.height() / 2;
         g.setFill(palette.strength(palette.sea(), 0.6));
-        RateStroke.bar(g, pair.independent().difference().interval95(), scale, middle + 4, 1.5);
-        RateStroke.bar(g, pair.independent().difference().interval68(), scale, middle + 3, 3.5);
+        RateStroke.bar(g, pair.independent().difference().interval95(), scale, middle + 5, 2);
+        RateStroke.bar(g, pair.independent().difference().interval68(), scale, middle + 3, 6);
         g.setFill(palette.link());
-        RateStroke.bar(g, pair.difference().shortest95(), scale, middle - 4.5, 1.5);
-        RateStroke.bar(g, pair.difference().shortest68(), scale, middle - 6, 4.5);
+        RateStroke.bar(g, pair.difference().shortest95(), scale, middle - 6, 2);
+        RateStroke.bar(g, pair.difference().shortest68(), scale, middle - 8, 6);
         g.setStroke(palette.ink());
         g.setLineWidth(1.6);
         double at = scale.x(pair.difference().median());
-        g.strokeLine(at, middle - 9, at, middle + 1);
+        g.strokeLine(at, middle - 10, at, middle);
     }
 
     private void motionColumns() {
-        motions.words("Site", SiteMotion::site, 120);
-        motions.words("Coast", site -> site.coast().orElse(""), 70);
-        motions.words("By", SitesModel::standsBy, 64);
-        motions.number("Rate (m/kyr)", site -> Wording.quantity(site.rate()), site -> site.rate().median(), 116);
+        motions.words("Site", SiteMotion::site, 106);
+        motions.words("Coast", site -> site.coast().orElse(""), 60);
+        motions.words("By", SitesModel::standsBy, 56);
+        motions.number(
+                "Rate (m/kyr)", site -> Wording.quantity(site.rate()), site -> site.rate().median(), 108);
         motions.number(
                 "95 %",
                 site -> ComparisonReport.interval(site.rate()),
                 site -> site.rate().interval95().low(),
-                110);
-        motions.words("Goes", SiteMotion::motion, 64);
+                104);
+        motions.words("Goes", SiteMotion::motion, 54);
         motions.strip(
                 "Probability of down, stable and up",
-                LEAST_STRIP,
+                LEAST_SHARES,
                 shareAxis,
                 SiteMotion::up,
                 site -> "down " + ComparisonReport.percent(site.down()) + ", stable "
                         + ComparisonReport.percent(site.stable()) + ", up " + ComparisonReport.percent(site.up()),
                 SitesView::paint);
-        motions.number("Down", site -> ComparisonReport.percent(site.down()), SiteMotion::down, 64);
-        motions.number("Stable", site -> ComparisonReport.percent(site.stable()), SiteMotion::stable, 64);
-        motions.number("Up", site -> ComparisonReport.percent(site.up()), SiteMotion::up, 64);
-        motions.number(
-                "Area (km²)",
-                site -> site.areaKm2().map(Digits::text).orElse(""),
-                site -> site.areaKm2().orElse(0.0),
-                84);
+        motions.number("Down", site -> ComparisonReport.percent(site.down()), SiteMotion::down, 54);
+        motions.number("Stable", site -> ComparisonReport.percent(site.stable()), SiteMotion::stable, 60);
+        motions.number("Up", site -> ComparisonReport.percent(site.up()), SiteMotion::up, 54);
     }
 
     private static void paint(GraphicsContext g, SiteMotion site, Scale scale, Palette palette) {
@@ -294,10 +292,10 @@ public final class SitesView extends BorderPane {
     }
 
     private void togetherColumns() {
-        together.wrapped("Coast or terrace", TogetherRow::of, 120);
-        together.wrapped("What", TogetherRow::what, 160);
-        together.wrapped("Answer", TogetherRow::answer, 230);
-        together.wrapped("If independent (wrong), or by itself", TogetherRow::independent, 230);
-        together.wrapped("", TogetherRow::warning, 170);
+        together.wrapped("Of", TogetherRow::of, 104);
+        together.wrapped("What", TogetherRow::what, 140);
+        together.wrapped("Answer", TogetherRow::answer, 200);
+        together.wrapped("Beside it", TogetherRow::beside, 200);
+        together.wrapped("But", TogetherRow::warning, 100);
     }
 }
