@@ -530,6 +530,6 @@ public final class LeverageModel {
     static String certainty(NextMeasurement each) {
         return each.pairing()
                 .map(gain -> Digits.text(gain.certainty(), 2) + " to " + Digits.text(gain.expectedCertainty(), 2)
-                        + " ± " + Digits.text(gain.error(), Math.max(gain.error(), 1e-4), 1))
+                        + (gain.error() < 0.0005 ? "" : " ± " + Digits.text(gain.error(), gain.error(), 1)))
                 .orElse("");
     }}

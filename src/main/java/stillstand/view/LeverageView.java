@@ -372,7 +372,7 @@ public final class LeverageView extends BorderPane {
                         .map(gain -> gain.certainty() - gain.expectedCertainty())
                         .orElse(1.0),
                 148);
-        next.wrapped("But", LeverageModel::tells, 112);
+        next.wrapped("But", LeverageModel::tells, 104);
     }
 
     private static String width(double width, NextMeasurement of) {

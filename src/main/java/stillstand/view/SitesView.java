@@ -5,6 +5,7 @@ import java.util.EnumMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
+import java.util.Optional;
 import javafx.beans.property.ReadOnlyObjectWrapper;
 import javafx.geometry.Insets;
 import javafx.geometry.Orientation;
@@ -234,8 +235,12 @@ public final class SitesView extends BorderPane {
                 90);
         differences.wrapped(
                 "Shared",
-                pair -> pair.sharedErrors() + "."
-                        + ComparisonReport.rough(pair.effectiveFraction()),
+                pair -> pair.sharedErrors()
+                        + pair.effectiveFraction()
+                                .map(part -> ComparisonReport.rough(Optional.of(part)))
+                                .filter(words -> !words.isEmpty())
+                                .map(words -> "." + words)
+                                .orElse(""),
                 170);
     }
 
