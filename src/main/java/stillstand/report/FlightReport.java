@@ -112,13 +112,13 @@ public final class FlightReport {
         return flight.halving().isEmpty()
                 ? Optional.empty()
                 : Optional.of("Halving one kind of error would change the width of the 95 % interval by: "
-                    + flight.halving().stream()
-                            .sorted(Comparator.comparingDouble(FlightResult.Halving::width95ChangePercent))
-                            .map(half -> half.error() + " "
-                                    + Wording.number(Digits.text(half.width95ChangePercent(), 0))
-                                    + " %")
-                            .collect(Collectors.joining(", "))
-                    + ".");
+                        + flight.halving().stream()
+                                .sorted(Comparator.comparingDouble(FlightResult.Halving::width95ChangePercent))
+                                .map(half -> half.error() + " "
+                                        + Wording.number(Digits.text(half.width95ChangePercent(), 0))
+                                        + " %")
+                                .collect(Collectors.joining(", "))
+                        + ".");
     }
 
     private void missing(List<String> lines) {

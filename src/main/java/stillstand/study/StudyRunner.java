@@ -80,8 +80,7 @@ public final class StudyRunner {
                 settings.indicativeRange(),
                 dates);
         MatchingRules rules = rules(settings.matching());
-        matching = new Flights(
-                streams, executor, monitor, rules, settings.indicativeRange(), changes(settings.rate()));
+        matching = new Flights(streams, executor, monitor, rules, settings.indicativeRange(), changes(settings.rate()));
         hinges = new SiteHinges(settings, rules, dates, streams, executor, monitor);
     }
 

@@ -169,19 +169,19 @@ public final class LeverageModel {
 
         private static Picture empty(boolean asks) {
             return new Picture(
-                List.of(),
-                List.of(),
-                new Interval(-1, 1),
-                List.of(),
-                new Interval(-1, 1),
-                List.of(),
-                new Interval(-1, 1),
-                List.of(),
-                List.of(),
-                List.of(),
-                asks,
-                false,
-                false);
+                    List.of(),
+                    List.of(),
+                    new Interval(-1, 1),
+                    List.of(),
+                    new Interval(-1, 1),
+                    List.of(),
+                    new Interval(-1, 1),
+                    List.of(),
+                    List.of(),
+                    List.of(),
+                    asks,
+                    false,
+                    false);
         }
 
         public Picture {
@@ -289,18 +289,22 @@ public final class LeverageModel {
                                 .map(row -> row.choice().rate().shortest95())
                                 .flatMapToDouble(of -> DoubleStream.of(of.low(), of.high()))),
                 halving,
-                around(0.06, DoubleStream.concat(
-                        DoubleStream.of(0),
-                        halving.stream().mapToDouble(FlightResult.Halving::width95ChangePercent))),
+                around(
+                        0.06,
+                        DoubleStream.concat(
+                                DoubleStream.of(0),
+                                halving.stream().mapToDouble(FlightResult.Halving::width95ChangePercent))),
                 tornados.stream().flatMap(LeverageModel::inputs).toList(),
-                around(0.04, tornados.stream()
-                        .flatMap(of -> of.bars().stream()
-                                .flatMap(bar -> Stream.of(bar.rateAtLow95() - of.rate(), bar.rateAtHigh95() - of.rate())))
-                        .mapToDouble(change -> change)),
+                around(
+                        0.04,
+                        tornados.stream()
+                                .flatMap(of -> of.bars().stream()
+                                        .flatMap(bar -> Stream.of(
+                                                bar.rateAtLow95() - of.rate(), bar.rateAtHigh95() - of.rate())))
+                                .mapToDouble(change -> change)),
                 here(leverage.nextMeasurements(), NextMeasurement::site, NextMeasurement::rateOf),
                 here(leverage.assumptionSwitches(), AssumptionSwitch::site, AssumptionSwitch::rateOf).stream()
-                        .sorted(Comparator.comparingDouble(
-                                of -> -LeverageReport.move(of.rate(), of.rateWouldBe())))
+                        .sorted(Comparator.comparingDouble(of -> -LeverageReport.move(of.rate(), of.rateWouldBe())))
                         .toList(),
                 leftOut(leverage, flight),
                 asks(),
@@ -336,13 +340,15 @@ public final class LeverageModel {
                         flight.map(FlightReport::new).flatMap(FlightReport::hinges).stream(),
                         report.leftOut().stream()));
         List<Words> all = new ArrayList<>();
-        words.forEach((part, lines) -> all.add(new Words(part, lines.map(String::strip).toList())));
+        words.forEach((part, lines) ->
+                all.add(new Words(part, lines.map(String::strip).toList())));
         return all.stream().filter(of -> !of.sentences().isEmpty()).toList();
     }
 
     private static Stream<InputRow> inputs(LevelTornado of) {
         String name = of.level() + of.stage().map(stage -> " at " + stage).orElse(", at its own age");
-        double longest = of.bars().stream().mapToDouble(LevelTornado.Bar::span95).max().orElse(0);
+        double longest =
+                of.bars().stream().mapToDouble(LevelTornado.Bar::span95).max().orElse(0);
         double sigma = longest / 4;
         List<InputRow> rows = new ArrayList<>();
         for (LevelTornado.Bar bar : of.bars()) {
@@ -389,8 +395,7 @@ public final class LeverageModel {
                         flights,
                         ShortRate.of(of.rate()),
                         Optional.of(out.rate()).map(ShortRate::of),
-                        "log predictive density "
-                                + Wording.number(Digits.text(out.logPredictive(), 1))))));
+                        "log predictive density " + Wording.number(Digits.text(out.logPredictive(), 1))))));
         for (SampleLeftOut out : leverage.samplesLeftOut()) {
             if (out.site().equals(site)) {
                 String name = out.sample() + " of " + out.level();
@@ -398,8 +403,8 @@ public final class LeverageModel {
                         .ifPresent(rate -> rows.add(
                                 new LeftOutRow("sample", name, out.level(), rate, out.levelRateWithout(), "")));
                 out.flightRate()
-                        .ifPresent(rate -> rows.add(
-                                new LeftOutRow("sample", name, flights, rate, out.flightRateWithout(), "")));
+                        .ifPresent(rate ->
+                                rows.add(new LeftOutRow("sample", name, flights, rate, out.flightRateWithout(), "")));
             }
         }
         for (CurveLeftOut out : leverage.curvesLeftOut()) {
@@ -456,25 +461,30 @@ public final class LeverageModel {
         return Optional.of(
                 switch (part) {
                     case CURVES -> whyNoCurves();
-                    case INPUTS -> new Missing(
-                            "No input can be moved by itself here: this rate waits for a highstand.", Optional.empty());
-                    case NEXT, ASSUMPTIONS -> now.wasAsked()
-                            ? new Missing("The run was asked, and found nothing here to tell.", Optional.empty())
-                            : new Missing(
-                                    "The last run was not asked for this, since it takes longer than the rates"
-                                            + " themselves.",
-                                    Optional.of(Way.ASK_AND_RUN));
-                    case LEFT_OUT -> now.wasAsked()
-                            ? new Missing("Nothing can be left out here.", Optional.empty())
-                            : new Missing(
-                                    "Levels are left out of a flight, curves where there are several, samples where"
-                                            + " the run is asked for it.",
-                                    Optional.of(Way.ASK_AND_RUN));
+                    case INPUTS ->
+                        new Missing(
+                                "No input can be moved by itself here: this rate waits for a highstand.",
+                                Optional.empty());
+                    case NEXT, ASSUMPTIONS ->
+                        now.wasAsked()
+                                ? new Missing("The run was asked, and found nothing here to tell.", Optional.empty())
+                                : new Missing(
+                                        "The last run was not asked for this, since it takes longer than the rates"
+                                                + " themselves.",
+                                        Optional.of(Way.ASK_AND_RUN));
+                    case LEFT_OUT ->
+                        now.wasAsked()
+                                ? new Missing("Nothing can be left out here.", Optional.empty())
+                                : new Missing(
+                                        "Levels are left out of a flight, curves where there are several, samples where"
+                                                + " the run is asked for it.",
+                                        Optional.of(Way.ASK_AND_RUN));
                 });
     }
 
     private Missing whyNoCurves() {
-        boolean elsewhere = shown.result().stream().anyMatch(result -> !result.curveChoice().isEmpty());
+        boolean elsewhere =
+                shown.result().stream().anyMatch(result -> !result.curveChoice().isEmpty());
         return elsewhere
                 ? new Missing("Only one curve serves this rate.", Optional.empty())
                 : new Missing(
@@ -485,14 +495,18 @@ public final class LeverageModel {
     /** What else to know of a part. */
     public String note(Part part) {
         return switch (part) {
-            case CURVES -> "No curve is true, and they share cores and methods. Read the mixtures beside the curves, never alone.";
-            case INPUTS -> "Each input from the low end of its own range (brown) to the high end (blue), all others at their"
-                    + " medians: thick 68 %, thin 95 %. Bars do not add up to the spread.";
-            case NEXT -> "Mean change of the width of the 95 % interval, ± one standard error of its calculation. What it costs is"
-                    + " for you to say.";
+            case CURVES ->
+                "No curve is true, and they share cores and methods. Read the mixtures beside the curves, never alone.";
+            case INPUTS ->
+                "Each input from the low end of its own range (brown) to the high end (blue), all others at their"
+                        + " medians: thick 68 %, thin 95 %. Bars do not add up to the spread.";
+            case NEXT ->
+                "Mean change of the width of the 95 % interval, ± one standard error of its calculation. What it costs is"
+                        + " for you to say.";
             case ASSUMPTIONS -> "Both rates with the same draws, median and 95 %: compare them with each other.";
-            case LEFT_OUT -> "Median and 95 %, with and without."
-                    + (picture.get().wasAsked() ? "" : " Samples only where the run is asked for it.");
+            case LEFT_OUT ->
+                "Median and 95 %, with and without."
+                        + (picture.get().wasAsked() ? "" : " Samples only where the run is asked for it.");
         };
     }
 
@@ -532,4 +546,5 @@ public final class LeverageModel {
                 .map(gain -> Digits.text(gain.certainty(), 2) + " to " + Digits.text(gain.expectedCertainty(), 2)
                         + (gain.error() < 0.0005 ? "" : " ± " + Digits.text(gain.error(), gain.error(), 1)))
                 .orElse("");
-    }}
+    }
+}

@@ -360,11 +360,7 @@ public final class LeverageView extends BorderPane {
                 row -> width(row.width95(), row) + " to " + width(row.expectedWidth95(), row),
                 NextMeasurement::expectedWidth95,
                 112);
-        next.number(
-                "May widen",
-                row -> Digits.text(row.probabilityWider(), 2),
-                NextMeasurement::probabilityWider,
-                80);
+        next.number("May widen", row -> Digits.text(row.probabilityWider(), 2), NextMeasurement::probabilityWider, 80);
         next.number(
                 "Certainty of pairings",
                 LeverageModel::certainty,
@@ -423,9 +419,7 @@ public final class LeverageView extends BorderPane {
     private static <T> void moves(ResultTable<T> table, Function<T, Double> move) {
         table.number(
                 "Moves by",
-                row -> move.apply(row) == Double.MAX_VALUE
-                        ? ""
-                        : Digits.text(move.apply(row), 2) + " half widths",
+                row -> move.apply(row) == Double.MAX_VALUE ? "" : Digits.text(move.apply(row), 2) + " half widths",
                 move::apply,
                 116);
     }

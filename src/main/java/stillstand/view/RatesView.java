@@ -82,9 +82,11 @@ public final class RatesView extends BorderPane {
         table.wrapped("Bound, or why none", Row::says, 194);
         table.number("Median", Row::median, row -> by(row, Rate::median), 114);
         table.number(
-                "68 %", Row::interval68, row -> by(row, rate -> rate.shortest68().low()), 114);
+                "68 %",
+                Row::interval68, row -> by(row, rate -> rate.shortest68().low()), 114);
         table.number(
-                "95 %", Row::interval95, row -> by(row, rate -> rate.shortest95().low()), 114);
+                "95 %",
+                Row::interval95, row -> by(row, rate -> rate.shortest95().low()), 114);
         table.strip(
                 "Density, metres per thousand years",
                 LEAST_STRIP,
@@ -93,8 +95,7 @@ public final class RatesView extends BorderPane {
                 row -> row.rate()
                         .map(rate -> row.median() + ", 95 % " + row.interval95())
                         .orElse("no rate"),
-                (g, row, scale, palette) ->
-                        row.rate().ifPresent(rate -> RateStroke.paint(g, rate, scale, palette)));
+                (g, row, scale, palette) -> row.rate().ifPresent(rate -> RateStroke.paint(g, rate, scale, palette)));
         table.words("Highstand", Row::stages, 126);
         table.number(
                 "Age (ka)",

@@ -35,8 +35,12 @@ final class ResultAreas {
         views.put(Area.RATES, new RatesView(rates));
         views.put(
                 Area.LEVERAGE,
-                new LeverageView(leverage, new LeverageView.Ways(
-                        model::askLeverageAndRun, () -> model.areaProperty().set(Area.SEA_LEVEL), cannotAsk(model))));
+                new LeverageView(
+                        leverage,
+                        new LeverageView.Ways(
+                                model::askLeverageAndRun,
+                                () -> model.areaProperty().set(Area.SEA_LEVEL),
+                                cannotAsk(model))));
         views.put(Area.SITES, new SitesView(sites));
         views.put(Area.RECORD, new RecordView(record, questions::folderToWrite));
         models = List.of(seaLevel::show, stair::show, rates::show, leverage::show, sites::show, record::show);

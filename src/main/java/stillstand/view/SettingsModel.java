@@ -79,11 +79,7 @@ final class SettingsModel {
                 number(SEA_LEVEL, "sea_level.curve_age_1sigma_ka", "Age scale of the curve, 1 sigma, ka"),
                 number(SEA_LEVEL, "sea_level.correlation_time_ka", "Correlation time, ka"),
                 choice(SEA_LEVEL, "sea_level.rezero", "Move the curve to 0 today", flags),
-                choice(
-                        PRIOR,
-                        PRIOR_KIND,
-                        "Kind",
-                        List.of("cauchy", "half-cauchy", "log-uniform", "normal")),
+                choice(PRIOR, PRIOR_KIND, "Kind", List.of("cauchy", "half-cauchy", "log-uniform", "normal")),
                 number(PRIOR, "rate.prior.location", "Location, m/kyr"),
                 number(PRIOR, "rate.prior.scale", "Scale, m/kyr"),
                 number(PRIOR, "rate.prior.mean", "Mean, m/kyr"),
@@ -132,7 +128,8 @@ final class SettingsModel {
         return document.checked().study().stream()
                 .flatMap(study -> study.ledger().stream())
                 .filter(line -> line.assumption().equals(field.keyPath + " is not stated")
-                        || (field.keyPath.equals(PRIOR_KIND) && line.assumption().equals("rate.prior is not stated")))
+                        || (field.keyPath.equals(PRIOR_KIND)
+                                && line.assumption().equals("rate.prior is not stated")))
                 .map(Assumption::value)
                 .findFirst()
                 .orElse("");
@@ -140,9 +137,11 @@ final class SettingsModel {
 
     void write(Field field, String typed) {
         if (!typed.strip().equals(value(field).strip())) {
-            change("changing " + field.label.replaceFirst(",.*", ""), settings -> field.isWords
-                    ? settings.withWords(field.keyPath, typed)
-                    : settings.withValue(field.keyPath, typed));
+            change(
+                    "changing " + field.label.replaceFirst(",.*", ""),
+                    settings -> field.isWords
+                            ? settings.withWords(field.keyPath, typed)
+                            : settings.withValue(field.keyPath, typed));
         }
     }
 
@@ -197,10 +196,7 @@ final class SettingsModel {
                 && (problem.header().equals(keyPath)
                         || problem.header().startsWith(keyPath + ".")
                         || problem.header().startsWith(keyPath + "["));
-        return document.checked().problems().stream()
-                .filter(isHere)
-                .findFirst()
-                .map(InputProblem::message);
+        return document.checked().problems().stream().filter(isHere).findFirst().map(InputProblem::message);
     }
 
     /** What is wrong with the curves. */

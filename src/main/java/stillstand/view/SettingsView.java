@@ -40,11 +40,11 @@ final class SettingsView extends BorderPane {
         this.model = model;
         getStyleClass().add("settings");
         HBox groups = new HBox(
+                column(form(SettingsModel.STUDY), form(SettingsModel.PRIOR), form(SettingsModel.MATCHING)),
                 column(
-                        form(SettingsModel.STUDY),
-                        form(SettingsModel.PRIOR),
-                        form(SettingsModel.MATCHING)),
-                column(group("Curves and their weights", curves()), form(SettingsModel.SEA_LEVEL), form(SettingsModel.LEVERAGE),
+                        group("Curves and their weights", curves()),
+                        form(SettingsModel.SEA_LEVEL),
+                        form(SettingsModel.LEVERAGE),
                         form(SettingsModel.SITES)));
         groups.getStyleClass().add("settings-groups");
         ScrollPane scroll = new ScrollPane(groups);
@@ -95,8 +95,8 @@ final class SettingsView extends BorderPane {
         refreshers.add(() -> {
             Optional<String> problem = model.problem(field.keyPath());
             showProblem(input, wrong, problem);
-            input.setAccessibleText(
-                    field.label() + problem.map(sentence -> ". Problem: " + sentence).orElse(""));
+            input.setAccessibleText(field.label()
+                    + problem.map(sentence -> ". Problem: " + sentence).orElse(""));
         });
         int row = form.getRowCount();
         form.addRow(row, label, input);
@@ -133,8 +133,7 @@ final class SettingsView extends BorderPane {
     }
 
     /** What is typed counts on Enter and when the field is left; Escape takes it back. */
-    private void commitsBy(
-            TextField input, Supplier<String> now, Consumer<String> write) {
+    private void commitsBy(TextField input, Supplier<String> now, Consumer<String> write) {
         refreshers.add(() -> {
             if (!input.isFocused() || !input.getText().equals(now.get())) {
                 input.setText(now.get());

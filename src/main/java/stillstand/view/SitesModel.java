@@ -78,8 +78,8 @@ public final class SitesModel {
             List<TogetherRow> together,
             String stableWithin,
             boolean stale) {
-        static final Content NOTHING = new Content(
-                List.of(), List.of(), new Interval(-1, 1), List.of(), List.of(), "a threshold", false);
+        static final Content NOTHING =
+                new Content(List.of(), List.of(), new Interval(-1, 1), List.of(), List.of(), "a threshold", false);
 
         public Content {
             words = List.copyOf(words);
@@ -138,7 +138,8 @@ public final class SitesModel {
         Interval axis = ends.length == 0
                 ? new Interval(-1, 1)
                 : new Interval(Math.min(0, ends[0]) - spare, Math.max(0, ends[ends.length - 1]) + spare);
-        return new Content(words, result.comparison(), axis, result.siteMotion(), together(result), stableWithin(), shown.stale());
+        return new Content(
+                words, result.comparison(), axis, result.siteMotion(), together(result), stableWithin(), shown.stale());
     }
 
     private static List<TogetherRow> together(StudyResult result) {
@@ -211,7 +212,8 @@ public final class SitesModel {
                         "tilt over the map" + points,
                         ComparisonReport.steepest(plane.sharedErrors()),
                         UNSHARED + ComparisonReport.steepest(plane.independent()),
-                        ComparisonReport.straight(plane.sharedErrors().p(), "plane").strip())));
+                        ComparisonReport.straight(plane.sharedErrors().p(), "plane")
+                                .strip())));
         tilt.rate()
                 .ifPresent(rate ->
                         rows.add(new TogetherRow(of, "tilt over its age", ComparisonReport.estimate(rate), "", "")));
@@ -233,13 +235,15 @@ public final class SitesModel {
         }
         return Optional.of(
                 switch (part) {
-                    case DIFFERENCES -> now.motions().size() < 2
-                            ? "One site with a rate has none to be compared with."
-                            : "Sites are compared within a coast (column coast of sites.csv), or as pairs that"
-                                    + " study.json names (comparison.pairs, under Settings in Evidence).";
+                    case DIFFERENCES ->
+                        now.motions().size() < 2
+                                ? "One site with a rate has none to be compared with."
+                                : "Sites are compared within a coast (column coast of sites.csv), or as pairs that"
+                                        + " study.json names (comparison.pairs, under Settings in Evidence).";
                     case MOTION -> "No site has a rate.";
-                    case TOGETHER -> "No coast has two sites with a rate (column coast of sites.csv), and no terrace"
-                            + " has three points (points.csv).";
+                    case TOGETHER ->
+                        "No coast has two sites with a rate (column coast of sites.csv), and no terrace"
+                                + " has three points (points.csv).";
                 });
     }
 
@@ -256,11 +260,15 @@ public final class SitesModel {
     /** What else to know of a part. */
     public String note(Part part) {
         return switch (part) {
-            case DIFFERENCES -> "Brick: errors of sea level that two sites share are kept shared. Blue below: the wrong answer,"
-                    + " as if they were independent.";
-            case MOTION -> "A site counts as stable where its rate is within " + content.get().stableWithin() + " of 0.";
-            case TOGETHER -> "Sites of a coast share errors of sea level, which is not mistaken for agreement. Beside each answer what would"
-                    + " come out otherwise.";
+            case DIFFERENCES ->
+                "Brick: errors of sea level that two sites share are kept shared. Blue below: the wrong answer,"
+                        + " as if they were independent.";
+            case MOTION ->
+                "A site counts as stable where its rate is within "
+                        + content.get().stableWithin() + " of 0.";
+            case TOGETHER ->
+                "Sites of a coast share errors of sea level, which is not mistaken for agreement. Beside each answer what would"
+                        + " come out otherwise.";
         };
     }
 

@@ -148,13 +148,13 @@ record SitesPicture(String name, Kind kind, List<Spot> spots, List<Join> joins) 
             return around(spots.stream().mapToDouble(Spot::y), LEAST_DEGREES);
         }
         Interval levels = around(
-                        DoubleStream.concat(
-                                DoubleStream.of(0),
-                                spots.stream()
-                                        .flatMap(spot -> spot.levels().stream())
-                                        .map(level -> level.height().orElseThrow().interval95())
-                                        .flatMapToDouble(of -> DoubleStream.of(of.low(), of.high()))),
-                        1e-3);
+                DoubleStream.concat(
+                        DoubleStream.of(0),
+                        spots.stream()
+                                .flatMap(spot -> spot.levels().stream())
+                                .map(level -> level.height().orElseThrow().interval95())
+                                .flatMapToDouble(of -> DoubleStream.of(of.low(), of.high()))),
+                1e-3);
         return new Interval(levels.low(), levels.high() + NAMES * levels.width());
     }
 

@@ -58,8 +58,8 @@ public final class SitesView extends BorderPane {
     private final ResultTable<SiteMotion> motions = new ResultTable<>("sites-motion", "Which way each site goes", "");
     private final ResultTable<TogetherRow> together =
             new ResultTable<>("sites-together", "What coasts and terraces say as a whole", "");
-    private final Map<Part, Node> tables = new EnumMap<>(
-            Map.of(Part.DIFFERENCES, differences, Part.MOTION, motions, Part.TOGETHER, together));
+    private final Map<Part, Node> tables =
+            new EnumMap<>(Map.of(Part.DIFFERENCES, differences, Part.MOTION, motions, Part.TOGETHER, together));
     private Part part = Part.DIFFERENCES;
     private boolean following;
 
@@ -263,7 +263,10 @@ public final class SitesView extends BorderPane {
         motions.words("Coast", site -> site.coast().orElse(""), 60);
         motions.words("By", SitesModel::standsBy, 56);
         motions.number(
-                "Rate (m/kyr)", site -> Wording.quantity(site.rate()), site -> site.rate().median(), 108);
+                "Rate (m/kyr)",
+                site -> Wording.quantity(site.rate()),
+                site -> site.rate().median(),
+                108);
         motions.number(
                 "95 %",
                 site -> ComparisonReport.interval(site.rate()),

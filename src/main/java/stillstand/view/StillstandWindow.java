@@ -103,9 +103,10 @@ public final class StillstandWindow extends Application {
             keepPlace(stage, memory);
             window.run().cancel();
         });
-        window.documentProperty().addListener((source, before, after) -> stage.setTitle(after.map(
-                        document -> document.folder().getFileName() + " \u00b7 Stillstand")
-                .orElse("Stillstand")));
+        window.documentProperty()
+                .addListener((source, before, after) ->
+                        stage.setTitle(after.map(document -> document.folder().getFileName() + " \u00b7 Stillstand")
+                                .orElse("Stillstand")));
         stage.focusedProperty().addListener((source, was, is) -> lookAtDisk(window));
         ScheduledFuture<?> unused = looks.scheduleWithFixedDelay(
                 () -> Platform.runLater(() -> lookAtDisk(window)), LOOK_SECONDS, LOOK_SECONDS, TimeUnit.SECONDS);
@@ -136,8 +137,8 @@ public final class StillstandWindow extends Application {
 
     private static void place(Stage stage, WindowMemory memory) {
         memory.place()
-                .filter(place -> Screen.getScreens().stream()
-                        .anyMatch(screen -> intersects(screen.getVisualBounds(), place)))
+                .filter(place ->
+                        Screen.getScreens().stream().anyMatch(screen -> intersects(screen.getVisualBounds(), place)))
                 .ifPresent(place -> {
                     stage.setX(place.left());
                     stage.setY(place.top());

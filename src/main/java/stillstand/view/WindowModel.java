@@ -107,12 +107,7 @@ final class WindowModel {
      * @param background for disk and check, one task after the other
      * @param foreground the window's own thread
      */
-    WindowModel(
-            StudyReader reader,
-            RunModel run,
-            WindowMemory memory,
-            Executor background,
-            Executor foreground) {
+    WindowModel(StudyReader reader, RunModel run, WindowMemory memory, Executor background, Executor foreground) {
         this.reader = reader;
         this.run = run;
         this.memory = memory;
@@ -245,15 +240,20 @@ final class WindowModel {
                 .ifPresent(loaded -> say(new Notice(
                         "results",
                         false,
-                        "Earlier results cannot be shown (" + loaded.problems().get(0).message()
-                                + "). The next run replaces them.",
+                        "Earlier results cannot be shown ("
+                                + loaded.problems().get(0).message() + "). The next run replaces them.",
                         List.of())));
         opened.checkedProperty().addListener((source, before, after) -> refresh());
         opened.changedOnDiskProperty().addListener((source, before, after) -> sayChanged(opened, after));
-        opened.troubleProperty().addListener((source, before, after) -> after.ifPresentOrElse(
-                sentence -> say(new Notice("disk", true, sentence, List.of())), () -> unsay("disk")));
-        opened.whyReadOnly().ifPresent(why -> say(new Notice(
-                "read-only", false, "Open for reading alone: " + why + ". Keep a copy to edit it.", List.of())));
+        opened.troubleProperty()
+                .addListener((source, before, after) -> after.ifPresentOrElse(
+                        sentence -> say(new Notice("disk", true, sentence, List.of())), () -> unsay("disk")));
+        opened.whyReadOnly()
+                .ifPresent(why -> say(new Notice(
+                        "read-only",
+                        false,
+                        "Open for reading alone: " + why + ". Keep a copy to edit it.",
+                        List.of())));
         recovery.ifPresent(edits -> sayRecovery(opened, edits));
         if (isCopy) {
             say(new Notice(
@@ -360,7 +360,8 @@ final class WindowModel {
                 draft -> draft.text(StudyJson.NAME)
                         .flatMap(SettingsText::parse)
                         .filter(settings -> settings.value(LEVERAGE).isPresent() != every)
-                        .map(settings -> draft.withText(StudyJson.NAME, settings.withValue(LEVERAGE, every ? USUAL : "")))
+                        .map(settings ->
+                                draft.withText(StudyJson.NAME, settings.withValue(LEVERAGE, every ? USUAL : "")))
                         .orElse(draft));
     }
 
@@ -397,17 +398,20 @@ final class WindowModel {
 
     /** Keeps the study in another folder, absent or empty, and goes on there. */
     void saveInto(Path folder) {
-        document.get().ifPresent(opened -> opened.copyTo(folder, () -> {
-            close(true);
-            open(folder);
-        }));
+        document.get()
+                .ifPresent(opened -> opened.copyTo(folder, () -> {
+                    close(true);
+                    open(folder);
+                }));
     }
 
     /** Writes the {@code highstand} cell of a level, as the Stair asks. */
     void pair(PairingEdit wanted) {
-        edit("pairing " + wanted.level(), draft -> draft.sheet("levels.csv")
-                .map(levels -> draft.with(paired(levels, wanted)))
-                .orElse(draft));
+        edit(
+                "pairing " + wanted.level(),
+                draft -> draft.sheet("levels.csv")
+                        .map(levels -> draft.with(paired(levels, wanted)))
+                        .orElse(draft));
     }
 
     private static Sheet paired(Sheet given, PairingEdit wanted) {
@@ -416,7 +420,8 @@ final class WindowModel {
         int site = levels.column("site").orElse(-1);
         int level = levels.column("level").orElse(-1);
         for (int row = 0; row < levels.rowCount() && site >= 0 && level >= 0; row++) {
-            if (levels.cell(row, site).equals(wanted.site()) && levels.cell(row, level).equals(wanted.level())) {
+            if (levels.cell(row, site).equals(wanted.site())
+                    && levels.cell(row, level).equals(wanted.level())) {
                 return levels.withCells(row, column, List.of(List.of(wanted.highstand())));
             }
         }
@@ -434,7 +439,9 @@ final class WindowModel {
                         String chosen = settings.withCurves(curves);
                         String overridden = SettingsText.parse(chosen)
                                 .orElseThrow()
-                                .withWords("sea_level.highstands.overrides", wanted.overrides().orElse("none"));
+                                .withWords(
+                                        "sea_level.highstands.overrides",
+                                        wanted.overrides().orElse("none"));
                         return draft.withText(StudyJson.NAME, overridden);
                     })
                     .orElse(draft);

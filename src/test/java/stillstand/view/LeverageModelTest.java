@@ -65,8 +65,8 @@ class LeverageModelTest {
     @Test
     void everySentenceIsOneOfTheTerminal() {
         showAll();
-        String terminal = TerminalReport.text("A", SampleStudy.result(), "results")
-                .replaceAll("\\s+", " ");
+        String terminal =
+                TerminalReport.text("A", SampleStudy.result(), "results").replaceAll("\\s+", " ");
         for (Part part : Part.values()) {
             List<String> words = model.words(part);
             assertFalse(words.isEmpty(), part.title());
@@ -82,14 +82,20 @@ class LeverageModelTest {
                 model.pictureProperty().get().curves().stream()
                         .map(LeverageModel.CurveRow::curve)
                         .toList());
-        assertEquals("T4 5e", model.pictureProperty().get().curves().get(0).choice().matches().stream()
-                .map(match -> match.level() + " " + match.highstand().orElse("none"))
-                .reduce("", String::concat));
+        assertEquals(
+                "T4 5e",
+                model.pictureProperty().get().curves().get(0).choice().matches().stream()
+                        .map(match -> match.level() + " " + match.highstand().orElse("none"))
+                        .reduce("", String::concat));
         assertTrue(model.pictureProperty().get().rateAxis().contains(0.4));
         model.choose("North cliff", "T4");
-        assertEquals("Only one curve serves this rate.", model.missing(Part.CURVES).orElseThrow().sentence());
+        assertEquals(
+                "Only one curve serves this rate.",
+                model.missing(Part.CURVES).orElseThrow().sentence());
         model.show(Shown.of(SampleStudy.study(), with(Leverage.NONE, true), false));
-        assertEquals(Optional.of(Way.CHOOSE_CURVES), model.missing(Part.CURVES).orElseThrow().way());
+        assertEquals(
+                Optional.of(Way.CHOOSE_CURVES),
+                model.missing(Part.CURVES).orElseThrow().way());
     }
 
     @Test
@@ -144,7 +150,9 @@ class LeverageModelTest {
     @Test
     void whatWasNotAskedIsSaidWithAWayToAsk() {
         model.show(Shown.of(SampleStudy.study(), with(Leverage.NONE, false), false));
-        assertEquals(Optional.of(Way.ASK_AND_RUN), model.missing(Part.NEXT).orElseThrow().way());
+        assertEquals(
+                Optional.of(Way.ASK_AND_RUN),
+                model.missing(Part.NEXT).orElseThrow().way());
         assertEquals(
                 Optional.of(Way.ASK_AND_RUN),
                 model.missing(Part.ASSUMPTIONS).orElseThrow().way());

@@ -86,7 +86,8 @@ class LeverageWindowTest {
         robot.interact(() -> robot.model().run().show(Optional.of(SampleStudy.withoutFailure())));
         robot.command(KeyCode.DIGIT5);
         robot.push("#leverage-inputs-part");
-        robot.interact(() -> robot.lookup("#leverage-rate-of").queryAs(ChoiceBox.class).setValue("T4"));
+        robot.interact(
+                () -> robot.lookup("#leverage-rate-of").queryAs(ChoiceBox.class).setValue("T4"));
         WaitForAsyncUtils.waitForFxEvents();
         TableView<?> bars = robot.lookup("#leverage-inputs").queryAs(TableView.class);
         assertEquals(4, bars.getItems().size());
@@ -114,7 +115,6 @@ class LeverageWindowTest {
                 robot.lookup("#sites-paper").query().getAccessibleText());
         robot.push("#sites-together-part");
         assertEquals(
-                9,
-                robot.lookup("#sites-together").queryTableView().getItems().size());
+                9, robot.lookup("#sites-together").queryTableView().getItems().size());
     }
 }

@@ -38,8 +38,8 @@ class SitesModelTest {
     @Test
     void everySentenceIsOneOfTheTerminal() {
         showAll();
-        String terminal = TerminalReport.text("A", SampleStudy.result(), "results")
-                .replaceAll("\\s+", " ");
+        String terminal =
+                TerminalReport.text("A", SampleStudy.result(), "results").replaceAll("\\s+", " ");
         List<String> words = model.contentProperty().get().words();
         assertTrue(words.size() > 6, "only " + words.size());
         words.forEach(sentence -> assertTrue(terminal.contains(sentence), sentence));
@@ -51,7 +51,8 @@ class SitesModelTest {
         SitesModel.Content content = model.contentProperty().get();
         assertEquals(1, content.differences().size());
         assertTrue(content.differenceAxis().contains(0), "whether a difference holds 0 can be seen");
-        assertTrue(content.differenceAxis().contains(0.34) && content.differenceAxis().contains(0.46));
+        assertTrue(content.differenceAxis().contains(0.34)
+                && content.differenceAxis().contains(0.46));
         assertEquals("A site counts as stable where its rate is within 0.05 m/kyr of 0.", model.note(Part.MOTION));
     }
 
@@ -71,9 +72,12 @@ class SitesModelTest {
                         "tilt along the coast by 6 points",
                         "tilt over its age"),
                 rows.stream().map(TogetherRow::what).toList());
-        assertEquals("by itself: 0.430 ± 0.020 m/kyr, 95 % 0.39 to 0.47", rows.get(2).beside());
+        assertEquals(
+                "by itself: 0.430 ± 0.020 m/kyr, 95 % 0.39 to 0.47", rows.get(2).beside());
         assertEquals("−0.0130 ± 0.0010 m/kyr per km", rows.get(5).answer());
-        assertEquals("were errors not shared: −0.0130 ± 0.0010 m/kyr per km", rows.get(5).beside());
+        assertEquals(
+                "were errors not shared: −0.0130 ± 0.0010 m/kyr per km",
+                rows.get(5).beside());
         assertEquals("North cliff / T4", rows.get(8).of());
     }
 
@@ -93,16 +97,18 @@ class SitesModelTest {
         assertEquals(Kind.COAST, coast.kind());
         assertEquals(List.of(0.0, 30.0), coast.spots().stream().map(Spot::x).toList());
         assertEquals("T4", coast.spots().get(0).levels().get(0).name());
-        assertEquals("North cliff: up (>99 %), 0.430 ± 0.020 m/kyr", SitesModel.reading(coast.spots().get(0).site()));
+        assertEquals(
+                "North cliff: up (>99 %), 0.430 ± 0.020 m/kyr",
+                SitesModel.reading(coast.spots().get(0).site()));
     }
 
     @Test
     void levelsAreJoinedByTheProbabilityThatBothRecordOneHighstand() {
         LevelAnswer any = SampleStudy.result().levels().get(0);
-        LevelView one = new LevelView(
-                "A", Optional.empty(), List.of(new Claim("5e", 0.75), new Claim("older", 0.25)), any);
-        LevelView other = new LevelView(
-                "B", Optional.empty(), List.of(new Claim("older", 0.5), new Claim("5e", 0.5)), any);
+        LevelView one =
+                new LevelView("A", Optional.empty(), List.of(new Claim("5e", 0.75), new Claim("older", 0.25)), any);
+        LevelView other =
+                new LevelView("B", Optional.empty(), List.of(new Claim("older", 0.5), new Claim("5e", 0.5)), any);
         assertEquals(0.375, one.probabilitySameHighstand(other), 1e-12); // "older" names no one age
     }
 

@@ -29,15 +29,18 @@ class WindowModelTest {
         window.open(study());
         assertEquals(Optional.empty(), window.shownProperty().get().result());
         window.startRun();
-        assertEquals(State.DONE, window.run().state(), window.run().outcomeProperty().get());
+        assertEquals(
+                State.DONE, window.run().state(), window.run().outcomeProperty().get());
         assertFalse(window.shownProperty().get().stale());
         StudyDocument document = window.document().orElseThrow();
-        document.edit("elevation", draft -> draft.with(
-                draft.sheet("levels.csv").orElseThrow().withCells(0, 2, List.of(List.of("31")))));
+        document.edit(
+                "elevation",
+                draft -> draft.with(draft.sheet("levels.csv").orElseThrow().withCells(0, 2, List.of(List.of("31")))));
         assertTrue(window.shownProperty().get().stale());
         assertTrue(window.shownProperty().get().result().isPresent());
-        document.edit("mistake", draft -> draft.with(
-                draft.sheet("levels.csv").orElseThrow().withCells(0, 2, List.of(List.of("x")))));
+        document.edit(
+                "mistake",
+                draft -> draft.with(draft.sheet("levels.csv").orElseThrow().withCells(0, 2, List.of(List.of("x")))));
         assertTrue(window.shownProperty().get().stale());
         assertTrue(window.shownProperty().get().study().isPresent(), "the last good one");
         assertFalse(window.canRun());
@@ -112,6 +115,7 @@ class WindowModelTest {
         Path copy = window.document().orElseThrow().folder();
         assertTrue(window.isPassingCopy());
         assertTrue(window.canRun());
+        assertTrue(Files.exists(copy.resolve("points.csv")), "the tilt that the readme tells of");
         assertEquals(List.of("copy"), abouts());
         assertEquals(List.of(), memory.recent());
         Path kept = folder.resolve("kept");
@@ -165,9 +169,12 @@ class WindowModelTest {
         StudyDocument document = window.document().orElseThrow();
         assertEquals(
                 Optional.of("asking what to measure next"),
-                document.undoableProperty().get(), "asked already, so nothing was edited");
+                document.undoableProperty().get(),
+                "asked already, so nothing was edited");
         window.askLeverage(false);
-        assertEquals(Optional.empty(), window.shownProperty().get().study().orElseThrow().settings().leverage());
+        assertEquals(
+                Optional.empty(),
+                window.shownProperty().get().study().orElseThrow().settings().leverage());
         assertTrue(window.shownProperty().get().stale());
     }
 

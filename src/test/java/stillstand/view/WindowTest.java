@@ -111,8 +111,7 @@ class WindowTest {
         holds = true;
         robot.push("#run");
         held.await();
-        robot.interact(() -> robot.stage().fireEvent(
-                new WindowEvent(robot.stage(), WindowEvent.WINDOW_CLOSE_REQUEST)));
+        robot.interact(() -> robot.stage().fireEvent(new WindowEvent(robot.stage(), WindowEvent.WINDOW_CLOSE_REQUEST)));
         robot.waitFor(() -> !robot.stage().isShowing());
         assertFalse(robot.model().run().state().isBusy());
         assertFalse(Files.exists(folder.resolve("study/results")));
@@ -185,8 +184,10 @@ class WindowTest {
 
     @Test
     void fullDiskIsSaidAndNothingIsLost() throws IOException {
-        try (FileSystem small = Jimfs.newFileSystem(
-                Configuration.unix().toBuilder().setBlockSize(512).setMaxSize(24 * 512).build())) {
+        try (FileSystem small = Jimfs.newFileSystem(Configuration.unix().toBuilder()
+                .setBlockSize(512)
+                .setMaxSize(24 * 512)
+                .build())) {
             Path study = OpenStudies.template(small.getPath("/work"));
             StudyDocument document = robot.open(study);
             String before = Files.readString(study.resolve("study.json"));
