@@ -130,14 +130,7 @@ final class CoastFigure {
     private static void join(Pen pen, Station one, Station next) {
         for (SiteView.LevelView level : one.view().stair()) {
             for (SiteView.LevelView other : next.view().stair()) {
-                double probability = 0;
-                for (SiteView.Claim claim : level.claims()) {
-                    for (SiteView.Claim same : other.claims()) {
-                        boolean together = claim.highstand().equals(same.highstand())
-                                && !claim.highstand().equals(SiteView.OLDER);
-                        probability += together ? claim.probability() * same.probability() : 0;
-                    }
-                }
+                double probability = level.probabilitySameHighstand(other);
                 if (probability >= LEAST_JOINED) {
                     pen.line(
                             pen.x(one.km()),

@@ -51,6 +51,19 @@ public record SiteView(
         public LevelView {
             claims = List.copyOf(claims);
         }
+
+        /** Probability that two levels record one highstand, were each alone in the world. */
+        public double probabilitySameHighstand(LevelView other) {
+            double probability = 0;
+            for (Claim claim : claims) {
+                for (Claim same : other.claims()) {
+                    boolean together = claim.highstand().equals(same.highstand())
+                            && !claim.highstand().equals(OLDER);
+                    probability += together ? claim.probability() * same.probability() : 0;
+                }
+            }
+            return probability;
+        }
     }
 
     /** A height and its 95 % interval, m. */

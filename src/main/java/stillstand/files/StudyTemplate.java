@@ -12,12 +12,14 @@ import stillstand.ledger.InputProblem;
 /** Studies that come with the tool: a small one to start from, with comments and an invented example, and the demo. */
 public final class StudyTemplate {
     private static final List<String> FILES = List.of("study.json", "sites.csv", "levels.csv", "samples.csv");
+    private static final List<String> DEMO_FILES =
+            Stream.concat(FILES.stream(), Stream.of("points.csv")).toList();
 
     private static final String PASSING = "stillstand-demo-";
 
     private StudyTemplate() {}
 
-    /** Its files, in the order in which to look at them. */
+    /** The files of the small one, in the order in which to look at them. */
     public static List<String> files() {
         return FILES;
     }
@@ -30,12 +32,12 @@ public final class StudyTemplate {
      * @throws IOException if a file cannot be written
      */
     public static Optional<InputProblem> write(Path folder) throws IOException {
-        return write("/stillstand/new-study/", folder);
+        return write("/stillstand/new-study/", FILES, folder);
     }
 
     /** Writes the demo, an invented island, in the same way. */
     public static Optional<InputProblem> writeDemo(Path folder) throws IOException {
-        return write("/stillstand/demo/", folder);
+        return write("/stillstand/demo/", DEMO_FILES, folder);
     }
 
     /** Writes the demo into a new folder of the system's place for passing files. */
@@ -54,13 +56,13 @@ public final class StudyTemplate {
         FolderTree.delete(parent);
     }
 
-    private static Optional<InputProblem> write(String from, Path folder) throws IOException {
+    private static Optional<InputProblem> write(String from, List<String> files, Path folder) throws IOException {
         Optional<InputProblem> problem = inTheWayOf(folder);
         if (problem.isPresent()) {
             return problem;
         }
         Files.createDirectories(folder);
-        for (String file : FILES) {
+        for (String file : files) {
             Files.write(folder.resolve(file), ShippedFile.bytes(from + file), StandardOpenOption.CREATE_NEW);
         }
         return Optional.empty();

@@ -16,7 +16,7 @@ import stillstand.uncertainty.Digits;
 import stillstand.uplift.Quantity;
 
 /** What the sites of a study read like together. */
-final class ComparisonReport {
+public final class ComparisonReport {
     private static final int PAIRS_SHOWN = 12;
     private static final int SITES_SHOWN = 20;
     private static final int GROUPS_SHOWN = 8;
@@ -25,12 +25,13 @@ final class ComparisonReport {
 
     private final StudyResult result;
 
-    ComparisonReport(StudyResult result) {
+    /** What a result says of its sites. */
+    public ComparisonReport(StudyResult result) {
         this.result = result;
     }
 
     /** Lines, the first a heading; none where a study has one site and no points of terraces. */
-    List<String> lines() {
+    public List<String> lines() {
         List<String> lines = new ArrayList<>();
         if (result.siteMotion().size() > 1) {
             lines.add("Sites together");
@@ -77,7 +78,8 @@ final class ComparisonReport {
         more(lines, pairs.size() - PAIRS_SHOWN, "pairs", "comparison.csv");
     }
 
-    private static String rough(Optional<Double> fraction) {
+    /** A warning where the sites fit each other's sea level badly; else blank. */
+    public static String rough(Optional<Double> fraction) {
         return fraction.filter(part -> part < ROUGH)
                 .map(part -> " Rough: the two fit each other's sea level badly (" + percent(part)
                         + " of the draws are effective).")
@@ -109,10 +111,15 @@ final class ComparisonReport {
 
     private static String plane(PlanarTilt tilt) {
         PlanarTilt.Plane plane = tilt.sharedErrors();
-        return estimate(plane.steepest()) + " toward "
-                + String.format(Locale.ROOT, "%03.0f", plane.steepestToDegrees() % 360) + " degrees ("
+        return steepest(plane) + " ("
                 + plusMinus(tilt.independent().steepest()) + " were the errors not shared)."
                 + straight(plane.p(), "plane");
+    }
+
+    /** {@code 0.012 ± 0.004 m/kyr per km toward 045 degrees}. */
+    public static String steepest(PlanarTilt.Plane plane) {
+        return estimate(plane.steepest()) + " toward "
+                + String.format(Locale.ROOT, "%03.0f", plane.steepestToDegrees() % 360) + " degrees";
     }
 
     private static String terrace(TerraceTilt tilt) {
@@ -126,14 +133,16 @@ final class ComparisonReport {
                         .orElse("");
     }
 
-    private static String straight(Optional<Double> p, String shape) {
+    /** A warning where no line or plane fits; else blank. */
+    public static String straight(Optional<Double> p, String shape) {
         return p.filter(chance -> chance < STRAIGHT)
                 .map(chance -> " No " + shape + " fits well: so much scatter comes by chance with probability "
                         + Digits.text(chance, chance, 1) + ".")
                 .orElse("");
     }
 
-    private static String estimate(Estimate estimate) {
+    /** {@code 0.012 ± 0.004 m/kyr per km}. */
+    public static String estimate(Estimate estimate) {
         return Wording.number(Digits.text(estimate.value(), estimate.sd(), 2)) + " " + plusMinus(estimate) + " "
                 + estimate.unit();
     }
@@ -142,14 +151,15 @@ final class ComparisonReport {
         return "± " + Digits.text(estimate.sd(), estimate.sd(), 2);
     }
 
-    private static String interval(Quantity quantity) {
+    /** {@code 0.40 to 0.47}: equal tails, 0.95. */
+    public static String interval(Quantity quantity) {
         double sigma = quantity.sd().orElse(quantity.interval68().width() / 2);
         return Wording.number(Digits.text(quantity.interval95().low(), sigma, 1)) + " to "
                 + Wording.number(Digits.text(quantity.interval95().high(), sigma, 1));
     }
 
-    /** Never 0 or 100 %: draws are too few to say so. */
-    private static String percent(double probability) {
+    /** A probability, never 0 or 100 %: draws are too few to say so. */
+    public static String percent(double probability) {
         if (probability < 0.005) {
             return "<1 %";
         }

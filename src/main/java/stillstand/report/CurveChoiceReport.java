@@ -14,7 +14,7 @@ import stillstand.uplift.FlightResult.Match;
 import stillstand.uplift.Rate;
 
 /** What the choice of curve does, in plain sentences. */
-final class CurveChoiceReport {
+public final class CurveChoiceReport {
     /** A level whose medians differ by less than its standard deviation hardly feels the choice. */
     private static final double FELT = 1;
 
@@ -26,7 +26,7 @@ final class CurveChoiceReport {
     private CurveChoiceReport() {}
 
     /** Sentences on one site; none where it ran under one curve. */
-    static List<String> ofSite(String site, List<CurveChoice> all) {
+    public static List<String> ofSite(String site, List<CurveChoice> all) {
         List<CurveChoice> own =
                 all.stream().filter(choice -> choice.site().equals(site)).toList();
         List<String> lines = new ArrayList<>();
@@ -43,7 +43,7 @@ final class CurveChoiceReport {
     }
 
     /** Sentences on all sites together. */
-    static List<String> ofAll(List<CurveEvidence> evidence) {
+    public static List<String> ofAll(List<CurveEvidence> evidence) {
         Map<String, List<CurveEvidence>> regions = new LinkedHashMap<>();
         evidence.forEach(each -> regions.computeIfAbsent(each.region(), region -> new ArrayList<>())
                 .add(each));
@@ -97,7 +97,18 @@ final class CurveChoiceReport {
                 .collect(Collectors.joining("; "));
     }
 
-    private static String weight(double weight) {
+    /** The name of a mixture in words; a curve's own id. */
+    public static String name(String curve) {
+        return switch (curve) {
+            case CurveChoice.EVIDENCE_WEIGHTED -> "all, weighed by evidence";
+            case CurveChoice.EQUAL_WEIGHTED -> "all alike";
+            case CurveChoice.STUDY_WEIGHTED -> "all, by the study's weights";
+            default -> curve;
+        };
+    }
+
+    /** {@code 0.65}; never 0 where there is some. */
+    public static String weight(double weight) {
         return weight < 0.005 ? "<0.01" : String.format(Locale.ROOT, "%.2f", weight);
     }
 

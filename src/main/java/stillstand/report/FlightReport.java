@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 import java.util.stream.Collectors;
 import java.util.stream.IntStream;
 import stillstand.uncertainty.Digits;
@@ -99,19 +100,25 @@ public final class FlightReport {
     public List<String> closing() {
         List<String> lines = new ArrayList<>();
         missing(lines);
-        hinges(lines);
-        if (!flight.halving().isEmpty()) {
-            lines.add("Halving one kind of error would change the width of the 95 % interval by: "
-                    + flight.halving().stream()
-                            .sorted(Comparator.comparingDouble(FlightResult.Halving::width95ChangePercent))
-                            .map(half -> half.error() + " "
-                                    + Wording.number(String.format(Locale.ROOT, "%.0f", half.width95ChangePercent()))
-                                    + " %")
-                            .collect(Collectors.joining(", "))
-                    + ".");
-        }
+        hinges().ifPresent(lines::add);
+        strays(lines);
+        halving().ifPresent(lines::add);
         flight.slidingFits().stream().findFirst().ifPresent(fit -> lines.add(sliding(fit)));
         return lines;
+    }
+
+    /** By how much halving each kind of error would narrow the rate; empty where nobody worked it out. */
+    public Optional<String> halving() {
+        return flight.halving().isEmpty()
+                ? Optional.empty()
+                : Optional.of("Halving one kind of error would change the width of the 95 % interval by: "
+                        + flight.halving().stream()
+                                .sorted(Comparator.comparingDouble(FlightResult.Halving::width95ChangePercent))
+                                .map(half -> half.error() + " "
+                                        + Wording.number(Digits.text(half.width95ChangePercent(), 0))
+                                        + " %")
+                                .collect(Collectors.joining(", "))
+                        + ".");
     }
 
     private void missing(List<String> lines) {
@@ -140,7 +147,7 @@ public final class FlightReport {
     }
 
     /** The levels whose removal moves the rate the most. */
-    private void hinges(List<String> lines) {
+    public Optional<String> hinges() {
         double median = flight.rate().median();
         String moved = flight.leaveOneOut().stream()
                 .sorted(Comparator.comparingDouble(
@@ -148,9 +155,10 @@ public final class FlightReport {
                 .limit(LEVELS_SHOWN)
                 .map(out -> "without " + out.level() + " it would be " + Wording.rate(out.rate()))
                 .collect(Collectors.joining("; "));
-        if (!moved.isEmpty()) {
-            lines.add("The rate hangs most on: " + moved + ".");
-        }
+        return moved.isEmpty() ? Optional.empty() : Optional.of("The rate hangs most on: " + moved + ".");
+    }
+
+    private void strays(List<String> lines) {
         String strays = flight.unmatched().stream()
                 .filter(level -> level.probability() > RATHER_NONE)
                 .map(FlightResult.Unmatched::level)

@@ -8,6 +8,7 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.stream.Collectors;
+import java.util.stream.Stream;
 import stillstand.sensitivity.AssumptionSwitch;
 import stillstand.sensitivity.CurveLeftOut;
 import stillstand.sensitivity.Leverage;
@@ -20,7 +21,7 @@ import stillstand.uncertainty.Digits;
  * What the answers of one site hang on, in sentences: what to measure next, what other assumptions would
  * do, and what each sample and curve does.
  */
-final class LeverageReport {
+public final class LeverageReport {
     private static final int SHOWN = 4;
     /** A change is worth a word where it is so many errors of its calculation. */
     private static final double ERRORS = 2;
@@ -30,16 +31,34 @@ final class LeverageReport {
     private final String site;
     private final Leverage leverage;
 
-    LeverageReport(String site, Leverage leverage) {
+    /** What a result says of one site. */
+    public LeverageReport(String site, Leverage leverage) {
         this.site = site;
         this.leverage = leverage;
     }
 
     /** All sentences; none where they were not asked for. */
-    List<String> lines() {
+    public List<String> lines() {
+        return Stream.of(next(), switches(), leftOut()).flatMap(List::stream).toList();
+    }
+
+    /** Which measurements would narrow which rate. */
+    public List<String> next() {
         List<String> lines = new ArrayList<>();
         next(lines);
+        return lines;
+    }
+
+    /** Which other assumptions would move which rate. */
+    public List<String> switches() {
+        List<String> lines = new ArrayList<>();
         switches(lines);
+        return lines;
+    }
+
+    /** What rates would be without a sample or a curve. */
+    public List<String> leftOut() {
+        List<String> lines = new ArrayList<>();
         samples(lines);
         curves(lines);
         return lines;
@@ -71,14 +90,15 @@ final class LeverageReport {
         surest(own).ifPresent(lines::add);
     }
 
-    private static boolean tells(NextMeasurement each) {
+    /** Whether a measurement would narrow the interval by more than the error of its calculation lets one tell. */
+    public static boolean tells(NextMeasurement each) {
         return each.width95ChangePercent() < -ERRORS * each.width95ChangePercentError()
                 && each.effectiveDraws() >= NextMeasurement.FEW_DRAWS
                 && each.width95ChangePercent() < -1;
     }
 
     /** {@code a date of T4 to 3 ka}. */
-    private static String named(NextMeasurement each) {
+    public static String named(NextMeasurement each) {
         String thing = each.sample().orElse(each.level());
         String sigma = " to " + Wording.number(Digits.text(each.sigma(), each.sigma(), 1)) + " " + each.unit();
         return switch (each.measurement()) {
@@ -90,10 +110,14 @@ final class LeverageReport {
     }
 
     private static String measurement(NextMeasurement each) {
-        String form = each.width95ChangePercentError() < 0.95 ? "%.1f ± %.1f %%" : "%.0f ± %.0f %%";
-        return named(each) + " "
-                + Wording.number(String.format(
-                        Locale.ROOT, form, each.width95ChangePercent(), each.width95ChangePercentError()));
+        return named(each) + " " + change(each);
+    }
+
+    /** {@code −38.5 ± 0.4 %}: the mean change of the width of the 95 % interval, and one standard error of its calculation. */
+    public static String change(NextMeasurement each) {
+        int decimals = each.width95ChangePercentError() < 0.95 ? 1 : 0;
+        return Wording.number(Digits.text(each.width95ChangePercent(), decimals)) + " ± "
+                + Digits.text(each.width95ChangePercentError(), decimals) + " %";
     }
 
     private static Optional<String> surest(List<NextMeasurement> own) {
@@ -143,7 +167,8 @@ final class LeverageReport {
         }
     }
 
-    private static String name(String rateOf) {
+    /** The flight, or the level. */
+    public static String name(String rateOf) {
         return rateOf.equals(NextMeasurement.FLIGHT) ? "the flight" : rateOf;
     }
 
@@ -166,7 +191,7 @@ final class LeverageReport {
     }
 
     /** How far the median or an end of the 95 % interval moves, in half widths of that interval; far where the rate is lost. */
-    private static double move(ShortRate rate, Optional<ShortRate> other) {
+    public static double move(ShortRate rate, Optional<ShortRate> other) {
         if (other.isEmpty()) {
             return Double.MAX_VALUE;
         }
@@ -197,12 +222,13 @@ final class LeverageReport {
 
     /** {@code  would be 0.43 (0.39 to 0.47), not 0.45 (0.41 to 0.49)}, to the digits that the spread as it is leaves. */
     private static String would(Optional<ShortRate> then, ShortRate now) {
-        double sigma = Math.max(now.interval95().width() / 4, 1e-6);
-        return then.map(rate -> " would be " + rate(rate, sigma)).orElse(" would have no rate of its own") + ", not "
-                + rate(now, sigma);
+        return then.map(rate -> " would be " + rate(rate, now)).orElse(" would have no rate of its own") + ", not "
+                + rate(now, now);
     }
 
-    private static String rate(ShortRate rate, double sigma) {
+    /** {@code 0.43 (0.39 to 0.47)}, to the digits that the spread of another leaves. */
+    public static String rate(ShortRate rate, ShortRate spread) {
+        double sigma = Math.max(spread.interval95().width() / 4, 1e-6);
         return Wording.number(Digits.text(rate.median(), sigma, 1)) + " ("
                 + Wording.number(Digits.text(rate.interval95().low(), sigma, 1)) + " to "
                 + Wording.number(Digits.text(rate.interval95().high(), sigma, 1)) + ")";

@@ -105,8 +105,9 @@ public final class RatesModel {
     public void show(Shown now) {
         shown = now;
         rows.setAll(now.result().map(RatesModel::rows).orElse(List.of()));
-        sites.setAll(rows.stream().map(Row::site).distinct().toList());
-        choose(sites.contains(site) ? site : "");
+        List<String> there = rows.stream().map(Row::site).distinct().toList();
+        choose(there.contains(site) ? site : "");
+        sites.setAll(there);
     }
 
     /** Shows one site alone; blank = all. */
@@ -224,6 +225,11 @@ public final class RatesModel {
         double high = DoubleStream.of(ends).max().orElseThrow();
         double room = 0.08 * (high - low) + 0.005;
         return new Interval(low - room, high + room);
+    }
+
+    /** The site that is shown alone; empty where all are. */
+    public Optional<String> chosen() {
+        return Optional.of(site).filter(name -> !name.isEmpty());
     }
 
     /** The rates of the chosen site or of all. */

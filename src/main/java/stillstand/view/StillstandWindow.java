@@ -92,7 +92,7 @@ public final class StillstandWindow extends Application {
         scene.getStylesheets().add(resource("/stillstand/view/window.css"));
         stage.setScene(scene);
         stage.setTitle("Stillstand");
-        stage.setMinWidth(760);
+        stage.setMinWidth(820);
         stage.setMinHeight(520);
         place(stage, memory);
         stage.setOnCloseRequest(event -> {

@@ -14,6 +14,8 @@ import javafx.beans.property.ObjectProperty;
 import javafx.beans.property.ReadOnlyObjectProperty;
 import javafx.beans.property.ReadOnlyObjectWrapper;
 import javafx.beans.property.SimpleObjectProperty;
+import javafx.beans.value.ChangeListener;
+import javafx.beans.value.ObservableValue;
 import javafx.collections.FXCollections;
 import javafx.collections.ObservableList;
 import stillstand.files.ResultsJson;
@@ -25,12 +27,20 @@ import stillstand.files.StudyStore;
 import stillstand.files.StudyTemplate;
 import stillstand.ledger.InputProblem;
 import stillstand.ledger.Loaded;
+import stillstand.sensitivity.MeasurementPlan;
 import stillstand.study.Library;
 import stillstand.study.Study;
 import stillstand.study.StudyResult;
+import stillstand.uncertainty.Digits;
 
 /** The whole window: which study is open, what the areas show, what has to be said, and all that the menus do. */
 final class WindowModel {
+    private static final String LEVERAGE = "leverage";
+    /** Written out, so that whoever reads the study sees what is supposed. */
+    private static final String USUAL = "{\"date_1sigma_ka\": "
+            + Digits.text(MeasurementPlan.DEFAULT.dateSigmaKa()) + ", \"survey_1sigma_m\": "
+            + Digits.text(MeasurementPlan.DEFAULT.surveySigmaMetres()) + "}";
+
     private final StudyReader reader;
     private final RunModel run;
     private final WindowMemory memory;
@@ -54,7 +64,9 @@ final class WindowModel {
         SEA_LEVEL(2, "Sea level"),
         STAIR(3, "Stair"),
         RATES(4, "Rates"),
-        RECORD(5, "Record");
+        LEVERAGE(5, "Leverage"),
+        SITES(6, "Sites"),
+        RECORD(7, "Record");
 
         private final int number;
         private final String title;
@@ -339,6 +351,45 @@ final class WindowModel {
         } else {
             run.start(study, Optional.of(opened.results()));
         }
+    }
+
+    /** Asks every run from now on what to measure next, or no longer. */
+    void askLeverage(boolean every) {
+        edit(
+                every ? "asking what to measure next" : "no longer asking what to measure next",
+                draft -> draft.text(StudyJson.NAME)
+                        .flatMap(SettingsText::parse)
+                        .filter(settings -> settings.value(LEVERAGE).isPresent() != every)
+                        .map(settings ->
+                                draft.withText(StudyJson.NAME, settings.withValue(LEVERAGE, every ? USUAL : "")))
+                        .orElse(draft));
+    }
+
+    /** Asks what to measure next, and runs as soon as the study has been checked. */
+    void askLeverageAndRun() {
+        document.get().ifPresent(opened -> {
+            askLeverage(true);
+            whenChecked(opened, this::startRun);
+        });
+    }
+
+    private static void whenChecked(StudyDocument opened, Runnable then) {
+        if (opened.checked().draft().equals(opened.draft())) {
+            then.run();
+            return;
+        }
+        opened.checkedProperty().addListener(new ChangeListener<>() {
+            @Override
+            public void changed(
+                    ObservableValue<? extends StudyDocument.Checked> source,
+                    StudyDocument.Checked before,
+                    StudyDocument.Checked after) {
+                if (after.draft().equals(opened.draft())) {
+                    opened.checkedProperty().removeListener(this);
+                    then.run();
+                }
+            }
+        });
     }
 
     void save() {

@@ -12,6 +12,7 @@ import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import stillstand.files.StudyStore;
+import stillstand.study.StudyResult;
 import stillstand.view.RunModel.State;
 import stillstand.view.WindowModel.Notice;
 
@@ -114,6 +115,7 @@ class WindowModelTest {
         Path copy = window.document().orElseThrow().folder();
         assertTrue(window.isPassingCopy());
         assertTrue(window.canRun());
+        assertTrue(Files.exists(copy.resolve("points.csv")), "the tilt that the readme tells of");
         assertEquals(List.of("copy"), abouts());
         assertEquals(List.of(), memory.recent());
         Path kept = folder.resolve("kept");
@@ -150,6 +152,39 @@ class WindowModelTest {
         assertTrue(second.notices().get(0).sentence().contains("another window has this study open"));
         second.startRun();
         assertEquals(State.DONE, second.run().state());
+        assertFalse(Files.exists(study.resolve("results")));
+    }
+
+    @Test
+    void askingWhatToMeasureNextIsOneEditThatKeepsTheOtherKeys() throws IOException {
+        Path study = study();
+        window.open(study);
+        window.askLeverageAndRun();
+        assertEquals(State.DONE, window.run().state());
+        StudyResult result = window.run().resultProperty().get().orElseThrow();
+        assertFalse(result.leverage().nextMeasurements().isEmpty());
+        assertFalse(result.leverage().assumptionSwitches().isEmpty());
+        assertTrue(Files.readString(study.resolve("study.json")).contains("\"maximum\": 20000"));
+        window.askLeverage(true);
+        StudyDocument document = window.document().orElseThrow();
+        assertEquals(
+                Optional.of("asking what to measure next"),
+                document.undoableProperty().get(),
+                "asked already, so nothing was edited");
+        window.askLeverage(false);
+        assertEquals(
+                Optional.empty(),
+                window.shownProperty().get().study().orElseThrow().settings().leverage());
+        assertTrue(window.shownProperty().get().stale());
+    }
+
+    @Test
+    void nothingRunsWhereAskingFindsProblems() throws IOException {
+        Path study = study();
+        Files.writeString(study.resolve("levels.csv"), "site,level,elevation_m\nA,one,x\n");
+        window.open(study);
+        window.askLeverageAndRun();
+        assertEquals(State.IDLE, window.run().state());
         assertFalse(Files.exists(study.resolve("results")));
     }
 

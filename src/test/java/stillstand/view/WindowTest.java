@@ -120,7 +120,14 @@ class WindowTest {
     @Test
     void keysReachEveryAreaLightAndDark() throws IOException {
         robot.open(study());
-        List<KeyCode> keys = List.of(KeyCode.DIGIT1, KeyCode.DIGIT2, KeyCode.DIGIT3, KeyCode.DIGIT4, KeyCode.DIGIT5);
+        List<KeyCode> keys = List.of(
+                KeyCode.DIGIT1,
+                KeyCode.DIGIT2,
+                KeyCode.DIGIT3,
+                KeyCode.DIGIT4,
+                KeyCode.DIGIT5,
+                KeyCode.DIGIT6,
+                KeyCode.DIGIT7);
         for (Area area : Area.values()) {
             robot.command(keys.get(area.number() - 1));
             assertEquals(area, robot.model().areaProperty().get());
