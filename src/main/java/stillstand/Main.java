@@ -19,8 +19,7 @@ public final class Main {
     @SuppressWarnings("SystemConsoleNull") // the property makes later Javas answer as 17 does
     private static boolean isOpenedByHand() {
         System.setProperty("jdk.console", "java.base");
-        boolean hasDisplay =
-                !System.getProperty("os.name", "").startsWith("Linux") || System.getenv("DISPLAY") != null;
+        boolean hasDisplay = !System.getProperty("os.name", "").startsWith("Linux") || System.getenv("DISPLAY") != null;
         return System.console() == null && hasDisplay;
     }
 }

@@ -17,6 +17,8 @@ import java.util.concurrent.atomic.AtomicLong;
 import javafx.animation.AnimationTimer;
 import javafx.application.Platform;
 import javafx.event.Event;
+import javafx.event.EventType;
+import javafx.geometry.Point2D;
 import javafx.scene.Scene;
 import javafx.scene.input.MouseButton;
 import javafx.scene.input.MouseEvent;
@@ -172,12 +174,14 @@ public final class StairDragBenchmark {
         }.start();
     }
 
-    private void fire(javafx.event.EventType<MouseEvent> type, double x, double y) {
-        Event.fireEvent(
-                paper,
-                new MouseEvent(
-                        type, x, y, x, y, MouseButton.PRIMARY, 1, false, false, false, false, true, false, false, true,
-                        false, false, null));
+    /** Fires an event at a place of the drawing; events speak in places of the scene. */
+    private void fire(EventType<MouseEvent> type, double x, double y) {
+        Point2D at = paper.localToScene(x, y);
+        boolean no = false;
+        MouseEvent event = new MouseEvent(
+                type, at.getX(), at.getY(), at.getX(), at.getY(), MouseButton.PRIMARY, 1, no, no, no, no, true, no, no, no,
+                no, no, null);
+        Event.fireEvent(paper, event);
     }
 
     private void tell(PrintStream out) {
@@ -189,6 +193,9 @@ public final class StairDragBenchmark {
         double[] work = held.stream().mapToDouble(nanos -> nanos / NANOS_PER_MILLI).toArray();
         Arrays.sort(gaps);
         Arrays.sort(work);
+        if (previews.get() < 10) {
+            throw new IllegalStateException("no line was dragged: " + previews.get() + " previews were asked for");
+        }
         out.printf(
                 Locale.ROOT,
                 "%d frames: %.1f a second; between frames median %.1f ms, 99 %% %.1f ms, most %.1f ms%n",

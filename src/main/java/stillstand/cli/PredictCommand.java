@@ -191,8 +191,7 @@ final class PredictCommand implements Callable<Integer> {
             }
         }
         throw new ParameterException(
-                spec.commandLine(),
-                (at.isEmpty() ? "--site" : "--at") + ": the study has no site \"" + name + "\"");
+                spec.commandLine(), (at.isEmpty() ? "--site" : "--at") + ": the study has no site \"" + name + "\"");
     }
 
     private String words() {

@@ -1,45 +1,55 @@
 package stillstand.figure;
 
+import java.awt.Color;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import org.jfree.chart.plot.XYPlot;
+import stillstand.sensitivity.CurveChoice;
 import stillstand.study.StudyResult;
 import stillstand.uncertainty.Interval;
 import stillstand.uplift.Rate;
 
-/** All rates of all sites on one axis. */
+/** All rates of all sites on one axis; where there are several curves, each flight under each of them too. */
 final class ForestFigure {
     private static final double ROW = 11.5;
 
     private ForestFigure() {}
 
-    /** A row: a heading, a flight, or a level. */
-    private record Row(
-            String name, Optional<Rate> rate, List<Interval> inner, List<Interval> outer, boolean ofFlight) {}
-
-    static boolean has(StudyResult result) {
-        return rows(SiteView.all(result)).stream().anyMatch(row -> row.rate().isPresent());
+    /** A row: a heading, a flight, a flight under one curve, or a level. */
+    private record Row(String name, Optional<Rate> rate, List<Interval> inner, List<Interval> outer, Color colour) {
+        static Row of(String name, Rate rate, Color colour) {
+            return new Row(name, Optional.of(rate), List.of(rate.shortest68()), List.of(rate.shortest95()), colour);
+        }
     }
 
-    private static List<Row> rows(List<SiteView> sites) {
+    static boolean has(StudyResult result) {
+        return rows(result, SiteView.all(result)).stream()
+                .anyMatch(row -> row.rate().isPresent());
+    }
+
+    private static List<Row> rows(StudyResult result, List<SiteView> sites) {
         List<Row> rows = new ArrayList<>();
         for (SiteView site : sites) {
             List<Row> below = new ArrayList<>();
             site.flight()
                     .ifPresent(flight -> below.add(new Row(
-                            "whole flight", Optional.of(flight.rate()), flight.regions68(), flight.regions95(), true)));
+                            "whole flight",
+                            Optional.of(flight.rate()),
+                            flight.regions68(),
+                            flight.regions95(),
+                            Style.LINK)));
+            result.curveChoice().stream()
+                    .filter(choice -> choice.site().equals(site.site())
+                            && choice.level().isEmpty()
+                            && !choice.curve().equals(CurveChoice.EVIDENCE_WEIGHTED))
+                    .forEach(choice -> below.add(Row.of(
+                            choice.mixesCurves() ? "all curves alike" : choice.curve(), choice.rate(), Style.MUTED)));
             site.levels()
-                    .forEach(level -> level.answer()
-                            .rate()
-                            .ifPresent(rate -> below.add(new Row(
-                                    level.name(),
-                                    Optional.of(rate),
-                                    List.of(rate.shortest68()),
-                                    List.of(rate.shortest95()),
-                                    false))));
+                    .forEach(level ->
+                            level.answer().rate().ifPresent(rate -> below.add(Row.of(level.name(), rate, Style.SEA))));
             if (!below.isEmpty()) {
-                rows.add(new Row("", Optional.empty(), List.of(), List.of(), false));
+                rows.add(new Row("", Optional.empty(), List.of(), List.of(), Style.INK));
                 rows.addAll(below);
             }
         }
@@ -48,7 +58,7 @@ final class ForestFigure {
 
     static Page page(String name, StudyResult result, double widthPoints) {
         List<SiteView> sites = SiteView.all(result);
-        List<Row> rows = rows(sites);
+        List<Row> rows = rows(result, sites);
         List<Rate> rates = rows.stream().flatMap(row -> row.rate().stream()).toList();
         XYPlot plot = Rows.plot(
                 RateMarks.axis(rates),
@@ -79,7 +89,7 @@ final class ForestFigure {
             if (row.rate().isEmpty()) {
                 heading(pen, y, headings.get(site++));
             } else {
-                RateMarks.bars(pen, y, row.outer(), row.inner(), row.ofFlight() ? Style.LINK : Style.SEA);
+                RateMarks.bars(pen, y, row.outer(), row.inner(), row.colour());
                 pen.dot(pen.x(row.rate().get().median()), y, 2, Style.INK);
             }
         }

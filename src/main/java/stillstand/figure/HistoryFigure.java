@@ -17,8 +17,7 @@ final class HistoryFigure {
     private HistoryFigure() {}
 
     static Page page(String name, SiteView site, FlightResult flight, double widthPoints) {
-        List<Segment> segments =
-                flight.history().map(RateHistory::bins).orElse(flight.segments());
+        List<Segment> segments = flight.history().map(RateHistory::bins).orElse(flight.segments());
         double oldest = oldest(flight);
         NumberAxis ages = Style.axis("Age (ka)", 0, oldest);
         ages.setInverted(true);

@@ -42,8 +42,8 @@ public record FinishedRun(Study study, StudyResult result) {
         results.replace(fresh -> {
             ResultFiles.write(fresh, study, result);
             if (hasFigures) {
-                faults.addAll(FigureFiles.OF_RUN.write(
-                        Figures.of(result).figures(), fresh.resolve("figures"), threads));
+                faults.addAll(
+                        FigureFiles.OF_RUN.write(Figures.of(result).figures(), fresh.resolve("figures"), threads));
             }
         });
         return faults;

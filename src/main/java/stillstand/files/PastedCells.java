@@ -33,7 +33,8 @@ public record PastedCells(List<String> header, List<List<String>> rows) {
     public static PastedCells of(String text, Set<String> known) {
         String first = TableFile.firstLine(text).orElse("");
         Separator separator = first.contains("\t") ? Separator.TAB : TableFile.separatorOf(first);
-        boolean isTable = text.contains("\t") || isHeader(cells(first, separator).get(0), known);
+        boolean isTable =
+                text.contains("\t") || isHeader(cells(first, separator).get(0), known);
         List<List<String>> rows = isTable ? cells(text, text.contains("\t") ? Separator.TAB : separator) : lines(text);
         return isHeader(rows.get(0), known)
                 ? new PastedCells(rows.get(0), rows.subList(1, rows.size()))

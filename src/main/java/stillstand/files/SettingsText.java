@@ -67,7 +67,8 @@ public final class SettingsText {
 
     /** The text with words under a key; blank takes the key away. */
     public String withWords(String keyPath, String words) {
-        return with(keyPath, words.isBlank() ? Optional.empty() : Optional.of(JsonNodeFactory.instance.stringNode(words)));
+        return with(
+                keyPath, words.isBlank() ? Optional.empty() : Optional.of(JsonNodeFactory.instance.stringNode(words)));
     }
 
     /**

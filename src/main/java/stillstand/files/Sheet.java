@@ -34,8 +34,7 @@ public final class Sheet implements DraftFile {
     private final String tail;
     private final int columnCount;
 
-    private Sheet(
-            String name, String mark, char separator, String newLine, Line header, List<Line> rows, String tail) {
+    private Sheet(String name, String mark, char separator, String newLine, Line header, List<Line> rows, String tail) {
         this.name = name;
         this.mark = mark;
         this.separator = separator;
@@ -108,8 +107,7 @@ public final class Sheet implements DraftFile {
         }
         String tail = above + String.join("", physical.subList(taken, physical.size()));
         List<Line> rows = List.copyOf(found.subList(1, found.size()));
-        return Optional.of(
-                new Sheet(name, mark, separator.character, lineEnd(physical), found.get(0), rows, tail));
+        return Optional.of(new Sheet(name, mark, separator.character, lineEnd(physical), found.get(0), rows, tail));
     }
 
     private static boolean isPassedOver(String line) {
@@ -302,9 +300,8 @@ public final class Sheet implements DraftFile {
         return with(
                 header,
                 rows.stream()
-                        .map(row -> row.cells.size() >= header.cells.size()
-                                ? row
-                                : line(row.above, padded(row.cells, 0)))
+                        .map(row ->
+                                row.cells.size() >= header.cells.size() ? row : line(row.above, padded(row.cells, 0)))
                         .toList());
     }
 

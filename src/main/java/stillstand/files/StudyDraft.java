@@ -37,7 +37,9 @@ public record StudyDraft(SortedMap<String, DraftFile> files) {
 
     /** A table, where there is one of that name that can be taken apart. */
     public Optional<Sheet> sheet(String name) {
-        return Optional.ofNullable(files.get(name)).filter(Sheet.class::isInstance).map(Sheet.class::cast);
+        return Optional.ofNullable(files.get(name))
+                .filter(Sheet.class::isInstance)
+                .map(Sheet.class::cast);
     }
 
     /** The text of a file, where there is one of that name. */

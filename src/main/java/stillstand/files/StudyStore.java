@@ -57,8 +57,8 @@ public final class StudyStore implements AutoCloseable {
     public static Loaded<StudyStore> open(Path given) throws IOException {
         if (!Files.isDirectory(given)) {
             String found = Files.exists(given) ? "a file" : "no such folder";
-            return Loaded.failed(List.of(InputProblem.ofFile(
-                    String.valueOf(given), found, "the folder of a study, with study.json in it")));
+            return Loaded.failed(List.of(
+                    InputProblem.ofFile(String.valueOf(given), found, "the folder of a study, with study.json in it")));
         }
         Path folder = given.toRealPath();
         try {

@@ -62,7 +62,8 @@ final class HistoryReport {
 
     private static String cannotTell(Change change) {
         String side = change.datedYounger() ? "older" : change.datedOlder() ? "younger" : "younger or older";
-        return "No dated level is " + side + " than the change at " + Math.round(change.age().median())
+        return "No dated level is " + side + " than the change at "
+                + Math.round(change.age().median())
                 + " ka: then a change of rate and another pairing of levels and highstands are the same"
                 + " thing, and the evidence cannot tell them apart.";
     }

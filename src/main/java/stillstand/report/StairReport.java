@@ -52,11 +52,12 @@ public final class StairReport {
         PlainTable table = new PlainTable(headers, 1);
         for (String stage : oldestFirst) {
             List<String> cells = new ArrayList<>(List.of(stage, number(stages.getOrDefault(stage, 0.0))));
-            stairs.values().forEach(stair -> cells.add(stair.steps().stream()
-                    .filter(step -> step.stage().equals(stage))
-                    .findFirst()
-                    .map(StairReport::cell)
-                    .orElse("")));
+            stairs.values()
+                    .forEach(stair -> cells.add(stair.steps().stream()
+                            .filter(step -> step.stage().equals(stage))
+                            .findFirst()
+                            .map(StairReport::cell)
+                            .orElse("")));
             table.row(cells);
         }
         return heading + "\n  " + String.join("\n  ", table.lines()) + "\n";

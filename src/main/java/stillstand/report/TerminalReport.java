@@ -10,9 +10,9 @@ import stillstand.study.StudyResult;
 import stillstand.uplift.BetweenLevels;
 import stillstand.uplift.FlightResult;
 import stillstand.uplift.LevelAnswer;
-import stillstand.uplift.LevelAnswers;
 import stillstand.uplift.LevelAnswer.MonteCarlo;
 import stillstand.uplift.LevelAnswer.SampleAnswer;
+import stillstand.uplift.LevelAnswers;
 
 /** A result as a summary to show a colleague: plain text of at most 100 columns, a screen a site. */
 public final class TerminalReport {

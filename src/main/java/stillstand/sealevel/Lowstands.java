@@ -101,7 +101,9 @@ public final class Lowstands {
             }
             String one = younger.substring(String.valueOf(low.get()).length());
             String two = older.substring(String.valueOf(high.get()).length());
-            if (high.get().equals(low.get()) && one.length() == 1 && two.length() == 1
+            if (high.get().equals(low.get())
+                    && one.length() == 1
+                    && two.length() == 1
                     && two.charAt(0) - one.charAt(0) == 2) {
                 return low.get() + String.valueOf((char) (one.charAt(0) + 1));
             }

@@ -58,9 +58,10 @@ final class QuickAnswers {
         return LevelAnswers.coralsTogether(supposed.site(), level, supposed.basis(), supposed.prior());
     }
 
-    /** Whether the site has a flight that can be matched. */
+    /** Whether the site has a flight that can be matched and is worked out here; reefs that drowned are not. */
     static boolean hasFlight(Supposition supposed) {
         return FlightSetup.isNeeded(supposed.site())
+                && !FlightSetup.isDrowned(supposed.site())
                 && FlightSetup.whyNot(supposed.site(), supposed.basis()).isEmpty();
     }
 

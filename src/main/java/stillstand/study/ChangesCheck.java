@@ -62,7 +62,8 @@ final class ChangesCheck {
                 .filter(row -> row.sample().filter(ChangesCheck::dates).isPresent())
                 .map(SamplesTable.SampleRow::key)
                 .collect(Collectors.toSet());
-        long count = flight.stream().filter(level -> dated.contains(level.key())).count();
+        long count =
+                flight.stream().filter(level -> dated.contains(level.key())).count();
         if (changes.most() > 0 && count < changes.most() + 1) {
             site.reader()
                     .warn(

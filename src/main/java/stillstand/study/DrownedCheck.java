@@ -31,9 +31,10 @@ final class DrownedCheck {
                             .filter(level -> level.formsAt() == FormsAt.HIGHSTAND)
                             .findFirst()
                             .ifPresent(raised -> mixed(first, raised)));
-            boolean picked = seaLevel.apply(site.name()).stream().anyMatch(sea -> sea.curve()
-                    .filter(curve -> curve.id().equals(sea.highstands().id()))
-                    .isPresent());
+            boolean picked = seaLevel.apply(site.name()).stream()
+                    .anyMatch(sea -> sea.curve()
+                            .filter(curve -> curve.id().equals(sea.highstands().id()))
+                            .isPresent());
             if (picked) {
                 drowned.forEach(DrownedCheck::checkPin);
             }
@@ -54,7 +55,8 @@ final class DrownedCheck {
         drowned.reader()
                 .problem(
                         FORMS_AT,
-                        DROWNING + " at a site where level " + quote(raised.key().level()) + " forms at a highstand",
+                        DROWNING + " at a site where level "
+                                + quote(raised.key().level()) + " forms at a highstand",
                         "levels of one kind at a site: a rising coast keeps highstands, a sinking one lowstands; give the"
                                 + " drowned reefs a site of their own");
     }

@@ -15,8 +15,10 @@ import stillstand.uncertainty.Uncertain;
 
 /** The rows of {@code points.csv}: many points measured on one terrace. */
 final class PointsTable {
+    static final String NAME = "points.csv";
+
     private static final Column ELEVATION = Column.withSpread("elevation", "m");
-    private static final Columns COLUMNS = new Columns(
+    static final Columns COLUMNS = new Columns(
             List.of(
                     Column.plain("site"),
                     Column.plain("level"),

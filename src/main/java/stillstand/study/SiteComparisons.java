@@ -9,6 +9,7 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import java.util.concurrent.ExecutorService;
+import java.util.stream.Collectors;
 import stillstand.comparison.SiteComparison;
 import stillstand.comparison.SiteGroup;
 import stillstand.comparison.SiteMotion;
@@ -22,9 +23,11 @@ import stillstand.ledger.RunMonitor;
 import stillstand.shoreline.FormerSeaLevel;
 import stillstand.shoreline.HeightTerm;
 import stillstand.shoreline.Level;
+import stillstand.shoreline.Site;
 import stillstand.uncertainty.DrawStreams;
 import stillstand.uplift.DateRules;
 import stillstand.uplift.FlightResult;
+import stillstand.uplift.FlightSetup;
 import stillstand.uplift.LevelAnswer;
 import stillstand.uplift.MatchingRules;
 import stillstand.uplift.Quantity;
@@ -75,8 +78,24 @@ record SiteComparisons(
                             .put(level.level(), rate));
             level.age().ifPresent(age -> ages.put(key(level.site(), level.level()), age));
         }
+        Set<String> drowned = study.sites().stream()
+                .map(SitePlan::site)
+                .filter(FlightSetup::isDrowned)
+                .map(Site::name)
+                .collect(Collectors.toSet());
+        Set<Assumption> ledger = new LinkedHashSet<>();
         Map<String, Rate> flights = new HashMap<>();
         for (FlightResult flight : found.flights()) {
+            if (drowned.contains(flight.site())) {
+                // lowstands share other errors than highstands: the two kinds of flight cannot be conditioned on each
+                // other
+                ledger.add(new Assumption(
+                        "a flight of drowned reefs is not compared with other sites",
+                        "single levels of the site that have a rate of their own are",
+                        "Stillstand's default",
+                        flight.site()));
+                continue;
+            }
             flights.put(flight.site(), flight.rate());
             flight.predictedAges().forEach(age -> ages.putIfAbsent(key(flight.site(), age.level()), age.age()));
         }
@@ -96,7 +115,7 @@ record SiteComparisons(
                 streams,
                 executor,
                 monitor);
-        Set<Assumption> ledger = new LinkedHashSet<>(compared.assumptions());
+        ledger.addAll(compared.assumptions());
         return new SiteComparisons(
                 compared.pairs(), compared.motions(), compared.groups(), tilts(study, ages, ledger), ledger);
     }

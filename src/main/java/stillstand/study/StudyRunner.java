@@ -80,7 +80,8 @@ public final class StudyRunner {
                 settings.indicativeRange(),
                 dates);
         MatchingRules rules = rules(settings.matching());
-        matching = new Flights(streams, executor, monitor, rules, settings.indicativeRange(), changes(settings.rate()));
+        RateChanges changes = changes(settings.rate());
+        matching = new Flights(streams, executor, monitor, rules, settings.indicativeRange(), changes);
         hinges = new SiteHinges(settings, rules, dates, streams, executor, monitor);
     }
 

@@ -9,6 +9,7 @@ public final class TableColumns {
             SitesTable.NAME, SitesTable.COLUMNS,
             LevelsTable.NAME, LevelsTable.COLUMNS,
             SamplesTable.NAME, SamplesTable.COLUMNS,
+            PointsTable.NAME, PointsTable.COLUMNS,
             GiaTable.NAME, GiaTable.COLUMNS);
 
     private TableColumns() {}

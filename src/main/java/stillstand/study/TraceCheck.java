@@ -19,9 +19,7 @@ final class TraceCheck {
     private TraceCheck() {}
 
     static void check(
-            StudySettings settings,
-            List<LevelsTable.LevelRow> levels,
-            Function<String, List<SeaLevelCase>> seaLevel) {
+            StudySettings settings, List<LevelsTable.LevelRow> levels, Function<String, List<SeaLevelCase>> seaLevel) {
         Map<String, List<LevelsTable.LevelRow>> terraces = new LinkedHashMap<>();
         for (LevelsTable.LevelRow level : levels) {
             String terrace = level.reader().text(TERRACE);
@@ -44,7 +42,8 @@ final class TraceCheck {
             level.reader()
                     .problem(
                             TERRACE,
-                            quote(terrace) + " beside forms_at " + level.formsAt().id(),
+                            quote(terrace) + " beside forms_at "
+                                    + level.formsAt().id(),
                             "nothing: only a level that is matched to a highstand shares one with another site");
         }
     }
@@ -57,7 +56,8 @@ final class TraceCheck {
                 level.reader()
                         .problem(
                                 TERRACE,
-                                quote(terrace) + " a second time at " + quote(level.key().site()) + " (level "
+                                quote(terrace) + " a second time at "
+                                        + quote(level.key().site()) + " (level "
                                         + quote(other.key().level()) + " has it)",
                                 "each traced terrace once at a site: it is one shoreline");
             }
@@ -65,7 +65,9 @@ final class TraceCheck {
         if (levels.size() == 1) {
             levels.get(0)
                     .reader()
-                    .warn(TERRACE, "terrace " + quote(terrace) + " is traced to no other site, so that it says nothing");
+                    .warn(
+                            TERRACE,
+                            "terrace " + quote(terrace) + " is traced to no other site, so that it says nothing");
         }
     }
 
@@ -86,7 +88,8 @@ final class TraceCheck {
                                     quote(level.reader().text("highstand")) + " on terrace " + quote(terrace),
                                     "a highstand that it can share with level "
                                             + quote(before.get().key().level()) + " of "
-                                            + quote(before.get().key().site()) + " on the same terrace, which is tied to "
+                                            + quote(before.get().key().site())
+                                            + " on the same terrace, which is tied to "
                                             + quote(before.get().reader().text("highstand")));
                     return;
                 }
@@ -105,7 +108,9 @@ final class TraceCheck {
                         .add(level));
         for (List<LevelsTable.LevelRow> site : bySite.values()) {
             List<LevelsTable.LevelRow> traced = FlightSetup.inOrder(
-                            site, LevelsTable.LevelRow::order, level -> level.elevationMetres()
+                            site,
+                            LevelsTable.LevelRow::order,
+                            level -> level.elevationMetres()
                                     .map(each -> each.mean())
                                     .orElse(0.0))
                     .stream()
@@ -122,8 +127,8 @@ final class TraceCheck {
                                 .problem(
                                         TERRACE,
                                         quote(high) + " above " + quote(low),
-                                        quote(high) + " below " + quote(low) + ", as at " + quote(other.key().site())
-                                                + ": traced terraces cannot cross");
+                                        quote(high) + " below " + quote(low) + ", as at "
+                                                + quote(other.key().site()) + ": traced terraces cannot cross");
                         return;
                     }
                     above.putIfAbsent(List.of(low, high), traced.get(k));
@@ -141,7 +146,9 @@ final class TraceCheck {
                 .anyMatch(level -> seaLevel.apply(level.key().site()).size() > 1);
         if (several) {
             first.reader()
-                    .warn(TERRACE, "traced terraces are not used where a study has several curves: each site stands alone");
+                    .warn(
+                            TERRACE,
+                            "traced terraces are not used where a study has several curves: each site stands alone");
         } else if (settings.rate().changes() != StudySettings.Changes.NONE) {
             first.reader()
                     .warn(TERRACE, "traced terraces are not used where the rate may change: each site stands alone");

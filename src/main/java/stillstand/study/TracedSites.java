@@ -34,7 +34,8 @@ final class TracedSites {
                         basis,
                         plan.prior(),
                         flights.stream()
-                                .filter(flight -> flight.site().equals(plan.site().name()))
+                                .filter(flight ->
+                                        flight.site().equals(plan.site().name()))
                                 .findFirst()));
             }
         }

@@ -37,11 +37,7 @@ final class ChangingFlights {
      * @param monitor is told of each model and asked whether to stop
      * @param changes how the rate may change
      */
-    ChangingFlights(
-            DrawStreams streams,
-            ExecutorService executor,
-            RunMonitor monitor,
-            RateChanges changes) {
+    ChangingFlights(DrawStreams streams, ExecutorService executor, RunMonitor monitor, RateChanges changes) {
         this.streams = streams;
         this.executor = executor;
         this.monitor = monitor;
@@ -224,8 +220,8 @@ final class ChangingFlights {
             for (double from = 0; from < untilKa; from += BIN_KA) {
                 double young = from;
                 double old = from + BIN_KA;
-                ToDoubleFunction<UpliftHistory> mean = history ->
-                        (history.upliftMetresSince(old) - history.upliftMetresSince(young)) / (old - young);
+                ToDoubleFunction<UpliftHistory> mean =
+                        history -> (history.upliftMetresSince(old) - history.upliftMetresSince(young)) / (old - young);
                 bins.add(new FlightResult.Segment(
                         young, Optional.of(old), Rate.of(all.of(mean).posterior(0))));
             }

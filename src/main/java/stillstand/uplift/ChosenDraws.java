@@ -82,8 +82,7 @@ final class ChosenDraws {
     }
 
     private static PairingSums empty(ShorelineFilter filter) {
-        return new PairingSums(
-                filter.model.levels().size(), filter.model.rows().size());
+        return new PairingSums(filter.model.levels().size(), filter.model.rows().size());
     }
 
     private static List<Optional<LevelAge>> ages(PairingTable table, PairingSums sums) {

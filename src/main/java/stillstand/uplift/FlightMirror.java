@@ -54,18 +54,12 @@ final class FlightMirror {
                 flight.halving(),
                 flight.slidingFits().stream()
                         .map(fit -> new FlightResult.HandFit(
-                                fit.criterion(),
-                                -fit.rate(),
-                                fit.rmsMetres(),
-                                fit.rSquared(),
-                                fit.probabilityAsFar()))
+                                fit.criterion(), -fit.rate(), fit.rmsMetres(), fit.rSquared(), fit.probabilityAsFar()))
                         .toList(),
                 flight.modelChoice(),
                 flight.history()
                         .map(history -> new RateHistory(
-                                history.changes().stream()
-                                        .map(FlightMirror::of)
-                                        .toList(),
+                                history.changes().stream().map(FlightMirror::of).toList(),
                                 history.bins().stream().map(FlightMirror::of).toList())));
     }
 

@@ -147,12 +147,12 @@ public final class FlightMixture {
 
     /** Bin by bin, and change by change where all accounts have as many; else those of the heaviest. */
     private RateHistory history(RateHistory own) {
-        List<RateHistory> all = flights.stream()
-                .flatMap(flight -> flight.history().stream())
-                .toList();
+        List<RateHistory> all =
+                flights.stream().flatMap(flight -> flight.history().stream()).toList();
         boolean alike = all.size() == flights.size()
-                && all.stream().allMatch(other -> other.bins().size() == own.bins().size()
-                        && other.changes().size() == own.changes().size());
+                && all.stream()
+                        .allMatch(other -> other.bins().size() == own.bins().size()
+                                && other.changes().size() == own.changes().size());
         if (!alike) {
             return own;
         }
@@ -175,7 +175,8 @@ public final class FlightMixture {
                     all.stream().map(other -> other.changes().get(number)).toList();
             changes.add(new RateHistory.Change(
                     own.changes().get(i).model(),
-                    QuantityMixture.of(each.stream().map(RateHistory.Change::age).toList(), weights),
+                    QuantityMixture.of(
+                            each.stream().map(RateHistory.Change::age).toList(), weights),
                     mean(each, weights, RateHistory.Change::probabilityFasterBefore),
                     own.changes().get(i).datedYounger(),
                     own.changes().get(i).datedOlder()));

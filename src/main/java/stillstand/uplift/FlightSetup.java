@@ -42,7 +42,8 @@ import stillstand.uncertainty.Uncertain;
  * @param mirrored whether heights, rows and rates are those of a mirror: for reefs that drowned
  * @param assumptions what was supposed on the way
  */
-public record FlightSetup(FlightModel model, SharedPriors shared, boolean complete, boolean mirrored, List<Assumption> assumptions) {
+public record FlightSetup(
+        FlightModel model, SharedPriors shared, boolean complete, boolean mirrored, List<Assumption> assumptions) {
     private static final String OURS = "Stillstand's default";
     /** A date without a spread gets this one, ka: nothing is dated better. */
     private static final double LEAST_DATE_SIGMA_KA = 0.01;
@@ -64,7 +65,7 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
     }
 
     /** Whether the levels of a site are reefs that drowned on a sinking coast. */
-    static boolean isDrowned(Site site) {
+    public static boolean isDrowned(Site site) {
         return site.levels().stream().anyMatch(level -> level.formsAt() == FormsAt.DROWNING);
     }
 
@@ -260,7 +261,8 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
                         level.loweringMetresPerKyr().standardDeviation()
                                 * ageKa.get().mean(),
                         lowering * ageKa.get().standardDeviation());
-                terms.add(new HeightTerm(Source.SURVEY, sign, sigma > 0 ? new Normal(metres, sigma) : new Exact(metres)));
+                terms.add(
+                        new HeightTerm(Source.SURVEY, sign, sigma > 0 ? new Normal(metres, sigma) : new Exact(metres)));
                 say("surface lowering in the flight", metres(metres) + " at the level's own dates", level);
             } else if (lowering > 0) {
                 say("surface lowering is left out of the flight", "the level has no date to reckon it by", level);
@@ -332,7 +334,9 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
 
         private void sayRules(Interval surveyed, SharedPriors shared, FlightModel model) {
             say(
-                    mirrored ? "drowned reefs are matched to lowstands, in a mirror" : "a flight is matched to highstands",
+                    mirrored
+                            ? "drowned reefs are matched to lowstands, in a mirror"
+                            : "a flight is matched to highstands",
                     complete ? "of a table taken as it stands" : "by the default model");
             say(
                     "heights in which a terrace would have been seen",
@@ -359,7 +363,9 @@ public record FlightSetup(FlightModel model, SharedPriors shared, boolean comple
             if (!complete) {
                 say(
                         "the answer supposes that at least one level is a shoreline",
-                        mirrored ? "and that reefs stand below today's sea" : "and that shorelines stand above today's sea");
+                        mirrored
+                                ? "and that reefs stand below today's sea"
+                                : "and that shorelines stand above today's sea");
             }
             if (datumSigmaMetres > 0) {
                 say("error of the datum", metres(datumSigmaMetres) + " (1 sigma), shared by all levels of the flight");

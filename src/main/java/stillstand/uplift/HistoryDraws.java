@@ -58,8 +58,11 @@ record HistoryDraws(
 
     /** Ages of the n-th change, ka, from 0; absent where the model's changes are none or known. */
     Optional<WeightedRates> changesKa(int n) {
-        return prior instanceof HistoryPrior.Stepped stepped && n < stepped.changes() && stepped.fromKa() < stepped.toKa()
-                ? Optional.of(of(history -> ((UpliftHistory.SteppedRate) history).changesKa().get(n)))
+        return prior instanceof HistoryPrior.Stepped stepped
+                        && n < stepped.changes()
+                        && stepped.fromKa() < stepped.toKa()
+                ? Optional.of(of(history ->
+                        ((UpliftHistory.SteppedRate) history).changesKa().get(n)))
                 : Optional.empty();
     }
 

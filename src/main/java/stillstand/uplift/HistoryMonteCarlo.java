@@ -27,8 +27,15 @@ final class HistoryMonteCarlo {
     /** So many points of the prior are looked at for each one that goes on. */
     private static final int FIRST = 64;
 
+    /** A point of the prior this far below the best, in the logarithm, is looked at with few cells only. */
+    private static final double HOPELESS = 40;
+
+    private static final int PILOT_CELLS = 32;
     private static final double JUMP_BETWEEN_MODES = 0.1;
     private static final double NOISE = 2e-3;
+    /** Copies made by drawing anew part only by moves: so many more of them at the end. */
+    private static final int LAST = 3;
+
     private static final int BISECTIONS = 40;
 
     private final FlightModel model;
@@ -39,6 +46,7 @@ final class HistoryMonteCarlo {
     private final String key;
     private final RunMonitor monitor;
     private final int dimensions;
+    private final ShorelineFilter pilot;
     private final ShorelineFilter coarse;
     private final ShorelineFilter fine;
 
@@ -48,11 +56,11 @@ final class HistoryMonteCarlo {
      * @param islands independent populations, 4 or more
      * @param points in each, a power of two, 64 or more
      * @param cells cells of height, 10 or more; the last evaluation is at twice as many too
-     * @param sweeps moves of every point after each power, 1 or more
+     * @param sweeps moves of every point after each power, 1 or more; three times as many after the last
      */
     record Effort(int islands, int points, int cells, int sweeps) {
-        /** 8 islands of 512 points, 80 cells, 6 sweeps. */
-        static final Effort FULL = new Effort(8, 512, 80, 6);
+        /** 8 islands of 512 points, 80 cells, 3 sweeps. */
+        static final Effort FULL = new Effort(8, 512, 80, 3);
 
         Effort {
             if (!(islands >= 4 && points >= 64 && Integer.bitCount(points) == 1 && cells >= 10 && sweeps >= 1)) {
@@ -78,6 +86,7 @@ final class HistoryMonteCarlo {
         this.key = key;
         this.monitor = monitor;
         dimensions = prior.dimensions() + this.shared.dimensions();
+        pilot = new ShorelineFilter(model, Math.min(PILOT_CELLS, effort.cells()));
         coarse = new ShorelineFilter(model, effort.cells());
         fine = new ShorelineFilter(model, 2 * effort.cells());
     }
@@ -169,8 +178,13 @@ final class HistoryMonteCarlo {
         void run() {
             begin();
             while (power < 1 && logEvidence > Double.NEGATIVE_INFINITY) {
+                boolean first = power == 0;
                 raise();
-                for (int sweep = 0; sweep < effort.sweeps() && logEvidence > Double.NEGATIVE_INFINITY; sweep++) {
+                for (int k = 0; k < log.length && first && logEvidence > Double.NEGATIVE_INFINITY; k++) {
+                    log[k] = logLikelihood(at[k]); // of a hopeless point the few cells said it
+                }
+                int sweeps = power == 1 ? LAST * effort.sweeps() : effort.sweeps();
+                for (int sweep = 0; sweep < sweeps && logEvidence > Double.NEGATIVE_INFINITY; sweep++) {
                     sweep();
                 }
                 if (number == 0) {
@@ -187,6 +201,7 @@ final class HistoryMonteCarlo {
 
         private void begin() {
             SobolPoints points = SobolPoints.scrambled(streams, key + " prior", dimensions, number);
+            FilterWorkspace few = pilot.workspace(false);
             double[][] columns = new double[dimensions][at.length];
             for (int d = 0; d < dimensions; d++) {
                 points.column(d, columns[d]);
@@ -197,8 +212,15 @@ final class HistoryMonteCarlo {
                 for (int d = 0; d < dimensions; d++) {
                     at[k][d] = columns[d][k];
                 }
-                log[k] = logLikelihood(at[k]);
-                meanNothing += Math.exp(workspace.logNothingRecorded) / at.length;
+                stopIfCancelled();
+                log[k] = pilot.logEvidence(prior.at(at[k]), shared.at(at[k], prior.dimensions()), few);
+                meanNothing += Math.exp(few.logNothingRecorded) / at.length;
+            }
+            double highest = Arrays.stream(log).max().orElseThrow();
+            for (int k = 0; k < at.length; k++) {
+                if (log[k] > highest - HOPELESS) {
+                    log[k] = logLikelihood(at[k]);
+                }
             }
         }
 
@@ -214,7 +236,8 @@ final class HistoryMonteCarlo {
                 logEvidence = Double.NEGATIVE_INFINITY;
                 return;
             }
-            double alive = Arrays.stream(log).filter(v -> v > Double.NEGATIVE_INFINITY).count();
+            double alive =
+                    Arrays.stream(log).filter(v -> v > Double.NEGATIVE_INFINITY).count();
             alive = Math.min(alive, effort.points());
             double step = 1 - power;
             if (effective(step, highest) < STAYING * alive) {

@@ -370,9 +370,9 @@ public final class LevelRates {
                     prior.isTwoSided() ? posterior.map(p -> 1 - p.cumulativeProbability(0)) : Optional.empty(),
                     Quantity.of(ages, "ka"),
                     Quantity.of(
-                            knownHeight.map(Summary::of).orElseGet(() -> all.height()
-                                    .distribution()
-                                    .summary()),
+                            knownHeight
+                                    .map(Summary::of)
+                                    .orElseGet(() -> all.height().distribution().summary()),
                             "m"),
                     settled((int) draws, converged),
                     (double) beyondCurve / (draws * explanations.size()));

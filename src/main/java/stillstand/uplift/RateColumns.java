@@ -101,8 +101,7 @@ final class RateColumns {
         }
         if (variance > 0) {
             inputs.clear();
-            inputs.add(new Input(
-                    InputGroup.ELEVATION, Role.HEIGHT, 1, new Normal(meanMetres, Math.sqrt(variance))));
+            inputs.add(new Input(InputGroup.ELEVATION, Role.HEIGHT, 1, new Normal(meanMetres, Math.sqrt(variance))));
             inputs.addAll(others);
         }
     }

@@ -43,12 +43,15 @@ final class SharedScores {
         double offset = priors.offsetSigmaMetres() > 0 ? priors.offsetSigmaMetres() * scores[k++] : 0;
         double interstadial = priors.interstadialSigmaMetres() > 0 ? priors.interstadialSigmaMetres() * scores[k++] : 0;
         double shift = priors.ageShiftSigmaKa() > 0 ? priors.ageShiftSigmaKa() * scores[k++] : 0;
-        double recorded =
-                recording.length > 0 ? read(recording, scores[k++]) : priors.recording().quantile(0.5);
+        double recorded = recording.length > 0
+                ? read(recording, scores[k++])
+                : priors.recording().quantile(0.5);
         int decays = priors.decaysKa().size();
         int decay = decays > 1 ? (int) Math.min(decays - 1, probability(scores[k++]) * decays) : 0;
-        double stray = strays.length > 0 ? read(strays, scores[k]) : priors.strays().quantile(0.5);
-        return new SharedNumbers(offset, interstadial, shift, recorded, priors.decaysKa().get(decay), stray);
+        double stray =
+                strays.length > 0 ? read(strays, scores[k]) : priors.strays().quantile(0.5);
+        return new SharedNumbers(
+                offset, interstadial, shift, recorded, priors.decaysKa().get(decay), stray);
     }
 
     private static double read(double[] table, double score) {

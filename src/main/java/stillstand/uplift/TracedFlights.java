@@ -258,17 +258,19 @@ public final class TracedFlights {
             for (int k : weighted.chosen(Math.min(1000, weights.length))) {
                 joint.add(correlations.get(k));
             }
-            FlightAnswer answer =
-                    new FlightAnswer(
-                            posterior,
-                            counted.table(before.missing()),
-                            counted.ages(),
-                            List.of(),
-                            before.probabilityAllStray());
+            FlightAnswer answer = new FlightAnswer(
+                    posterior,
+                    counted.table(before.missing()),
+                    counted.ages(),
+                    List.of(),
+                    before.probabilityAllStray());
             FlightSummary summary = new FlightSummary(site.site().name(), model, answer, new JointDraws(joint));
-            Flights.Answered answered =
-                    new Flights.Answered(
-                    result(before, posterior, summary, FlightMirror.of(site.prior(), with.setup().mirrored())),
+            Flights.Answered answered = new Flights.Answered(
+                    result(
+                            before,
+                            posterior,
+                            summary,
+                            FlightMirror.of(site.prior(), with.setup().mirrored())),
                     summary.residuals(),
                     said(weighted, found));
             return with.setup().mirrored() ? FlightMirror.of(answered) : answered;

@@ -36,8 +36,8 @@ final class AreaSwitch extends HBox {
             steps.put(area, step);
             getChildren().add(step);
         }
-        Runnable show = () -> Optional.ofNullable(steps.get(model.areaProperty().get()))
-                .ifPresent(step -> step.setSelected(true));
+        Runnable show = () ->
+                Optional.ofNullable(steps.get(model.areaProperty().get())).ifPresent(step -> step.setSelected(true));
         model.areaProperty().addListener((source, before, after) -> show.run());
         show.run();
     }

@@ -38,6 +38,9 @@ record CellRange(int anchorRow, int anchorColumn, int row, int column) {
     }
 
     boolean holds(int someRow, int someColumn) {
-        return someRow >= firstRow() && someRow <= lastRow() && someColumn >= firstColumn() && someColumn <= lastColumn();
+        return someRow >= firstRow()
+                && someRow <= lastRow()
+                && someColumn >= firstColumn()
+                && someColumn <= lastColumn();
     }
 }

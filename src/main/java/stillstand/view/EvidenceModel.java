@@ -169,6 +169,4 @@ final class EvidenceModel {
         lastVisited = Math.floorMod(here < 0 && isBackwards ? -1 : here + (isBackwards ? -1 : 1), all.size());
         return Optional.of(all.get(lastVisited));
     }
-
-
 }

@@ -104,7 +104,7 @@ final class EvidenceView extends BorderPane {
                 : part.equals("gia.csv")
                         ? "Local sea level"
                         : part.substring(0, 1).toUpperCase(Locale.ROOT)
-                        + part.substring(1).replace(".csv", "");
+                                + part.substring(1).replace(".csv", "");
     }
 
     private static Region spacer() {
@@ -160,7 +160,9 @@ final class EvidenceView extends BorderPane {
         if (part.equals(StudyJson.NAME)) {
             return settings.isUsable() != (content.getCenter() == settings);
         }
-        return model.grid(part).map(now -> grid.map(shown -> shown.model() != now).orElse(true)).orElse(grid.isPresent());
+        return model.grid(part)
+                .map(now -> grid.map(shown -> shown.model() != now).orElse(true))
+                .orElse(grid.isPresent());
     }
 
     private void show() {

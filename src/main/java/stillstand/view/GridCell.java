@@ -129,7 +129,17 @@ final class GridCell extends TableCell<Integer, String> {
         }
     }
 
-    private void key(KeyEvent event) {
+    boolean hasEditor() {
+        return editor.isPresent();
+    }
+
+    /** Takes a letter that came before the editor had the focus. */
+    void append(String letter) {
+        editor.ifPresent(field -> field.appendText(letter));
+    }
+
+    /** Ends editing where the key says so. */
+    void key(KeyEvent event) {
         switch (event.getCode()) {
             case ENTER -> leave(event, true, 1, 0);
             case TAB -> leave(event, true, 0, event.isShiftDown() ? -1 : 1);

@@ -31,8 +31,8 @@ final class GridModel {
         Sheet now = document.draft().sheet(name).orElseThrow();
         this.sheet = new ReadOnlyObjectWrapper<>(now);
         this.marks = new ReadOnlyObjectWrapper<>(marks(document.checked()));
-        document.draftProperty().addListener((source, before, after) -> after.sheet(name)
-                .ifPresent(this::show));
+        document.draftProperty()
+                .addListener((source, before, after) -> after.sheet(name).ifPresent(this::show));
         document.checkedProperty().addListener((source, before, after) -> marks.set(marks(after)));
     }
 
@@ -48,8 +48,7 @@ final class GridModel {
     }
 
     private CellMarks marks(StudyDocument.Checked checked) {
-        return CellMarks.of(
-                checked.draft().sheet(name).orElseGet(sheet::get), checked.problems(), checked.warnings());
+        return CellMarks.of(checked.draft().sheet(name).orElseGet(sheet::get), checked.problems(), checked.warnings());
     }
 
     String name() {
@@ -204,14 +203,17 @@ final class GridModel {
         CellRange at = chosen.get();
         if (!pasted.header().isEmpty()) {
             edit("pasting a table", now -> underNames(now, pasted, at.firstRow()));
-            chosen.set(new CellRange(at.firstRow(), 0, within(at.firstRow() + pasted.rows().size() - 1, lastRow()), lastColumn()));
+            chosen.set(new CellRange(
+                    at.firstRow(), 0, within(at.firstRow() + pasted.rows().size() - 1, lastRow()), lastColumn()));
             return;
         }
         List<List<String>> block = pasted.rows();
         int widest = block.stream().mapToInt(List::size).max().orElse(1);
         boolean fills = block.size() == 1 && widest == 1;
         List<List<String>> cells = fills
-                ? Collections.nCopies(at.rowCount(), Collections.nCopies(at.columnCount(), block.get(0).get(0)))
+                ? Collections.nCopies(
+                        at.rowCount(),
+                        Collections.nCopies(at.columnCount(), block.get(0).get(0)))
                 : block;
         edit("pasting", now -> now.withCells(at.firstRow(), at.firstColumn(), cells));
         if (!fills) {
@@ -243,7 +245,8 @@ final class GridModel {
             for (int j = 0; j < given.size(); j++) {
                 cells.set(j < places.size() ? places.get(j) : wide.columnCount() + j - places.size(), given.get(j));
             }
-            while (cells.size() > wide.columnCount() && cells.get(cells.size() - 1).isEmpty()) {
+            while (cells.size() > wide.columnCount()
+                    && cells.get(cells.size() - 1).isEmpty()) {
                 cells.remove(cells.size() - 1);
             }
             rows.add(cells);
@@ -256,12 +259,10 @@ final class GridModel {
         CellRange at = chosen.get();
         int from = at.rowCount() > 1 ? at.firstRow() : at.firstRow() - 1;
         if (from >= 0) {
-            List<String> source =
-                    cells(new CellRange(from, at.firstColumn(), from, at.lastColumn())).get(0);
+            List<String> source = cells(new CellRange(from, at.firstColumn(), from, at.lastColumn()))
+                    .get(0);
             int rows = at.lastRow() - from;
-            edit(
-                    "filling down",
-                    now -> now.withCells(from + 1, at.firstColumn(), Collections.nCopies(rows, source)));
+            edit("filling down", now -> now.withCells(from + 1, at.firstColumn(), Collections.nCopies(rows, source)));
         }
     }
 

@@ -11,6 +11,7 @@ import javafx.scene.control.MenuItem;
 import javafx.scene.control.TableCell;
 import javafx.scene.control.TableColumn;
 import javafx.scene.control.TableView;
+import javafx.scene.control.TextField;
 import javafx.scene.control.TextInputDialog;
 import javafx.scene.control.Tooltip;
 import javafx.scene.control.skin.VirtualFlow;
@@ -169,28 +170,28 @@ final class GridView extends BorderPane {
 
     private void pressed(KeyEvent event) {
         if (isEditing()) {
+            early(event).ifPresent(cell -> cell.key(event));
             return;
         }
         boolean isShift = event.isShiftDown();
         boolean isCommand = event.isShortcutDown();
         int page = Math.max(1, (int) (table.getHeight() / ROW_HEIGHT) - 2);
         CellRange at = model.chosen();
-        Optional<Runnable> action =
-                switch (event.getCode()) {
-                    case UP -> Optional.of(() -> model.move(isCommand ? -at.row() : -1, 0, isShift));
-                    case DOWN -> Optional.of(() -> model.move(isCommand ? model.rowCount() : 1, 0, isShift));
-                    case LEFT -> Optional.of(() -> model.move(0, isCommand ? -at.column() : -1, isShift));
-                    case RIGHT -> Optional.of(() -> model.move(0, isCommand ? shownColumns : 1, isShift));
-                    case PAGE_UP -> Optional.of(() -> model.move(-page, 0, isShift));
-                    case PAGE_DOWN -> Optional.of(() -> model.move(page, 0, isShift));
-                    case HOME -> Optional.of(() -> model.move(isCommand ? -at.row() : 0, -at.column(), isShift));
-                    case END -> Optional.of(() -> model.move(isCommand ? model.rowCount() : 0, shownColumns, isShift));
-                    case DELETE, BACK_SPACE -> Optional.of(model::clear);
-                    case F2, ENTER -> isCommand ? Optional.empty() : Optional.of(() -> edit(Optional.empty()));
-                    case A -> isCommand ? Optional.of(model::chooseAll) : Optional.empty();
-                    case SPACE -> isShift ? Optional.of(() -> model.chooseRow(at.row())) : Optional.empty();
-                    default -> Optional.empty();
-                };
+        Optional<Runnable> action = switch (event.getCode()) {
+            case UP -> Optional.of(() -> model.move(isCommand ? -at.row() : -1, 0, isShift));
+            case DOWN -> Optional.of(() -> model.move(isCommand ? model.rowCount() : 1, 0, isShift));
+            case LEFT -> Optional.of(() -> model.move(0, isCommand ? -at.column() : -1, isShift));
+            case RIGHT -> Optional.of(() -> model.move(0, isCommand ? shownColumns : 1, isShift));
+            case PAGE_UP -> Optional.of(() -> model.move(-page, 0, isShift));
+            case PAGE_DOWN -> Optional.of(() -> model.move(page, 0, isShift));
+            case HOME -> Optional.of(() -> model.move(isCommand ? -at.row() : 0, -at.column(), isShift));
+            case END -> Optional.of(() -> model.move(isCommand ? model.rowCount() : 0, shownColumns, isShift));
+            case DELETE, BACK_SPACE -> Optional.of(model::clear);
+            case F2, ENTER -> isCommand ? Optional.empty() : Optional.of(() -> edit(Optional.empty()));
+            case A -> isCommand ? Optional.of(model::chooseAll) : Optional.empty();
+            case SPACE -> isShift ? Optional.of(() -> model.chooseRow(at.row())) : Optional.empty();
+            default -> Optional.empty();
+        };
         if (action.isPresent() && !event.isAltDown()) {
             event.consume();
             action.get().run();
@@ -200,15 +201,28 @@ final class GridView extends BorderPane {
     private void keyTyped(KeyEvent event) {
         String character = event.getCharacter();
         boolean isCommand = (event.isControlDown() || event.isMetaDown()) && !event.isAltDown();
-        if (isEditing()
-                || isCommand
-                || character.isEmpty()
-                || character.charAt(0) < ' '
-                || character.charAt(0) == 0x7F) {
+        if (isCommand || character.isEmpty() || character.charAt(0) < ' ' || character.charAt(0) == 0x7F) {
             return;
         }
-        event.consume();
-        edit(Optional.of(character));
+        if (!isEditing()) {
+            event.consume();
+            edit(Optional.of(character));
+        } else {
+            early(event).ifPresent(cell -> {
+                event.consume();
+                cell.append(character);
+            });
+        }
+    }
+
+    /**
+     * The cell that is edited, where a key came before its editor could hear it, which is when it has the focus and, from the
+     * next frame on, a skin: a quick hand loses no letter.
+     */
+    private Optional<GridCell> early(KeyEvent event) {
+        return event.getTarget() instanceof TextField field && field.getSkin() != null
+                ? Optional.empty()
+                : cells.stream().filter(GridCell::hasEditor).findFirst();
     }
 
     private boolean isEditing() {

@@ -37,8 +37,7 @@ final class ShellView extends BorderPane {
         ResultAreas areas(Library library);
     }
 
-    ShellView(
-            WindowModel model, WindowActions actions, AreasOf areasOf, Consumer<Boolean> darkens, Runnable quits) {
+    ShellView(WindowModel model, WindowActions actions, AreasOf areasOf, Consumer<Boolean> darkens, Runnable quits) {
         this.model = model;
         this.actions = actions;
         getStyleClass().add("shell");
@@ -118,8 +117,9 @@ final class ShellView extends BorderPane {
                     .flatMap(settings -> settings.value("title"))
                     .orElse("A study without title"));
             title.setTooltip(new Tooltip(folder));
-            String where =
-                    model.isPassingCopy() ? "a passing copy" : "in " + document.folder().getFileName();
+            String where = model.isPassingCopy()
+                    ? "a passing copy"
+                    : "in " + document.folder().getFileName();
             state.setText(
                     document.isReadOnly()
                             ? "for reading alone"

@@ -174,13 +174,13 @@ final class StairPaper extends Region {
         Pointing shownStage = pointing.stage().isEmpty() && isFocused() && !selected.isEmpty()
                 ? new Pointing(pointing.level(), keyStage, pointing.dragTo())
                 : pointing;
+        pointing.dragTo()
+                .ifPresent(to -> picture.level(pointing.level()).ifPresent(level -> painter.dragged(level, to)));
         painter.stands(shownStage);
         painter.levels(selected, pointing, model::choiceOf);
         if (isFocused()) {
             painter.focus();
         }
-        pointing.dragTo()
-                .ifPresent(to -> picture.level(pointing.level()).ifPresent(level -> painter.dragged(level, to)));
     }
 
     private void point(Pointing other) {

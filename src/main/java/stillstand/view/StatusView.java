@@ -49,8 +49,7 @@ final class StatusView extends HBox {
         run.outcomeProperty().addListener((source, before, after) -> showRun());
         run.fractionProperty().addListener((source, before, after) -> showRun());
         model.evidenceProperty().addListener((source, before, after) -> {
-            after.ifPresent(evidence ->
-                    evidence.findingsProperty().addListener((list, was, is) -> showProblems()));
+            after.ifPresent(evidence -> evidence.findingsProperty().addListener((list, was, is) -> showProblems()));
             showProblems();
         });
         showProblems();
@@ -58,11 +57,11 @@ final class StatusView extends HBox {
     }
 
     private void showProblems() {
-        List<Finding> findings =
-                model.evidence().map(EvidenceModel::findings).orElse(List.of());
+        List<Finding> findings = model.evidence().map(EvidenceModel::findings).orElse(List.of());
         long wrong = findings.stream().filter(Finding::isProblem).count();
         long odd = findings.size() - wrong;
-        String text = (wrong == 0 ? "No problems" : count(wrong, "problem")) + (odd == 0 ? "" : ", " + count(odd, "warning"));
+        String text =
+                (wrong == 0 ? "No problems" : count(wrong, "problem")) + (odd == 0 ? "" : ", " + count(odd, "warning"));
         problems.setText(text);
         problems.setAccessibleText(text + ". Press to see them.");
         problems.setVisible(model.evidence().isPresent());

@@ -84,8 +84,7 @@ final class StudyDocument {
         this.keepsEdits = !isRecoveryOpen;
         this.saved = read;
         this.draft = new ReadOnlyObjectWrapper<>(read);
-        this.checked =
-                new ReadOnlyObjectWrapper<>(new Checked(read, Optional.empty(), List.of(), List.of(), false));
+        this.checked = new ReadOnlyObjectWrapper<>(new Checked(read, Optional.empty(), List.of(), List.of(), false));
         check();
     }
 

@@ -20,7 +20,8 @@ final class WelcomeView extends VBox {
         setAlignment(Pos.TOP_LEFT);
         Label name = new Label("Stillstand");
         name.getStyleClass().add("welcome-name");
-        Label what = new Label("Vertical rates of coasts, from marine terraces, reefs and dated corals, with their errors.");
+        Label what =
+                new Label("Vertical rates of coasts, from marine terraces, reefs and dated corals, with their errors.");
         what.getStyleClass().add("welcome-what");
         HBox ways = new HBox(
                 way(

@@ -19,7 +19,9 @@ final class WindowActions {
     }
 
     void openTemplate() {
-        questions.folderForNew("Where the new study is to be").ifPresent(folder -> leaving(() -> model.openTemplate(folder)));
+        questions
+                .folderForNew("Where the new study is to be")
+                .ifPresent(folder -> leaving(() -> model.openTemplate(folder)));
     }
 
     void open() {

@@ -110,7 +110,9 @@ final class WindowMemory {
 
     private Optional<Path> path(String key) {
         try {
-            return Optional.of(node.get(key, "")).filter(text -> !text.isEmpty()).map(Path::of);
+            return Optional.of(node.get(key, ""))
+                    .filter(text -> !text.isEmpty())
+                    .map(Path::of);
         } catch (InvalidPathException e) {
             return Optional.empty();
         }

@@ -65,8 +65,14 @@ final class WindowMenu extends MenuBar {
                 item("_Copy", "Shortcut+C", inGrid(GridView::copy)),
                 item("_Paste", "Shortcut+V", inGrid(GridView::paste)),
                 item("_Fill down", "Shortcut+D", inGrid(grid -> grid.model().fillDown())),
-                item("_Insert rows above", "Shortcut+I", inGrid(grid -> grid.model().insertRows())),
-                item("Remo_ve rows", "Shortcut+Minus", inGrid(grid -> grid.model().removeRows())),
+                item(
+                        "_Insert rows above",
+                        "Shortcut+I",
+                        inGrid(grid -> grid.model().insertRows())),
+                item(
+                        "Remo_ve rows",
+                        "Shortcut+Minus",
+                        inGrid(grid -> grid.model().removeRows())),
                 new SeparatorMenuItem(),
                 item(
                         "Rename colu_mn…",
@@ -75,7 +81,8 @@ final class WindowMenu extends MenuBar {
                 item(
                         "Remove column",
                         "Shortcut+Shift+Minus",
-                        inGrid(grid -> grid.model().removeColumn(grid.model().chosen().column()))),
+                        inGrid(grid ->
+                                grid.model().removeColumn(grid.model().chosen().column()))),
                 new SeparatorMenuItem(),
                 item("_Next problem", "F8", () -> goToNext(false)),
                 item("Previous problem", "Shift+F8", () -> goToNext(true)));
@@ -131,8 +138,14 @@ final class WindowMenu extends MenuBar {
     }
 
     private void nameUndo() {
-        name(undo, "Undo", model.document().flatMap(document -> document.undoableProperty().get()));
-        name(redo, "Redo", model.document().flatMap(document -> document.redoableProperty().get()));
+        name(
+                undo,
+                "Undo",
+                model.document().flatMap(document -> document.undoableProperty().get()));
+        name(
+                redo,
+                "Redo",
+                model.document().flatMap(document -> document.redoableProperty().get()));
     }
 
     private static void name(MenuItem item, String verb, Optional<String> what) {

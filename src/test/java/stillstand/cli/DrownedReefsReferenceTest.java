@@ -27,7 +27,10 @@ class DrownedReefsReferenceTest {
         // spreads of the heights and of the older ages are not published: 10 m and 5 % are ours
         StudyOnDisk study = new StudyOnDisk(folder)
                 .with("study.json", "{\"title\": \"Drowned reefs\"}")
-                .with("sites.csv", "site,latitude,longitude,surveyed_from_m,surveyed_to_m", "NW Hawaii,20,-156,-700,-100")
+                .with(
+                        "sites.csv",
+                        "site,latitude,longitude,surveyed_from_m,surveyed_to_m",
+                        "NW Hawaii,20,-156,-700,-100")
                 .with(
                         "levels.csv",
                         "site,level,elevation_m,elevation_1sigma_m,forms_at",
@@ -42,8 +45,10 @@ class DrownedReefsReferenceTest {
                         "NW Hawaii,C,R3,255,13");
         StudyResult result = study.run("--draws", "16384");
         FlightResult flight = result.flights().get(0);
-        assertTrue(flight.rate().interval95().high() < -1, "rate " + flight.rate().interval95());
-        assertTrue(flight.rate().interval95().low() > -4, "rate " + flight.rate().interval95());
+        assertTrue(
+                flight.rate().interval95().high() < -1, "rate " + flight.rate().interval95());
+        assertTrue(
+                flight.rate().interval95().low() > -4, "rate " + flight.rate().interval95());
         assertEquals(0, flight.probabilityUplift().orElseThrow(), 0.02);
         assertEquals(
                 List.of("2", "6", "8"),
@@ -80,8 +85,14 @@ class DrownedReefsReferenceTest {
     void huonGulfWithALowstandOfACurve() throws IOException {
         StudyResult result = new StudyOnDisk(folder)
                 .with("study.json", "{\"title\": \"Drowned reefs\"}")
-                .with("sites.csv", "site,latitude,longitude,surveyed_from_m,surveyed_to_m", "Huon Gulf,-7,147.5,-2500,-100")
-                .with("levels.csv", "site,level,elevation_m,elevation_1sigma_m,forms_at", "Huon Gulf,R,-2000,5,drowning")
+                .with(
+                        "sites.csv",
+                        "site,latitude,longitude,surveyed_from_m,surveyed_to_m",
+                        "Huon Gulf,-7,147.5,-2500,-100")
+                .with(
+                        "levels.csv",
+                        "site,level,elevation_m,elevation_1sigma_m,forms_at",
+                        "Huon Gulf,R,-2000,5,drowning")
                 .with("samples.csv", "site,sample,level,age_ka,age_1sigma_ka", "Huon Gulf,A,R,348,10")
                 .run("--draws", "16384");
         LevelAnswer reef = StudyOnDisk.level(result, "R");

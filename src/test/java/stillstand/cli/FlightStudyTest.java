@@ -133,7 +133,8 @@ class FlightStudyTest {
         assertTrue(study.out().contains("Flight of 3 levels: 0.3"), study.out());
         assertTrue(study.out().contains("Sliding the rate by hand would have given"), study.out());
         assertTrue(
-                study.out().contains("E1 is one earthquake's step: it records no sea level, and stays out of rates and"),
+                study.out()
+                        .contains("E1 is one earthquake's step: it records no sea level, and stays out of rates and"),
                 study.out());
         for (FlightResult.Fate fate : flight.missing()) {
             assertEquals(

@@ -54,11 +54,7 @@ class MirrorTest {
                         "Coast,T3," + sign * 52 + ",2," + formsAt + ",C,",
                         "Coast,T4," + sign * 61 + ",1," + formsAt + ",,",
                         "Coast,T5," + sign * 99 + ",3," + formsAt + ",,")
-                .with(
-                        "samples.csv",
-                        "site,sample,level,age_ka,age_1sigma_ka",
-                        "Coast,S1,T1,21,2",
-                        "Coast,S2,T4,140,6")
+                .with("samples.csv", "site,sample,level,age_ka,age_1sigma_ka", "Coast,S1,T1,21,2", "Coast,S2,T4,140,6")
                 .run("--draws", "16384");
     }
 
@@ -78,10 +74,13 @@ class MirrorTest {
         assertMirrored(up.rate().interval95(), down.rate().interval95());
         assertMirrored(up.rate().shortest68(), down.rate().shortest68());
         assertEquals(up.regions95().size(), down.regions95().size());
-        assertMirrored(up.regions95().get(0), down.regions95().get(down.regions95().size() - 1));
+        assertMirrored(
+                up.regions95().get(0), down.regions95().get(down.regions95().size() - 1));
         assertEquals(up.logEvidence(), down.logEvidence(), TOLERANCE);
         assertEquals(
-                up.probabilityUplift().orElseThrow(), 1 - down.probabilityUplift().orElseThrow(), TOLERANCE);
+                up.probabilityUplift().orElseThrow(),
+                1 - down.probabilityUplift().orElseThrow(),
+                TOLERANCE);
         for (String level : List.of("T1", "T2", "T3", "T4", "T5")) {
             List<FlightResult.Pairing> ups = up.pairingsOf(level);
             List<FlightResult.Pairing> downs = down.pairingsOf(level);
@@ -96,7 +95,8 @@ class MirrorTest {
                     TOLERANCE);
         }
         for (int j = 0; j < up.missing().size(); j++) {
-            assertEquals(up.missing().get(j).heightMetres(), -down.missing().get(j).heightMetres(), TOLERANCE);
+            assertEquals(
+                    up.missing().get(j).heightMetres(), -down.missing().get(j).heightMetres(), TOLERANCE);
             assertEquals(up.missing().get(j).reoccupied(), down.missing().get(j).reoccupied(), TOLERANCE);
         }
         for (int i = 0; i < up.leaveOneOut().size(); i++) {
@@ -119,7 +119,10 @@ class MirrorTest {
         LevelAnswer up = StudyOnDisk.level(run(1, "highstand"), "T3");
         LevelAnswer down = StudyOnDisk.level(run(-1, "drowning"), "T3");
         assertEquals(
-                up.firstOrder().orElseThrow().rate(), -down.firstOrder().orElseThrow().rate(), TOLERANCE);
-        assertEquals(up.rate().orElseThrow().median(), -down.rate().orElseThrow().median(), 1e-3);
+                up.firstOrder().orElseThrow().rate(),
+                -down.firstOrder().orElseThrow().rate(),
+                TOLERANCE);
+        assertEquals(
+                up.rate().orElseThrow().median(), -down.rate().orElseThrow().median(), 1e-3);
     }
 }

@@ -33,14 +33,15 @@ class PredictTest {
     @Test
     void severalSitesSideBySide() throws IOException {
         Path file = folder.resolve("stairs.csv");
-        assertEquals(0, study.execute("predict", "--at", "North=0.5,150:1", "--at", "South=0.2", "--out", file.toString()));
         assertEquals(
-                "Staircase of North 0.5,150:1; South 0.2 (m/kyr) under own, in brackets what a later sea overran:\n"
-                        + "  Highstand  Age (ka)    North (m)   South (m)\n"
-                        + "  C             200.0  120.0 ± 1.0  35.0 ± 1.0\n"
-                        + "  B             120.0   65.0 ± 1.0  29.0 ± 1.0\n"
-                        + "  A              80.0   30.0 ± 1.0   6.0 ± 1.0\n",
-                study.out());
+                0, study.execute("predict", "--at", "North=0.5,150:1", "--at", "South=0.2", "--out", file.toString()));
+        assertEquals("""
+                Staircase of North 0.5,150:1; South 0.2 (m/kyr) under own, in brackets what a later sea overran:
+                  Highstand  Age (ka)    North (m)   South (m)
+                  C             200.0  120.0 ± 1.0  35.0 ± 1.0
+                  B             120.0   65.0 ± 1.0  29.0 ± 1.0
+                  A              80.0   30.0 ± 1.0   6.0 ± 1.0
+                """, study.out());
         assertTrue(Files.readString(file).contains("\nNorth,C,200.0,-5.0,120.0,1.0,yes,\n"), Files.readString(file));
         assertTrue(Files.readString(file).contains("\nSouth,B,120.0,5.0,29.0,1.0,yes,\n"), Files.readString(file));
     }
@@ -49,19 +50,20 @@ class PredictTest {
     @Test
     void drownedReefs() {
         assertEquals(0, study.execute("predict", "--rate", "-0.1", "--drowned"));
-        assertEquals(
-                "Drowned reefs of -0.1 m/kyr under own:\n"
-                        + "  Highstand  Fate          Age (ka)  Sea (m)  Height (m)    ±\n"
-                        + "  C          stands           200.0     −5.0       −25.0  1.0\n"
-                        + "  B          overrun by A     120.0      5.0        −7.0  1.0\n"
-                        + "  A          stands            80.0    −10.0       −18.0  1.0\n",
-                study.out());
+        assertEquals("""
+                Drowned reefs of -0.1 m/kyr under own:
+                  Highstand  Fate          Age (ka)  Sea (m)  Height (m)    ±
+                  C          stands           200.0     −5.0       −25.0  1.0
+                  B          overrun by A     120.0      5.0        −7.0  1.0
+                  A          stands            80.0    −10.0       −18.0  1.0
+                """, study.out());
     }
 
     @Test
     void whatCannotBeRead() {
         assertEquals(2, study.execute("predict", "--at", "North=fast"));
-        assertTrue(study.err().startsWith("--at: \"fast\" is no RATE[,AGE:RATE...] such as 0.4,150:0.9\n"), study.err());
+        assertTrue(
+                study.err().startsWith("--at: \"fast\" is no RATE[,AGE:RATE...] such as 0.4,150:0.9\n"), study.err());
         assertEquals(2, study.execute("predict", "--at", "West=1"));
         assertTrue(study.err().startsWith("--at: the study has no site \"West\"\n"), study.err());
         assertEquals(2, study.execute("predict"));

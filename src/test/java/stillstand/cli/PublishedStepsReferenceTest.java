@@ -37,8 +37,7 @@ class PublishedStepsReferenceTest {
     @Test
     @Tag("slow")
     void christChurchIs5aAnd5cAnd5e() throws IOException {
-        FlightResult flight = study()
-                .with("sites.csv", SITES, "Christ Church,13.06,-59.53,1,45")
+        FlightResult flight = study().with("sites.csv", SITES, "Christ Church,13.06,-59.53,1,45")
                 .with(
                         "levels.csv",
                         LEVELS,
@@ -69,8 +68,7 @@ class PublishedStepsReferenceTest {
     @Test
     @Tag("slow")
     void severalStepsOfOneStageNeedRowsAndAreThenNoStrays() throws IOException {
-        StudyOnDisk study = study()
-                .with("sites.csv", SITES, "South coast,13.06,-59.56,0.5,45")
+        StudyOnDisk study = study().with("sites.csv", SITES, "South coast,13.06,-59.56,0.5,45")
                 .with(
                         "levels.csv",
                         LEVELS,
@@ -126,9 +124,9 @@ class PublishedStepsReferenceTest {
      * youngest dates the last occupation, 5a.
      */
     @Test
+    @Tag("slow")
     void threeAgesOnOneStepAreNeverAveraged() throws IOException {
-        StudyOnDisk study = study()
-                .with("sites.csv", SITES, "Cape Laundi,-9.5,120.2,1,60")
+        StudyOnDisk study = study().with("sites.csv", SITES, "Cape Laundi,-9.5,120.2,1,60")
                 .with("levels.csv", LEVELS, "Cape Laundi,I-1,3,1")
                 .with(
                         "samples.csv",
@@ -162,8 +160,7 @@ class PublishedStepsReferenceTest {
     @Test
     @Tag("slow")
     void oneWrongDateOfThreeMovesNothing() throws IOException {
-        StudyOnDisk study = study()
-                .with("sites.csv", SITES, "Stair,1,2,4,70")
+        StudyOnDisk study = study().with("sites.csv", SITES, "Stair,1,2,4,70")
                 .with("levels.csv", LEVELS, "Stair,T1,16,3", "Stair,T2,28,3", "Stair,T3,52,3")
                 .with("samples.csv", SAMPLES, "Stair,A,T3,124,2,", "Stair,B,T3,126,2,");
         FlightResult two = study.run("--draws", "16384").flights().get(0);
@@ -172,15 +169,17 @@ class PublishedStepsReferenceTest {
                 .run("--draws", "16384")
                 .flights()
                 .get(0);
-        assertEquals(two.rate().median(), three.rate().median(), 0.25 * two.rate().sd().orElseThrow());
+        assertEquals(
+                two.rate().median(),
+                three.rate().median(),
+                0.25 * two.rate().sd().orElseThrow());
         assertTrue(pairing(three, "T3", "5e") > 0.95);
     }
 
     /** Invented: steps of single earthquakes record no sea level, and a staircase of them is left alone. */
     @Test
     void aHoloceneStaircaseOfEarthquakesIsLeftAlone() throws IOException {
-        StudyResult result = study()
-                .with("sites.csv", SITES, "Steps,1,2,0.5,20")
+        StudyResult result = study().with("sites.csv", SITES, "Steps,1,2,0.5,20")
                 .with(
                         "levels.csv",
                         LEVELS + ",forms_at",

@@ -63,6 +63,7 @@ class RateChangeReferenceTest {
     }
 
     @Test
+    @Tag("slow")
     void changeOfKnownAge() throws IOException {
         FlightResult flight = flight(study("one", "[150, 150]").run("--draws", "16384"));
         assertEquals("one change", flight.model());
@@ -98,7 +99,10 @@ class RateChangeReferenceTest {
                 study.out().replaceAll("\\s+", " ").matches(".*: one change \\+(2\\.9|3\\.0|3\\.1) \\(strong\\).*"),
                 study.out());
         assertTrue(
-                flight.modelChoice().get(1).prior().orElseThrow()
+                flight.modelChoice()
+                        .get(1)
+                        .prior()
+                        .orElseThrow()
                         .equals("2 independent rates, each log-uniform 0.05 3; change uniform from 40 to 450 ka"),
                 flight.modelChoice().get(1).prior().orElseThrow());
     }
@@ -113,7 +117,8 @@ class RateChangeReferenceTest {
         double constant = evidence(flight, "constant").weight().orElseThrow();
         double one = evidence(flight, "one change").weight().orElseThrow();
         assertEquals(
-                Math.exp(evidence(flight, "one change").logEvidence() - evidence(flight, "constant").logEvidence()),
+                Math.exp(evidence(flight, "one change").logEvidence()
+                        - evidence(flight, "constant").logEvidence()),
                 one / constant,
                 1e-6 * one / constant);
         assertEquals(
@@ -125,6 +130,8 @@ class RateChangeReferenceTest {
         // slower today than over the whole flight, whatever the model
         FlightResult.Segment first = flight.segments().get(0);
         FlightResult.Segment fifth = flight.segments().get(4);
-        assertTrue(first.rate().interval68().high() < fifth.rate().interval68().low(), flight.segments().toString());
+        assertTrue(
+                first.rate().interval68().high() < fifth.rate().interval68().low(),
+                flight.segments().toString());
     }
 }

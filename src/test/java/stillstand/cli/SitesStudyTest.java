@@ -9,6 +9,7 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import stillstand.comparison.SiteComparison;
@@ -212,6 +213,7 @@ class SitesStudyTest {
 
     /** A flight beside a site of one level, whatever the number of threads. */
     @Test
+    @Tag("slow")
     void aFlightBesideALevel() throws IOException {
         StudyOnDisk study = study(
                         "site,coast,surveyed_from_m,surveyed_to_m", "Stair,lee,2,120", "Step,lee,,", "Low,lee,2,60")
@@ -241,15 +243,16 @@ class SitesStudyTest {
     /** Under two curves a difference is the mixture of what each makes of it; sea level cancels at one highstand under both. */
     @Test
     void severalCurves() throws IOException {
-        String curves =
-                "{\"title\": \"Sites\", \"sea_level\": {\"curves\": [%s], \"highstands\": {\"overrides\": \"none\"}}}";
         String one = "{\"id\": \"spratt-lisiecki-2016\", \"weight\": 3}";
         String other = "{\"id\": \"waelbroeck-2002\", \"weight\": 1}";
         double[] medians = new double[3];
         List<String> choices = List.of(one, other, one + ", " + other);
         for (int k = 0; k < 3; k++) {
             StudyResult result = study("site,coast", "A,lee", "B,lee")
-                    .with("study.json", String.format(java.util.Locale.ROOT, curves, choices.get(k)))
+                    .with(
+                            "study.json",
+                            "{\"title\": \"Sites\", \"sea_level\": {\"curves\": [" + choices.get(k)
+                                    + "], \"highstands\": {\"overrides\": \"none\"}}}")
                     .with("levels.csv", LEVELS, "A,T1,70,1,5a", "B,T1,30,1,5e")
                     .run();
             medians[k] = result.comparison().get(0).difference().mean().orElseThrow();

@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
 import java.nio.file.Path;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import stillstand.study.StudyResult;
@@ -44,6 +45,7 @@ class TracedTerracesTest {
     }
 
     @Test
+    @Tag("slow")
     void aCoralOnTheNextHeadlandDatesTheTerrace() throws IOException {
         StudyResult alone = run("", "5e");
         StudyResult traced = run("Main", "5e");
@@ -57,7 +59,8 @@ class TracedTerracesTest {
         double widthBefore = before.rate().interval95().width();
         double widthAfter = after.rate().interval95().width();
         assertTrue(widthAfter < 0.8 * widthBefore, widthBefore + " to " + widthAfter);
-        assertTrue(traced.ledger().stream().anyMatch(line -> line.assumption().equals("terraces traced to other sites")));
+        assertTrue(
+                traced.ledger().stream().anyMatch(line -> line.assumption().equals("terraces traced to other sites")));
         for (FlightResult.Fate fate : after.missing()) {
             assertEquals(
                     1,

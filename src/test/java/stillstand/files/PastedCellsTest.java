@@ -27,28 +27,34 @@ class PastedCellsTest {
 
     @Test
     void textOfATableIsTakenApartOnlyWithAHeader() {
-        assertEquals(List.of(List.of("A", "5")), PastedCells.of("site;level\nA;5\n", KNOWN).rows());
         assertEquals(
-                List.of(List.of("0,5"), List.of("0,7")), PastedCells.of("0,5\n0,7\n", KNOWN).rows());
+                List.of(List.of("A", "5")),
+                PastedCells.of("site;level\nA;5\n", KNOWN).rows());
+        assertEquals(
+                List.of(List.of("0,5"), List.of("0,7")),
+                PastedCells.of("0,5\n0,7\n", KNOWN).rows());
     }
 
     @Test
     void quotedCellsMayHoldTabsAndLines() {
         assertEquals(
                 List.of(List.of("two\nlines", "a\tb", "say \"x\"")),
-                PastedCells.of("\"two\nlines\"\t\"a\tb\"\t\"say \"\"x\"\"\"\n", KNOWN).rows());
+                PastedCells.of("\"two\nlines\"\t\"a\tb\"\t\"say \"\"x\"\"\"\n", KNOWN)
+                        .rows());
     }
 
     @Test
     void strayQuoteSpoilsNothing() {
         assertEquals(
-                List.of(List.of("\"5", "a"), List.of("6", "b")), PastedCells.of("\"5\ta\n6\tb\n", KNOWN).rows());
+                List.of(List.of("\"5", "a"), List.of("6", "b")),
+                PastedCells.of("\"5\ta\n6\tb\n", KNOWN).rows());
     }
 
     @Test
     void halfATableKeepsItsShape() {
         assertEquals(
-                List.of(List.of("A", "1", "5"), List.of("B")), PastedCells.of("A\t1\t5\nB", KNOWN).rows());
+                List.of(List.of("A", "1", "5"), List.of("B")),
+                PastedCells.of("A\t1\t5\nB", KNOWN).rows());
         assertEquals(List.of(List.of("")), PastedCells.of("", KNOWN).rows());
     }
 

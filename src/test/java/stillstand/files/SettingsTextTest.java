@@ -32,8 +32,10 @@ class SettingsTextTest {
         assertEquals("{\"seed\": \"0,5\"}\n", at("{}").withValue("seed", "0,5"));
         assertEquals("{\"seed\": -0.5}\n", at("{}").withValue("seed", "\u22120.5"));
         assertEquals("{\"seed\": 9007199254740993}\n", at("{}").withValue("seed", "9007199254740993"));
-        assertTrue(at("{}").withValue("matching.recording_probability", "{\"beta\": [4, 2.5]}").contains("[4, 2.5]"));
-        assertTrue(at("{}").withValue("matching.recording_probability", "{\"beta\"").contains("\\\"beta"));
+        assertTrue(at("{}").withValue("matching.recording_probability", "{\"beta\": [4, 2.5]}")
+                .contains("[4, 2.5]"));
+        assertTrue(at("{}").withValue("matching.recording_probability", "{\"beta\"")
+                .contains("\\\"beta"));
     }
 
     @Test

@@ -15,8 +15,7 @@ import stillstand.study.Table;
 
 /** A table that is edited keeps what was not edited. */
 class SheetTest {
-    private static final String LEVELS =
-            """
+    private static final String LEVELS = """
             # heights in the harbour's datum
 
             site,level,elevation_m,elevation_1sigma_m,note
@@ -56,7 +55,9 @@ class SheetTest {
     void rowsStandOnTheLinesOnWhichTheyAreReadAgain() {
         Sheet sheet = sheet(LEVELS);
         assertSameWhenReadAgain(sheet);
-        assertEquals(List.of(6L, 9L), sheet.table().rows().stream().map(Table.Row::line).toList());
+        assertEquals(
+                List.of(6L, 9L),
+                sheet.table().rows().stream().map(Table.Row::line).toList());
         Sheet longer = sheet.withCells(1, 4, List.of(List.of("a\nb\nc"), List.of("x", "y")))
                 .withBlankRows(1, 2)
                 .withCells(0, 0, List.of(List.of("#1")));
@@ -72,8 +73,12 @@ class SheetTest {
 
     @Test
     void commentsAboveARemovedRowMoveDown() {
-        assertEquals("a,b\n# one\n# two\n3,4\n", sheet("a,b\n# one\n1,2\n# two\n3,4\n").withoutRows(0, 1).text());
-        assertEquals("a,b\n# one\n# two\n", sheet("a,b\n# one\n1,2\n# two\n3,4\n").withoutRows(0, 2).text());
+        assertEquals(
+                "a,b\n# one\n# two\n3,4\n",
+                sheet("a,b\n# one\n1,2\n# two\n3,4\n").withoutRows(0, 1).text());
+        assertEquals(
+                "a,b\n# one\n# two\n",
+                sheet("a,b\n# one\n1,2\n# two\n3,4\n").withoutRows(0, 2).text());
     }
 
     @Test
@@ -94,7 +99,9 @@ class SheetTest {
 
     @Test
     void newLineIsMadeWhereTheLastRowHadNone() {
-        assertEquals("a,b\n1,2\n5,6\n", sheet("a,b\n1,2").withCells(1, 0, List.of(List.of("5", "6"))).text());
+        assertEquals(
+                "a,b\n1,2\n5,6\n",
+                sheet("a,b\n1,2").withCells(1, 0, List.of(List.of("5", "6"))).text());
     }
 
     @Test

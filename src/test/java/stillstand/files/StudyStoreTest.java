@@ -66,8 +66,10 @@ class StudyStoreTest {
 
     @Test
     void fullDiskLeavesTheOldFiles() throws IOException {
-        try (FileSystem small = Jimfs.newFileSystem(
-                Configuration.unix().toBuilder().setBlockSize(512).setMaxSize(20 * 512).build())) {
+        try (FileSystem small = Jimfs.newFileSystem(Configuration.unix().toBuilder()
+                .setBlockSize(512)
+                .setMaxSize(20 * 512)
+                .build())) {
             Path study = small.getPath("/study");
             StudyTemplate.write(study);
             try (StudyStore store = open(study)) {
@@ -147,7 +149,9 @@ class StudyStoreTest {
                     "levels.csv:4:3: elevation_m: found \"88,4\", expected a number with a decimal point",
                     before.problems().get(0).message());
             store.save(edited);
-            assertEquals(before.problems(), StudyFolder.read(demo, ShippedLibrary.load()).problems());
+            assertEquals(
+                    before.problems(),
+                    StudyFolder.read(demo, ShippedLibrary.load()).problems());
         }
     }
 

@@ -65,6 +65,19 @@ class TerminalReportTest {
                 The 2 flights of the study together weigh the curves: made-up-curve 0.88 (as if the sites shared no
                 error of a curve, which makes it look surer than it is).
 
+                Sites together
+                  North cliff: up (>99 %), 0.430 ± 0.020 m/kyr, by level T4.
+                  South cliff: stable (75 %), 0.030 ± 0.020 m/kyr, by level S1.
+                  North cliff less South cliff: 0.40 ± 0.02 m/kyr, 95 % 0.36 to 0.44; North cliff is faster with
+                  probability >99 % (were their errors not shared, 95 % 0.34 to 0.46 and 97 %).
+                  east, 2 sites pooled: their mean is 0.20 ± 0.10 m/kyr, and they differ by 0.100 ± 0.030.
+                  east, mean over areas: 0.200 ± 0.020 m/kyr.
+                  east, tilt along the coast: −0.0130 ± 0.0010 m/kyr per km (± 0.0010 were the errors not shared).
+                  east, tilt over the map: 0.0100 ± 0.0010 m/kyr per km toward 090 degrees (± 0.0010 were the errors
+                  not shared).
+                  North cliff / T4, tilt by 6 points: −0.50 ± 0.13 m per km (± 0.13 were the errors not shared).
+                  Over its age: −0.0040 ± 0.0010 m/kyr per km.
+
                 Not done:
                   East bay: its curve ends at 20 ka
 

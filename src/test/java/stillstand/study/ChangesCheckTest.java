@@ -26,7 +26,8 @@ class ChangesCheckTest {
                 new StudySettings.RateChoice(CauchyPrior.DEFAULT, changes),
                 plain.matching(),
                 plain.indicativeRange(),
-                plain.screening());
+                plain.screening(),
+                plain.leverage());
         List<String> lines = new ArrayList<>(List.of("site,level,elevation_m,elevation_1sigma_m,highstand"));
         lines.addAll(List.of(levels));
         List<String> dated = new ArrayList<>(List.of("site,sample,level,age_ka,age_1sigma_ka"));
@@ -48,8 +49,9 @@ class ChangesCheckTest {
     @Test
     void aChangeAskedOfTwoLevels() {
         assertEquals(
-                List.of("sites.csv:2:1: a change of rate is asked of two levels of \"North\": so few fit any change, and the"
-                        + " answer is the prior's"),
+                List.of(
+                        "sites.csv:2:1: a change of rate is asked of two levels of \"North\": so few fit any change, and the"
+                                + " answer is the prior's"),
                 warnings(
                         Changes.ONE,
                         List.of("North,A,T1,100,1", "North,B,T2,200,2"),
@@ -63,12 +65,14 @@ class ChangesCheckTest {
         String[] levels = {"North,T1,20,1,", "North,T2,50,1,", "North,T3,70,1,"};
         assertEquals(List.of(), warnings(Changes.ONE, twoDates, levels));
         assertEquals(
-                List.of("sites.csv:2:1: up to two changes of rate asked of \"North\", which has 2 dated levels: without one on"
-                        + " either side of each change it cannot be told from another pairing of levels and highstands"),
+                List.of(
+                        "sites.csv:2:1: up to two changes of rate asked of \"North\", which has 2 dated levels: without one on"
+                                + " either side of each change it cannot be told from another pairing of levels and highstands"),
                 warnings(Changes.CHOOSE, twoDates, levels));
         assertEquals(
-                List.of("sites.csv:2:1: one change of rate asked of \"North\", which has 1 dated level: without one on either"
-                        + " side of each change it cannot be told from another pairing of levels and highstands"),
+                List.of(
+                        "sites.csv:2:1: one change of rate asked of \"North\", which has 1 dated level: without one on either"
+                                + " side of each change it cannot be told from another pairing of levels and highstands"),
                 warnings(Changes.ONE, twoDates.subList(0, 1), levels));
         assertEquals(List.of(), warnings(Changes.GRADUAL, List.of(), levels));
         assertEquals(List.of(), warnings(Changes.NONE, List.of(), levels));
@@ -77,8 +81,9 @@ class ChangesCheckTest {
     @Test
     void aChangeWhereNothingIsMatched() {
         assertEquals(
-                List.of("sites.csv:2:1: a change of rate is asked for, but every level of \"North\" is tied to one highstand, so"
-                        + " that no flight is matched: its levels keep one rate each"),
+                List.of(
+                        "sites.csv:2:1: a change of rate is asked for, but every level of \"North\" is tied to one highstand, so"
+                                + " that no flight is matched: its levels keep one rate each"),
                 warnings(Changes.ONE, List.of(), "North,T1,20,1,5c", "North,T2,50,1,5e", "North,T3,70,1,7a"));
     }
 }

@@ -37,7 +37,8 @@ class TraceCheckTest {
 
     @Test
     void traceWithoutFault() {
-        Loaded<Study> loaded = check("North,T1,20,1,,,Long", "North,T2,40,1,,,High", "South,S1,30,1,5e,,Long", "South,S2,60,1,,,High");
+        Loaded<Study> loaded =
+                check("North,T1,20,1,,,Long", "North,T2,40,1,,,High", "South,S1,30,1,5e,,Long", "South,S2,60,1,,,High");
         assertEquals(List.of(), loaded.problems());
         assertEquals(List.of(), loaded.warnings());
     }
@@ -45,16 +46,18 @@ class TraceCheckTest {
     @Test
     void aTraceAgainstAPin() {
         assertEquals(
-                List.of("levels.csv:3:5: highstand: found \"5e\" on terrace \"Long\", expected a highstand that it can share"
-                        + " with level \"T1\" of \"North\" on the same terrace, which is tied to \"5a|5c\""),
+                List.of(
+                        "levels.csv:3:5: highstand: found \"5e\" on terrace \"Long\", expected a highstand that it can share"
+                                + " with level \"T1\" of \"North\" on the same terrace, which is tied to \"5a|5c\""),
                 problems("North,T1,20,1,5a|5c,,Long", "South,S1,30,1,5e,,Long"));
     }
 
     @Test
     void tracesThatCross() {
         assertEquals(
-                List.of("levels.csv:4:7: terrace: found \"Long\" above \"High\", expected \"Long\" below \"High\", as at"
-                        + " \"North\": traced terraces cannot cross"),
+                List.of(
+                        "levels.csv:4:7: terrace: found \"Long\" above \"High\", expected \"Long\" below \"High\", as at"
+                                + " \"North\": traced terraces cannot cross"),
                 problems(
                         "North,T1,20,1,,,Long",
                         "North,T2,40,1,,,High",
@@ -65,16 +68,18 @@ class TraceCheckTest {
     @Test
     void aTerraceTiedToItself() {
         assertEquals(
-                List.of("levels.csv:3:7: terrace: found \"Long\" a second time at \"North\" (level \"T1\" has it), expected each"
-                        + " traced terrace once at a site: it is one shoreline"),
+                List.of(
+                        "levels.csv:3:7: terrace: found \"Long\" a second time at \"North\" (level \"T1\" has it), expected each"
+                                + " traced terrace once at a site: it is one shoreline"),
                 problems("North,T1,20,1,,,Long", "North,T2,40,1,,,Long", "South,S1,30,1,,,Long"));
     }
 
     @Test
     void aTraceOfALevelThatRecordsNoHighstand() {
         assertEquals(
-                List.of("levels.csv:2:7: terrace: found \"Long\" beside forms_at event, expected nothing: only a level that is"
-                        + " matched to a highstand shares one with another site"),
+                List.of(
+                        "levels.csv:2:7: terrace: found \"Long\" beside forms_at event, expected nothing: only a level that is"
+                                + " matched to a highstand shares one with another site"),
                 problems("North,T1,20,1,,event,Long", "South,S1,30,1,,,Long"));
     }
 

@@ -163,10 +163,20 @@ class FlightCalibrationStatisticalTest {
                 RunMonitor.SILENT,
                 Workers.NONE);
         return List.of(
-                below(draws, history -> history.rateMetresPerKyrAt(0) < flight.truth().recentRate()),
-                below(draws, history -> history.rateMetresPerKyrAt(900) < flight.truth().olderRate()),
-                below(draws, history -> ((UpliftHistory.SteppedRate) history).changesKa().get(0)
-                        < flight.truth().changeKa()));
+                below(
+                        draws,
+                        history ->
+                                history.rateMetresPerKyrAt(0) < flight.truth().recentRate()),
+                below(
+                        draws,
+                        history ->
+                                history.rateMetresPerKyrAt(900) < flight.truth().olderRate()),
+                below(
+                        draws,
+                        history -> ((UpliftHistory.SteppedRate) history)
+                                        .changesKa()
+                                        .get(0)
+                                < flight.truth().changeKa()));
     }
 
     private static double below(HistoryDraws draws, Predicate<UpliftHistory> isBelow) {

@@ -25,7 +25,8 @@ class FlightPreviewTest {
     private static final List<FlightLevel> LEVELS = ToyFlights.datedFlight();
 
     private static FlightSetup setup(List<FlightLevel> levels) {
-        return new FlightSetup(FlightModel.complete(levels, ToyFlights.plainRows(), 2, 200), KNOWN, true, List.of());
+        return new FlightSetup(
+                FlightModel.complete(levels, ToyFlights.plainRows(), 2, 200), KNOWN, true, false, List.of());
     }
 
     @Test

@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.List;
 import java.util.concurrent.atomic.AtomicInteger;
+import org.junit.jupiter.api.Tag;
 import org.junit.jupiter.api.Test;
 import stillstand.ledger.RunCancelledException;
 import stillstand.ledger.RunMonitor;
@@ -56,6 +57,7 @@ class HistoryMonteCarloReferenceTest {
     }
 
     @Test
+    @Tag("slow")
     void noChange() {
         HistoryDraws draws = draws(new HistoryPrior.Steady(RATE));
         assertTrue(draws.logEvidenceError() < 0.1, "error " + draws.logEvidenceError());
@@ -66,24 +68,24 @@ class HistoryMonteCarloReferenceTest {
                 SharedNodes.fixed(SharedNumbers.plain(0.7, 0.2)),
                 FlightIntegration.Effort.FULL,
                 RunMonitor.SILENT);
-        RatePosterior drawn =
-                draws.of(HistoryMonteCarloReferenceTest::recent).posterior(0);
+        RatePosterior drawn = draws.of(HistoryMonteCarloReferenceTest::recent).posterior(0);
         assertEquals(0.43829378, drawn.mean(), SHARE * exact.standardDeviation());
     }
 
     @Test
+    @Tag("slow")
     void changeOfKnownAge() {
         HistoryDraws draws = draws(new HistoryPrior.Stepped(RATE, 1, 150, 150));
         assertTrue(draws.logEvidenceError() < 0.1, "error " + draws.logEvidenceError());
         assertEquals(-38.592885, draws.logEvidence(), 4 * Math.hypot(draws.logEvidenceError(), 0.005));
-        RatePosterior recent =
-                draws.of(HistoryMonteCarloReferenceTest::recent).posterior(0);
+        RatePosterior recent = draws.of(HistoryMonteCarloReferenceTest::recent).posterior(0);
         RatePosterior older = draws.of(HistoryMonteCarloReferenceTest::older).posterior(0);
         assertEquals(0.26431639, recent.mean(), SHARE * 0.0234);
         assertEquals(0.023411462, recent.standardDeviation(), SHARE * 0.0234);
         assertEquals(0.82633185, older.mean(), SHARE * 0.0669);
         assertEquals(0.066923864, older.standardDeviation(), SHARE * 0.0669);
-        RatePosterior ratio = draws.of(history -> recent(history) / older(history)).posterior(0);
+        RatePosterior ratio =
+                draws.of(history -> recent(history) / older(history)).posterior(0);
         assertEquals(0.32345096, ratio.mean(), SHARE * ratio.standardDeviation());
         assertTrue(ratio.cumulativeProbability(1) > 0.999);
     }

@@ -125,15 +125,15 @@ class TracedFlightsTest {
             for (int two = -1; two < rows; two++) {
                 FlightModel held = setup.model()
                         .withLevels(List.of(
-                                held(setup.model().levels().get(0), one), held(setup.model().levels().get(1), two)));
+                                held(setup.model().levels().get(0), one),
+                                held(setup.model().levels().get(1), two)));
                 ShorelineFilter filter = new ShorelineFilter(held, 200);
                 FilterWorkspace workspace = filter.workspace(false);
                 double mass = 0;
                 double rateMass = 0;
                 for (int k = 0; k < NODES; k++) {
                     double rate = PRIOR.quantile((k + 0.5) / NODES);
-                    double p = Math.exp(
-                            filter.logEvidence(new UpliftHistory.ConstantRate(rate), shared, workspace));
+                    double p = Math.exp(filter.logEvidence(new UpliftHistory.ConstantRate(rate), shared, workspace));
                     mass += p / NODES;
                     rateMass += p * rate / NODES;
                 }
@@ -165,10 +165,12 @@ class TracedFlightsTest {
             List<TracedFlights.TracedSite> traced = new ArrayList<>();
             for (Site site : sites) {
                 traced.add(new TracedFlights.TracedSite(
-                        site, basis(), PRIOR, Optional.of(flights.of(site, basis(), PRIOR).flight())));
+                        site,
+                        basis(),
+                        PRIOR,
+                        Optional.of(flights.of(site, basis(), PRIOR).flight())));
             }
-            return new TracedFlights(
-                            streams, executor, RunMonitor.SILENT, RULES, IndicativeRule.QUADRATURE, TRACE)
+            return new TracedFlights(streams, executor, RunMonitor.SILENT, RULES, IndicativeRule.QUADRATURE, TRACE)
                     .of(traced);
         } finally {
             executor.shutdownNow();
@@ -227,15 +229,17 @@ class TracedFlightsTest {
     void sharesByHand() {
         Map<List<String>, Double> one = Map.of(List.of("A"), 0.4, List.of("B"), 0.6);
         Map<List<String>, Double> two = Map.of(List.of("B"), 0.7, List.of(TracedShares.NO_SHORELINE), 0.3);
-        TracedShares.Found found =
-                TracedShares.of(List.of(one, two), List.of(new TracedShares.Link(0, 0, 1, 0)), 0.9);
+        TracedShares.Found found = TracedShares.of(List.of(one, two), List.of(new TracedShares.Link(0, 0, 1, 0)), 0.9);
         double same = 0.6 * 0.7 * 0.9;
         double other = (0.4 * 0.7 + 0.4 * 0.3 + 0.6 * 0.3) * 0.1;
         assertEquals(same + other, found.factor(), 1e-15);
-        assertEquals((same + 0.6 * 0.3 * 0.1) / (same + other), found.shares().get(0).get(List.of("B")), 1e-15);
+        assertEquals(
+                (same + 0.6 * 0.3 * 0.1) / (same + other),
+                found.shares().get(0).getOrDefault(List.of("B"), -1.0),
+                1e-15);
         assertEquals(
                 (0.4 + 0.6) * 0.3 * 0.1 / (same + other),
-                found.shares().get(1).get(List.of(TracedShares.NO_SHORELINE)),
+                found.shares().get(1).getOrDefault(List.of(TracedShares.NO_SHORELINE), -1.0),
                 1e-15);
     }
 
@@ -247,8 +251,7 @@ class TracedFlightsTest {
                 "no correlation of all sites agrees with the traces",
                 assertThrows(
                                 IllegalArgumentException.class,
-                                () -> TracedShares.of(
-                                        List.of(one, two), List.of(new TracedShares.Link(0, 0, 1, 0)), 1))
+                                () -> TracedShares.of(List.of(one, two), List.of(new TracedShares.Link(0, 0, 1, 0)), 1))
                         .getMessage());
     }
 }

@@ -43,7 +43,8 @@ class EvidenceModelTest {
                 settings.problem("rate.prior.scale").map(EvidenceModelTest::withoutPlace));
         evidence.goTo(evidence.findings().get(0));
         assertEquals("study.json", evidence.partProperty().get());
-        assertEquals(Optional.of("rate.prior.scale"), evidence.wantedKeyProperty().get());
+        assertEquals(
+                Optional.of("rate.prior.scale"), evidence.wantedKeyProperty().get());
         settings.write(field(settings, "rate.prior.scale"), "0.5");
         assertEquals(Optional.empty(), settings.problem("rate.prior.scale"));
         settings.write(field(settings, "rate.prior.scale"), "");
@@ -76,11 +77,13 @@ class EvidenceModelTest {
         EvidenceModel evidence = OpenStudies.evidence(OpenStudies.document(study));
         assertEquals(Optional.empty(), evidence.grid("levels.csv"));
         assertTrue(evidence.hasText("levels.csv"));
-        assertEquals("a quoted cell that never ends", evidence.document().checked().problems().stream()
-                .filter(problem -> problem.file().equals("levels.csv"))
-                .findFirst()
-                .orElseThrow()
-                .found());
+        assertEquals(
+                "a quoted cell that never ends",
+                evidence.document().checked().problems().stream()
+                        .filter(problem -> problem.file().equals("levels.csv"))
+                        .findFirst()
+                        .orElseThrow()
+                        .found());
         evidence.writeText("levels.csv", "site,level,elevation_m,elevation_1sigma_m\n");
         assertTrue(evidence.grid("levels.csv").isPresent());
     }
@@ -116,7 +119,8 @@ class EvidenceModelTest {
         assertEquals(Optional.empty(), evidence.grid("samples.csv"));
         evidence.addTable("samples.csv");
         assertTrue(evidence.grid("samples.csv").isPresent());
-        assertEquals(0, evidence.problemCount("samples.csv"), evidence.findings().toString());
+        assertEquals(
+                0, evidence.problemCount("samples.csv"), evidence.findings().toString());
         evidence.document().undo();
         assertEquals(Optional.empty(), evidence.grid("samples.csv"));
     }
@@ -128,7 +132,9 @@ class EvidenceModelTest {
         settings.use("waelbroeck-2002", true);
         settings.use("spratt-lisiecki-2016", true);
         settings.weigh("spratt-lisiecki-2016", "0.5");
-        assertEquals("{waelbroeck-2002=, spratt-lisiecki-2016=0.5}", settings.curves().toString());
+        assertEquals(
+                "{waelbroeck-2002=, spratt-lisiecki-2016=0.5}",
+                settings.curves().toString());
         settings.weigh("spratt-lisiecki-2016", "-1");
         assertTrue(settings.problemOfCurves().orElseThrow().contains("a number above 0"));
         settings.use("spratt-lisiecki-2016", false);

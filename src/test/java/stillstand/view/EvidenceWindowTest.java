@@ -9,11 +9,13 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Optional;
+import javafx.event.Event;
 import javafx.scene.Node;
 import javafx.scene.control.CheckBox;
 import javafx.scene.control.ListView;
 import javafx.scene.control.TextInputControl;
 import javafx.scene.input.KeyCode;
+import javafx.scene.input.KeyEvent;
 import javafx.stage.Stage;
 import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.Test;
@@ -47,8 +49,7 @@ class EvidenceWindowTest {
         StudyDocument document = robot.open(study("site,level,elevation_m,elevation_1sigma_m,highstand\n"));
         String before = Files.readString(document.folder().resolve("levels.csv"));
         robot.choose("levels.csv", 0, 0);
-        robot.putOnClipboard(
-                """
+        robot.putOnClipboard("""
                 A\tL1\t3.1\t0.5\t1
                 A\tL2\t18,4\t1\t5a
                 A\tL3\t22.0\t1\t5c
@@ -61,7 +62,10 @@ class EvidenceWindowTest {
         robot.command(KeyCode.V);
         robot.waitForCheck();
         assertEquals(8, robot.grid("levels.csv").sheet().rowCount());
-        assertEquals(2, document.checked().problems().size(), document.checked().problems().toString());
+        assertEquals(
+                2,
+                document.checked().problems().size(),
+                document.checked().problems().toString());
         assertEquals("2 problems", robot.text("#problems").replaceFirst(",.*", ""));
         assertTrue(robot.lookup("#run").query().isDisabled());
 
@@ -83,7 +87,13 @@ class EvidenceWindowTest {
 
         robot.push("#run");
         robot.waitFor(() -> robot.model().run().state() == RunModel.State.DONE);
-        LevelAnswer last = robot.model().run().resultProperty().get().orElseThrow().levels().get(7);
+        LevelAnswer last = robot.model()
+                .run()
+                .resultProperty()
+                .get()
+                .orElseThrow()
+                .levels()
+                .get(7);
         double median = last.rate().orElseThrow().median();
         assertTrue(median > 0.25 && median < 0.4, "103 m in about 325 thousand years: " + median);
         assertTrue(Files.exists(document.folder().resolve("results/results.json")));
@@ -134,6 +144,24 @@ class EvidenceWindowTest {
     }
 
     @Test
+    void quickHandLosesNoLetter() throws IOException {
+        robot.open(study("site,level,elevation_m,elevation_1sigma_m\nA,one,5,1\n"));
+        robot.choose("levels.csv", 0, 2);
+        robot.interact(() -> {
+            for (String letter : List.of("9", "1", ".", "5")) {
+                send(new KeyEvent(KeyEvent.KEY_TYPED, letter, "", KeyCode.UNDEFINED, false, false, false, false));
+            }
+            send(new KeyEvent(KeyEvent.KEY_PRESSED, "", "", KeyCode.ENTER, false, false, false, false));
+        });
+        assertEquals("91.5", robot.grid("levels.csv").cell(0, 2));
+    }
+
+    /** To whatever has the focus, as the toolkit does, without waiting for anything. */
+    private void send(KeyEvent event) {
+        Event.fireEvent(robot.stage().getScene().getFocusOwner(), event);
+    }
+
+    @Test
     void leavingACellByThePointerKeepsWhatWasTyped() throws IOException {
         robot.open(study("site,level,elevation_m,elevation_1sigma_m\nA,one,5,1\nA,two,8,1\n"));
         robot.choose("levels.csv", 0, 2);
@@ -163,7 +191,9 @@ class EvidenceWindowTest {
         robot.interact(() -> findings.getSelectionModel().select(0));
         robot.interact(findings::requestFocus);
         robot.type(KeyCode.ENTER);
-        assertEquals("levels.csv", robot.model().evidence().orElseThrow().partProperty().get());
+        assertEquals(
+                "levels.csv",
+                robot.model().evidence().orElseThrow().partProperty().get());
         assertEquals(CellRange.at(0, 2), robot.grid("levels.csv").chosen());
     }
 
@@ -184,7 +214,14 @@ class EvidenceWindowTest {
         robot.waitForCheck();
         assertEquals(
                 "waelbroeck-2002",
-                document.checked().study().orElseThrow().settings().seaLevel().curves().get(0).id());
+                document.checked()
+                        .study()
+                        .orElseThrow()
+                        .settings()
+                        .seaLevel()
+                        .curves()
+                        .get(0)
+                        .id());
         robot.command(KeyCode.Z);
         robot.command(KeyCode.Z);
         assertTrue(document.draft().text("study.json").orElseThrow().contains("7,5"));
@@ -195,7 +232,11 @@ class EvidenceWindowTest {
         robot.open(study("site,level,elevation_m,elevation_1sigma_m\n"));
         StringBuilder text = new StringBuilder();
         for (int i = 0; i < 5000; i++) {
-            text.append("A\tL").append(i).append("\t").append(i % 100 == 0 ? "1,5" : "1.5").append("\t0.1\n");
+            text.append("A\tL")
+                    .append(i)
+                    .append("\t")
+                    .append(i % 100 == 0 ? "1,5" : "1.5")
+                    .append("\t0.1\n");
         }
         robot.choose("levels.csv", 0, 0);
         robot.putOnClipboard(text.toString());

@@ -18,7 +18,8 @@ import stillstand.view.CellMarks.Mark;
 
 /** A table to type in. */
 class GridModelTest {
-    private static final String LEVELS = "site,level,elevation_m,elevation_1sigma_m\nA,one,5,1\nA,two,9,1\nA,three,12,1\n";
+    private static final String LEVELS =
+            "site,level,elevation_m,elevation_1sigma_m\nA,one,5,1\nA,two,9,1\nA,three,12,1\n";
 
     @TempDir
     private Path folder;
@@ -73,7 +74,9 @@ class GridModelTest {
     void columnsOfAPastedTableGoUnderTheirNames() {
         grid.choose(3, 2);
         grid.paste("level\tnote\tsite\televation_m\televation_1sigma_m\nfour\tmine\tA\t20\t2\n");
-        assertEquals(List.of("site", "level", "elevation_m", "elevation_1sigma_m", "note"), grid.sheet().header());
+        assertEquals(
+                List.of("site", "level", "elevation_m", "elevation_1sigma_m", "note"),
+                grid.sheet().header());
         assertEquals("A", grid.cell(3, 0));
         assertEquals("20", grid.cell(3, 2));
         assertEquals("mine", grid.cell(3, 4));
@@ -144,7 +147,8 @@ class GridModelTest {
         assertFalse(offered.contains("elevation_2sigma_m"), "one spread is there");
         grid.addColumn("highstand");
         grid.write(0, 4, "5e");
-        assertEquals("site,level,elevation_m,elevation_1sigma_m,highstand\nA,one,5,1,5e\nA,two,9,1,\nA,three,12,1,\n",
+        assertEquals(
+                "site,level,elevation_m,elevation_1sigma_m,highstand\nA,one,5,1,5e\nA,two,9,1,\nA,three,12,1,\n",
                 grid.sheet().text());
     }
 
@@ -168,7 +172,11 @@ class GridModelTest {
     void fiveThousandRowsArePastedAndCheckedInTime() {
         StringBuilder text = new StringBuilder();
         for (int i = 0; i < 5000; i++) {
-            text.append("A\tL").append(i).append('\t').append(i % 10 == 0 ? "1,5" : "1.5").append("\t0.1\n");
+            text.append("A\tL")
+                    .append(i)
+                    .append('\t')
+                    .append(i % 10 == 0 ? "1,5" : "1.5")
+                    .append("\t0.1\n");
         }
         grid.choose(3, 0);
         assertTimeout(Duration.ofSeconds(8), () -> grid.paste(text.toString()));

@@ -9,6 +9,7 @@ import stillstand.sealevel.Highstand;
 import stillstand.sealevel.HighstandClass;
 import stillstand.sealevel.HighstandTable;
 import stillstand.sealevel.SharedErrors;
+import stillstand.sensitivity.Leverage;
 import stillstand.shoreline.FormsAt;
 import stillstand.shoreline.IndicativeMeaning;
 import stillstand.shoreline.Level;
@@ -164,6 +165,7 @@ final class InventedStair {
                 List.of(flight()),
                 List.of(),
                 List.of(),
+                Leverage.NONE,
                 List.of(
                         new LevelResidual(SITE, "P1", 31.5, 31.5, 3),
                         new LevelResidual(SITE, "P2", 40.6, 40.6, 3),

@@ -43,7 +43,10 @@ class KilledWindowTest {
         assertEquals(Optional.of("{\"title\": \"unsaved\"}"), document.draft().text("study.json"));
         assertTrue(document.isEdited());
         after.startRun();
-        assertEquals(RunModel.State.DONE, after.run().state(), after.run().outcomeProperty().get());
+        assertEquals(
+                RunModel.State.DONE,
+                after.run().state(),
+                after.run().outcomeProperty().get());
         assertFalse(results.equals(Files.readString(study.resolve("results/results.json"))));
         after.close(true);
     }

@@ -152,7 +152,8 @@ class RunModelTest {
             Files.writeString(place.resolve("study.json"), "{\"title\": \"A\", \"draws\": {\"maximum\": 20000}}");
             Files.writeString(place.resolve("sites.csv"), "site\nA\n");
             Files.writeString(
-                    place.resolve("levels.csv"), "site,level,elevation_m,elevation_1sigma_m,highstand\nA,one,30,1,5e\n");
+                    place.resolve("levels.csv"),
+                    "site,level,elevation_m,elevation_1sigma_m,highstand\nA,one,30,1,5e\n");
         }
         return OpenStudies.READER.check(place, Map.of()).value().orElseThrow();
     }

@@ -35,7 +35,10 @@ class SameResultsTest {
         SettingsModel settings = evidence.settings();
         settings.write(settings.fields().get(2), "7");
         window.startRun();
-        assertEquals(RunModel.State.DONE, window.run().state(), window.run().outcomeProperty().get());
+        assertEquals(
+                RunModel.State.DONE,
+                window.run().state(),
+                window.run().outcomeProperty().get());
         Map<String, String> ofWindow = texts(study.resolve("results"));
         window.close(true);
 

@@ -52,10 +52,12 @@ class StudyDocumentTest {
         Path study = OpenStudies.template(folder);
         StudyDocument document = OpenStudies.document(study);
         assertTrue(document.checked().study().isPresent());
-        document.edit("a mistake", draft -> draft.with(draft.sheet("levels.csv")
-                .orElseThrow()
-                .withCells(0, 2, List.of(List.of("12,5")))
-                .withCells(1, 0, List.of(List.of("Nowhere")))));
+        document.edit(
+                "a mistake",
+                draft -> draft.with(draft.sheet("levels.csv")
+                        .orElseThrow()
+                        .withCells(0, 2, List.of(List.of("12,5")))
+                        .withCells(1, 0, List.of(List.of("Nowhere")))));
         List<InputProblem> inWindow = document.checked().problems();
         assertTrue(document.checked().study().isEmpty());
         document.save(() -> {});
@@ -66,7 +68,9 @@ class StudyDocumentTest {
     @Test
     void editThatChangesNothingIsNone() throws IOException {
         StudyDocument document = OpenStudies.document(OpenStudies.template(folder));
-        document.edit("nothing", draft -> draft.withText("study.json", draft.text("study.json").orElseThrow()));
+        document.edit(
+                "nothing",
+                draft -> draft.withText("study.json", draft.text("study.json").orElseThrow()));
         assertEquals(Optional.empty(), document.undoableProperty().get());
     }
 
@@ -162,8 +166,8 @@ class StudyDocumentTest {
         Path study = OpenStudies.template(folder);
         Deque<Runnable> waiting = new ArrayDeque<>();
         StudyStore store = StudyStore.open(study).value().orElseThrow();
-        StudyDocument document = new StudyDocument(
-                store, store.read(), OpenStudies.READER, waiting::add, Runnable::run, false);
+        StudyDocument document =
+                new StudyDocument(store, store.read(), OpenStudies.READER, waiting::add, Runnable::run, false);
         document.edit("broken", draft -> draft.withText("study.json", "{"));
         document.edit("mended", draft -> draft.withText("study.json", TITLE));
         int[] heard = new int[1];

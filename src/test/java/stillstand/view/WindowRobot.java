@@ -96,8 +96,10 @@ final class WindowRobot extends FxRobot {
         try {
             WaitForAsyncUtils.waitFor(PATIENCE_SECONDS, TimeUnit.SECONDS, () -> truth.getAsBoolean());
         } catch (TimeoutException e) {
-            throw new AssertionError("waited for nothing: " + model.notices() + " "
-                    + model.run().outcomeProperty().get(), e);
+            throw new AssertionError(
+                    "waited for nothing: " + model.notices() + " "
+                            + model.run().outcomeProperty().get(),
+                    e);
         }
         WaitForAsyncUtils.waitForFxEvents();
     }
