@@ -37,12 +37,11 @@ import stillstand.sensitivity.ShortRate;
 import stillstand.uncertainty.Digits;
 import stillstand.uncertainty.Interval;
 import stillstand.uplift.FlightResult.Halving;
-import stillstand.view.LeverageModel.CurveRow;
-import stillstand.view.LeverageModel.InputRow;
-import stillstand.view.LeverageModel.LeftOutRow;
 import stillstand.view.LeverageModel.Missing;
 import stillstand.view.LeverageModel.Part;
-import stillstand.view.LeverageModel.Picture;
+import stillstand.view.LeveragePicture.CurveRow;
+import stillstand.view.LeveragePicture.InputRow;
+import stillstand.view.LeveragePicture.LeftOutRow;
 import stillstand.view.ResultTable.Scale;
 
 /** What the answers hang on: the sentences of the terminal on one side, one question at a time in numbers on the other. */
@@ -188,7 +187,7 @@ public final class LeverageView extends BorderPane {
         return box;
     }
 
-    private void follow(Picture now) {
+    private void follow(LeveragePicture now) {
         following = true;
         site.getItems().setAll(model.sites());
         site.setValue(model.site());
@@ -353,7 +352,7 @@ public final class LeverageView extends BorderPane {
 
     private void nextColumns() {
         next.words("Rate of", row -> LeverageReport.name(row.rateOf()), 70);
-        next.words("Measurement", LeverageReport::named, 232);
+        next.wrapped("Measurement", LeverageReport::named, 232);
         next.number("Changes 95 % by", LeverageReport::change, NextMeasurement::width95ChangePercent, 118);
         next.number(
                 "Width (m/kyr)",
@@ -377,9 +376,9 @@ public final class LeverageView extends BorderPane {
 
     private void assumptionColumns() {
         assumptions.words("Rate of", row -> LeverageReport.name(row.rateOf()), 70);
-        assumptions.wrapped("Assumption", AssumptionSwitch::assumption, 156);
-        assumptions.wrapped("Is", AssumptionSwitch::was, 124);
-        assumptions.wrapped("Would be", AssumptionSwitch::wouldBe, 124);
+        assumptions.wrapped("Assumption", AssumptionSwitch::assumption, 150);
+        assumptions.wrapped("Is", AssumptionSwitch::was, 110);
+        assumptions.wrapped("Would be", AssumptionSwitch::wouldBe, 146);
         assumptions.number(
                 "Rate (m/kyr)",
                 row -> LeverageReport.rate(row.rate(), row.rate()),
@@ -412,15 +411,15 @@ public final class LeverageView extends BorderPane {
                 row -> row.without().map(ShortRate::median).orElse(Double.POSITIVE_INFINITY),
                 148);
         moves(leftOut, LeftOutRow::move);
-        leftOut.wrapped("Also", LeftOutRow::also, 150);
+        leftOut.wrapped("Also", LeftOutRow::also, 168);
     }
 
     /** How far a rate moves, in half widths of its 95 % interval. */
     private static <T> void moves(ResultTable<T> table, Function<T, Double> move) {
         table.number(
-                "Moves by",
-                row -> move.apply(row) == Double.MAX_VALUE ? "" : Digits.text(move.apply(row), 2) + " half widths",
+                "Half widths",
+                row -> move.apply(row) == Double.MAX_VALUE ? "" : Digits.text(move.apply(row), 2),
                 move::apply,
-                116);
+                88);
     }
 }

@@ -3,7 +3,9 @@ package stillstand.view;
 import atlantafx.base.theme.Styles;
 import java.util.ArrayList;
 import java.util.Comparator;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.function.Function;
 import java.util.function.ToDoubleFunction;
 import java.util.stream.Collectors;
@@ -43,6 +45,9 @@ final class ResultTable<T> extends TableView<T> {
     private final List<Words<T>> copied = new ArrayList<>();
     private Function<List<T>, String> copies = this::cells;
 
+    private final Map<TableColumn<T, ?>, Double> wrapped = new LinkedHashMap<>();
+    private boolean hasStrip;
+
     private record Words<T>(String header, Function<T, String> words) {}
 
     /** Draws a row on a strip. */
@@ -68,6 +73,19 @@ final class ResultTable<T> extends TableView<T> {
         empty.setWrapText(true);
         setPlaceholder(empty);
         addEventHandler(KeyEvent.KEY_PRESSED, this::copy);
+        widthProperty().addListener((property, before, now) -> widen());
+    }
+
+    /** Where nothing is drawn, columns of wrapped words share what width is left. */
+    private void widen() {
+        double least = getColumns().stream()
+                .mapToDouble(column -> wrapped.getOrDefault(column, column.getWidth()))
+                .sum();
+        double all = wrapped.values().stream().mapToDouble(width -> width).sum();
+        double spare = Math.max(0, getWidth() - least - SCROLL_BAR);
+        if (!hasStrip && all > 0) {
+            wrapped.forEach((column, width) -> column.setPrefWidth(width * (1 + spare / all)));
+        }
     }
 
     /** A column of words, cut where they are too long. */
@@ -79,6 +97,7 @@ final class ResultTable<T> extends TableView<T> {
     void wrapped(String header, Function<T, String> words, double width) {
         TableColumn<T, String> column = column(header, words, width);
         column.setCellFactory(made -> new WrappedCell<>());
+        wrapped.put(column, width);
         add(column);
     }
 
@@ -128,6 +147,7 @@ final class ResultTable<T> extends TableView<T> {
             ToDoubleFunction<T> key,
             Function<T, String> words,
             Painter<T> painter) {
+        hasStrip = true;
         Strip<T> strip = new Strip<>(says, least, axis);
         TableColumn<T, T> column = new TableColumn<>();
         column.setGraphic(strip.head);

@@ -21,7 +21,7 @@ final class SettingsModel {
     static final String PRIOR = "Prior of the rate";
     static final String MATCHING = "Matching";
     static final String LEVERAGE = "A next measurement";
-    static final String SITES = "Sites compared";
+    static final String SITES = "Comparing sites";
 
     private static final String PRIOR_KIND = "rate.prior.kind";
     private static final String CURVES = "sea_level.curves";
@@ -98,11 +98,11 @@ final class SettingsModel {
                 number(MATCHING, "matching.wrong_date_probability", "Wrong date probability"),
                 number(MATCHING, "matching.trace_probability", "Trace probability"),
                 choice(MATCHING, "indicative_range", "Indicative range", List.of("quadrature", "uniform")),
-                number(LEVERAGE, "leverage.date_1sigma_ka", "Date, 1 sigma, ka"),
-                number(LEVERAGE, "leverage.survey_1sigma_m", "Survey, 1 sigma, m"),
                 number(SITES, "comparison.stable_within_m_per_kyr", "Stable within, m/kyr"),
-                number(SITES, "comparison.site_spread_m_per_kyr", "Sites of a coast differ by, m/kyr"),
-                number(SITES, "comparison.pairs", "Pairs beside those of a coast"));
+                number(SITES, "comparison.site_spread_m_per_kyr", "Spread of sites, m/kyr"),
+                number(SITES, "comparison.pairs", "Pairs beside those of a coast"),
+                number(LEVERAGE, "leverage.date_1sigma_ka", "Date, 1 sigma, ka"),
+                number(LEVERAGE, "leverage.survey_1sigma_m", "Survey, 1 sigma, m"));
     }
 
     private static Field words(String group, String keyPath, String label) {

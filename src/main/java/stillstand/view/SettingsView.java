@@ -44,8 +44,8 @@ final class SettingsView extends BorderPane {
                 column(
                         group("Curves and their weights", curves()),
                         form(SettingsModel.SEA_LEVEL),
-                        form(SettingsModel.LEVERAGE),
-                        form(SettingsModel.SITES)));
+                        form(SettingsModel.SITES),
+                        form(SettingsModel.LEVERAGE)));
         groups.getStyleClass().add("settings-groups");
         ScrollPane scroll = new ScrollPane(groups);
         scroll.setFitToWidth(true);

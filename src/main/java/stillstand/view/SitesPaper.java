@@ -191,7 +191,9 @@ final class SitesPaper extends Region {
             double x = Math.rint(x(tick)) + 0.5;
             g.setStroke(palette.hair());
             g.strokeLine(x, TOP, x, TOP + height());
-            g.fillText(number(tick), x, TOP + height() + 5);
+            if (x < LEFT + width() - RIGHT) { // half a number at the end says nothing
+                g.fillText(number(tick), x, TOP + height() + 5);
+            }
         }
         g.setTextAlign(TextAlignment.RIGHT);
         g.setTextBaseline(VPos.CENTER);

@@ -13,11 +13,11 @@ import stillstand.report.TerminalReport;
 import stillstand.sensitivity.Leverage;
 import stillstand.sensitivity.NextMeasurement;
 import stillstand.study.StudyResult;
-import stillstand.view.LeverageModel.InputRow;
-import stillstand.view.LeverageModel.LeftOutRow;
 import stillstand.view.LeverageModel.Missing;
 import stillstand.view.LeverageModel.Part;
 import stillstand.view.LeverageModel.Way;
+import stillstand.view.LeveragePicture.InputRow;
+import stillstand.view.LeveragePicture.LeftOutRow;
 
 /** What answers hang on, in the words of the terminal. */
 class LeverageModelTest {
@@ -80,7 +80,7 @@ class LeverageModelTest {
         assertEquals(
                 List.of("made-up-curve", "other-curve", "all, weighed by evidence", "all alike"),
                 model.pictureProperty().get().curves().stream()
-                        .map(LeverageModel.CurveRow::curve)
+                        .map(LeveragePicture.CurveRow::curve)
                         .toList());
         assertEquals(
                 "T4 5e",
