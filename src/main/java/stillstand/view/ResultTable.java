@@ -148,7 +148,7 @@ final class ResultTable<T> extends TableView<T> {
             Function<T, String> words,
             Painter<T> painter) {
         hasStrip = true;
-        Strip<T> strip = new Strip<>(says, least, axis);
+        Strip strip = new Strip(says, least, axis);
         TableColumn<T, T> column = new TableColumn<>();
         column.setGraphic(strip.head);
         column.setMinWidth(least + BESIDE_STRIP);
@@ -209,7 +209,7 @@ final class ResultTable<T> extends TableView<T> {
     }
 
     /** The axis in the header. */
-    private static final class Strip<T> {
+    private static final class Strip {
         private final Canvas canvas;
         private final Label head;
         private final ObservableValue<Interval> axis;
@@ -261,12 +261,12 @@ final class ResultTable<T> extends TableView<T> {
     }
 
     private static final class StripCell<T> extends TableCell<T, T> {
-        private final Strip<T> strip;
+        private final Strip strip;
         private final Function<T, String> words;
         private final Painter<T> painter;
         private final Canvas canvas = new Canvas(1, ROW);
 
-        StripCell(Strip<T> strip, Function<T, String> words, Painter<T> painter) {
+        StripCell(Strip strip, Function<T, String> words, Painter<T> painter) {
             this.strip = strip;
             this.words = words;
             this.painter = painter;
