@@ -6,7 +6,6 @@ import stillstand.sealevel.CurveFacts;
 import stillstand.sealevel.Highstand;
 import stillstand.sealevel.HighstandTable;
 import stillstand.sealevel.SeaLevelCurve;
-import stillstand.shoreline.DatedSample;
 import stillstand.shoreline.IndicativeRule;
 import stillstand.shoreline.Level;
 import stillstand.shoreline.Site;
@@ -102,38 +101,12 @@ public record Supposition(
         List<Level> levels = site.levels().stream()
                 .map(level -> level.name().equals(levelName) ? without(level, sampleName) : level)
                 .toList();
-        return with(new Site(
-                site.name(),
-                site.position(),
-                site.coast(),
-                site.distanceAlongCoastKm(),
-                site.datumOffsetMetres(),
-                site.surveyedMetres(),
-                site.localCurve(),
-                levels,
-                site.samples(),
-                site.note(),
-                site.own()));
+        return with(site.withLevels(levels));
     }
 
     private static Level without(Level level, String sampleName) {
-        List<DatedSample> samples = level.samples().stream()
+        return level.withSamples(level.samples().stream()
                 .filter(sample -> !sample.name().equals(sampleName))
-                .toList();
-        return new Level(
-                level.name(),
-                level.elevationMetres(),
-                level.meaning(),
-                level.formsAt(),
-                level.coverMetres(),
-                level.loweringMetresPerKyr(),
-                level.highstand(),
-                level.terrace(),
-                level.doubtful(),
-                level.order(),
-                level.coseismicStepMetres(),
-                samples,
-                level.note(),
-                level.own());
+                .toList());
     }
 }

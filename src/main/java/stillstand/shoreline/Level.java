@@ -48,4 +48,42 @@ public record Level(
             throw new IllegalArgumentException("coseismicStepMetres must be 0 or more but is " + coseismicStepMetres);
         }
     }
+
+    /** The same level under another choice of its highstand. */
+    public Level withHighstand(StageChoice other) {
+        return new Level(
+                name,
+                elevationMetres,
+                meaning,
+                formsAt,
+                coverMetres,
+                loweringMetresPerKyr,
+                other,
+                terrace,
+                doubtful,
+                order,
+                coseismicStepMetres,
+                samples,
+                note,
+                own);
+    }
+
+    /** The same level with other samples. */
+    public Level withSamples(List<DatedSample> others) {
+        return new Level(
+                name,
+                elevationMetres,
+                meaning,
+                formsAt,
+                coverMetres,
+                loweringMetresPerKyr,
+                highstand,
+                terrace,
+                doubtful,
+                order,
+                coseismicStepMetres,
+                others,
+                note,
+                own);
+    }
 }

@@ -41,4 +41,20 @@ public record Site(
             throw new IllegalArgumentException("name of a site must not be blank");
         }
     }
+
+    /** The same site with other levels. */
+    public Site withLevels(List<Level> others) {
+        return new Site(
+                name,
+                position,
+                coast,
+                distanceAlongCoastKm,
+                datumOffsetMetres,
+                surveyedMetres,
+                localCurve,
+                others,
+                samples,
+                note,
+                own);
+    }
 }

@@ -95,37 +95,10 @@ public final class SitePreview {
     private Site under(Map<String, StageChoice> choices) {
         Site site = plan.site();
         List<Level> levels = site.levels().stream()
-                .map(level -> choices.containsKey(level.name()) ? with(level, choices.get(level.name())) : level)
+                .map(level -> Optional.ofNullable(choices.get(level.name()))
+                        .map(level::withHighstand)
+                        .orElse(level))
                 .toList();
-        return new Site(
-                site.name(),
-                site.position(),
-                site.coast(),
-                site.distanceAlongCoastKm(),
-                site.datumOffsetMetres(),
-                site.surveyedMetres(),
-                site.localCurve(),
-                levels,
-                site.samples(),
-                site.note(),
-                site.own());
-    }
-
-    private static Level with(Level level, StageChoice choice) {
-        return new Level(
-                level.name(),
-                level.elevationMetres(),
-                level.meaning(),
-                level.formsAt(),
-                level.coverMetres(),
-                level.loweringMetresPerKyr(),
-                choice,
-                level.terrace(),
-                level.doubtful(),
-                level.order(),
-                level.coseismicStepMetres(),
-                level.samples(),
-                level.note(),
-                level.own());
+        return site.withLevels(levels);
     }
 }

@@ -60,7 +60,7 @@ class StudyStoreTest {
         Files.createDirectory(demo.resolve(".study.stillstand-lock")); // stands in for a disk without permission
         try (StudyStore store = open(demo)) {
             assertTrue(store.whyReadOnly().orElseThrow().startsWith("its folder cannot be written"));
-            assertEquals(4, store.read().files().size());
+            assertEquals(5, store.read().files().size());
         }
     }
 
