@@ -197,8 +197,8 @@ public final class LeverageModel {
                 "Each input from the low end of its own range (brown) to the high end (blue), all others at their"
                         + " medians: thick 68 %, thin 95 %. Bars do not add up to the spread.";
             case NEXT ->
-                "Mean change of the width of the 95 % interval, ± one standard error of its calculation. What it costs is"
-                        + " for you to say.";
+                "Mean change of the width of the 95 % interval, ± one standard error of its calculation, and the"
+                        + " probability that it widens. What it costs is for you to say.";
             case ASSUMPTIONS ->
                 "Both rates with the same draws, median and 95 %: compare them with each other. " + HALF_WIDTHS;
             case LEFT_OUT ->
@@ -232,9 +232,7 @@ public final class LeverageModel {
     static String tells(NextMeasurement each) {
         return LeverageReport.tells(each)
                 ? ""
-                : each.effectiveDraws() < NextMeasurement.FEW_DRAWS
-                        ? "too few draws to say"
-                        : "no more than can be told";
+                : each.effectiveDraws() < NextMeasurement.FEW_DRAWS ? "too few draws" : "cannot be told";
     }
 
     /** {@code 0.88 to 0.94}; blank where the rate is not a flight's. */

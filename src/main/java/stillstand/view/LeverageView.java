@@ -352,22 +352,22 @@ public final class LeverageView extends BorderPane {
 
     private void nextColumns() {
         next.words("Rate of", row -> LeverageReport.name(row.rateOf()), 70);
-        next.wrapped("Measurement", LeverageReport::named, 232);
-        next.number("Changes 95 % by", LeverageReport::change, NextMeasurement::width95ChangePercent, 118);
+        next.wrapped("Measurement", LeverageReport::named, 242);
+        next.number("95 % width by", LeverageReport::change, NextMeasurement::width95ChangePercent, 116);
         next.number(
                 "Width (m/kyr)",
                 row -> width(row.width95(), row) + " to " + width(row.expectedWidth95(), row),
                 NextMeasurement::expectedWidth95,
-                112);
-        next.number("May widen", row -> Digits.text(row.probabilityWider(), 2), NextMeasurement::probabilityWider, 80);
+                104);
+        next.number("Widens", row -> Digits.text(row.probabilityWider(), 2), NextMeasurement::probabilityWider, 76);
         next.number(
                 "Certainty of pairings",
                 LeverageModel::certainty,
                 row -> row.pairing()
                         .map(gain -> gain.certainty() - gain.expectedCertainty())
                         .orElse(1.0),
-                148);
-        next.wrapped("But", LeverageModel::tells, 104);
+                138);
+        next.wrapped("But", LeverageModel::tells, 102);
     }
 
     private static String width(double width, NextMeasurement of) {

@@ -19,7 +19,7 @@ final class WrappedCell<T> extends TableCell<T, String> {
         });
         words.fillProperty().bind(textFillProperty());
         setAlignment(Pos.CENTER_LEFT);
-        setPadding(new Insets(5, 8, 5, 8));
+        setPadding(new Insets(6.5, 8, 3.5, 8)); // so that one line stands level with the cells beside it
         setPrefHeight(USE_COMPUTED_SIZE);
     }
 
