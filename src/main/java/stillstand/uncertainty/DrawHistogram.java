@@ -67,6 +67,9 @@ public final class DrawHistogram {
 
     /** Forgets all draws; the range stays. */
     public void clear() {
+        if (count == 0) {
+            return;
+        }
         Arrays.fill(cells, 0);
         beyond.clear();
         count = 0;
@@ -160,6 +163,9 @@ public final class DrawHistogram {
     public void merge(DrawHistogram other) {
         if (other.middle != middle || other.cellWidth != cellWidth) {
             throw new IllegalArgumentException("histograms to be merged must have the same range");
+        }
+        if (other.count == 0) {
+            return;
         }
         for (int cell = 0; cell < CELLS; cell++) {
             cells[cell] += other.cells[cell];

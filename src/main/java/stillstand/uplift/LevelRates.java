@@ -41,8 +41,10 @@ public final class LevelRates {
     private static final double RARE = 1e-6;
     /** A prior that leaves fewer draws than this (Kish 1965) leaves no distribution. */
     private static final double LEAST_EFFECTIVE_DRAWS = 100;
+    /** Draws that are worked on together, so that their columns stay in the fastest memory; a power of two. */
+    private static final int SLICE = 1 << 11;
     /** Enough draws to choose the range of a histogram. */
-    private static final int PILOT_DRAWS = 1 << 11;
+    private static final int PILOT_DRAWS = SLICE;
 
     private static final DrawHistogram NONE = DrawHistogram.forDrawsLike(new double[1]);
 
@@ -113,16 +115,27 @@ public final class LevelRates {
     private static final class Workspace {
         final RateColumns.Columns drawn;
         final double[] weights;
+        /** Probabilities of a whole block, and of the slice that is worked on. */
+        private double[][] points = new double[0][];
+
         private double[][] probabilities = new double[0][];
 
-        Workspace(int draws) {
-            drawn = new RateColumns.Columns(draws);
-            weights = new double[draws];
+        Workspace() {
+            drawn = new RateColumns.Columns(SLICE);
+            weights = new double[SLICE];
         }
 
-        double[][] probabilities(int dimensions) {
-            if (probabilities.length < dimensions) {
-                probabilities = new double[dimensions][weights.length];
+        double[][] points(int dimensions, int draws) {
+            if (points.length < dimensions || (dimensions > 0 && points[0].length != draws)) {
+                points = new double[dimensions][draws];
+                probabilities = new double[dimensions][SLICE];
+            }
+            return points;
+        }
+
+        double[][] slice(int dimensions, int number) {
+            for (int d = 0; d < dimensions; d++) {
+                System.arraycopy(points[d], number * SLICE, probabilities[d], 0, SLICE);
             }
             return probabilities;
         }
@@ -194,6 +207,9 @@ public final class LevelRates {
         /** Height of the former sea where its distribution is known without a draw. */
         private final Optional<Uncertain> knownHeight;
 
+        /** Whether every draw counts and the age has one distribution, that of its only explanation. */
+        private final boolean knownAge;
+
         private final boolean hasMean;
         /** Everything so far; its ranges are set by the pilot. */
         private Gathered all = new Gathered(NONE, NONE, NONE, NONE);
@@ -212,6 +228,7 @@ public final class LevelRates {
             this.explanations = explanations;
             this.prior = prior;
             knownHeight = knownHeight(height, lowering);
+            knownAge = explanations.size() == 1 && explanations.get(0) instanceof SeaAtLevel.AtHighstand;
             for (SeaAtLevel sea : explanations) {
                 functions.add(
                         knownHeight.isPresent()
@@ -244,8 +261,9 @@ public final class LevelRates {
             double[][] draws = new double[3][explanations.size() * each];
             double[] weights = new double[explanations.size() * each];
             double[] posteriorWeights = new double[weights.length];
-            Workspace w = new Workspace(each);
+            Workspace w = new Workspace();
             for (int e = 0; e < explanations.size(); e++) {
+                draw(e, 0, each, w);
                 evaluate(e, 0, w);
                 weigh(explanations.get(e).probability(), w);
                 System.arraycopy(w.drawn.rateMetresPerKyr, 0, draws[0], e * each, each);
@@ -293,28 +311,37 @@ public final class LevelRates {
             Gathered into = borrow();
             long beyond = 0;
             Workspace w = borrowWorkspace();
-            RateColumns.Columns drawn = w.drawn;
             for (int e = 0; e < explanations.size(); e++) {
-                evaluate(e, number, w);
-                beyond += weigh(explanations.get(e).probability(), w);
-                if (explanations.size() == 1 && drawn.allValid) {
-                    into.rate().add(drawn.rateMetresPerKyr);
-                    if (knownHeight.isEmpty()) {
-                        into.height().add(drawn.heightMetres);
-                    }
-                } else {
-                    into.rate().add(drawn.rateMetresPerKyr, w.weights);
-                    into.height().add(drawn.heightMetres, w.weights);
-                    into.age().add(drawn.ageKa, w.weights);
+                draw(e, number, DrawStreams.BLOCK_DRAWS, w);
+                for (int slice = 0; slice < DrawStreams.BLOCK_DRAWS / SLICE; slice++) {
+                    evaluate(e, slice, w);
+                    beyond += weigh(explanations.get(e).probability(), w);
+                    gather(w, into);
                 }
-                underPrior(w);
-                into.rateWithPrior().add(drawn.rateMetresPerKyr, w.weights);
             }
             workspaces.add(w);
             return new Block(
                     into,
                     beyond,
                     hasMean ? BlockEstimates.of(into.rate()) : BlockEstimates.withoutMoments(into.rate()));
+        }
+
+        private void gather(Workspace w, Gathered into) {
+            RateColumns.Columns drawn = w.drawn;
+            boolean alike = explanations.size() == 1 && drawn.allValid;
+            if (alike) {
+                into.rate().add(drawn.rateMetresPerKyr);
+            } else {
+                into.rate().add(drawn.rateMetresPerKyr, w.weights);
+            }
+            if (knownHeight.isEmpty()) {
+                into.height().add(drawn.heightMetres, w.weights);
+            }
+            if (!knownAge) {
+                into.age().add(drawn.ageKa, w.weights);
+            }
+            underPrior(w);
+            into.rateWithPrior().add(drawn.rateMetresPerKyr, w.weights);
         }
 
         private Gathered borrow() {
@@ -341,17 +368,22 @@ public final class LevelRates {
             return beyond;
         }
 
-        private void evaluate(int explanation, int number, Workspace w) {
-            RateColumns function = functions.get(explanation);
-            double[][] probabilities = w.probabilities(function.dimensions());
-            if (function.dimensions() > 0) {
-                SobolPoints points = SobolPoints.scrambled(
-                        streams, key + " / explanation " + explanation, function.dimensions(), number);
-                for (int d = 0; d < function.dimensions(); d++) {
-                    points.column(d, probabilities[d]);
+        /** Probabilities of one explanation's inputs in one block, or in its first {@code draws}. */
+        private void draw(int explanation, int number, int draws, Workspace w) {
+            int dimensions = functions.get(explanation).dimensions();
+            double[][] columns = w.points(dimensions, draws);
+            if (dimensions > 0) {
+                SobolPoints points =
+                        SobolPoints.scrambled(streams, key + " / explanation " + explanation, dimensions, number);
+                for (int d = 0; d < dimensions; d++) {
+                    points.column(d, columns[d]);
                 }
             }
-            function.evaluate(probabilities, w.drawn);
+        }
+
+        private void evaluate(int explanation, int slice, Workspace w) {
+            RateColumns function = functions.get(explanation);
+            function.evaluate(w.slice(function.dimensions(), slice), w.drawn);
         }
 
         Outcome outcome(boolean converged) {
@@ -361,7 +393,7 @@ public final class LevelRates {
                     ? Optional.of(all.rateWithPrior().distribution())
                             .filter(p -> p.effectiveSampleSize() >= LEAST_EFFECTIVE_DRAWS)
                     : Optional.empty();
-            Summary ages = explanations.size() == 1 && beyondCurve == 0
+            Summary ages = knownAge
                     ? Summary.of(explanations.get(0).ageKa())
                     : all.age().distribution().summary();
             return new Outcome(
@@ -390,6 +422,6 @@ public final class LevelRates {
 
     private Workspace borrowWorkspace() {
         Workspace free = workspaces.poll();
-        return free == null ? new Workspace(DrawStreams.BLOCK_DRAWS) : free;
+        return free == null ? new Workspace() : free;
     }
 }

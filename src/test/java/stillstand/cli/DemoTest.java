@@ -58,7 +58,7 @@ class DemoTest {
     @Test
     void islandBehavesAsItsTablesSay() throws IOException {
         StudyOnDisk demo = copied();
-        StudyResult result = demo.run();
+        StudyResult result = demo.run("--draws", "65536");
         assertEquals(23, result.levels().size());
         assertEquals(List.of(), result.failures());
 
