@@ -91,6 +91,7 @@ class HistoryMonteCarloReferenceTest {
     }
 
     @Test
+    @Tag("slow")
     void changeOfUnknownAge() {
         HistoryDraws draws = draws(new HistoryPrior.Stepped(RATE, 1, 40, 450));
         assertEquals(-40.317031, draws.logEvidence(), 4 * Math.hypot(draws.logEvidenceError(), 0.012));
