@@ -56,8 +56,10 @@ final class DrawCommand implements Callable<Integer> {
     @Option(
             names = "--figure",
             paramLabel = "NAME",
-            description = "this figure alone; may be given again for several. A kind (stair, rates, budget, pairings,"
-                    + " fates, residuals, history, curves, forest) or one file's name without its ending")
+            description =
+                    "this figure alone; may be given again for several. A kind (stair, rates, budget, tornado, pairings,"
+                            + " fates, residuals, history, curves, forest, map, coast, differences) or one file's name"
+                            + " without its ending")
     private List<String> names = new ArrayList<>();
 
     @Option(
